@@ -1,0 +1,19 @@
+// One cell, compiled: straight-line operations on a shared array of slots.
+//
+// A segment owns a block of slots, [base, base + size). It reads slots of other segments and writes
+// only its own. Constants are written once, when the segment is installed; the operations never
+// overwrite them. Segments are plain data and can be posted to a worker.
+
+export interface Segment {
+  readonly base: number;
+  readonly size: number;
+  readonly ops: Int32Array;
+  readonly args: Int32Array;
+  readonly constantSlots: Int32Array;
+  readonly constantValues: Float64Array;
+}
+
+/** A multi-result operation: `args[at]`, `args[at + 1]`, .. are slots, inputs first, then outputs. */
+export type Kernel = (slots: Float64Array, args: Int32Array, at: number) => void;
+/** The kernels a program may call, by name; a program refers to them by their position. */
+export type KernelTable = readonly { readonly name: string; readonly run: Kernel }[];
