@@ -1,0 +1,22 @@
+// A kernel is an operation with several results: a root solve, a device law. It reads and writes the
+// slots of a running program: `s` holds the values, `a[p], a[p + 1], ..` are slot numbers, those of the
+// inputs first, then those of the outputs, in the order of the kernel's two lists.
+
+/** The kernels of this folder; `KERNELS` holds them. */
+export type KernelName =
+  | 'device-at-temperature'
+  | 'gate-leakage'
+  | 'line-point'
+  | 'general-point'
+  | 'forced-point'
+  | 'held-point'
+  | 'capacitances'
+  | 'swing';
+
+/** One multi-result operation and the names of what it takes and gives. */
+export interface Kernel {
+  readonly inputs: readonly string[];
+  readonly outputs: readonly string[];
+  /** Reads the input slots, writes the output slots, allocates nothing. */
+  readonly run: (s: Float64Array, a: Int32Array, p: number) => void;
+}
