@@ -1,0 +1,3 @@
+// The page.
+
+export { App } from './app.tsx';
