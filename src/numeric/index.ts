@@ -1,0 +1,12 @@
+// Numbers that come out alike on every machine: elementary functions made of + - * / sqrt and the bits
+// of doubles only, roots, and the digest of a text. All angles are in rad.
+
+export { atan } from './arctangent.ts';
+export { exp, expm1 } from './exponential.ts';
+export { hypot } from './hypotenuse.ts';
+export { ln, log10, log1p } from './logarithm.ts';
+export { pow } from './power.ts';
+export { solveBracketed } from './root.ts';
+export type { Root, RootOptions, RootStatus } from './root.ts';
+export { sha256Hex } from './sha256.ts';
+export { cos, sin, tan } from './trigonometry.ts';
