@@ -45,6 +45,7 @@ export default defineConfig({
           name: 'unit',
           include: ['test/**/*.test.ts', 'test/**/*.test.tsx'],
           exclude: ['test/browser/**'],
+          setupFiles: ['test/support/quiet-console.ts'],
         },
       },
       {
