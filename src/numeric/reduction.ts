@@ -7,7 +7,7 @@
 // Source: W. J. Cody and W. Waite, Software Manual for the Elementary Functions (1980), ch. 8;
 // M. H. Payne and R. N. Hanek, "Radian reduction for trigonometric functions", SIGNUM 18 (1983).
 
-import { biasedExponent, powerOfTwo, significand } from './bits.ts';
+import { biasedExponent, powerOfTwo } from './bits.ts';
 import { sumRemainder } from './exact.ts';
 
 const TWO_OVER_PI = 0.6366197723675814;
@@ -33,7 +33,6 @@ export function reduceAngle(x: number, out: Float64Array): number {
   return n & 3;
 }
 
-const INTEGER_SCALE = powerOfTwo(52);
 const FROM_192_BITS = powerOfTwo(-192);
 const FRACTION_BITS = 1280n;
 /** 2/pi times 2^1280. */
@@ -48,9 +47,9 @@ const HALF_PI_BITS = 0x1921fb54442d18469898cc51701b839a252049c1114cf98e8n;
 
 function reduceLargeAngle(x: number, out: Float64Array): number {
   const size = Math.abs(x);
-  const exponent = BigInt(biasedExponent(size) - 1075);
-  const places = FRACTION_BITS - exponent;
-  const product = BigInt(significand(size) * INTEGER_SCALE) * TWO_OVER_PI_BITS;
+  const exponent = biasedExponent(size) - 1075;
+  const places = FRACTION_BITS - BigInt(exponent);
+  const product = BigInt(size * powerOfTwo(-exponent)) * TWO_OVER_PI_BITS;
   let n = product >> places;
   let fraction = product - (n << places);
   if (fraction >> (places - 1n) === 1n) {
