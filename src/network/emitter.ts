@@ -1,7 +1,7 @@
 // What the lowering of a stage writes to: a straight list of operations on values that are known only
 // when the program runs. The compiled program implements it; nothing here looks at a number.
 
-import type { KernelName } from './kernel.ts';
+import type { KernelName } from './kernels.ts';
 
 /** A value known when the program runs. */
 export type Handle = number;

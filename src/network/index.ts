@@ -5,7 +5,9 @@
 // -1); I_D, V_ov, V_DSsat and margin in the device's own sense; temperatures in kelvin.
 
 export type { Emitter, Handle } from './emitter.ts';
-export type { Kernel, KernelName } from './kernel.ts';
+export type { Kernel } from './kernel.ts';
+export { KERNELS } from './kernels.ts';
+export type { KernelName } from './kernels.ts';
 export { DEVICE_FIELDS } from './device-field.ts';
 export type { DeviceField, DeviceFieldInfo, DeviceHandles, OptionalDeviceField } from './device-field.ts';
 export type { NetElement, NetFet, NetLeg, PlaceRef, StageFault, StageFaultCode, StageNet } from './stage-net.ts';

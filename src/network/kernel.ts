@@ -2,17 +2,6 @@
 // slots of a running program: `s` holds the values, `a[p], a[p + 1], ..` are slot numbers, those of the
 // inputs first, then those of the outputs, in the order of the kernel's two lists.
 
-/** The kernels of this folder; `KERNELS` holds them. */
-export type KernelName =
-  | 'device-at-temperature'
-  | 'gate-leakage'
-  | 'line-point'
-  | 'general-point'
-  | 'forced-point'
-  | 'held-point'
-  | 'capacitances'
-  | 'swing';
-
 /** One multi-result operation and the names of what it takes and gives. */
 export interface Kernel {
   readonly inputs: readonly string[];

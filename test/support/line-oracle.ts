@@ -33,8 +33,9 @@ export function judgeLine(c: LineCase): string | null {
   const below = excess(c, twofold(I * (1 - 1e-12)));
   const above = excess(c, twofold(I * (1 + 1e-12)));
   if (!(below[0] <= 0 && above[0] >= 0)) return `I ${I} is off by more than 1e-12`;
-  if (region === 1 && c.R > 0 && !changesSign((y) => ohmicExcess(c, y), vds)) return `V_DS ${vds} is off`;
-  if (region === 2 && c.r > 0 && !changesSign((x) => saturatedExcess(c, x), vov)) return `V_ov ${vov} is off`;
+  if (region === 1 && c.R > 0 && !changesSign((y) => ohmicExcess(c, y), vds, c.R * c.b)) return `V_DS ${vds} is off`;
+  if (region === 2 && c.r > 0 && !changesSign((x) => saturatedExcess(c, x), vov, c.r * c.A))
+    return `V_ov ${vov} is off`;
   // The other voltage follows from I; it may move by what the last digits of A and b move it.
   const exact = root(c, I);
   const exactVov = subTwofold(twofold(c.A), mulTwofold(twofold(c.r), exact))[0];
@@ -105,9 +106,10 @@ function excess(c: LineCase, I: Twofold): Twofold {
   return subTwofold(I, mulTwofold(twofold(c.beta), mulTwofold(square, stretch)));
 }
 
-/** Whether an increasing function of a voltage changes sign within 1e-6 of it. */
-function changesSign(f: (z: Twofold) => Twofold, z: number): boolean {
-  return f(twofold(z * (1 - 1e-6)))[0] <= 0 && f(twofold(z * (1 + 1e-6)))[0] >= 0;
+/** Whether an increasing residual changes sign within 1e-6 of a voltage, or is below the last digits of its largest term. */
+function changesSign(f: (z: Twofold) => Twofold, z: number, scale: number): boolean {
+  const slack = 2 ** -50 * scale;
+  return f(twofold(z * (1 - 1e-6)))[0] <= slack && f(twofold(z * (1 + 1e-6)))[0] >= -slack;
 }
 
 /** R (y - b + R f) with V_DS = y, I = (b - y) / R: increasing in y. */
@@ -116,7 +118,10 @@ function ohmicExcess(c: LineCase, y: Twofold): Twofold {
   const drop = subTwofold(twofold(c.b), y);
   const scaledVov = subTwofold(mulTwofold(R, twofold(c.A)), mulTwofold(r, drop));
   const scaledY = mulTwofold(R, y);
-  const square = mulTwofold(scaledY, subTwofold(addTwofold(scaledVov, scaledVov), scaledY));
+  const saturated = scaledY[0] >= scaledVov[0];
+  const square = saturated
+    ? mulTwofold(scaledVov, scaledVov)
+    : mulTwofold(scaledY, subTwofold(addTwofold(scaledVov, scaledVov), scaledY));
   const stretch = addTwofold(twofold(1), mulTwofold(twofold(c.lambda), y));
   return subTwofold(mulTwofold(twofold(c.beta), mulTwofold(square, stretch)), mulTwofold(R, drop));
 }
