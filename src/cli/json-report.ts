@@ -1,0 +1,153 @@
+// The sheet as one JSON object, for builds and other programs. Numbers are SI; lines and columns count from 1.
+
+import { lineColumn } from '../language/index.ts';
+import type { Line } from '../language/index.ts';
+import { sha256Hex } from '../numeric/index.ts';
+import { siUnitText } from '../quantity/index.ts';
+import { checkText, shownCell, shownReading, workingsOf } from '../record/index.ts';
+import type { CellKind, CellReading, Fault, Reading, Sheet } from '../sheet/index.ts';
+import { entryText } from './entry-text.ts';
+
+export interface JsonValue {
+  /** In `unit`; a region's word; null where there is none or it is infinite. */
+  readonly value: number | string | null;
+  /** SI unit, `1` for plain numbers; null for regions, conditions, and where the kind is not known. */
+  readonly unit: string | null;
+  /** As shown; null where there is no value. */
+  readonly text: string | null;
+}
+
+export interface JsonFault {
+  readonly code: string;
+  readonly message: string;
+  readonly line: number;
+  readonly column: number;
+}
+
+export interface JsonCell extends JsonValue {
+  readonly kind: CellKind;
+  readonly line: number;
+  /** As written, without name, source and note. */
+  readonly entry: string;
+  readonly error: JsonFault | null;
+  /** Of parts, points and stages, by value name. */
+  readonly values?: Readonly<Record<string, JsonValue>>;
+}
+
+export interface JsonReport {
+  readonly title: string | null;
+  /** SHA-256 of the UTF-8 text. */
+  readonly digest: string;
+  readonly cells: Readonly<Record<string, JsonCell>>;
+  /** null where a check is not computed; `reserve` also where it has no number or is infinite. */
+  readonly checks: Readonly<Record<string, { readonly holds: boolean | null; readonly reserve: number | null }>>;
+  readonly cautions: readonly { readonly cell: string; readonly line: number; readonly text: string }[];
+  readonly workings?: readonly JsonStep[];
+}
+
+export interface JsonStep {
+  readonly name: string | null;
+  readonly formula: string;
+  readonly substitution: string | null;
+  readonly result: string;
+  readonly sentence: string;
+}
+
+/** The report of a computed sheet; `workings` names the cell whose workings it shall hold. */
+export function jsonReport(sheet: Sheet, workings: string | null): JsonReport {
+  const { tree } = sheet;
+  const cells = new Map<string, JsonCell>();
+  const checks = new Map<string, { holds: boolean | null; reserve: number | null }>();
+  const keyed = sheet
+    .cells()
+    .map((cell) => ({ line: cell.tree.line.index, name: cell.name, cell: jsonCell(sheet, cell) }));
+  const loose = sheet.loose().map((fault) => ({ line: fault.line, name: null, cell: looseCell(sheet, fault) }));
+  for (const { line, name, cell } of [...keyed, ...loose].toSorted((a, b) => a.line - b.line)) {
+    cells.set(name === null || cells.has(name) ? `line ${line + 1}` : name, cell);
+  }
+  for (const { name, kind, check } of sheet.cells()) {
+    if (kind !== 'check' || checks.has(name)) continue;
+    checks.set(name, { holds: check?.holds ?? null, reserve: finite(check?.reserve ?? null) });
+  }
+  return {
+    title: tree.title?.text ?? null,
+    digest: sha256Hex(new TextEncoder().encode(tree.text)),
+    cells: Object.fromEntries(cells),
+    checks: Object.fromEntries(checks),
+    cautions: sheet.cautions().map(({ cell, line, text }) => ({ cell, line: line + 1, text })),
+    ...(workings === null ? {} : { workings: jsonWorkings(sheet, workings) }),
+  };
+}
+
+function jsonCell(sheet: Sheet, cell: CellReading): JsonCell {
+  const { line } = cell.tree;
+  const offers = cell.kind === 'part' || cell.kind === 'another' || cell.kind === 'point' || cell.kind === 'stage';
+  const own = cell.reading === null ? null : jsonValue(cell.reading, shownCell(cell));
+  const text = cell.check === null ? (own?.text ?? null) : checkText(cell);
+  return {
+    kind: cell.kind,
+    line: line.index + 1,
+    entry: entryText(line, cell.tree.entry.span),
+    value: own?.value ?? null,
+    unit: own?.unit ?? null,
+    text,
+    error: cellFault(sheet, cell),
+    ...(offers
+      ? { values: Object.fromEntries(cell.values.map((each) => [each.name, jsonValue(each, shownReading(each))])) }
+      : {}),
+  };
+}
+
+function looseCell(sheet: Sheet, fault: Fault): JsonCell {
+  const { text } = sheet.tree.lines[fault.line]!;
+  return {
+    kind: 'broken',
+    line: fault.line + 1,
+    entry: text.trim(),
+    value: null,
+    unit: null,
+    text: null,
+    error: jsonFault(sheet.tree.lines, fault),
+  };
+}
+
+function jsonValue(reading: Reading, text: string | null): JsonValue {
+  const { type, value } = reading;
+  return {
+    value: typeof value === 'number' ? finite(value) : typeof value === 'string' ? value : null,
+    unit: typeof type === 'string' ? null : siUnitText(type),
+    text,
+  };
+}
+
+function cellFault(sheet: Sheet, cell: CellReading): JsonFault | null {
+  const { lines } = sheet.tree;
+  if (cell.fault !== null) return jsonFault(lines, cell.fault);
+  if (cell.waitsFor === null) return null;
+  const { entry, line } = cell.tree;
+  return jsonFault(lines, {
+    code: 'waits-for',
+    text: `waits for ${cell.waitsFor}`,
+    line: line.index,
+    span: entry.span,
+  });
+}
+
+function jsonFault(lines: readonly Line[], fault: Fault): JsonFault {
+  const column = lineColumn(lines[fault.line]!, fault.span.start);
+  return { code: fault.code, message: fault.text, line: fault.line + 1, column };
+}
+
+function jsonWorkings(sheet: Sheet, name: string): readonly JsonStep[] {
+  return workingsOf(sheet, name).map(({ text, sentence }) => ({
+    name: text.left,
+    formula: text.formula,
+    substitution: text.substitution,
+    result: text.result,
+    sentence,
+  }));
+}
+
+function finite(value: number | null): number | null {
+  return value !== null && Number.isFinite(value) ? value : null;
+}

@@ -1,0 +1,196 @@
+// The sheet as text for a terminal: the verdict, what fails, then the sheet's own rows section by
+// section with their values, and at the end what is to be heeded.
+
+import { lineColumn } from '../language/index.ts';
+import type { FieldTree, Line, Note, Source } from '../language/index.ts';
+import { checkText, shownCell, shownOwn, shownReading, verdictOf } from '../record/index.ts';
+import type { CellReading, Fault, Sheet } from '../sheet/index.ts';
+import { entryText } from './entry-text.ts';
+import type { Column } from './text-table.ts';
+import { characterCount, rowLines, widthLeft, wrapText } from './text-table.ts';
+
+/** A line of the sheet, or a value under it. */
+interface Row {
+  readonly type: 'row';
+  readonly name: string;
+  readonly entry: string;
+  readonly value: string;
+  readonly remark: string;
+}
+type Item = Row | { readonly type: 'section' | 'message'; readonly text: string };
+
+const INDENT = '  ';
+/** The entries take at most this share of what names and values leave. */
+const ENTRY_SHARE = 0.6;
+const LEAST_ENTRY = 16;
+const LEAST_REMARK = 8;
+
+/** The report in lines of at most `width` characters, as far as names and values fit in it. */
+export function textReport(sheet: Sheet, width: number): string {
+  const verdict = verdictOf(sheet);
+  const failing = verdict.failing.map((cell): Row => ({
+    ...cellRow(cell),
+    name: INDENT + cell.name,
+    remark: `line ${cell.tree.line.index + 1}`,
+  }));
+  const blocks = [
+    [sheet.tree.title?.text ?? 'Sheet without a title', ...wrapText(verdict.sentence, width)],
+    failing.length === 0 ? [] : ['Failing checks', ...table(failing, width)],
+    ...sections(table(sheetItems(sheet), width)),
+    listed(
+      'Cautions',
+      sheet.cautions().map(({ cell, line, text }) => `${cell}, line ${line + 1}: ${text}`),
+      width,
+    ),
+    listed(
+      'Assumptions, to be confirmed',
+      sheet.assumptions().map(({ cell, text }) => `${cell}: ${text}`),
+      width,
+    ),
+  ];
+  return `${blocks
+    .filter((block) => block.length > 0)
+    .map((block) => block.join('\n'))
+    .join('\n\n')}\n`;
+}
+
+/** `line 12, column 8: what is wrong`. */
+export function faultText(lines: readonly Line[], fault: Fault): string {
+  return `line ${fault.line + 1}, column ${lineColumn(lines[fault.line]!, fault.span.start)}: ${fault.text}`;
+}
+
+// ---------------------------------------------------------------- rows
+
+function sheetItems(sheet: Sheet): Item[] {
+  const { lines } = sheet.tree;
+  const cells = new Map(sheet.cells().map((cell) => [cell.tree.line.index, cell]));
+  const loose = new Map(sheet.loose().map((fault) => [fault.line, fault]));
+  const items: Item[] = [];
+  for (const line of lines) {
+    const cell = cells.get(line.index);
+    const fault = loose.get(line.index);
+    if (line.tree.type === 'heading' && line !== sheet.tree.title?.line) {
+      items.push({ type: 'section', text: line.tree.text });
+    } else if (cell) {
+      items.push(...cellItems(cell, lines));
+    } else if (fault) {
+      items.push({
+        type: 'row',
+        name: `${INDENT}line ${line.index + 1}`,
+        entry: line.text.trim(),
+        value: '',
+        remark: '',
+      });
+      items.push({ type: 'message', text: faultText(lines, fault) });
+    }
+  }
+  return items;
+}
+
+function cellItems(cell: CellReading, lines: readonly Line[]): Item[] {
+  const fieldAt = new Map(cell.fields.map((field) => [field.line, field]));
+  const fault = cell.waitsFor === null ? cell.fault : null;
+  const items: Item[] = [cellRow(cell)];
+  const message = (line: number): void => {
+    if (fault?.line === line) items.push({ type: 'message', text: faultText(lines, fault) });
+  };
+  message(cell.tree.line.index);
+  for (const field of cell.tree.fields) {
+    const reading = fieldAt.get(field.line.index);
+    const value = reading ? (shownOwn(reading, reading.isInput) ?? '') : '';
+    items.push(fieldRow(field, value, reading?.isInput ?? false));
+    message(field.line.index);
+  }
+  for (const value of cell.values) {
+    const text = shownReading(value);
+    const name = INDENT.repeat(2) + value.name;
+    items.push({ type: 'row', name, entry: '', value: text ?? '–', remark: value.missing?.text ?? '' });
+  }
+  return items;
+}
+
+function cellRow(cell: CellReading): Row {
+  const { line, entry, source, note } = cell.tree;
+  return {
+    type: 'row',
+    name: INDENT + cell.name,
+    entry: entryText(line, entry.span),
+    value: ownValue(cell),
+    remark: remark(source, note, cell.isInput),
+  };
+}
+
+function ownValue(cell: CellReading): string {
+  if (cell.waitsFor !== null) return `waits for ${cell.waitsFor}`;
+  if (cell.fault !== null) return '';
+  return cell.kind === 'check' ? checkText(cell) : (shownCell(cell) ?? '');
+}
+
+function fieldRow(field: FieldTree, value: string, isInput: boolean): Row {
+  const label = field.label.map(({ name }) => name).join('.');
+  return {
+    type: 'row',
+    name: INDENT.repeat(2) + label,
+    entry: entryText(field.line, field.body.span),
+    value,
+    remark: remark(field.source, field.note, isInput),
+  };
+}
+
+function remark(source: Source | null, note: Note | null, isInput: boolean): string {
+  const from = source?.text.trim() ?? (isInput ? 'no source' : '');
+  return [from, note?.text ?? ''].filter((part) => part !== '').join('; ');
+}
+
+// ---------------------------------------------------------------- layout
+
+function table(items: readonly Item[], width: number): string[] {
+  const rows = items.filter((item) => item.type === 'row');
+  const aligned = alignNumbers(rows.map((row) => row.value));
+  const name = widest(rows.map((row) => row.name));
+  const value = widest(aligned);
+  const free = widthLeft(width, [name, value]);
+  const entry = Math.min(widest(rows.map((row) => row.entry)), Math.max(LEAST_ENTRY, Math.floor(free * ENTRY_SHARE)));
+  const columns: Column[] = [
+    { width: name, overflow: 'wrap' },
+    { width: entry, overflow: 'wrap' },
+    { width: value, overflow: 'wrap' },
+    { width: Math.max(LEAST_REMARK, widthLeft(width, [name, entry, value])), overflow: 'cut' },
+  ];
+  let index = 0;
+  return items.flatMap((item) => {
+    if (item.type === 'row') return rowLines([item.name, item.entry, aligned[index++]!, item.remark], columns);
+    if (item.type === 'section') return ['', item.text];
+    const text = wrapText(item.text, Math.max(LEAST_ENTRY, width - 2 * INDENT.length));
+    return text.map((each) => INDENT.repeat(2) + each);
+  });
+}
+
+/** Numbers to the right, their units to the left of one line; what is no number stays. */
+function alignNumbers(values: readonly string[]): string[] {
+  const parts = values.map((value) => /^([−∞\d][^ ]*)(?: (.*))?$/.exec(value));
+  const width = widest(parts.map((part) => part?.[1] ?? ''));
+  return parts.map((part, i) => {
+    if (!part) return values[i]!;
+    const number = ' '.repeat(width - characterCount(part[1]!)) + part[1]!;
+    return part[2] === undefined ? number : `${number} ${part[2]}`;
+  });
+}
+
+function sections(lines: readonly string[]): string[][] {
+  const blocks: string[][] = [[]];
+  for (const line of lines) {
+    if (line === '') blocks.push([]);
+    else blocks[blocks.length - 1]!.push(line);
+  }
+  return blocks;
+}
+
+function listed(heading: string, texts: readonly string[], width: number): string[] {
+  if (texts.length === 0) return [];
+  return [heading, ...texts.flatMap((text) => wrapText(text, width - INDENT.length).map((line) => INDENT + line))];
+}
+
+function widest(texts: readonly string[]): number {
+  return Math.max(0, ...texts.map(characterCount));
+}

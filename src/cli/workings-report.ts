@@ -1,0 +1,28 @@
+// The workings of one cell as text for a terminal.
+
+import { stepText, workingsOf } from '../record/index.ts';
+import type { Sheet } from '../sheet/index.ts';
+import { faultText } from './text-report.ts';
+import { wrapText } from './text-table.ts';
+
+const INDENT = '  ';
+
+/** Sentence, then formula, numbers in place and result of every step; lines are broken between words. */
+export function workingsReport(sheet: Sheet, name: string, width: number): string {
+  const lines = [`Workings of ${name}`];
+  const cell = sheet.cell(name);
+  if (cell?.waitsFor) lines.push(`${INDENT}${name} waits for ${cell.waitsFor}.`);
+  else if (cell?.fault) lines.push(...indented(faultText(sheet.tree.lines, cell.fault), width));
+  const steps = workingsOf(sheet, name);
+  if (steps.length === 0 && !cell?.fault && !cell?.waitsFor) lines.push(`${INDENT}Nothing is computed in this cell.`);
+  for (const step of steps) {
+    if (step.sentence !== '') lines.push('', ...wrapText(step.sentence, width));
+    lines.push(...indented(stepText(step), width));
+  }
+  return `${lines.join('\n')}\n`;
+}
+
+function indented(text: string, width: number): string[] {
+  const [first, ...rest] = wrapText(text, width - 3 * INDENT.length);
+  return [INDENT + first!, ...rest.map((line) => INDENT.repeat(3) + line)];
+}

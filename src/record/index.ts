@@ -1,0 +1,15 @@
+// What the page, the record and the terminal print: TeX, workings, values, checks and the verdict.
+// All of it is text or plain trees; nothing is rendered here.
+
+export { checkText, reserveText } from './check-text.ts';
+export { proseParts } from './prose.ts';
+export type { ProsePart } from './prose.ts';
+export { shownCell, shownOwn, shownReading } from './shown.ts';
+export { texOfExpression } from './tex.ts';
+export type { TexOptions } from './tex.ts';
+export { texOfName, texOfPath } from './tex-name.ts';
+export { texOfUnit } from './tex-number.ts';
+export { lacksValue, verdictOf } from './verdict.ts';
+export type { Verdict } from './verdict.ts';
+export { stepText, workingsOf } from './workings.ts';
+export type { PrintedStep, StepLine } from './workings.ts';
