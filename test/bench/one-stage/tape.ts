@@ -1,0 +1,85 @@
+// The one-stage bench as the product's compiled form: one segment per cell, run by its scalar evaluator.
+
+import { isConstantNode, isFunctionNode, isOperatorNode, isParenthesisNode, isSymbolNode, parse } from 'mathjs';
+import type { MathNode } from 'mathjs';
+import { line, solveLine } from '../../../src/network/line-solve.ts';
+import { assemble, createBuilder, createSlots, runAll } from '../../../src/program/index.ts';
+import type { Builder, KernelTable, Segment } from '../../../src/program/index.ts';
+import { CELLS, FIXED, INPUT_NAMES, POINT_INPUTS, POINT_OUTPUTS, STEPS, SUMMED } from './inputs.ts';
+import type { InputName } from './inputs.ts';
+
+const KERNELS: KernelTable = [
+  {
+    name: 'line-point',
+    run: (s, a, p) => {
+      solveLine(s[a[p]], s[a[p + 1]], s[a[p + 2]], s[a[p + 3]], s[a[p + 4]], s[a[p + 5]]);
+      s[a[p + 6]] = line[0];
+      s[a[p + 7]] = line[1];
+      s[a[p + 8]] = line[2];
+    },
+  },
+];
+
+/** As `createHandLoop`, on a program. */
+export function createTape(columns: Readonly<Record<InputName, Float64Array>>) {
+  const slotOf = new Map<string, number>(INPUT_NAMES.map((name, k) => [name, k]));
+  const segments: Segment[] = [];
+  let base = INPUT_NAMES.length;
+  for (const step of STEPS) {
+    const builder = createBuilder(KERNELS);
+    const lookUp = (name: string) => slotOf.get(name) ?? builder.constant(FIXED[name as keyof typeof FIXED]);
+    const [names, handles] =
+      step === 'operating point'
+        ? [POINT_OUTPUTS, builder.call('line-point', POINT_INPUTS.map(lookUp), POINT_OUTPUTS.length)]
+        : [[step[0]], [lower(parse(step[1]), builder, lookUp)]];
+    const { segment, slot } = builder.finish(base);
+    segments.push(segment);
+    names.forEach((name, k) => slotOf.set(name, slot(handles[k])));
+    base += segment.size;
+  }
+  // Every sample runs the whole program: nothing here asks which segment feeds which.
+  const program = assemble(
+    segments,
+    segments.map(() => []),
+  );
+  const slots = createSlots(program);
+  const cells = CELLS.map((name) => slotOf.get(name)!);
+  const inputs = INPUT_NAMES.map((name) => columns[name]);
+  const summed = SUMMED.map((k) => cells[k]);
+  const row = new Float64Array(CELLS.length);
+  const evaluate = (i: number): void => {
+    for (let k = 0; k < inputs.length; k++) slots[k] = inputs[k][i];
+    runAll(program, slots, KERNELS);
+  };
+  const run = (): number => {
+    let sum = 0;
+    for (let i = 0; i < columns.V_DD.length; i++) {
+      evaluate(i);
+      for (let k = 0; k < summed.length; k++) sum += slots[summed[k]];
+    }
+    return sum;
+  };
+  const runOne = (i: number): void => {
+    evaluate(i);
+    cells.forEach((slot, k) => (row[k] = slots[slot]));
+  };
+  return { row, runOne, run };
+}
+
+const BINARY = { '+': 'add', '-': 'sub', '*': 'mul', '/': 'div' } as const;
+
+/** Appends the operations of a formula; knows what the formulas of this bench use. */
+function lower(node: MathNode, builder: Builder, lookUp: (name: string) => number): number {
+  if (isConstantNode(node)) return builder.constant(node.value as number);
+  if (isSymbolNode(node)) return lookUp(node.name);
+  if (isParenthesisNode(node)) return lower(node.content, builder, lookUp);
+  if (isOperatorNode(node)) {
+    const [a, b] = node.args.map((operand) => lower(operand, builder, lookUp));
+    return b === undefined ? builder.neg(a) : builder[BINARY[node.op as keyof typeof BINARY]](a, b);
+  }
+  if (isFunctionNode(node)) {
+    const [a, b] = node.args.map((operand) => lower(operand, builder, lookUp));
+    return builder.op(node.fn.name as 'min' | 'abs' | 'log10', a, b);
+  }
+  throw new Error(`The formulas of this bench hold no ${node.type}.`);
+}
