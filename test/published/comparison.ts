@@ -44,7 +44,7 @@ export interface Comparison {
   /** Values of our own that belong to the example: the designed stage gives back what was asked, a side the source leaves out. */
   readonly own?: readonly {
     readonly path: string;
-    readonly value: number | string;
+    readonly value: number | string | boolean;
     readonly unit: string;
     readonly because: string;
   }[];

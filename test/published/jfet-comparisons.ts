@@ -248,6 +248,14 @@ export const JFET_COMPARISONS: Readonly<Record<string, Comparison>> = {
   },
   'ztc-063-theory': {
     quantities: { Vov_ztc: 'V_ov1' },
+    own: [
+      {
+        path: 'steady',
+        value: true,
+        unit: '',
+        because: 'at that V_ov the current does not move with T_A, 1.4 V above it it does',
+      },
+    ],
   },
   'ztc-it-notes-12': {
     quantities: { VGS: 'P1.V_GS', ID: 'P1.I_D' },

@@ -4,8 +4,8 @@ import { createSheet } from '../../src/sheet/index.ts';
 
 /** A computed sheet as the comparisons read it. */
 export interface ComputedSheet {
-  /** SI value of a path, a region's word, or null where there is none; `-A1.V_DS` turns the sign. */
-  value(path: string): number | string | null;
+  /** SI value of a path, a region's word, whether a check holds, or null where there is none; `-A1.V_DS` turns the sign. */
+  value(path: string): number | string | boolean | null;
   /** Every fault of the sheet as `NAME: text`. */
   faults(): string[];
   /** Declared ends of a cell or of a field of a part (`Q1.I_DSS`), in SI, or null without spread. */
@@ -19,7 +19,6 @@ export function readSheet(text: string): ComputedSheet {
     value(path) {
       const turned = path.startsWith('-');
       const value = sheet.value(turned ? path.slice(1) : path);
-      if (typeof value === 'boolean') return null;
       return turned && typeof value === 'number' ? -value : value;
     },
     faults: () => [
