@@ -27,6 +27,8 @@ function inlineStylesWhileDeveloping(): Plugin {
 
 export default defineConfig({
   base: './',
+  // What is not there is answered by 404, while developing as on a plain host.
+  appType: 'mpa',
   plugins: [solid(), woff2Only(), inlineStylesWhileDeveloping()],
   build: {
     target: 'es2022',

@@ -88,8 +88,13 @@ export function formatTimings(title: string, unit: string, timings: readonly Tim
 function judge(ratio: number, target: Variant['target']): string {
   if (target === undefined) return '';
   const { atLeast = 0, atMost = Infinity } = target;
-  const words = [atLeast > 0 ? `at least ${atLeast}` : '', atMost < Infinity ? `at most ${atMost}` : ''].filter(
-    (word) => word !== '',
-  );
+  const words = [
+    atLeast > 0 ? `at least ${short(atLeast)}` : '',
+    atMost < Infinity ? `at most ${short(atMost)}` : '',
+  ].filter((word) => word !== '');
   return `${words.join(', ')}: ${ratio >= atLeast && ratio <= atMost ? 'met' : 'MISSED'}`;
+}
+
+function short(ratio: number): string {
+  return Number(ratio.toPrecision(2)).toString();
 }
