@@ -1,0 +1,54 @@
+// bench = "bench" ;   its one field names the columns, and rows of numbers and names follow.
+//
+// columns = column { "," column } ;   column = name [ "[" unit "]" ] ;
+
+import { skipBlanks } from './characters.ts';
+import { beginsWith } from './entry-kind.ts';
+import type { EntryKind } from './entry-kind.ts';
+import { halt } from './messages.ts';
+import type { Reader } from './reader.ts';
+import { spanOf } from './reader.ts';
+import type { BenchEntry, FieldBody, NameRef } from './syntax.ts';
+import type { Unit } from '../quantity/index.ts';
+import { unitAt } from './unit-text.ts';
+
+/** The label in whose line a bracket is a unit. */
+export const COLUMNS = 'columns';
+
+export const BENCH: EntryKind = {
+  type: 'bench',
+  starts: beginsWith('bench'),
+  read: readBench,
+  fields: { read: readBenchField, rows: true },
+};
+
+function readBench(reader: Reader): BenchEntry {
+  const { start } = reader.take();
+  reader.expectEnd();
+  return { type: 'bench', span: reader.spanFrom(start) };
+}
+
+function readBenchField(reader: Reader, label: readonly NameRef[]): FieldBody {
+  const { start } = reader.ahead;
+  if (label.length !== 1 || label[0].name !== COLUMNS)
+    halt('bench-field', { start: label[0].span.start, end: label.at(-1)!.span.end }, reader.textOf(label[0].span));
+  const columns: { name: NameRef; unit: Unit | null; span: { start: number; end: number } }[] = [];
+  do {
+    const { ahead } = reader;
+    if (ahead.type !== 'name') halt('columns-form', spanOf(ahead));
+    reader.take();
+    const unit = reader.atSign('[') ? readBracket(reader) : null;
+    columns.push({ name: { name: ahead.name, span: spanOf(ahead) }, unit, span: reader.spanFrom(ahead.start) });
+  } while (reader.takeSign(','));
+  reader.expectEnd();
+  return { type: 'columns', columns, span: reader.spanFrom(start) };
+}
+
+function readBracket(reader: Reader): Unit {
+  const open = reader.take();
+  const { unit, span } = unitAt(reader.text, skipBlanks(reader.text, open.end, reader.limit), reader.limit);
+  const close = skipBlanks(reader.text, span.end, reader.limit);
+  if (close >= reader.limit || reader.text[close] !== ']') halt('source-open', spanOf(open));
+  reader.jump(close + 1);
+  return unit;
+}

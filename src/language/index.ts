@@ -1,0 +1,15 @@
+// The language of the sheet: text to syntax tree and back, edits as splices, messages.
+//
+// Spans count UTF-16 units from the start of their line, offsets of splices from the start of the document.
+// Numbers are SI. What a user got wrong is in the tree, as a broken entry, body or line with its message.
+
+export type * from './syntax.ts';
+export { parseExpression } from './expression.ts';
+export { literalOf } from './literal.ts';
+export { nearestNames } from './nearest.ts';
+export { lineColumn } from './position.ts';
+export { printExpr } from './print.ts';
+export { isCellName, RESERVED } from './reserved.ts';
+export { parseSheet } from './sheet.ts';
+export { exprsOfBody, exprsOfEntry, partsOf, pathsOf, placesOfBody, walkExpr } from './walk.ts';
+export { applySplices, invertSplices } from './splice.ts';

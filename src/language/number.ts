@@ -1,0 +1,204 @@
+// Numbers of grammar.md `number`: a decimal with or without unit, or a component code. A unit is taken
+// as far as it goes; what may not stand glued to it, or follow a number at all, is told from here,
+// because only here the blanks are still known.
+
+import type { Unit, ValueKind } from '../quantity/index.ts';
+import {
+  describeUnitFault,
+  dimensionName,
+  isUnitFault,
+  PLAIN,
+  scaleToSI,
+  scanCode,
+  scanUnit,
+} from '../quantity/index.ts';
+import { isBlank, isDigit, isLetter, nameEnd, skipBlanks } from './characters.ts';
+import { halt } from './messages.ts';
+
+export interface NumberToken {
+  readonly type: 'number';
+  readonly start: number;
+  readonly end: number;
+  /** The digits as written; '' for a component code, which has no other spelling of its value. */
+  readonly numeral: string;
+  readonly value: number;
+  readonly unit: Unit | null;
+  readonly kind: ValueKind;
+}
+
+/** More digits than any number needs; keeps exact decimal arithmetic short. */
+const MOST_DIGITS = 100;
+
+const CODE_LETTERS = 'RkMGpnuµμ';
+
+/** Reads the number that begins at `at`, where a digit stands; leaves with a message where it is none. */
+export function scanNumber(text: string, at: number, limit: number): NumberToken {
+  const code = scanCode(text, at);
+  if (code) {
+    refuseUnitBehindCode(text, at, code.end, limit, code.kind);
+    return { type: 'number', start: at, numeral: '', ...code };
+  }
+  const end = numeralEnd(text, at, limit);
+  const numeral = text.slice(at, end);
+  const found = unitBehind(text, at, end, limit);
+  if (!found) refuseDigitsBehind(text, at, end, limit);
+  const unit = found?.unit ?? null;
+  return {
+    type: 'number',
+    start: at,
+    end: found?.end ?? end,
+    numeral,
+    value: checkedValue(numeral, unit, { start: at, end }),
+    unit,
+    kind: unit?.kind ?? PLAIN,
+  };
+}
+
+/** The SI value of a numeral; leaves with a message where it overflows or vanishes. */
+export function checkedValue(numeral: string, unit: Unit | null, span: { start: number; end: number }): number {
+  const value = scaleToSI(numeral, unit);
+  const vanished = value === 0 && /[1-9]/.test(numeral.replace(/[eE].*$/, ''));
+  if (!Number.isFinite(value) || (vanished && unit?.kind.scale !== 'celsius')) halt('number-range', span, numeral);
+  return value;
+}
+
+function digitsEnd(text: string, at: number, limit: number): number {
+  let i = at;
+  while (i < limit && isDigit(text.charCodeAt(i))) i++;
+  return i;
+}
+
+function numeralEnd(text: string, at: number, limit: number): number {
+  let end = digitsEnd(text, at, limit);
+  if (text[end] === '.' && end < limit && text[end + 1] !== '.') {
+    const fraction = digitsEnd(text, end + 1, limit);
+    if (fraction === end + 1) {
+      const whole = text.slice(at, end);
+      halt('decimals-missing', { start: at, end: end + 1 }, `${whole}.`, `${whole}.0`);
+    }
+    end = fraction;
+  }
+  if ((text[end] === 'e' || text[end] === 'E') && end < limit) {
+    const sign = text[end + 1] === '+' || text[end + 1] === '-' || text[end + 1] === '−' ? 1 : 0;
+    const exponent = digitsEnd(text, end + 1 + sign, limit);
+    if (exponent > end + 1 + sign) end = exponent;
+  }
+  if (end - at > MOST_DIGITS) halt('number-length', { start: at, end }, MOST_DIGITS);
+  return end;
+}
+
+// ---------------------------------------------------------------- units
+
+function unitBehind(text: string, at: number, end: number, limit: number): { unit: Unit; end: number } | null {
+  const start = skipBlanks(text, end, limit);
+  if (start === limit) return null;
+  const first = text[start];
+  const begins = first === '/' || first === '√' || first === '%' || first === '°' || first === 'º' || first === '℃';
+  if (!begins && !isLetter(text.charCodeAt(start))) return null;
+  const read = scanUnit(text, start);
+  if (!isUnitFault(read)) {
+    refuseGluedOperator(text, at, read.end, limit);
+    return read;
+  }
+  if (read.fault === 'power not allowed' || read.fault === 'stands alone')
+    halt('unit-form', { start: read.start, end: read.end }, describeUnitFault(read));
+  if (first === '/' || first === '√') return null;
+  const numeral = text.slice(at, end);
+  const wordEnd = Math.max(nameEnd(text, start, limit), start + 1);
+  const word = text.slice(start, wordEnd);
+  const whole = { start: at, end: wordEnd };
+  if (word.length === 1 && CODE_LETTERS.includes(word) && /^\d+(\.\d+)?$/.test(numeral)) {
+    const unit = `${numeral} ${word === 'R' ? 'ohm' : `${word}${'pnuµμ'.includes(word) ? 'F' : 'ohm'}`}`;
+    const code = numeral.includes('.') ? numeral.replace('.', word) : numeral + word;
+    const written = text.slice(at, wordEnd);
+    if (start === end) halt('code-decimals', whole, written, code, unit);
+    if (word !== 'R') halt('code-blank', whole, written, code, unit);
+  }
+  if (start > end) return null;
+  const letter = /^([A-Za-zΑ-Ωα-ωµ])\d+$/.exec(word);
+  if (letter && CODE_LETTERS.includes(letter[1])) halt('code-end', whole, text.slice(at, wordEnd));
+  if (letter) halt('code-letter', whole, text.slice(at, wordEnd), letter[1]);
+  if (/\d/.test(word)) halt('code-end', whole, text.slice(at, wordEnd));
+  return halt('unit-unknown', { start, end: wordEnd }, word, read.hint);
+}
+
+/** `10 V/R`, `10 V*2`, `10 V^x`: behind a unit these signs need blanks, or they would belong to it. */
+function refuseGluedOperator(text: string, at: number, end: number, limit: number): void {
+  if (end >= limit) return;
+  const sign = text[end];
+  if (sign === '^') halt('unit-power', { start: at, end: end + 1 }, ...powerSpellings(text, at, end, end + 1, limit));
+  const parallel = sign === '/' && text[end + 1] === '/';
+  if (parallel || !(sign === '/' || sign === '*' || sign === '·' || sign === '⋅' || sign === '×')) return;
+  const from = skipBlanks(text, end + 1, limit);
+  const operand = text.slice(from, operandEnd(text, from, limit));
+  const right = `${text.slice(at, end)} ${sign} ${operand}`.trimEnd();
+  const span = { start: at, end: Math.max(end + 1, from + operand.length) };
+  halt('unit-glued', span, text.slice(span.start, span.end).trimEnd(), right);
+}
+
+/** What was written with a power behind a quantity, and its two possible meanings; `from` is behind the sign. */
+export function powerSpellings(
+  text: string,
+  at: number,
+  end: number,
+  from: number,
+  limit: number,
+): [found: string, group: string, glued: string] {
+  const start = skipBlanks(text, from, limit);
+  const stop = operandEnd(text, start, limit);
+  const exponent = text.slice(start, stop) || '2';
+  const quantity = text.slice(at, end);
+  return [text.slice(at, Math.max(stop, from)).trimEnd(), `(${quantity})^${exponent}`, `${quantity}^${exponent}`];
+}
+
+/** The end of a signed number or a path, for quoting it. */
+function operandEnd(text: string, at: number, limit: number): number {
+  let i = at;
+  if (text[i] === '-' || text[i] === '−' || text[i] === '+') i++;
+  while (i < limit && (nameEnd(text, i, limit) > i || (text[i] === '.' && text[i + 1] !== '.'))) i++;
+  return i;
+}
+
+// ---------------------------------------------------------------- what may not follow
+
+function refuseUnitBehindCode(text: string, at: number, end: number, limit: number, kind: ValueKind): void {
+  const start = skipBlanks(text, end, limit);
+  if (start === limit || !(text[start] === '/' || text[start] === '√' || isLetter(text.charCodeAt(start)))) return;
+  const read = scanUnit(text, start);
+  if (isUnitFault(read)) return;
+  halt(
+    'code-with-unit',
+    { start: at, end: read.end },
+    text.slice(at, read.end),
+    text.slice(at, end),
+    dimensionName(kind),
+  );
+}
+
+/** `10 000` and `3,3`: what other notations would make one number. */
+function refuseDigitsBehind(text: string, at: number, end: number, limit: number): void {
+  const numeral = text.slice(at, end);
+  if (text[end] === ',' && end + 1 < limit && isDigit(text.charCodeAt(end + 1)) && /^\d+$/.test(numeral)) {
+    const stop = digitsEnd(text, end + 1, limit);
+    const fraction = text.slice(end + 1, stop);
+    // `3,3.1` has a point already, so that its comma stands between two numbers.
+    if (text[stop] !== '.' || text[stop + 1] === '.')
+      halt(
+        'decimal-comma',
+        { start: at, end: stop },
+        `${numeral},${fraction}`,
+        `${numeral}.${fraction}`,
+        `${numeral}, ${fraction}`,
+      );
+  }
+  let stop = end;
+  while (stop < limit && isBlank(text.charCodeAt(stop))) {
+    const next = skipBlanks(text, stop, limit);
+    if (digitsEnd(text, next, limit) !== next + 3) break;
+    stop = next + 3;
+  }
+  if (stop > end && nameEnd(text, stop, limit) === stop && /^\d{1,3}$/.test(numeral)) {
+    const found = text.slice(at, stop);
+    halt('digits-grouped', { start: at, end: stop }, found, found.replace(/\D/g, ''));
+  }
+}
