@@ -103,8 +103,8 @@ function baseFactors(dimension: Dimension): readonly UnitFactor[] {
   const factors = dimension.flatMap((power, i): UnitFactor[] => {
     const magnitude = Math.round(Math.abs(power) * 1e6) / 1e6;
     if (magnitude === 0) return [];
-    const root = magnitude === 0.5;
-    const value = root ? 1 : magnitude;
+    const root = magnitude % 1 === 0.5;
+    const value = root ? magnitude * 2 : magnitude;
     return [{ divides: power < 0, root, prefix: null, symbol: BASE[i]!, exponent: { text: String(value), value } }];
   });
   return [...factors.filter((factor) => !factor.divides), ...factors.filter((factor) => factor.divides)];

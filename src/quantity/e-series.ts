@@ -1,4 +1,5 @@
-// The preferred numbers of one decade. Source: IEC 60063:2015, tables of the two groups.
+// The preferred numbers of one decade. Source: IEC 60063:2015, as two independent public
+// lists agree on it.
 // E3 to E24 are historic values that follow no rule; E48 to E192 are 100·10^(i/N) rounded, save for
 // 920 in E192 (the rule gives 919). The tests hold both.
 

@@ -8,11 +8,12 @@
 import type { DisplayUnit } from './display-unit.ts';
 import { choosePrefix, displayUnitOf, prefixedUnit } from './display-unit.ts';
 import { sameDimension } from './dimension.ts';
+import { decimalOf } from './decimal.ts';
 import { dimensionName } from './dimension-name.ts';
 import type { ValueKind } from './kind.ts';
 import type { RoundedDecimal, Rounding } from './round-decimal.ts';
-import { roundDecimal } from './round-decimal.ts';
-import { fromSI } from './si-scale.ts';
+import { roundDecimal, unroundedDecimal } from './round-decimal.ts';
+import { decimalFromSI, fromSI } from './si-scale.ts';
 import { superscript } from './unit-factor.ts';
 import type { Unit } from './unit.ts';
 import { knownUnit } from './unit.ts';
@@ -110,7 +111,7 @@ export function formatRow(
 export function bestPrefix(value: number, kind: ValueKind, options: FormatOptions = {}): number {
   if (value === 0 || !Number.isFinite(value)) return 0;
   const { digits = DIGITS, rounding = 'nearest' } = options;
-  return choosePrefix(kind, leadOf(roundDecimal(value, { digits, rounding })));
+  return choosePrefix(kind, leadOf(roundValue(value, digits, rounding)));
 }
 
 // ---------------------------------------------------------------- parts
@@ -129,14 +130,27 @@ function show(value: number, kind: ValueKind, options: FormatOptions): Shown {
   if (asUnit && (asUnit.exponent10 === null || asUnit.kind.scale === 'celsius')) {
     // No shift of the decimal point leads to this unit: the number itself is another.
     const leastLead = asUnit.kind.scale === 'celsius' ? 1 : undefined;
-    const rounded = roundDecimal(fromSI(value, asUnit), { digits, rounding, leastLead });
+    const rounded =
+      digits === 'all'
+        ? unroundedDecimal(decimalFromSI(finite(value), asUnit))
+        : roundDecimal(fromSI(value, asUnit), { digits, rounding, leastLead });
     return { rounded, unit: displayUnitOf(asUnit), exponent: rounded.exponent, dropZeros };
   }
   const leastLead = kind.scale === 'decibel' ? 0 : undefined;
-  const rounded = roundDecimal(value, { digits, rounding, leastLead });
+  const rounded = roundValue(value, digits, rounding, leastLead);
   const prefix = options.prefix ?? (value === 0 ? 0 : choosePrefix(kind, leadOf(rounded)));
   const unit = asUnit ? displayUnitOf(asUnit) : prefixedUnit(kind, prefix);
   return { rounded, unit, exponent: rounded.exponent - unit.exponent10, dropZeros };
+}
+
+function roundValue(value: number, digits: number | 'all', rounding: Rounding, leastLead?: number): RoundedDecimal {
+  if (digits === 'all') return unroundedDecimal(decimalOf(finite(value)));
+  return roundDecimal(value, { digits, rounding, leastLead });
+}
+
+function finite(value: number): number {
+  if (!Number.isFinite(value)) throw new RangeError(`no finite value to print: ${value}`);
+  return value;
 }
 
 function leadOf({ digits, exponent }: RoundedDecimal): number {

@@ -37,7 +37,7 @@ export { superscript } from './unit-factor.ts';
 export type { UnitFault, UnitFaultKind } from './unit-fault.ts';
 export { describeUnitFault, isUnitFault } from './unit-fault.ts';
 export type { ScannedUnit, Unit } from './unit.ts';
-export { asciiUnit, isPrefix, knownUnit, parseUnit, scanUnit, typesetUnit } from './unit.ts';
+export { asciiUnit, knownUnit, parseUnit, scanUnit, typesetUnit } from './unit.ts';
 export { fromSI, scaleToSI } from './si-scale.ts';
 export type { ComponentCode } from './rkm-code.ts';
 export { readCode, scanCode } from './rkm-code.ts';

@@ -15,16 +15,17 @@ interface Place {
 }
 
 /**
- * The preferred value nearest to `x` by ratio (of two equally near the larger one), or the next one not below (`up`) or not above it
- * (`down`). A value of the series is its own answer whatever the float noise. Throws RangeError unless 0 < x < infinity.
+ * The preferred value nearest to `x` by ratio, or the next one not below (`up`) or not above it (`down`). A value of
+ * the series is its own answer whatever the float noise. Throws RangeError unless 0 < x < infinity.
  */
 export function preferredValue(series: SeriesName, x: number, direction: PreferredDirection): number {
   const { below, exact, wanted } = locate(series, x);
   if (exact || direction === 'down') return valueAt(series, below);
   const above = stepPlace(series, below, 1);
   if (direction === 'up') return valueAt(series, above);
-  // wanted / a < b / wanted, in whole numbers
-  const nearBelow = wanted * wanted < integerAt(series, below, below.decade) * integerAt(series, above, below.decade);
+  // wanted / below < above / wanted, in whole numbers; no two neighbours have a rational mean, so there is no tie.
+  const [low, high] = [integerAt(series, below, below.decade), integerAt(series, above, below.decade)];
+  const nearBelow = BigInt(wanted) ** 2n < BigInt(low) * BigInt(high);
   return valueAt(series, nearBelow ? below : above);
 }
 
@@ -35,11 +36,11 @@ export function nextPreferred(series: SeriesName, x: number, direction: 'up' | '
   return valueAt(series, exact ? stepPlace(series, below, -1) : below);
 }
 
-function locate(series: SeriesName, x: number): { below: Place; exact: boolean; wanted: bigint } {
+function locate(series: SeriesName, x: number): { below: Place; exact: boolean; wanted: number } {
   if (!(x > 0 && x < Infinity)) throw new RangeError(`no preferred value near ${x}`);
   const [mantissa, exponent] = x.toExponential(READ_DIGITS - 1).split('e') as [string, string];
   const decade = Number(exponent);
-  const wanted = BigInt(mantissa.replace('.', ''));
+  const wanted = Number(mantissa.replace('.', ''));
   // The last value not above; every series begins with the decade itself, so there is one.
   const index = SERIES[series].findLastIndex((_, i) => integerAt(series, { index: i, decade }, decade) <= wanted);
   const below = { index, decade };
@@ -54,9 +55,9 @@ function stepPlace(series: SeriesName, { index, decade }: Place, step: 1 | -1): 
 }
 
 /** The value in units of the last of 13 digits of `decade`. */
-function integerAt(series: SeriesName, { index, decade }: Place, inDecade: number): bigint {
+function integerAt(series: SeriesName, { index, decade }: Place, inDecade: number): number {
   const printed = SERIES[series][index]!;
-  return BigInt(printed) * 10n ** BigInt(READ_DIGITS - String(printed).length + decade - inDecade);
+  return Number(`${printed}e${READ_DIGITS - String(printed).length + decade - inDecade}`);
 }
 
 function valueAt(series: SeriesName, { index, decade }: Place): number {

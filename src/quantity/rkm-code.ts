@@ -27,12 +27,12 @@ const LETTERS: Readonly<Record<string, readonly [exponent10: number, unit: Unit]
   p: [-12, FARAD_UNIT],
   n: [-9, FARAD_UNIT],
   u: [-6, FARAD_UNIT],
-  µ: [-6, FARAD_UNIT],
-  μ: [-6, FARAD_UNIT],
+  '\u00b5': [-6, FARAD_UNIT],
+  '\u03bc': [-6, FARAD_UNIT],
 };
 
 // Nothing of a name may follow, and no second decimal point (`1k..2k` has none).
-const CODE = /(\d+)(?:([RkMGpnuµμ])(\d*)|(K)(\d+))(?![A-Za-zΑ-Ωα-ωΩµ0-9_]|\.\d)/y;
+const CODE = /(\d+)(?:([RkMGpnu\u00b5\u03bc])(\d*)|(K)(\d+))(?![A-Za-zΑ-Ωα-ω\u2126\u00b50-9_]|\.\d)/y;
 
 /** Reads a component code from `at`, or null where none stands there; it ends before `end`. */
 export function scanCode(text: string, at: number): (ComponentCode & { readonly end: number }) | null {

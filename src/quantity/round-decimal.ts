@@ -6,7 +6,8 @@
 // number above the value and `up` never one below. Who asks for more than 12 digits gets the exact
 // digits of the double, without the allowance.
 
-import { decimalOf, readDecimal } from './decimal.ts';
+import type { Decimal } from './decimal.ts';
+import { readDecimal } from './decimal.ts';
 
 /** nearest: halves away from zero; down: towards -infinity; up: towards +infinity. */
 export type Rounding = 'nearest' | 'down' | 'up';
@@ -19,8 +20,8 @@ export interface RoundedDecimal {
 }
 
 export interface RoundOptions {
-  /** Significant digits, 1 to 30; `all` for the shortest decimal that reads back as the value. */
-  readonly digits: number | 'all';
+  /** Significant digits, 1 to 30. */
+  readonly digits: number;
   readonly rounding: Rounding;
   /** Digits are counted from this power of ten on where the value is smaller: for scales whose zero is arbitrary. */
   readonly leastLead?: number;
@@ -32,15 +33,15 @@ const MOST_DIGITS = 30;
 
 /** Rounds a finite value; throws RangeError for any other, and for a count of digits that is none. */
 export function roundDecimal(value: number, options: RoundOptions): RoundedDecimal {
-  const { digits, rounding, leastLead = -Infinity } = options;
+  const { digits, rounding, leastLead } = options;
   if (!Number.isFinite(value)) throw new RangeError(`no finite value to print: ${value}`);
-  if (digits === 'all') return asRounded(decimalOf(value).coefficient, decimalOf(value).exponent);
   if (!Number.isInteger(digits) || digits < 1 || digits > MOST_DIGITS)
     throw new RangeError(`no count of digits: ${digits}`);
   const { coefficient, exponent } = readDigits(value, digits, leastLead);
   const magnitude = coefficient < 0n ? -coefficient : coefficient;
   if (magnitude === 0n) return { negative: false, digits: '0', exponent: 0 };
-  const lead = Math.max(String(magnitude).length - 1 + exponent, leastLead);
+  const first = String(magnitude).length - 1 + exponent;
+  const lead = leastLead === undefined ? first : Math.max(first, leastLead);
   const place = lead - digits + 1;
   const kept = roundAt(coefficient, place - exponent, rounding);
   // 999.6 became 1000: one digit more in front, one less behind.
@@ -48,10 +49,17 @@ export function roundDecimal(value: number, options: RoundOptions): RoundedDecim
   return carried ? asRounded(kept / 10n, place + 1) : asRounded(kept, place);
 }
 
-function readDigits(value: number, digits: number, leastLead: number): { coefficient: bigint; exponent: number } {
+/** A decimal as it is, without zeros at its end. */
+export function unroundedDecimal({ coefficient, exponent }: Decimal): RoundedDecimal {
+  if (coefficient === 0n) return { negative: false, digits: '0', exponent: 0 };
+  const zeros = /0*$/.exec(String(coefficient))![0].length;
+  return asRounded(coefficient / 10n ** BigInt(zeros), exponent + zeros);
+}
+
+function readDigits(value: number, digits: number, leastLead: number | undefined): Decimal {
   if (digits >= NOISE_DIGITS) return readDecimal(value.toExponential(EXACT_DIGITS));
-  const places = NOISE_DIGITS - 1 - leastLead;
-  if (Math.abs(value) < Number(`1e${leastLead}`)) return readDecimal(value.toFixed(places));
+  if (leastLead !== undefined && Math.abs(value) < Number(`1e${leastLead}`))
+    return readDecimal(value.toFixed(NOISE_DIGITS - 1 - leastLead));
   return readDecimal(value.toExponential(NOISE_DIGITS - 1));
 }
 

@@ -1,5 +1,6 @@
 // From a number with its unit to SI and back, in decimal where the unit is a power of ten.
 
+import type { Decimal } from './decimal.ts';
 import { addDecimals, CELSIUS_ZERO, decimalOf, decimalToNumber, negateDecimal, readDecimal } from './decimal.ts';
 import type { Unit } from './unit.ts';
 
@@ -16,7 +17,13 @@ export function scaleToSI(decimalText: string, unit: Unit | null): number {
 
 /** How many of `unit` an SI value is: the shortest decimal of the value, moved; ±infinity stays. */
 export function fromSI(value: number, unit: Unit): number {
-  if (!Number.isFinite(value)) return value;
-  if (unit.kind.scale === 'celsius') return decimalToNumber(addDecimals(decimalOf(value), negateDecimal(CELSIUS_ZERO)));
-  return unit.exponent10 === null ? value / unit.factor : decimalToNumber(decimalOf(value), -unit.exponent10);
+  return Number.isFinite(value) ? decimalToNumber(decimalFromSI(value, unit)) : value;
+}
+
+/** The same as a decimal, for a finite value: with all the digits that lead back to the value. */
+export function decimalFromSI(value: number, unit: Unit): Decimal {
+  if (unit.exponent10 === null) return decimalOf(value / unit.factor);
+  const decimal = decimalOf(value);
+  if (unit.kind.scale === 'celsius') return addDecimals(decimal, negateDecimal(CELSIUS_ZERO));
+  return { coefficient: decimal.coefficient, exponent: decimal.exponent - unit.exponent10 };
 }

@@ -43,9 +43,9 @@ export function describeUnitFault({ fault, text, hint }: UnitFault): string {
     case 'prefix not allowed':
       return `${text} carries a prefix, which this unit never has.${write}`;
     case 'power not allowed':
-      return `${text} carries a power that a unit cannot have here.${write}`;
+      return `${text} carries a power that this unit does not take.${write}`;
     case 'stands alone':
-      return `${text} is not joined with other units.${write}`;
+      return `dB takes no other unit beside it, so ${text} is not a unit.${write}`;
     case 'blank inside':
       return `A unit has no blank inside.${write}`;
     case 'text behind':
@@ -187,6 +187,8 @@ function withoutSuffix(word: string): string | null {
 function nearestSpelling(word: string): string | null {
   const written = asciiWord(word);
   const { length } = written;
+  // A1, V_x: a name, not a slip of the finger.
+  if (/[0-9_]/.test(word)) return null;
   let best: string | null = null;
   let least = length < 5 ? 2 : 3;
   for (const spelling of SPELLINGS) {

@@ -10,7 +10,7 @@ import type { Exponent, UnitFactor } from './unit-factor.ts';
 import { asciiFactors, EXPONENT_ONE, factorPower, typesetFactors } from './unit-factor.ts';
 import type { UnitFault } from './unit-fault.ts';
 import { faultOfWord, isUnitFault } from './unit-fault.ts';
-import { DECIBEL_SYMBOL, DEGREE_CELSIUS, findPrefix, readWord } from './unit-symbols.ts';
+import { DECIBEL_SYMBOL, DEGREE_CELSIUS, readWord } from './unit-symbols.ts';
 
 export interface Unit {
   /** As written. */
@@ -41,7 +41,7 @@ export interface ScannedFactors {
 /** No unit of the trade has more. */
 const HIGHEST_POWER = 9;
 
-const WORD = /[A-Za-zΑ-Ωα-ωΩµ°º℃%][A-Za-zΑ-Ωα-ωΩµ0-9_°º℃%]*/y;
+const WORD = /[A-Za-zΑ-Ωα-ω\u2126\u00b5°º℃%][A-Za-zΑ-Ωα-ω\u2126\u00b50-9_°º℃%]*/y;
 const ROOT = /√|sqrt\(/y;
 const EXPONENT = /\^\((?<ratio>[-−]?\d+\/\d+)\)|\^(?<decimal>[-−]?\d+(?:\.\d+)?)|(?<raised>⁻?[⁰¹²³⁴-⁹]+)/y;
 const TIMES = /[·⋅×*]/;
@@ -198,8 +198,8 @@ function scanFactor(text: string, at: number, divides: boolean): { end: number; 
   }
   if (root && !Number.isInteger(exponent.value))
     return { fault: 'power not allowed', text: text.slice(at, end), start: at, end, hint: null };
-  const half = !root && exponent.value === 0.5;
-  if (half) exponent = EXPONENT_ONE;
+  const half = !root && Math.abs(exponent.value % 1) === 0.5;
+  if (half) exponent = { text: String(exponent.value * 2), value: exponent.value * 2 };
   return { end, factor: { divides, root: half || root !== '', ...read, exponent } };
 }
 
@@ -219,9 +219,4 @@ function scanExponent(text: string, at: number): { end: number; exponent: Expone
 function match(pattern: RegExp, text: string, at: number): RegExpExecArray | null {
   pattern.lastIndex = at;
   return pattern.exec(text);
-}
-
-/** Whether the word is a prefix and nothing else (`k` in `4.7 k`). */
-export function isPrefix(word: string): boolean {
-  return findPrefix(word) !== undefined && readWord(word) === null;
 }
