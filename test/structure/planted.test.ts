@@ -207,9 +207,11 @@ describe('texts', () => {
     expect(checkMentions(tree({ 'src/a.ts': "// README.md\nimport './work/home.ts';" }))).toEqual([]);
   });
   test('names in other cases are seen', () => {
-    expect(checkFileNames(tree({ 'src/fet/biasLine.ts': '', 'src/fet/bias-line.test.ts': '' }))).toEqual([
-      'src/fet/biasLine.ts is not in kebab-case',
-    ]);
+    expect(
+      checkFileNames(
+        tree({ 'src/fet/biasLine.ts': '', 'test/fet/bias-line.test.ts': '', 'test/sheets/2N5457.txt': '' }),
+      ),
+    ).toEqual(['src/fet/biasLine.ts is not in kebab-case']);
   });
   test('headless files are seen', () => {
     expect(checkFileHeads(tree({ 'src/fet/a.ts': '\n// Late.', 'src/fet/b.ts': '// B.', 'src/ui/a.css': '' }))).toEqual(

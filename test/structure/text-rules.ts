@@ -36,10 +36,14 @@ export function checkMentions(files: Files): string[] {
   return faults;
 }
 
-/** One sentence for each file of src or test that is called otherwise than in kebab-case. */
+/** One sentence for each file of code or style that is called otherwise than in kebab-case. */
 export function checkFileNames(files: Files): string[] {
   return [...files.keys()]
-    .filter((file) => !file.split('/').every((part) => /^[a-z0-9]+(?:-[a-z0-9]+)*(?:\.[a-z0-9]+)*$/.test(part)))
+    .filter(
+      (file) =>
+        /\.(?:tsx?|css)$/.test(file) &&
+        !file.split('/').every((part) => /^[a-z0-9]+(?:-[a-z0-9]+)*(?:\.[a-z0-9]+)*$/.test(part)),
+    )
     .map((file) => `${file} is not in kebab-case`);
 }
 
