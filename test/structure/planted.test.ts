@@ -127,7 +127,7 @@ describe('words', () => {
     expect(words(text)).toEqual([`src/fet/a.ts:${line} ${fault}`]);
   });
   test.each([
-    'const a = (n: bigint) => 10n ** n;',
+    'const a = (n: bigint) => 10n ** n + n ** 2n;',
     'const a = Math.sqrt(Math.abs(Math.PI)) + 2 ** 3 + 2 ** -1;',
     '// Math.exp, console, document\nconst a = "Math.exp(console)";',
     'const a = { document: 1, Date: 2 };\nconst b = a.document;',

@@ -248,7 +248,7 @@ function boundNames(pattern: unknown): string[] {
 }
 
 function isExactPower({ left, right }: Node): boolean {
-  return isBigInt(left) || isWholeNumber(right);
+  return isBigInt(left) || isBigInt(right) || isWholeNumber(right);
 }
 
 function isBigInt(node: unknown): boolean {
