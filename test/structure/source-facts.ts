@@ -46,13 +46,19 @@ export function isCode(file: string): boolean {
   return /\.tsx?$/.test(file);
 }
 
-/** Reads the facts of the TypeScript file `file`. Throws where it does not parse. */
+const known = new Map<string, { readonly text: string; readonly facts: SourceFacts }>();
+
+/** The facts of the TypeScript file `file`, read once for each text of it. Throws where it does not parse. */
 export function readFacts(file: string, text: string): SourceFacts {
+  const before = known.get(file);
+  if (before?.text === text) return before.facts;
   const { program, errors } = parseSync(file, text);
   if (errors.length > 0) throw new Error(`${file}: ${errors[0].message}`);
   const reader = new FactReader(text);
   reader.visit(program as unknown as Node, null, '');
-  return reader.facts();
+  const facts = reader.facts();
+  known.set(file, { text, facts });
+  return facts;
 }
 
 const isNode = (value: unknown): value is Node =>
@@ -88,7 +94,12 @@ class FactReader {
   /** Local name of `import * as name` to the names taken through it. */
   private readonly namespaces = new Map<string, string[]>();
 
-  constructor(private readonly text: string) {}
+  /** Where the lines of the text begin. */
+  private readonly lineStarts: readonly number[];
+
+  constructor(text: string) {
+    this.lineStarts = [0, ...[...text.matchAll(/\n/g)].map(({ index }) => index + 1)];
+  }
 
   facts(): SourceFacts {
     const { links, exports, members, math, powers, statements } = this;
@@ -105,7 +116,13 @@ class FactReader {
   }
 
   private mention(name: string, node: Node): Mention {
-    return { name, line: this.text.slice(0, node.start).split('\n').length };
+    let [low, high] = [0, this.lineStarts.length];
+    while (high - low > 1) {
+      const middle = (low + high) >> 1;
+      if (this.lineStarts[middle] <= node.start) low = middle;
+      else high = middle;
+    }
+    return { name, line: low + 1 };
   }
 
   private link(node: Node, specifier: string, kind: Link['kind'], names: readonly string[]): void {
