@@ -15,6 +15,6 @@ export const ANOTHER: EntryKind = {
 function readAnother(reader: Reader): AnotherEntry {
   const { start } = reader.take();
   const of = reader.takeName('The name of the cell to repeat', 'another R_Da');
-  reader.expectEnd();
+  reader.expectNothing();
   return { type: 'another', of, span: reader.spanFrom(start) };
 }

@@ -24,7 +24,7 @@ export const BENCH: EntryKind = {
 
 function readBench(reader: Reader): BenchEntry {
   const { start } = reader.take();
-  reader.expectEnd();
+  reader.expectNothing();
   return { type: 'bench', span: reader.spanFrom(start) };
 }
 
@@ -40,7 +40,7 @@ function readBenchField(reader: Reader, label: readonly NameRef[]): FieldBody {
     const unit = reader.atSign('[') ? readBracket(reader) : null;
     columns.push({ name: { name: ahead.name, span: spanOf(ahead) }, unit, span: reader.spanFrom(ahead.start) });
   } while (reader.takeSign(','));
-  reader.expectEnd();
+  reader.expectListEnd();
   return { type: 'columns', columns, span: reader.spanFrom(start) };
 }
 
@@ -49,6 +49,6 @@ function readBracket(reader: Reader): Unit {
   const { unit, span } = unitAt(reader.text, skipBlanks(reader.text, open.end, reader.limit), reader.limit);
   const close = skipBlanks(reader.text, span.end, reader.limit);
   if (close >= reader.limit || reader.text[close] !== ']') halt('source-open', spanOf(open));
-  reader.jump(close + 1);
+  reader.jump({ start: open.start, end: close + 1 });
   return unit;
 }

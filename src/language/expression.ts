@@ -3,7 +3,7 @@
 
 import { isUnitSymbol, PLAIN } from '../quantity/index.ts';
 import { halt, reading } from './messages.ts';
-import { powerSpellings, checkedValue } from './number.ts';
+import { checkedValue, refusePower } from './number.ts';
 import type { NumberToken } from './number.ts';
 import type { SuperscriptToken } from './lexer.ts';
 import { Reader, spanOf } from './reader.ts';
@@ -130,10 +130,8 @@ function readPower(reader: Reader): Expr {
   const superscript = ahead.type === 'superscript';
   if (!superscript && !reader.atSign('^')) return base;
   if (base.type === 'number' && base.unit) {
-    const { text, limit } = reader;
     const from = superscript ? ahead.start : ahead.end;
-    const spellings = powerSpellings(text, base.span.start, base.span.end, from, limit);
-    halt('unit-power', { start: base.span.start, end: ahead.end }, ...spellings);
+    refusePower(reader.text, base.span.start, base.span.end, from, reader.limit);
   }
   reader.countOperator();
   reader.take();
@@ -209,7 +207,7 @@ function closeParenthesis(reader: Reader, open: Span): void {
 /** path = name { "." name } ; the dots stand glued, and behind a dot any name may stand, a unit's too (`Q1.K`). */
 export function readPathFrom(reader: Reader, first: NameRef): PathExpr {
   const names = [first];
-  while (reader.atSign('.')) {
+  while (dotAhead(reader, names)) {
     const dot = reader.take();
     const { ahead } = reader;
     const glued = dot.start === names.at(-1)!.span.end && ahead.start === dot.end;
@@ -219,6 +217,16 @@ export function readPathFrom(reader: Reader, first: NameRef): PathExpr {
     names.push({ name: ahead.name, span: spanOf(ahead) });
   }
   return { type: 'path', names, span: reader.spanFrom(first.span.start) };
+}
+
+function dotAhead(reader: Reader, names: readonly NameRef[]): boolean {
+  const { end } = names.at(-1)!.span;
+  // Else `.5` in `A1.5` would be looked at as a number.
+  if (/^\.\d/.test(reader.text.slice(end, end + 2)) && end < reader.limit) {
+    const span = { start: end, end: end + 1 };
+    halt('path-name-missing', span, reader.textOf({ start: names[0].span.start, end }));
+  }
+  return reader.atSign('.');
 }
 
 // ---------------------------------------------------------------- parts

@@ -45,11 +45,12 @@ function readField(text: string, label: Label, fields: Fields): LineTree {
 function readUnlabelled(text: string, at: number, fields: Fields): LineTree {
   if (!fields.rows) {
     const name = nameAt(text, at);
-    const equals = name && text[skipBlanks(text, name.span.end, text.length)] === '=';
+    const equals = nameBeforeEquals(text, at);
     const label = name ? { names: [name], span: name.span, bodyStart: name.span.end } : noLabel(at);
     const here = { start: at, end: trimEnd(text, at, text.length) };
     if (!equals) return brokenField(message('field-unreadable', here, 'gate: R_G to 0 V'), label, text);
-    return brokenField(message('field-equals', name.span, text.slice(name.span.start, name.span.end)), label, text);
+    const written = text.slice(equals.span.start, equals.span.end);
+    return brokenField(message('field-equals', equals.span, written), label, text);
   }
   const tail = readTail(text, at);
   const span = bodySpan(text, at, tail.limit);
@@ -71,9 +72,10 @@ function readRow(reader: Reader): RowValues {
     const { ahead } = reader;
     if (atLiteral(reader)) values.push(readLiteral(reader));
     else if (ahead.type === 'name') values.push({ name: ahead.name, span: spanOf(reader.take()) });
-    else halt('row-form', spanOf(ahead), reader.textOf(ahead) || 'The end of the line');
+    else if (ahead.type === 'end') halt('operand-missing', spanOf(ahead), 'The place behind the comma');
+    else halt('row-form', spanOf(ahead), reader.textOf(ahead));
   } while (reader.takeSign(','));
-  reader.expectEnd();
+  reader.expectListEnd();
   return values;
 }
 
@@ -81,6 +83,8 @@ function readRow(reader: Reader): RowValues {
 
 function readTitleField(text: string, at: number, label: Label | null): LineTree {
   if (!label) {
+    const equals = nameBeforeEquals(text, at);
+    if (equals) return loose(message('field-equals', equals.span, text.slice(equals.span.start, equals.span.end)));
     const here = { start: at, end: trimEnd(text, at, text.length) };
     return loose(message('field-unreadable', here, 'project: Tank level sensor'));
   }
@@ -101,12 +105,16 @@ function textField(text: string, label: Label): LineTree {
 // ---------------------------------------------------------------- what belongs nowhere
 
 function refuseUnlabelled(text: string, at: number, context: Context): LineTree {
-  const name = nameAt(text, at);
-  if (name && text[skipBlanks(text, name.span.end, text.length)] === '=')
-    return loose(message('cell-indented', name.span, text.slice(name.span.start, name.span.end)), name);
+  const name = nameBeforeEquals(text, at);
+  if (name) return loose(message('cell-indented', name.span, text.slice(name.span.start, name.span.end)), name);
   const here = { start: at, end: trimEnd(text, at, text.length) };
   const fault = message('field-unreadable', here, 'gate: R_G to 0 V');
   return context.block === 'plain' ? brokenField(fault, noLabel(at), text) : loose(fault);
+}
+
+function nameBeforeEquals(text: string, at: number): NameRef | null {
+  const name = nameAt(text, at);
+  return name && text[skipBlanks(text, name.span.end, text.length)] === '=' ? name : null;
 }
 
 function noLabel(at: number): Label {

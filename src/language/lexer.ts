@@ -88,7 +88,7 @@ const SPELLINGS: Readonly<Record<string, Sign>> = {
 
 /** What other languages and keyboards write, and what is written here. */
 const FOREIGN: Readonly<Record<string, string>> = {
-  '...': '..',
+  '...': 'two dots',
   '**': '^',
   '==': '=',
   '=<': '<=',
@@ -119,7 +119,7 @@ for (const [text, right] of Object.entries(FOREIGN)) add({ text, sign: null, rig
 
 function add(spelling: Spelling): void {
   const others = BY_FIRST.get(spelling.text[0]) ?? [];
-  const all = [...others, spelling].sort((a, b) => b.text.length - a.text.length);
+  const all = [...others, spelling].toSorted((a, b) => b.text.length - a.text.length);
   BY_FIRST.set(spelling.text[0], all);
 }
 

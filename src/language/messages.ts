@@ -9,7 +9,6 @@ const meant = (names: readonly string[]): string => (names.length > 0 ? ` Did yo
 const TEXTS = {
   // Characters and numbers
   'character-unknown': (found: string) => `${found} has no meaning here.`,
-  'character-spelling': (found: string, right: string) => `${found} is not read here: write ${right}.`,
   'decimals-missing': (found: string, right: string) => `${found} has no digit behind its point: write ${right}.`,
   'whole-part-missing': (right: string) => `The number has no digit before its point: write ${right}.`,
   'number-range': (found: string) =>
@@ -35,8 +34,10 @@ const TEXTS = {
   'unit-glued': (found: string, right: string) =>
     `${found} has no blanks around its operator, so it reads as one unit, and it is none: write ${right}.`,
   'unit-blank': (found: string, right: string) => `${found} has a blank inside its unit: write ${right}.`,
-  'unit-power': (found: string, group: string, glued: string) =>
-    `${found} can be read in two ways: write ${group} for the power of the quantity, or ${glued} for a power in the unit.`,
+  'unit-power': (found: string, group: string, glued: string | null) =>
+    glued
+      ? `${found} can be read in two ways: write ${group} for the power of the quantity, or ${glued} for a power in the unit.`
+      : `${found} raises a quantity without parentheses: write ${group}.`,
   'unit-without-number': (found: string) => `${found} is a unit and stands only behind a number: write 1 ${found}.`,
   'unit-missing': () => 'A unit is missing here, such as kohm or mA/V^2.',
   'unit-form': (sentence: string) => sentence,
@@ -56,7 +57,7 @@ const TEXTS = {
   'comparison-chained-within': () =>
     'Comparisons do not chain: write two of them with and between, as in a within 1 .. 2 and b > 0.',
   'comparison-misplaced': (found: string) =>
-    `${found} compares, and a quantity is no comparison: comparisons stand in a check, as in check a >= b, or in if(a >= b, c, d).`,
+    `${found} belongs to a condition and this entry is a quantity: conditions stand in a check, as in check a >= b, or in if(a >= b, c, d).`,
   'operator-spelling': (found: string, right: string) => `${found} is no operator here: write ${right}.`,
   'range-missing': (where: string, example: string) =>
     `${where} wants two ends with .. between them, as in ${example}.`,
@@ -82,6 +83,7 @@ const TEXTS = {
 
   // Entries
   'entry-missing': (name: string) => `${name} has no entry: a value or a kind of cell belongs behind =.`,
+  'comma-missing': (left: string, right: string) => `A comma is missing between ${left} and ${right}.`,
   leftover: (found: string, after: string) => `${found} cannot stand behind ${after}.`,
   'name-missing': (what: string, example: string) => `${what} is missing here, as in ${example}.`,
   'part-spelling': (found: string, right: string) => `${found} is no kind of part: write ${right}.`,

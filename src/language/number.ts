@@ -1,4 +1,4 @@
-// Numbers of grammar.md `number`: a decimal with or without unit, or a component code. A unit is taken
+// Numbers as the grammar has them: a decimal with or without unit, or a component code. A unit is taken
 // as far as it goes; what may not stand glued to it, or follow a number at all, is told from here,
 // because only here the blanks are still known.
 
@@ -116,47 +116,65 @@ function unitBehind(text: string, at: number, end: number, limit: number): { uni
   }
   if (start > end) return null;
   const letter = /^([A-Za-zΑ-Ωα-ωµ])\d+$/.exec(word);
-  if (letter && CODE_LETTERS.includes(letter[1])) halt('code-end', whole, text.slice(at, wordEnd));
-  if (letter) halt('code-letter', whole, text.slice(at, wordEnd), letter[1]);
-  if (/\d/.test(word)) halt('code-end', whole, text.slice(at, wordEnd));
+  if (letter && !CODE_LETTERS.includes(letter[1])) halt('code-letter', whole, text.slice(at, wordEnd), letter[1]);
+  if (/\d/.test(word)) {
+    const stop = text[wordEnd] === '.' ? digitsEnd(text, wordEnd + 1, limit) : wordEnd;
+    halt('code-end', { start: at, end: stop }, text.slice(at, stop));
+  }
   return halt('unit-unknown', { start, end: wordEnd }, word, read.hint);
 }
 
-/** `10 V/R`, `10 V*2`, `10 V^x`: behind a unit these signs need blanks, or they would belong to it. */
+/** `10 V/R`, `10 V*2`, `10 V^x`, `10 V /A`: behind a unit these signs need blanks on both sides, or on none if they belong to it. */
 function refuseGluedOperator(text: string, at: number, end: number, limit: number): void {
-  if (end >= limit) return;
   const sign = text[end];
-  if (sign === '^') halt('unit-power', { start: at, end: end + 1 }, ...powerSpellings(text, at, end, end + 1, limit));
+  if (end >= limit) return;
+  if (sign === '^') refusePower(text, at, end, end + 1, limit);
+  const next = skipBlanks(text, end, limit);
+  if (next > end && text[next] === '/') {
+    const read = scanUnit(text, next);
+    if (!isUnitFault(read))
+      halt(
+        'unit-blank',
+        { start: at, end: read.end },
+        text.slice(at, read.end),
+        text.slice(at, end) + text.slice(next, read.end),
+      );
+  }
   const parallel = sign === '/' && text[end + 1] === '/';
   if (parallel || !(sign === '/' || sign === '*' || sign === '·' || sign === '⋅' || sign === '×')) return;
   const from = skipBlanks(text, end + 1, limit);
-  const operand = text.slice(from, operandEnd(text, from, limit));
-  const right = `${text.slice(at, end)} ${sign} ${operand}`.trimEnd();
-  const span = { start: at, end: Math.max(end + 1, from + operand.length) };
-  halt('unit-glued', span, text.slice(span.start, span.end).trimEnd(), right);
+  if (from === limit) return;
+  const stop = Math.max(operandEnd(text, from, limit), end + 1);
+  const right = `${text.slice(at, end)} ${sign} ${text.slice(from, stop)}`.trimEnd();
+  halt('unit-glued', { start: at, end: stop }, text.slice(at, stop).trimEnd(), right);
 }
 
-/** What was written with a power behind a quantity, and its two possible meanings; `from` is behind the sign. */
-export function powerSpellings(
-  text: string,
-  at: number,
-  end: number,
-  from: number,
-  limit: number,
-): [found: string, group: string, glued: string] {
-  const start = skipBlanks(text, from, limit);
-  const stop = operandEnd(text, start, limit);
-  const exponent = text.slice(start, stop) || '2';
+/** Leaves with the message about a power behind a quantity; the exponent is looked for from `from`. */
+export function refusePower(text: string, at: number, end: number, from: number, limit: number): never {
+  const stop = operandEnd(text, skipBlanks(text, from, limit), limit);
+  const exponent = text
+    .slice(from, stop)
+    .trim()
+    .replace(/[⁻⁰¹²³⁴-⁹]/g, (mark) => '-0123456789'['⁻⁰¹²³⁴⁵⁶⁷⁸⁹'.indexOf(mark)]);
   const quantity = text.slice(at, end);
-  return [text.slice(at, Math.max(stop, from)).trimEnd(), `(${quantity})^${exponent}`, `${quantity}^${exponent}`];
+  const code = scanCode(text, at)?.end === end;
+  const glued = !code && /^-?\d+$/.test(exponent) ? `${quantity}^${exponent}` : null;
+  return halt('unit-power', { start: at, end: stop }, text.slice(at, stop), `(${quantity})^${exponent}`, glued);
 }
 
-/** The end of a signed number or a path, for quoting it. */
+/** The end of a signed number, a path, or what stands in parentheses, for quoting it. */
 function operandEnd(text: string, at: number, limit: number): number {
   let i = at;
-  if (text[i] === '-' || text[i] === '−' || text[i] === '+') i++;
+  while (i < limit && '-−+√⁻'.includes(text[i])) i++;
+  while (i < limit && '⁰¹²³⁴⁵⁶⁷⁸⁹'.includes(text[i])) i++;
   while (i < limit && (nameEnd(text, i, limit) > i || (text[i] === '.' && text[i + 1] !== '.'))) i++;
-  return i;
+  if (text[i] !== '(') return i;
+  let depth = 0;
+  for (; i < limit; i++) {
+    if (text[i] === '(') depth++;
+    else if (text[i] === ')' && --depth === 0) return i + 1;
+  }
+  return limit;
 }
 
 // ---------------------------------------------------------------- what may not follow

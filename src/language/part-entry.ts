@@ -26,9 +26,9 @@ function readPart(reader: Reader): PartEntry {
   const end = start + written.length;
   if (written !== `${channel}-${family}`)
     halt('part-spelling', { start, end }, written, letter ? `${channel}-${family}` : `n-${family} or p-${family}`);
-  reader.jump(end);
+  reader.jump({ start, end });
   const fittedTo = reader.takeWord('fitted') ? readBenchName(reader) : null;
-  reader.expectEnd();
+  reader.expectNothing();
   return { type: 'part', channel, family, fittedTo, span: reader.spanFrom(start) };
 }
 

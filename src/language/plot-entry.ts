@@ -58,6 +58,9 @@ function readAgainst(reader: Reader, start: number): PlotEntry {
   do values.push(readState(reader));
   while (reader.takeSign(','));
   if (!reader.takeWord('against')) {
+    const { ahead, last } = reader;
+    if (ahead.type === 'name' && last.type === 'name' && FIGURES.includes(last.name))
+      halt('name-missing', ahead, 'The word of', `plot ${last.name} of A1`);
     if (!reader.atEnd()) reader.refuse();
     halt('plot-form', reader.spanFrom(start));
   }

@@ -18,6 +18,6 @@ function readPoint(reader: Reader): PointEntry {
   const { start } = reader.take();
   if (!reader.takeWord('of')) halt('name-missing', reader.ahead, 'The word of', 'point of Q1');
   const of = reader.takeName('The name of a part', 'point of Q1');
-  reader.expectEnd();
+  reader.expectNothing();
   return { type: 'point', of, span: reader.spanFrom(start) };
 }

@@ -48,10 +48,10 @@ export class Reader {
     return token;
   }
 
-  /** Goes on reading at `at`, behind something that was read as text. */
-  jump(at: number): void {
-    this.#last = { type: 'end', start: this.#position, end: at };
-    this.#position = at;
+  /** Goes on reading behind a stretch that was read as text. */
+  jump({ start, end }: Span): void {
+    this.#last = { type: 'end', start, end };
+    this.#position = end;
     this.#ahead = null;
   }
 
@@ -117,9 +117,23 @@ export class Reader {
       halt('expression-too-long', { start: this.position, end: this.limit }, MOST_OPERATORS);
   }
 
-  /** Leaves with a message unless everything is read. */
+  /** Leaves with a message unless everything is read; behind an expression. */
   expectEnd(): void {
     if (!this.atEnd()) this.refuse();
+  }
+
+  /** Leaves with a message unless everything is read; where no operator could follow. */
+  expectNothing(): void {
+    const { ahead, last } = this;
+    if (ahead.type !== 'end') halt('leftover', ahead, this.textOf(ahead), this.textOf(last));
+  }
+
+  /** Leaves with a message unless everything is read; behind an item of a list. */
+  expectListEnd(): void {
+    const { ahead, last } = this;
+    const item = ahead.type === 'name' || ahead.type === 'number';
+    if (item) halt('comma-missing', { start: last.start, end: ahead.end }, this.textOf(last), this.textOf(ahead));
+    this.expectNothing();
   }
 
   /** Leaves with the message about a token that nothing can take. */

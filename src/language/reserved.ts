@@ -4,16 +4,13 @@ import { isUnitSymbol } from '../quantity/index.ts';
 import { canonicalName, isLetter, nameEnd } from './characters.ts';
 
 /** Words that join parts of an entry: they stand where the grammar puts them and name nothing. */
-const JOINING = [
-  ...['in', 'at', 'as', 'to', 'from', 'of', 'over', 'such', 'that', 'with', 'within', 'against', 'another', 'each'],
-  ...['through', 'common', 'and', 'or', 'not', 'if', 'check', 'plot', 'stage', 'point', 'bench', 'fitted'],
-];
+const JOINING = (
+  'in at as to from of over such that with within against another each ' +
+  'through common and or not if check plot stage point bench fitted'
+).split(' ');
 
 /** Words that an expression may name although no cell may: constants, regions, the signal and the terminals. */
-const NAMING = [
-  ...['pi', 'k_B', 'q_e', 'cutoff', 'ohmic', 'saturation'],
-  ...['signal', 'gate', 'drain', 'source', 'bulk'],
-];
+const NAMING = 'pi k_B q_e cutoff ohmic saturation signal gate drain source bulk'.split(' ');
 
 const JOINING_WORDS: ReadonlySet<string> = new Set(JOINING);
 

@@ -25,7 +25,7 @@ export function invertSplices(text: string, splices: readonly Splice[]): Splice[
 
 /** By place; splices at one place keep their order. */
 function inOrder(text: string, splices: readonly Splice[]): readonly Splice[] {
-  const ordered = [...splices].sort((a, b) => a.start - b.start || a.end - b.end);
+  const ordered = [...splices].toSorted((a, b) => a.start - b.start || a.end - b.end);
   let at = 0;
   for (const { start, end } of ordered) {
     if (start < at || end < start || end > text.length)

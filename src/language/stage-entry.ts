@@ -33,6 +33,6 @@ function readStage(reader: Reader): StageEntry {
     if (reader.atSign(',')) halt('name-missing', reader.last, 'A name of its own for each FET', SEVERAL);
     fets.push({ name: null, part: first });
   }
-  reader.expectEnd();
+  reader.expectNothing();
   return { type: 'stage', fets, span: reader.spanFrom(start) };
 }

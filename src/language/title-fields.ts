@@ -1,10 +1,7 @@
 // The fields of the title, which are free text.
 
 /** Fields that stand once. */
-const SINGLE = [
-  ...['project', 'number', 'author', 'checker', 'revision', 'reason', 'status', 'date'],
-  ...['paper', 'samples', 'seed', 'yield'],
-];
+const SINGLE = 'project number author checker revision reason status date paper samples seed yield'.split(' ');
 
 /** The field that names checked results and may be repeated. */
 export const CHECKED = 'checked';

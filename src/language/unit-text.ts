@@ -11,8 +11,9 @@ import type { Span } from './syntax.ts';
 export function readAs(reader: Reader): { unit: Unit; span: Span } {
   const { start, end } = reader.take();
   const { unit, span } = unitAt(reader.text, skipBlanks(reader.text, end, reader.limit), reader.limit);
-  reader.jump(span.end);
-  return { unit, span: { start, end: span.end } };
+  const whole = { start, end: span.end };
+  reader.jump(whole);
+  return { unit, span: whole };
 }
 
 /** The unit at `at`; leaves with a message where none stands or more is glued to it. */

@@ -1,7 +1,7 @@
 // `a within lo .. hi` and `a within c ± d`. A centre and its tolerance are folded into two literals, in
 // exact decimals, so that 5 mA ± 10 % ends at 4.5 mA and not beside it.
 
-import { dimensionName, sameKind, TEMPERATURE_DIFFERENCE } from '../quantity/index.ts';
+import { dimensionName, fromSI, sameKind, TEMPERATURE_DIFFERENCE } from '../quantity/index.ts';
 import { addTolerance } from './decimal-sum.ts';
 import { literalOf, readLiteral } from './literal.ts';
 import { halt } from './messages.ts';
@@ -31,20 +31,20 @@ export function readWithin(reader: Reader, value: Expr, readSum: (reader: Reader
   return { type: 'within', value, low: end(-1), high: end(1), span: reader.spanFrom(value.span.start) };
 }
 
-/** Half the width: relative to the centre, or in the centre's own SI unit. */
+/** Half the width: relative to the centre, or in the centre's own SI unit. Degrees are differences here. */
 function widthOf(reader: Reader, centre: Literal, tolerance: Literal): { amount: number; relative: boolean } {
-  const { unit } = tolerance;
-  if (unit?.symbol === '%' || unit?.symbol === 'ppm') return { amount: tolerance.value, relative: true };
+  const { unit, kind, value } = tolerance;
+  if (unit?.symbol === '%' || unit?.symbol === 'ppm') return { amount: value, relative: true };
   const point = centre.kind.scale === 'celsius';
-  const difference = point && sameKind(tolerance.kind, TEMPERATURE_DIFFERENCE);
-  if (!difference && (point || !sameKind(tolerance.kind, centre.kind)))
+  if (point && kind.scale === 'celsius') return { amount: fromSI(value, unit!), relative: false };
+  if (!sameKind(kind, point ? TEMPERATURE_DIFFERENCE : centre.kind))
     halt(
       'tolerance-kind',
       tolerance.span,
-      `${reader.textOf(tolerance.span)}, ${dimensionName(tolerance.kind)},`,
+      `${reader.textOf(tolerance.span)}, ${dimensionName(kind)},`,
       `${reader.textOf(centre.span)}, ${dimensionName(centre.kind)}`,
     );
-  return { amount: tolerance.value, relative: false };
+  return { amount: value, relative: false };
 }
 
 /** A signed number as the expression that would be written for it. */
