@@ -91,7 +91,7 @@ function jsonCell(sheet: Sheet, cell: CellReading): JsonCell {
     value: own?.value ?? null,
     unit: own?.unit ?? null,
     text,
-    error: cellFault(sheet, cell),
+    error: cell.fault === null ? null : jsonFault(sheet.tree.lines, cell.fault),
     ...(offers
       ? { values: Object.fromEntries(cell.values.map((each) => [each.name, jsonValue(each, shownReading(each))])) }
       : {}),
@@ -118,19 +118,6 @@ function jsonValue(reading: Reading, text: string | null): JsonValue {
     unit: typeof type === 'string' ? null : siUnitText(type),
     text,
   };
-}
-
-function cellFault(sheet: Sheet, cell: CellReading): JsonFault | null {
-  const { lines } = sheet.tree;
-  if (cell.fault !== null) return jsonFault(lines, cell.fault);
-  if (cell.waitsFor === null) return null;
-  const { entry, line } = cell.tree;
-  return jsonFault(lines, {
-    code: 'waits-for',
-    text: `waits for ${cell.waitsFor}`,
-    line: line.index,
-    span: entry.span,
-  });
 }
 
 function jsonFault(lines: readonly Line[], fault: Fault): JsonFault {

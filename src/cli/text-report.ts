@@ -23,6 +23,7 @@ const INDENT = '  ';
 /** The entries take at most this share of what names and values leave. */
 const ENTRY_SHARE = 0.6;
 const LEAST_ENTRY = 16;
+/** Sources and notes that have less room than this stand under their row. */
 const LEAST_REMARK = 8;
 
 /** The report in lines of at most `width` characters, as far as names and values fit in it. */
@@ -89,7 +90,7 @@ function sheetItems(sheet: Sheet): Item[] {
 
 function cellItems(cell: CellReading, lines: readonly Line[]): Item[] {
   const fieldAt = new Map(cell.fields.map((field) => [field.line, field]));
-  const fault = cell.waitsFor === null ? cell.fault : null;
+  const fault = cell.fault?.code === 'waits-for' ? null : cell.fault;
   const items: Item[] = [cellRow(cell)];
   const message = (line: number): void => {
     if (fault?.line === line) items.push({ type: 'message', text: faultText(lines, fault) });
@@ -121,8 +122,7 @@ function cellRow(cell: CellReading): Row {
 }
 
 function ownValue(cell: CellReading): string {
-  if (cell.waitsFor !== null) return `waits for ${cell.waitsFor}`;
-  if (cell.fault !== null) return '';
+  if (cell.fault !== null) return cell.fault.code === 'waits-for' ? cell.fault.text : '';
   return cell.kind === 'check' ? checkText(cell) : (shownCell(cell) ?? '');
 }
 
@@ -151,18 +151,18 @@ function table(items: readonly Item[], width: number): string[] {
   const value = widest(aligned);
   const free = widthLeft(width, [name, value]);
   const entry = Math.min(widest(rows.map((row) => row.entry)), Math.max(LEAST_ENTRY, Math.floor(free * ENTRY_SHARE)));
-  const columns: Column[] = [
-    { width: name, overflow: 'wrap' },
-    { width: entry, overflow: 'wrap' },
-    { width: value, overflow: 'wrap' },
-    { width: Math.max(LEAST_REMARK, widthLeft(width, [name, entry, value])), overflow: 'cut' },
-  ];
+  const columns: Column[] = [name, entry, value].map((each) => ({ width: each, overflow: 'wrap' }));
+  const left = widthLeft(width, [name, entry, value]);
+  const isBeside = left >= LEAST_REMARK;
+  if (isBeside) columns.push({ width: left, overflow: 'cut' });
+  const below = (text: string): string[] =>
+    wrapText(text, Math.max(LEAST_ENTRY, width - 2 * INDENT.length)).map((line) => INDENT.repeat(2) + line);
   let index = 0;
   return items.flatMap((item) => {
-    if (item.type === 'row') return rowLines([item.name, item.entry, aligned[index++]!, item.remark], columns);
     if (item.type === 'section') return ['', item.text];
-    const text = wrapText(item.text, Math.max(LEAST_ENTRY, width - 2 * INDENT.length));
-    return text.map((each) => INDENT.repeat(2) + each);
+    if (item.type === 'message') return below(item.text);
+    const lines = rowLines([item.name, item.entry, aligned[index++]!, item.remark], columns);
+    return isBeside || item.remark === '' ? lines : [...lines, ...below(item.remark)];
   });
 }
 

@@ -44,6 +44,7 @@ export function widthLeft(total: number, others: readonly number[]): number {
 
 /** Lines of at most `width` characters, broken at blanks and, where a word is longer, inside of it; at least one line. */
 export function wrapText(text: string, width: number): string[] {
+  if (characterCount(text) <= width) return [text];
   const lines: string[] = [];
   let line = '';
   for (const word of text.split(' ')) {

@@ -10,11 +10,10 @@ const INDENT = '  ';
 /** Sentence, then formula, numbers in place and result of every step; lines are broken between words. */
 export function workingsReport(sheet: Sheet, name: string, width: number): string {
   const lines = [`Workings of ${name}`];
-  const cell = sheet.cell(name);
-  if (cell?.waitsFor) lines.push(`${INDENT}${name} waits for ${cell.waitsFor}.`);
-  else if (cell?.fault) lines.push(...indented(faultText(sheet.tree.lines, cell.fault), width));
+  const fault = sheet.error(name);
+  if (fault) lines.push(...indented(faultText(sheet.tree.lines, fault), width));
   const steps = workingsOf(sheet, name);
-  if (steps.length === 0 && !cell?.fault && !cell?.waitsFor) lines.push(`${INDENT}Nothing is computed in this cell.`);
+  if (steps.length === 0 && !fault) lines.push(`${INDENT}Nothing is computed in this cell.`);
   for (const step of steps) {
     if (step.sentence !== '') lines.push('', ...wrapText(step.sentence, width));
     lines.push(...indented(stepText(step), width));

@@ -2,7 +2,7 @@
 // short is rounded up, in the unit of the limit as the author wrote it.
 
 import type { Expr } from '../language/index.ts';
-import { formatValue, fromSI, sameKind } from '../quantity/index.ts';
+import { formatValue, fromSI, PLAIN, sameKind } from '../quantity/index.ts';
 import type { Unit, ValueKind } from '../quantity/index.ts';
 import type { CellReading } from '../sheet/index.ts';
 
@@ -27,7 +27,8 @@ export function reserveText(reserve: number, kind: ValueKind, unit: Unit | null)
   const size = Math.abs(reserve);
   const rounding = reserve > 0 ? 'down' : 'up';
   const amount = unit ? fromSI(size, unit) : size;
-  const inUnit = amount >= READABLE.least && amount < READABLE.most;
+  const hasUnit = unit !== null || sameKind(kind, PLAIN);
+  const inUnit = hasUnit && amount >= READABLE.least && amount < READABLE.most;
   const digits = amount >= 1 || !inUnit ? DIGITS.above : DIGITS.below;
   const { text } = formatValue(size, kind, { digits, rounding, ...(unit && inUnit ? { unit } : {}) });
   return `${text} ${reserve > 0 ? 'to spare' : 'short'}`;

@@ -11,5 +11,5 @@ export { texOfName, texOfPath } from './tex-name.ts';
 export { texOfUnit } from './tex-number.ts';
 export { lacksValue, verdictOf } from './verdict.ts';
 export type { Verdict } from './verdict.ts';
-export { stepText, workingsOf } from './workings.ts';
+export { printStep, stepText, workingsOf } from './workings.ts';
 export type { PrintedStep, StepLine } from './workings.ts';

@@ -17,6 +17,8 @@ export interface Verdict {
   readonly checks: number;
 }
 
+/** Codes of faults that are not the author's: another cell keeps this one from having a value, or nothing computes it yet. */
+const UNCOMPUTED: ReadonlySet<string> = new Set(['waits-for', 'not-computed-yet']);
 /** Names listed before the rest is counted. */
 const MOST_NAMES = 3;
 
@@ -26,7 +28,7 @@ export function verdictOf(sheet: Sheet): Verdict {
   const checks = cells.filter((cell) => cell.kind === 'check');
   const failing = checks.filter((cell) => cell.check?.holds === false);
   const holding = checks.filter((cell) => cell.check?.holds === true).length;
-  const isBroken = (cell: CellReading): boolean => cell.fault !== null && cell.waitsFor === null;
+  const isBroken = (cell: CellReading): boolean => cell.fault !== null && !UNCOMPUTED.has(cell.fault.code);
   const broken = [
     ...cells.filter(isBroken).map((cell) => ({ line: cell.tree.line.index, name: cell.name })),
     ...sheet.loose().map((fault) => ({ line: fault.line, name: `line ${fault.line + 1}` })),

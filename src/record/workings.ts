@@ -43,6 +43,8 @@ export interface PrintedStep {
 
 const LEAST_DIGITS = 3;
 const MOST_DIGITS = 15;
+/** As many as tell any two doubles apart: for operands that cancel to their last digits. */
+const ALL_DIGITS = 17;
 
 /** The printed workings of a cell; empty where it has none. */
 export function workingsOf(sheet: Sheet, name: string): readonly PrintedStep[] {
@@ -94,13 +96,17 @@ function parseFormula(formula: string): Expr {
 
 function growDigits(step: WorkingStep, tree: Expr): { operands: OperandTexts; digits: number; agrees: boolean } {
   for (let digits = LEAST_DIGITS; digits <= MOST_DIGITS; digits++) {
-    for (let operandDigits = digits; operandDigits <= MOST_DIGITS; operandDigits++) {
+    for (const operandDigits of [...range(digits, MOST_DIGITS), ALL_DIGITS]) {
       if (agreesAt(step, tree, operandDigits, digits)) {
         return { operands: operandTexts(step, operandDigits, infinitySign), digits, agrees: true };
       }
     }
   }
-  return { operands: operandTexts(step, MOST_DIGITS, infinitySign), digits: LEAST_DIGITS, agrees: false };
+  return { operands: operandTexts(step, ALL_DIGITS, infinitySign), digits: LEAST_DIGITS, agrees: false };
+}
+
+function range(from: number, to: number): number[] {
+  return Array.from({ length: to - from + 1 }, (_, i) => from + i);
 }
 
 function infinitySign(value: number): string {
