@@ -23,7 +23,7 @@ export function readDecimal(text: string): Decimal {
   const match = DECIMAL.exec(text);
   if (!match) throw new RangeError(`no decimal number: ${text}`);
   const [, sign, whole, fraction = '', exponentSign, exponentDigits = '0'] = match;
-  const magnitude = BigInt(whole! + fraction);
+  const magnitude = BigInt(whole + fraction);
   const exponent = Math.min(Number(exponentDigits), LARGEST_EXPONENT) * (exponentSign && exponentSign !== '+' ? -1 : 1);
   return { coefficient: sign && sign !== '+' ? -magnitude : magnitude, exponent: exponent - fraction.length };
 }

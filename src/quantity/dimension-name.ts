@@ -105,7 +105,7 @@ function baseFactors(dimension: Dimension): readonly UnitFactor[] {
     if (magnitude === 0) return [];
     const root = magnitude % 1 === 0.5;
     const value = root ? magnitude * 2 : magnitude;
-    return [{ divides: power < 0, root, prefix: null, symbol: BASE[i]!, exponent: { text: String(value), value } }];
+    return [{ divides: power < 0, root, prefix: null, symbol: BASE[i], exponent: { text: String(value), value } }];
   });
   return [...factors.filter((factor) => !factor.divides), ...factors.filter((factor) => factor.divides)];
 }

@@ -26,5 +26,5 @@ export function raiseDimension(a: Dimension, n: number): Dimension {
 
 /** Whether two dimensions are equal, up to the rounding of fractional exponents. */
 export function sameDimension(a: Dimension, b: Dimension): boolean {
-  return a.every((exponent, i) => Math.abs(exponent - b[i]!) < SAME_EXPONENT);
+  return a.every((exponent, i) => Math.abs(exponent - b[i]) < SAME_EXPONENT);
 }

@@ -37,12 +37,6 @@ export interface FormattedValue {
   readonly text: string;
 }
 
-export interface FormattedRow {
-  readonly low: FormattedValue | null;
-  readonly nominal: FormattedValue;
-  readonly high: FormattedValue | null;
-}
-
 interface Shown {
   readonly rounded: RoundedDecimal;
   readonly unit: DisplayUnit;
@@ -57,8 +51,6 @@ const MINUS = '\u2212';
 /** First digits from 0.0001 to below ten million are written out; others with a power of ten. */
 const LOWEST_LEAD = -4;
 const HIGHEST_LEAD = 6;
-/** Ends further from the nominal value than this take a prefix of their own. */
-const SHARED_PREFIX_RATIO = 1000;
 
 const CELSIUS = knownUnit('degC');
 
@@ -85,26 +77,6 @@ export function plainText(value: number, kind: ValueKind, options: FormatOptions
   const shown = show(value, kind, { digits: 'all', zeros: 'drop', ...options });
   const number = plainNumber(shown);
   return shown.unit.ascii === '' ? number : `${number} ${shown.unit.ascii}`;
-}
-
-/**
- * Low, nominal and high value of one row: low rounded down and high up, one prefix for all, the nominal's, save for an
- * end more than 1000 times larger or smaller. An end that is null (open) stays null.
- */
-export function formatRow(
-  row: { readonly low: number | null; readonly nominal: number; readonly high: number | null },
-  kind: ValueKind,
-  options: FormatOptions = {},
-): FormattedRow {
-  const reference = referenceOf(row);
-  const prefix = options.prefix ?? bestPrefix(reference, kind, options);
-  const cell = (value: number, rounding: Rounding): FormattedValue =>
-    formatValue(value, kind, { ...options, rounding, prefix: sharesPrefix(value, reference) ? prefix : undefined });
-  return {
-    low: row.low === null ? null : cell(row.low, 'down'),
-    nominal: cell(row.nominal, options.rounding ?? 'nearest'),
-    high: row.high === null ? null : cell(row.high, 'up'),
-  };
 }
 
 /** The power of ten of the prefix that `formatValue` chooses for a value: what other numbers beside it share. */
@@ -176,7 +148,8 @@ function joinDecimals(whole: string, fraction: string): string {
 /** The digits before and behind the point, and the power of ten behind them (0: none is written). */
 function placeDigits({ rounded, exponent, dropZeros }: Shown): { whole: string; fraction: string; power: number } {
   const { digits } = rounded;
-  if (digits === '0' && exponent >= 0) return { whole: '0', fraction: '', power: 0 };
+  // Zero itself; what was rounded to zero keeps its decimals.
+  if (digits === '0' && rounded.exponent === 0) return { whole: '0', fraction: '', power: 0 };
   const lead = digits.length - 1 + exponent;
   const power = digits !== '0' && (lead < LOWEST_LEAD || lead > HIGHEST_LEAD) ? lead : 0;
   const places = power - exponent;
@@ -184,17 +157,4 @@ function placeDigits({ rounded, exponent, dropZeros }: Shown): { whole: string; 
   const point = places > 0 ? padded.length - places : padded.length;
   const decimals = padded.slice(point);
   return { whole: padded.slice(0, point), fraction: dropZeros ? decimals.replace(/0+$/, '') : decimals, power };
-}
-
-/** The nominal value, or the larger end where that is 0 or infinite. */
-function referenceOf({ low, nominal, high }: { low: number | null; nominal: number; high: number | null }): number {
-  if (nominal !== 0 && Number.isFinite(nominal)) return nominal;
-  const ends = [low, high].filter((end) => end !== null).filter((end) => Number.isFinite(end));
-  return Math.max(0, ...ends.map((end) => Math.abs(end)));
-}
-
-function sharesPrefix(value: number, reference: number): boolean {
-  if (value === 0 || !Number.isFinite(value)) return true;
-  const ratio = Math.abs(value) / Math.abs(reference);
-  return ratio <= SHARED_PREFIX_RATIO && ratio >= 1 / SHARED_PREFIX_RATIO;
 }

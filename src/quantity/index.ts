@@ -3,14 +3,12 @@
 
 export type { Dimension } from './dimension.ts';
 export { DIMENSIONLESS, divideDimensions, multiplyDimensions, raiseDimension, sameDimension } from './dimension.ts';
-export type { Scale, ValueKind } from './kind.ts';
+export type { ValueKind } from './kind.ts';
 export {
   CAPACITANCE,
-  CHARGE,
   CONDUCTANCE,
   CURRENT,
   DECIBEL,
-  ENERGY,
   FREQUENCY,
   INDUCTANCE,
   LENGTH,
@@ -34,16 +32,17 @@ export {
 export { dimensionName, siUnitText } from './dimension-name.ts';
 export { isUnitSymbol } from './unit-symbols.ts';
 export { superscript } from './unit-factor.ts';
-export type { UnitFault, UnitFaultKind } from './unit-fault.ts';
+export type { UnitFault } from './unit-fault.ts';
 export { describeUnitFault, isUnitFault } from './unit-fault.ts';
-export type { ScannedUnit, Unit } from './unit.ts';
+export type { Unit } from './unit.ts';
 export { asciiUnit, knownUnit, parseUnit, scanUnit, typesetUnit } from './unit.ts';
 export { fromSI, scaleToSI } from './si-scale.ts';
-export type { ComponentCode } from './rkm-code.ts';
 export { readCode, scanCode } from './rkm-code.ts';
 export type { Rounding } from './round-decimal.ts';
-export type { FormatOptions, FormattedRow, FormattedValue } from './format.ts';
-export { bestPrefix, formatRow, formatValue, plainText } from './format.ts';
+export type { FormatOptions, FormattedValue } from './format.ts';
+export { bestPrefix, formatValue, plainText } from './format.ts';
+export type { FormattedRow } from './format-ends.ts';
+export { digitsToTell, formatReserve, formatRow, formatWindow } from './format-ends.ts';
 export type { SeriesName } from './e-series.ts';
 export { SERIES, SERIES_NAMES } from './e-series.ts';
 export type { PreferredDirection } from './preferred.ts';

@@ -30,7 +30,6 @@ export const CAPACITANCE = linearKind([-1, 1, 1, 0, 0]);
 export const INDUCTANCE = linearKind([1, -1, 1, 0, 0]);
 export const CHARGE = linearKind([0, 1, 1, 0, 0]);
 export const POWER = linearKind([1, 1, 0, 0, 0]);
-export const ENERGY = linearKind([1, 1, 1, 0, 0]);
 export const FREQUENCY = linearKind([0, 0, -1, 0, 0]);
 export const TIME = linearKind([0, 0, 1, 0, 0]);
 export const LENGTH = linearKind([0, 0, 0, 0, 1]);

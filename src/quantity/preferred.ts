@@ -41,8 +41,9 @@ function locate(series: SeriesName, x: number): { below: Place; exact: boolean; 
   const [mantissa, exponent] = x.toExponential(READ_DIGITS - 1).split('e') as [string, string];
   const decade = Number(exponent);
   const wanted = Number(mantissa.replace('.', ''));
+  const unit = unitOfSeries(series);
   // The last value not above; every series begins with the decade itself, so there is one.
-  const index = SERIES[series].findLastIndex((_, i) => integerAt(series, { index: i, decade }, decade) <= wanted);
+  const index = SERIES[series].findLastIndex((printed) => printed * unit <= wanted);
   const below = { index, decade };
   return { below, exact: integerAt(series, below, decade) === wanted, wanted };
 }
@@ -54,13 +55,17 @@ function stepPlace(series: SeriesName, { index, decade }: Place, step: 1 | -1): 
   return next < 0 ? { index: count - 1, decade: decade - 1 } : { index: next, decade };
 }
 
-/** The value in units of the last of 13 digits of `decade`. */
+/** The value in units of the last of 13 digits of `inDecade`, its own decade or the one below. */
 function integerAt(series: SeriesName, { index, decade }: Place, inDecade: number): number {
-  const printed = SERIES[series][index]!;
-  return Number(`${printed}e${READ_DIGITS - String(printed).length + decade - inDecade}`);
+  return SERIES[series][index] * unitOfSeries(series) * (decade > inDecade ? 10 : 1);
+}
+
+/** The last printed digit of the series in units of the last of 13 digits: 10^11 or 10^10. */
+function unitOfSeries(series: SeriesName): number {
+  return SERIES[series][0] === 10 ? 1e11 : 1e10;
 }
 
 function valueAt(series: SeriesName, { index, decade }: Place): number {
-  const printed = SERIES[series][index]!;
-  return Number(`${printed}e${decade - String(printed).length + 1}`);
+  const printedDigits = SERIES[series][0] === 10 ? 2 : 3;
+  return Number(`${SERIES[series][index]}e${decade - printedDigits + 1}`);
 }

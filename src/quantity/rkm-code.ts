@@ -1,5 +1,5 @@
 // Component codes: the letter stands for the decimal point and the multiplier (4k7, 470R, 4n7).
-// Source: IEC 60062:2016, as grammar.md restricts it: R k M G are ohms, p n u farads, and K only with
+// Source: IEC 60062:2016, as the sheet's grammar restricts it: R k M G are ohms, p n u farads, and K only with
 // digits behind it, since 300K is kelvin. m and L are no letters of it: m is milli, always.
 
 import { decimalToNumber, readDecimal } from './decimal.ts';
@@ -39,9 +39,9 @@ export function scanCode(text: string, at: number): (ComponentCode & { readonly 
   CODE.lastIndex = at;
   const found = CODE.exec(text);
   if (!found) return null;
-  const [exponent10, unit] = LETTERS[found[2] ?? found[4]!]!;
+  const [exponent10, unit] = LETTERS[found[2] ?? found[4]];
   const behind = found[3] ?? found[5] ?? '';
-  const digits = behind === '' ? found[1]! : `${found[1]}.${behind}`;
+  const digits = behind === '' ? found[1] : `${found[1]}.${behind}`;
   const value = decimalToNumber(readDecimal(digits), exponent10);
   return { end: at + found[0].length, value, kind: unit.kind, unit };
 }

@@ -19,7 +19,7 @@ export interface RoundedDecimal {
   readonly exponent: number;
 }
 
-export interface RoundOptions {
+interface RoundOptions {
   /** Significant digits, 1 to 30. */
   readonly digits: number;
   readonly rounding: Rounding;

@@ -37,7 +37,7 @@ const SUPERSCRIPTS: Readonly<Record<string, string>> = {
 
 /** A whole number in superscript digits: -12 is ⁻¹². */
 export function superscript(n: number): string {
-  return String(n).replace(/[-\d]/g, (mark) => SUPERSCRIPTS[mark]!);
+  return String(n).replace(/[-\d]/g, (mark) => SUPERSCRIPTS[mark]);
 }
 
 /** The exponent that the factor has in the whole unit, `/` and root counted. */

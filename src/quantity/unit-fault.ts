@@ -177,7 +177,7 @@ function symbolNamed(small: string): string | undefined {
 /** `Vrms`, `mVpp`, `Vdc` without what says how it was measured; `dBm` and its kin as dB; `V2` as a power. */
 function withoutSuffix(word: string): string | null {
   const power = /^(\D+)([2-9])$/.exec(word);
-  if (power && readWord(power[1]!)?.symbol.prefixes) return `${power[1]}^${power[2]}`;
+  if (power && readWord(power[1])?.symbol.prefixes) return `${power[1]}^${power[2]}`;
   const base = word.replace(/_?(rms|pp|pk|p|dc|ac)$/i, '');
   if (base !== word && readWord(base)) return base;
   return /^dB[a-zA-Zµ]{1,2}$/.test(word) ? 'dB' : null;
@@ -210,8 +210,8 @@ function editDistance(a: string, b: string): number {
   for (let i = 1; i <= a.length; i++) {
     const next = [i];
     for (let j = 1; j <= b.length; j++)
-      next.push(Math.min(row[j]! + 1, next[j - 1]! + 1, row[j - 1]! + (a[i - 1] === b[j - 1] ? 0 : 1)));
+      next.push(Math.min(row[j] + 1, next[j - 1] + 1, row[j - 1] + (a[i - 1] === b[j - 1] ? 0 : 1)));
     row = next;
   }
-  return row[b.length]!;
+  return row[b.length];
 }

@@ -1,4 +1,4 @@
-// The symbols of grammar `unit`: their spellings, what they mean, and which of them take a prefix.
+// The symbols of the grammar's `unit`: their spellings, what they mean, and which of them take a prefix.
 
 import type { ValueKind } from './kind.ts';
 import * as kinds from './kind.ts';
@@ -36,8 +36,8 @@ const bare = (ascii: string, typeset: string, aliases: readonly string[], expone
   prefixes: false,
 });
 
-export const OHM = prefixed('ohm', kinds.RESISTANCE, 'Ω', ['\u03a9', '\u2126']);
-export const FARAD = prefixed('F', kinds.CAPACITANCE);
+const OHM = prefixed('ohm', kinds.RESISTANCE, 'Ω', ['\u03a9', '\u2126']);
+const FARAD = prefixed('F', kinds.CAPACITANCE);
 export const DEGREE_CELSIUS: UnitSymbol = {
   ...bare('degC', '°C', ['\u00b0C', '\u00baC', '\u2103'], 0),
   kind: kinds.TEMPERATURE_POINT,
@@ -91,7 +91,7 @@ export const PREFIXES: readonly Prefix[] = [
   prefix('G', 9),
 ];
 
-export interface ReadWord {
+interface ReadWord {
   readonly prefix: Prefix | null;
   readonly symbol: UnitSymbol;
 }

@@ -1,4 +1,4 @@
-// Units as grammar.md writes them: [ "/" ] factor { ("/" | "·" | "*") factor }, without blanks.
+// Units as the sheet's grammar writes them: [ "/" ] factor { ("/" | "·" | "*") factor }, without blanks.
 // `scanUnit` takes the longest unit from a place in a line, so `10 V/R` yields V; what a `/` glued to
 // it then means is for the language to say.
 
@@ -32,7 +32,7 @@ export interface ScannedUnit {
   readonly behind: UnitFault | null;
 }
 
-export interface ScannedFactors {
+interface ScannedFactors {
   readonly end: number;
   readonly factors: readonly UnitFactor[];
   readonly behind: UnitFault | null;
@@ -96,11 +96,11 @@ export function knownFactors(text: string): readonly UnitFactor[] {
   return scanned.factors;
 }
 
-/** The unit that the factors make; null-free and without limits of its own, so `factors` come from a unit that was read. */
-export function unitOf(text: string, factors: readonly UnitFactor[], at: number): Unit | UnitFault {
+/** The unit that the factors make, or what forbids them together. */
+function unitOf(text: string, factors: readonly UnitFactor[], at: number): Unit | UnitFault {
   const fault = faultOfCombination(text, factors, at);
   if (fault) return fault;
-  const first = factors[0]!;
+  const first = factors[0];
   if (factors.length === 1 && first.symbol === DECIBEL_SYMBOL) return plainUnit(text, factors, first.symbol.kind);
   if (factors.length === 1 && first.symbol === DEGREE_CELSIUS && !first.divides)
     return plainUnit(text, factors, TEMPERATURE_POINT);

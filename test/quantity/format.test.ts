@@ -7,7 +7,6 @@ import {
   CONDUCTANCE,
   CURRENT,
   DECIBEL,
-  formatRow,
   formatValue,
   FREQUENCY,
   knownUnit,
@@ -201,45 +200,6 @@ describe('the text for the sheet', () => {
     [1200.4, RESISTANCE, { digits: 3 }, '1.2 kohm'],
     [1234.5678, RESISTANCE, { digits: 3, rounding: 'up' }, '1.24 kohm'],
   ])('%d as kind %o with %o', (value, kind, options, typed) => expect(plainText(value, kind, options)).toBe(typed));
-});
-
-describe('one row', () => {
-  const row = (low: number | null, nominal: number, high: number | null, kind: ValueKind, options?: FormatOptions) => {
-    const shown = formatRow({ low, nominal, high }, kind, options);
-    return [shown.low?.text ?? null, shown.nominal.text, shown.high?.text ?? null];
-  };
-
-  test('shares the prefix of the nominal value', () => {
-    expect(row(980, 1180.4, 1250, RESISTANCE)).toEqual(['0.980 kΩ', '1.18 kΩ', '1.25 kΩ']);
-    expect(row(0.212, 1.16e-3, 9e-4, CURRENT)).toEqual(['212 mA', '1.16 mA', '0.900 mA']);
-    expect(row(1e-6, 999.6e-6, 2e-3, CURRENT)).toEqual(['0.00100 mA', '1.00 mA', '2.00 mA']);
-  });
-
-  test('an end more than 1000 times away takes its own prefix, at 1000 it does not', () => {
-    expect(row(1, 1000, 1e6, RESISTANCE)).toEqual(['0.00100 kΩ', '1.00 kΩ', '1000 kΩ']);
-    expect(row(0.99, 1000, 1.01e6, RESISTANCE)).toEqual(['990 mΩ', '1.00 kΩ', '1.01 MΩ']);
-  });
-
-  test('rounds the ends outward', () => {
-    expect(row(-4.946, -2.2, -0.9991, VOLTAGE)).toEqual(['−4.95 V', '−2.20 V', '−0.999 V']);
-    expect(row(14.25, 15, 15.7501, VOLTAGE)).toEqual(['14.2 V', '15.0 V', '15.8 V']);
-    expect(row(14.25, 15, 15.75, VOLTAGE, { digits: 4 })).toEqual(['14.25 V', '15.00 V', '15.75 V']);
-  });
-
-  test('open ends stay open, infinite ones are infinite', () => {
-    expect(row(null, 5e-3, null, CURRENT)).toEqual([null, '5.00 mA', null]);
-    expect(row(2e4, Infinity, Infinity, RESISTANCE)).toEqual(['20.0 kΩ', '∞', '∞']);
-  });
-
-  test('a nominal value of 0 takes the prefix of the larger end', () => {
-    expect(row(-2e-3, 0, 1e-3, VOLTAGE)).toEqual(['−2.00 mV', '0 mV', '1.00 mV']);
-    expect(row(0, 0, 0, VOLTAGE)).toEqual(['0 V', '0 V', '0 V']);
-  });
-
-  test('an explicit unit or prefix serves the whole row', () => {
-    expect(row(0.04, 0.05, 0.06, PLAIN, { unit: knownUnit('%') })).toEqual(['4.00 %', '5.00 %', '6.00 %']);
-    expect(row(900, 1000, 1100, RESISTANCE, { prefix: 0 })).toEqual(['900 Ω', '1000 Ω', '1100 Ω']);
-  });
 });
 
 test('the prefix of a value is that of its rounded digits', () => {

@@ -2,6 +2,7 @@
 
 import { expect, test } from 'vitest';
 import { describeUnitFault, isUnitFault, parseUnit, scanUnit } from '../../src/quantity/index.ts';
+import type { UnitFault } from '../../src/quantity/index.ts';
 
 test.each([
   // text, fault, the text at fault, its start, hint
@@ -70,7 +71,8 @@ test.each([
   ['V)', 'text behind', ')', 1, null],
   ['V^x', 'text behind', '^x', 1, null],
 ] as const)('%s: %s', (text, fault, part, start, hint) => {
-  expect(parseUnit(text)).toEqual({ fault, text: part, start, end: start + part.length, hint });
+  const expected: UnitFault = { fault, text: part, start, end: start + part.length, hint };
+  expect(parseUnit(text)).toEqual(expected);
 });
 
 test.each([
