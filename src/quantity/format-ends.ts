@@ -14,13 +14,13 @@ export interface FormattedRow {
   readonly high: FormattedValue | null;
 }
 
-export interface FormattedWindow {
+interface FormattedWindow {
   readonly low: FormattedValue;
   readonly high: FormattedValue;
 }
 
 /** How much is to spare or short, without sign. */
-export interface FormattedReserve extends FormattedValue {
+interface FormattedReserve extends FormattedValue {
   readonly short: boolean;
 }
 

@@ -4,7 +4,7 @@
 import type { Dimension } from './dimension.ts';
 import { DIMENSIONLESS, sameDimension } from './dimension.ts';
 
-export type Scale = 'linear' | 'celsius' | 'decibel';
+type Scale = 'linear' | 'celsius' | 'decibel';
 
 export interface ValueKind {
   readonly dimension: Dimension;

@@ -7,7 +7,7 @@ import type { ValueKind } from './kind.ts';
 import type { Unit } from './unit.ts';
 import { knownUnit } from './unit.ts';
 
-export interface ComponentCode {
+interface ComponentCode {
   /** Ohms or farads. */
   readonly value: number;
   readonly kind: ValueKind;

@@ -3,7 +3,7 @@
 import type { UnitSymbol } from './unit-symbols.ts';
 import { findPrefix, findSymbol, PREFIXES, readWord, UNIT_SYMBOLS } from './unit-symbols.ts';
 
-export type UnitFaultKind =
+type UnitFaultKind =
   | 'unit missing'
   | 'unknown symbol'
   | 'wrong case'

@@ -25,7 +25,7 @@ export interface Unit {
 }
 
 /** A unit in a longer text: it ends before `end`. */
-export interface ScannedUnit {
+interface ScannedUnit {
   readonly end: number;
   readonly unit: Unit;
   /** Why the factor behind a `/`, `·` or `*` that stands at `end` is none; null where no such mark stands there. */
