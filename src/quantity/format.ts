@@ -69,12 +69,12 @@ export function formatValue(value: number, kind: ValueKind, options: FormatOptio
 }
 
 /**
- * A value as the sheet language reads it: `1.18 kohm`, `-2.2 V`, `0.01 /V`, `25 degC`. All digits are kept unless
- * `digits` says otherwise, and then it reads back as the same double. Throws RangeError where `formatValue` does and for infinities.
+ * A value as the sheet language reads it: `1.18 kohm`, `-2.2 V`, `0.01 /V`, `25 degC`. Without `digits` it has all
+ * that it takes to read back as the same double. Throws RangeError where `formatValue` does and for infinities.
  */
 export function plainText(value: number, kind: ValueKind, options: FormatOptions = {}): string {
   checkUnit(kind, options);
-  const shown = show(value, kind, { digits: 'all', zeros: 'drop', ...options });
+  const shown = show(value, kind, { ...options, digits: options.digits ?? 'all', zeros: options.zeros ?? 'drop' });
   const number = plainNumber(shown);
   return shown.unit.ascii === '' ? number : `${number} ${shown.unit.ascii}`;
 }

@@ -196,6 +196,7 @@ describe('the text for the sheet', () => {
     [12_345, PLAIN, {}, '12345'],
     [1.2e-9, PLAIN, {}, '1.2e-9'],
     [1e-18, CURRENT, {}, '1e-18 A'],
+    [1234.5678, RESISTANCE, { digits: undefined }, '1.2345678 kohm'],
     [1234.5678, RESISTANCE, { digits: 3 }, '1.23 kohm'],
     [1200.4, RESISTANCE, { digits: 3 }, '1.2 kohm'],
     [1234.5678, RESISTANCE, { digits: 3, rounding: 'up' }, '1.24 kohm'],
