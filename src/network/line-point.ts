@@ -54,7 +54,7 @@ export const linePoint: Kernel = {
     const vds = line[DRAIN_SOURCE];
     const region = line[REGION];
     const I = reversed ? 0 - line[CURRENT] : line[CURRENT];
-    deriveAt(beta, lambda, vov, vds, region, reversed, 0, rs, rd);
+    deriveAt(beta, lambda, vov, vds, reversed, 0, rs, rd);
     s[a[o]] = SOLVED;
     s[a[o + 1]] = I;
     s[a[o + 2]] = channel * (vgg - Rm * I) + 0;

@@ -7,31 +7,24 @@
 // with f1, f2 the derivatives of f(vov, vds) and x = dV_T/dV_SB. Resistances inside the source and drain
 // leads divide all three by 1 + (g_m + g_mb) r_s + g_ds (r_s + r_d).
 
+import { outputConductance, transconductance } from '../fet/index.ts';
+
 /** Where `deriveAt` leaves g_m, g_ds, g_mb in siemens. */
 export const slopes = new Float64Array(3);
 
-/** Writes g_m, g_ds, g_mb of region 0 (cutoff), 1 (ohmic) or 2 (saturation) into `slopes`. */
+/** Writes g_m, g_ds, g_mb at the terminals into `slopes`; `bodySlope` is dV_T/dV_SB. */
 export function deriveAt(
   beta: number,
   lambda: number,
   vov: number,
   vds: number,
-  region: number,
   reversed: boolean,
   bodySlope: number,
   rs: number,
   rd: number,
 ): void {
-  let f1 = 0;
-  let f2 = 0;
-  const stretch = 1 + lambda * vds;
-  if (region === 2) {
-    f1 = 2 * beta * vov * stretch;
-    f2 = beta * vov * vov * lambda;
-  } else if (region === 1) {
-    f1 = 2 * beta * vds * stretch;
-    f2 = beta * (2 * (vov - vds) * stretch + lambda * vds * (2 * vov - vds));
-  }
+  const f1 = transconductance(beta, lambda, vov, vds);
+  const f2 = outputConductance(beta, lambda, vov, vds);
   let gm = f1;
   let gds = f2;
   let gmb = f1 * bodySlope;

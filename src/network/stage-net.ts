@@ -7,7 +7,8 @@ import type { Handle } from './emitter.ts';
 /** Where a leg ends. `signal` is 0 V at rest and 0 ohm; `-signal` and `common` serve differential drive. */
 export type PlaceRef =
   | { readonly type: 'node'; readonly name: string }
-  | { readonly type: 'rail'; readonly volts: Handle; readonly label: string }
+  /** `volts` null: known to be 0 V. */
+  | { readonly type: 'rail'; readonly volts: Handle | null; readonly label: string }
   | { readonly type: 'signal'; readonly inverted: boolean }
   | { readonly type: 'common' };
 

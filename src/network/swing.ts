@@ -1,0 +1,263 @@
+// Kernel of the swing: the largest peaks at the output before the FET leaves saturation or a JFET's gate conducts.
+//
+// Along the a.c. load line, with v_s the test source and w the change of the channel current (the exact square law,
+// not its slope):
+//   V_ov = V_ov0 + a_gs v_s - r_gs w,  V_DS = V_DS0 + a_ds v_s - r_ds w,  v_out = a_out v_s - r_out w.
+//   cutoff           w = -I: linear
+//   onset of ohmic   V_ov = V_DS = y with I + w = beta y^2 (1 + lambda y): v_s eliminated, a cubic in y
+//   gate conduction  V_GS = 0.5 V with I + w = beta v^2 (1 + lambda V_DS), v the overdrive there: linear
+// Where no signal current can flow (`fixed`) w is minus the voltage of the island and the current stays I.
+// With body effect V_T moves along the line, and the limit is found by solving the point at each v_s instead.
+
+import { threshold } from '../fet/index.ts';
+import { solveBracketed } from '../numeric/index.ts';
+import { solveWithBody } from './body-solve.ts';
+import type { Kernel } from './kernel.ts';
+import { CURRENT, MARGIN, REGION, line } from './line-solve.ts';
+
+/** Forward gate voltage in V at which a JFET's gate is taken to conduct. */
+export const GATE_CONDUCTS = 0.5;
+
+const [NONE, CUTOFF, OHMIC, GATE] = [0, 1, 2, 3];
+
+const INPUTS = [
+  'channel',
+  'beta',
+  'V_TO',
+  'lambda',
+  'gamma',
+  'phi',
+  'gate_limit',
+  'fixed',
+  'I_D',
+  'V_GS',
+  'V_DS',
+  'V_SB',
+  'a_gs',
+  'a_ds',
+  'a_sb',
+  'a_out',
+  'r_gs',
+  'r_ds',
+  'r_sb',
+  'r_out',
+  'r_s',
+  'r_d',
+] as const;
+
+/** The call in hand, voltages inside the leads and in the n-channel frame, the leads' resistances in r_gs, r_ds, r_sb. */
+const given = new Float64Array(INPUTS.length);
+const [BETA, VTO, LAMBDA, GAMMA, PHI, LIMIT, FIXED, I, VGS, VDS, VSB] = [1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11];
+const [AGS, ADS, ASB, AOUT, RGS, RDS, RSB, ROUT, RS, RD] = [12, 13, 14, 15, 16, 17, 18, 19, 20, 21];
+
+/** What has been found so far, in the n-channel frame: nearest limit upwards and downwards, and what it is. */
+const found = { up: 0, down: 0, upLimit: 0, downLimit: 0 };
+
+/**
+ * Peaks in V, both counted positive, infinite where nothing limits them; their limits by the codes of `SWING_LIMIT`.
+ * Voltages and a_out, r_out in the true frame; `gate_limit` in V (n-channel frame), infinite for a MOSFET.
+ */
+export const swing: Kernel = {
+  inputs: INPUTS,
+  outputs: ['swing_up', 'swing_down', 'limit_up', 'limit_down'],
+  run(s, a, p) {
+    for (let n = 0; n < INPUTS.length; n++) given[n] = s[a[p + n]];
+    const channel = given[0];
+    const leads = given[RS] + given[RD];
+    const current = given[I];
+    given[VGS] = channel * given[VGS] - given[RS] * current;
+    given[VDS] = channel * given[VDS] - leads * current;
+    given[VSB] = channel * given[VSB] + given[RS] * current;
+    if (given[FIXED] === 0) {
+      given[RGS] += given[RS];
+      given[RDS] += leads;
+      given[RSB] += given[RS];
+    }
+    found.up = Infinity;
+    found.down = Infinity;
+    found.upLimit = NONE;
+    found.downLimit = NONE;
+    search();
+    const o = p + INPUTS.length;
+    s[a[o]] = channel > 0 ? found.up : found.down;
+    s[a[o + 1]] = channel > 0 ? found.down : found.up;
+    s[a[o + 2]] = channel > 0 ? found.upLimit : found.downLimit;
+    s[a[o + 3]] = channel > 0 ? found.downLimit : found.upLimit;
+  },
+};
+
+function search(): void {
+  const vt = given[GAMMA] === 0 ? given[VTO] : threshold(given[VTO], given[GAMMA], given[PHI], given[VSB]);
+  const vov = given[VGS] - vt;
+  const beyond = vov <= 0 ? CUTOFF : given[VDS] <= vov ? OHMIC : given[VGS] >= given[LIMIT] ? GATE : NONE;
+  if (beyond !== NONE || vov !== vov || given[VDS] !== given[VDS]) {
+    const nothing = vov === vov && given[VDS] === given[VDS] ? 0 : NaN;
+    found.up = nothing;
+    found.down = nothing;
+    found.upLimit = beyond;
+    found.downLimit = beyond;
+    return;
+  }
+  if (given[AGS] === 0 && given[ADS] === 0) return;
+  if (given[GAMMA] !== 0 && given[FIXED] === 0 && (given[ASB] !== 0 || given[RSB] !== 0)) {
+    searchWithBody(1);
+    searchWithBody(-1);
+  } else if (given[FIXED] === 0) searchLoadLine(vov);
+  else searchFixedCurrent(vov);
+}
+
+/** Takes an output voltage at which a limit is met, if it is the nearest on its side. */
+function meet(out: number, limit: number): void {
+  if (out >= 0 && out < found.up) {
+    found.up = out;
+    found.upLimit = limit;
+  }
+  if (out <= 0 && -out < found.down) {
+    found.down = 0 - out;
+    found.downLimit = limit;
+  }
+}
+
+function outputAt(vs: number, w: number): number {
+  return given[AOUT] * vs - given[ROUT] * w;
+}
+
+function searchLoadLine(vov: number): void {
+  const current = given[I];
+  const ags = given[AGS];
+  const ads = given[ADS];
+  const rgs = given[RGS];
+  const rds = given[RDS];
+  if (ags !== 0) meet(outputAt(-(vov + rgs * current) / ags, -current), CUTOFF);
+
+  const beta = given[BETA];
+  const lambda = given[LAMBDA];
+  const twist = ads * rgs - ags * rds;
+  const boundary = (y: number): number => {
+    const vs = y < 0 ? NaN : onsetDrive(y, beta * y * y * (1 + lambda * y) - current, vov);
+    meet(outputAt(vs, beta * y * y * (1 + lambda * y) - current), OHMIC);
+    return vs;
+  };
+  eachPositiveRoot(
+    ads * vov - ags * given[VDS] + twist * current,
+    ags - ads,
+    -twist * beta,
+    -twist * beta * lambda,
+    boundary,
+  );
+
+  const open = given[LIMIT] - (given[VGS] - vov);
+  if (open > 0 && open < Infinity && ags !== 0) {
+    const full = beta * open * open;
+    const level = given[VDS] + (ads / ags) * (given[LIMIT] - given[VGS]);
+    const slope = (ads * rgs) / ags - rds;
+    const w = (full * (1 + lambda * level) - current) / (1 - full * lambda * slope);
+    meet(outputAt((given[LIMIT] - given[VGS] + rgs * w) / ags, w), GATE);
+  }
+}
+
+/** v_s at which V_ov or V_DS, whichever the source moves more, is y. */
+function onsetDrive(y: number, w: number, vov: number): number {
+  if (Math.abs(given[AGS]) >= Math.abs(given[ADS])) return (y - vov + given[RGS] * w) / given[AGS];
+  return (y - given[VDS] + given[RDS] * w) / given[ADS];
+}
+
+/** The current cannot change: each limit is a pair of terminal voltages, and the source and the island reach it together. */
+function searchFixedCurrent(vov: number): void {
+  const { 1: beta, 3: lambda, 8: current } = given;
+  const square = current / beta;
+  const high = Math.sqrt(square);
+  const onset = solveBracketed((y) => y * y * (1 + lambda * y) - square, 0, high).value;
+  reach(onset - vov, onset - given[VDS], OHMIC);
+  const open = given[LIMIT] - (given[VGS] - vov);
+  if (open > 0 && open < Infinity && lambda > 0) {
+    const vds = (square / (open * open) - 1) / lambda;
+    if (vds >= open) reach(given[LIMIT] - given[VGS], vds - given[VDS], GATE);
+  }
+}
+
+function reach(dvgs: number, dvds: number, limit: number): void {
+  const twist = given[ADS] * given[RGS] - given[AGS] * given[RDS];
+  if (twist === 0) return;
+  const vs = (given[RGS] * dvds - given[RDS] * dvgs) / twist;
+  const w = (given[AGS] * dvds - given[ADS] * dvgs) / twist;
+  meet(outputAt(vs, w), limit);
+}
+
+/** Calls `visit` with every root y > 0 of c0 + c1 y + c2 y^2 + c3 y^3. */
+function eachPositiveRoot(c0: number, c1: number, c2: number, c3: number, visit: (y: number) => void): void {
+  const f = (y: number): number => c0 + y * (c1 + y * (c2 + y * c3));
+  // Beyond Cauchy's bound there is no root; between the turning points there is one where the signs differ.
+  const lead = c3 !== 0 ? c3 : c2 !== 0 ? c2 : c1;
+  if (lead === 0) return;
+  const bound = 1 + Math.max(Math.abs(c0), Math.abs(c1), Math.abs(c2)) / Math.abs(lead);
+  if (!(bound < Infinity)) return;
+  const turns = turningPoints(c1, 2 * c2, 3 * c3).filter((y) => y > 0 && y < bound);
+  let low = 0;
+  for (const high of [...turns, bound]) {
+    const [before, after] = [f(low), f(high)];
+    if (before === 0 ? low > 0 : after !== 0 && before > 0 !== after > 0) {
+      visit(before === 0 ? low : solveBracketed(f, low, high).value);
+    }
+    low = high;
+  }
+}
+
+/** Real roots of c + b y + a y^2, ascending. */
+function turningPoints(c: number, b: number, a: number): number[] {
+  if (a === 0) return b === 0 ? [] : [-c / b];
+  const inside = b * b - 4 * a * c;
+  if (!(inside > 0)) return [];
+  const q = -0.5 * (b + (b < 0 ? -1 : 1) * Math.sqrt(inside));
+  const roots = q === 0 ? [0] : [q / a, c / q];
+  return roots.toSorted((x, y) => x - y);
+}
+
+/** Follows the source in one direction to the first limit, solving the whole point at each step. */
+function searchWithBody(direction: number): void {
+  let low = 0;
+  let high = 2 ** -7;
+  while (headroomAt(direction * high) > 0) {
+    if (high > 2 ** 14) return;
+    low = high;
+    high *= 1.25;
+  }
+  const vs = direction * solveBracketed((x) => headroomAt(direction * x), low, high).value;
+  headroomAt(vs);
+  const limit = line[REGION] === 0 ? CUTOFF : line[MARGIN] <= gateRoom ? OHMIC : GATE;
+  const cutoff = line[CURRENT] <= 1e-9 * given[I];
+  meet(outputAt(vs, line[CURRENT] - given[I]), cutoff ? CUTOFF : limit);
+}
+
+/** Room to gate conduction at the last point, in V. */
+let gateRoom = 0;
+
+/** How far, in V, the point at a source of v_s is from the nearest limit; negative beyond it. */
+function headroomAt(vs: number): number {
+  const current = given[I];
+  const vgs = given[VGS] + given[AGS] * vs + given[RGS] * current;
+  const vds = given[VDS] + given[ADS] * vs + given[RDS] * current;
+  const vsb = given[VSB] + given[ASB] * vs - given[RSB] * current;
+  if (vds < 0) {
+    line[CURRENT] = 0;
+    line[MARGIN] = vds;
+    line[REGION] = 1;
+    return vds;
+  }
+  solveWithBody(
+    given[BETA],
+    given[LAMBDA],
+    given[VTO],
+    given[GAMMA],
+    given[PHI],
+    vgs,
+    given[RGS],
+    vds,
+    given[RDS],
+    vsb,
+    given[RSB],
+  );
+  gateRoom = given[LIMIT] - (vgs - given[RGS] * line[CURRENT]);
+  const margin = line[REGION] === 0 ? line[1] : Math.min(line[MARGIN], line[1]);
+  return Math.min(margin, gateRoom);
+}
