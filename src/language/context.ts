@@ -10,7 +10,7 @@ import type { LineTree } from './syntax.ts';
  * `title`: the title's fields; `unread`: below a cell of unknown kind; `plain`: below a cell without fields;
  * else the kind whose fields stand here.
  */
-export type Block = 'none' | 'loose' | 'title' | 'unread' | 'plain' | EntryKind['type'];
+type Block = 'none' | 'loose' | 'title' | 'unread' | 'plain' | EntryKind['type'];
 
 export interface Context {
   readonly block: Block;

@@ -69,7 +69,7 @@ export function entrySpan(line: Line): Span {
 }
 
 /** The line of this index; throws RangeError where there is none. */
-export function lineAt(tree: SheetTree, index: number): Line {
+function lineAt(tree: SheetTree, index: number): Line {
   const line = tree.lines[index];
   if (!line) throw new RangeError(`no line ${index} in a sheet of ${tree.lines.length}`);
   return line;

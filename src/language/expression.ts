@@ -5,7 +5,7 @@ import { isUnitSymbol, PLAIN } from '../quantity/index.ts';
 import { halt, reading } from './messages.ts';
 import { checkedValue, refusePower } from './number.ts';
 import type { NumberToken } from './number.ts';
-import type { SuperscriptToken } from './lexer.ts';
+import type { Sign, SuperscriptToken } from './lexer.ts';
 import { Reader, spanOf } from './reader.ts';
 import { isJoiningWord } from './reserved.ts';
 import type { BinaryExpr, BinaryOperator, Expr, Message, NameRef, NumberExpr, PathExpr, Span } from './syntax.ts';
@@ -50,18 +50,22 @@ function readNegation(reader: Reader): Expr {
 // rel = state [ ("="|"<"|">"|"<="|">=") state | "within" ( range | literal "±" literal ) ] ;
 function readRelation(reader: Reader): Expr {
   const left = readState(reader);
+  const { sign } = reader;
   let whole: Expr;
-  if (reader.atSign('=', '<', '>', '<=', '>=')) {
-    const { ahead } = reader;
-    whole = binary(reader, (ahead as { sign: BinaryOperator }).sign, left, readState);
-  } else if (reader.atWord('within')) whole = readWithin(reader, left, readSum);
+  if (isComparison(sign)) whole = binary(reader, sign, left, readState);
+  else if (reader.atWord('within')) whole = readWithin(reader, left, readSum);
   else return left;
   refuseChain(reader, whole);
   return whole;
 }
 
+/** Whether the sign compares. */
+export function isComparison(sign: Sign | null): sign is '=' | '<' | '>' | '<=' | '>=' {
+  return sign === '=' || sign === '<' || sign === '>' || sign === '<=' || sign === '>=';
+}
+
 function refuseChain(reader: Reader, whole: Expr): void {
-  if (!reader.atSign('=', '<', '>', '<=', '>=') && !reader.atWord('within')) return;
+  if (!isComparison(reader.sign) && !reader.atWord('within')) return;
   const { ahead } = reader;
   if (whole.type !== 'binary' || ahead.type === 'name') halt('comparison-chained-within', spanOf(ahead));
   const rest = reader.text.slice(ahead.start, reader.limit);
@@ -90,31 +94,36 @@ export function readState(reader: Reader): Expr {
 // sum = product { ("+"|"-") product } ;
 export function readSum(reader: Reader): Expr {
   let left = readProduct(reader);
-  while (reader.atSign('+', '-')) left = binary(reader, signAhead(reader), left, readProduct);
-  return left;
+  for (;;) {
+    const { sign } = reader;
+    if (sign !== '+' && sign !== '-') return left;
+    left = binary(reader, sign, left, readProduct);
+  }
 }
 
 // product = signed { ("*"|"/"|"||") signed } ;
 function readProduct(reader: Reader): Expr {
   let left = readSigned(reader);
-  while (reader.atSign('*', '/', '||')) left = binary(reader, signAhead(reader), left, readSigned);
-  return left;
+  for (;;) {
+    const { sign } = reader;
+    if (sign !== '*' && sign !== '/' && sign !== '||') return left;
+    left = binary(reader, sign, left, readSigned);
+  }
 }
 
 // signed = { "+"|"-" } power ;
 function readSigned(reader: Reader): Expr {
-  if (!reader.atSign('+', '-')) return readPower(reader);
+  const { sign: operator } = reader;
+  if (operator !== '+' && operator !== '-') return readPower(reader);
   const sign = reader.take();
   const { ahead } = reader;
   // A point of the Celsius scale owns its sign: -40 degC is one literal.
   if (ahead.type === 'number' && ahead.kind.scale === 'celsius') {
-    const negative = reader.textOf(sign) !== '+';
     const operand = readPower(reader);
-    if (operand.type === 'number') return signedPoint(ahead, operand, negative, sign.start);
+    if (operand.type === 'number') return signedPoint(ahead, operand, operator === '-', sign.start);
   }
   reader.countOperator();
   const operand = reader.nested(() => readSigned(reader));
-  const operator = reader.textOf(sign) === '+' ? '+' : '-';
   return { type: 'unary', operator, operand, span: reader.spanFrom(sign.start) };
 }
 
@@ -230,10 +239,6 @@ function dotAhead(reader: Reader, names: readonly NameRef[]): boolean {
 }
 
 // ---------------------------------------------------------------- parts
-
-function signAhead(reader: Reader): BinaryOperator {
-  return (reader.ahead as { sign: BinaryOperator }).sign;
-}
 
 function binary(reader: Reader, operator: BinaryOperator, left: Expr, readRight: (reader: Reader) => Expr): BinaryExpr {
   reader.countOperator();

@@ -3,7 +3,50 @@
 // Spans count UTF-16 units from the start of their line, offsets of splices from the start of the document.
 // Numbers are SI. What a user got wrong is in the tree, as a broken entry, body or line with its message.
 
-export type * from './syntax.ts';
+export type {
+  AnotherEntry,
+  BenchEntry,
+  BinaryExpr,
+  BinaryOperator,
+  Bounds,
+  BrokenEntry,
+  CallExpr,
+  CellTree,
+  CheckEntry,
+  Condition,
+  Entry,
+  Expr,
+  FieldBody,
+  FieldTree,
+  GroupExpr,
+  InverseEntry,
+  Leg,
+  Line,
+  LineTree,
+  Literal,
+  LooseLine,
+  Message,
+  NameRef,
+  Note,
+  NumberExpr,
+  PartEntry,
+  PathExpr,
+  Place,
+  PlotEntry,
+  PointEntry,
+  QuantityEntry,
+  Range,
+  RowTree,
+  SheetTree,
+  Source,
+  Span,
+  Splice,
+  Spread,
+  StageEntry,
+  UnaryExpr,
+  WithExpr,
+  WithinExpr,
+} from './syntax.ts';
 export { entrySpan, setEntry, setLine, setNote, setSource } from './edits.ts';
 export { parseExpression } from './expression.ts';
 export { literalOf } from './literal.ts';

@@ -27,13 +27,13 @@ export type Sign =
   | ':'
   | '[';
 
-export interface NameToken {
+interface NameToken {
   readonly type: 'name';
   readonly start: number;
   readonly end: number;
   readonly name: string;
 }
-export interface SignToken {
+interface SignToken {
   readonly type: 'sign';
   readonly start: number;
   readonly end: number;
@@ -46,7 +46,7 @@ export interface SuperscriptToken {
   readonly end: number;
   readonly value: number;
 }
-export interface EndToken {
+interface EndToken {
   readonly type: 'end';
   readonly start: number;
   readonly end: number;

@@ -8,14 +8,14 @@ import type { Expr, Literal } from './syntax.ts';
 
 /** Whether a signed number may begin at the next token. */
 export function atLiteral(reader: Reader): boolean {
-  return reader.ahead.type === 'number' || reader.atSign('+', '-');
+  return reader.ahead.type === 'number' || reader.atSign('+') || reader.atSign('-');
 }
 
 /** Reads a signed number; leaves with a message where none stands. */
 export function readLiteral(reader: Reader): Literal {
   const { start } = reader.ahead;
   const negative = reader.atSign('-');
-  if (reader.atSign('+', '-')) reader.take();
+  if (negative || reader.atSign('+')) reader.take();
   const { ahead } = reader;
   if (ahead.type === 'end') halt('operand-missing', spanOf(ahead), `The place behind ${reader.textOf(reader.last)}`);
   if (ahead.type !== 'number') halt('limit-not-literal', spanOf(ahead), reader.textOf(ahead));

@@ -19,7 +19,7 @@ export function nearestNames(name: string, candidates: Iterable<string>): string
 }
 
 /** Least number of insertions, deletions, changes and swaps of neighbours that turn `a` into `b`. */
-export function editDistance(a: string, b: string): number {
+function editDistance(a: string, b: string): number {
   let beforeLast: number[] = [];
   let last = Array.from({ length: b.length + 1 }, (_, j) => j);
   for (let i = 1; i <= a.length; i++) {

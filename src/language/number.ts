@@ -3,17 +3,10 @@
 // because only here the blanks are still known.
 
 import type { Unit, ValueKind } from '../quantity/index.ts';
-import {
-  describeUnitFault,
-  dimensionName,
-  isUnitFault,
-  PLAIN,
-  scaleToSI,
-  scanCode,
-  scanUnit,
-} from '../quantity/index.ts';
+import { describeUnitFault, dimensionName, isUnitFault, PLAIN, scaleToSI, scanCode } from '../quantity/index.ts';
 import { isBlank, isDigit, isLetter, nameEnd, skipBlanks } from './characters.ts';
 import { halt } from './messages.ts';
+import { scanUnitAt } from './unit-memo.ts';
 
 export interface NumberToken {
   readonly type: 'number';
@@ -95,7 +88,7 @@ function unitBehind(text: string, at: number, end: number, limit: number): { uni
   const first = text[start];
   const begins = first === '/' || first === '√' || first === '%' || first === '°' || first === 'º' || first === '℃';
   if (!begins && !isLetter(text.charCodeAt(start))) return null;
-  const read = scanUnit(text, start);
+  const read = scanUnitAt(text, start, limit);
   if (!isUnitFault(read)) {
     refuseGluedOperator(text, at, read.end, limit);
     return read;
@@ -131,7 +124,7 @@ function refuseGluedOperator(text: string, at: number, end: number, limit: numbe
   if (sign === '^') refusePower(text, at, end, end + 1, limit);
   const next = skipBlanks(text, end, limit);
   if (next > end && text[next] === '/') {
-    const read = scanUnit(text, next);
+    const read = scanUnitAt(text, next, limit);
     if (!isUnitFault(read))
       halt(
         'unit-blank',
@@ -182,7 +175,7 @@ function operandEnd(text: string, at: number, limit: number): number {
 function refuseUnitBehindCode(text: string, at: number, end: number, limit: number, kind: ValueKind): void {
   const start = skipBlanks(text, end, limit);
   if (start === limit || !(text[start] === '/' || text[start] === '√' || isLetter(text.charCodeAt(start)))) return;
-  const read = scanUnit(text, start);
+  const read = scanUnitAt(text, start, limit);
   if (isUnitFault(read)) return;
   halt(
     'code-with-unit',

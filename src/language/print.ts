@@ -82,10 +82,10 @@ function operand(expr: Expr, least: Rung): string {
   return RUNGS.indexOf(rungOf(expr)) < RUNGS.indexOf(least) ? `(${text})` : text;
 }
 
-/** A sign before a point of the Celsius scale would become part of it. */
+/** A sign before a point of the Celsius scale would become part of it, unless it has one of its own. */
 function signedOperand(expr: Expr): string {
   const point = expr.type === 'number' && expr.kind.scale === 'celsius' && rungOf(expr) === 'primary';
-  return point ? `(${printExpr(expr)})` : operand(expr, 'signed');
+  return point ? `+${printExpr(expr)}` : operand(expr, 'signed');
 }
 
 /** A quantity with its unit is no base without parentheses. */

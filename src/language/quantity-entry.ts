@@ -2,7 +2,7 @@
 // The value may carry a `with` as well: `x = A1.A_v with V_C = -8 V`.
 
 import type { EntryKind } from './entry-kind.ts';
-import { readState } from './expression.ts';
+import { isComparison, readState } from './expression.ts';
 import { atLiteral, literalOf, readLiteral } from './literal.ts';
 import { halt } from './messages.ts';
 import type { Reader } from './reader.ts';
@@ -14,7 +14,7 @@ import { readAs } from './unit-text.ts';
 export const QUANTITY: EntryKind = { type: 'quantity', starts: () => true, read: readQuantity, fields: null };
 
 /** Reads a whole quantity, to the end of the body. */
-export function readQuantity(reader: Reader): QuantityEntry {
+function readQuantity(reader: Reader): QuantityEntry {
   const { start } = reader.ahead;
   return finishQuantity(reader, start, reader.atSign('..') ? null : readState(reader));
 }
@@ -48,7 +48,7 @@ function readBounds(reader: Reader, start: number, low: Expr | null): Bounds {
 /** Null where nothing stands that could be meant as a limit. */
 function refuseFormula(reader: Reader): null {
   const { ahead } = reader;
-  const law = reader.atWord('uniform', 'normal', 'service', 'at', 'as', 'in');
+  const law = reader.atOneOf(['uniform', 'normal', 'service', 'at', 'as', 'in']);
   if (ahead.type === 'name' && !law) halt('limit-not-literal', spanOf(ahead), reader.textOf(ahead));
   return null;
 }
@@ -75,7 +75,7 @@ function readLaw(reader: Reader, start: number, tolerance: Literal | null, bound
   if (reader.takeWord('uniform')) law = 'uniform';
   else if (reader.takeWord('normal')) law = 'normal';
   const service = reader.takeWord('service') !== null;
-  if (service && !law && reader.atWord('uniform', 'normal')) {
+  if (service && !law && reader.atOneOf(['uniform', 'normal'])) {
     const word = reader.textOf(reader.ahead);
     halt('law-order', spanOf(reader.ahead), `${word} service`);
   }
@@ -99,9 +99,8 @@ function refuseBehind(reader: Reader, spread: Spread | null): void {
   if (reader.atEnd()) return;
   const here = spanOf(reader.ahead);
   const found = reader.textOf(here);
-  if (reader.atSign('=', '<', '>', '<=', '>=') || reader.atWord('within', 'and', 'or'))
-    halt('comparison-misplaced', here, found);
-  if (reader.atWord('uniform', 'normal', 'service')) {
+  if (isComparison(reader.sign) || reader.atOneOf(['within', 'and', 'or'])) halt('comparison-misplaced', here, found);
+  if (reader.atOneOf(['uniform', 'normal', 'service'])) {
     if (spread) halt('spread-order', here, found);
     halt('law-without-spread', here, found);
   }

@@ -1,12 +1,13 @@
 // A line being read: one token of lookahead, and what every construct asks of it.
 
-import { isUnitFault, scanUnit } from '../quantity/index.ts';
-import { canonicalName, trimEnd } from './characters.ts';
+import { isUnitFault } from '../quantity/index.ts';
+import { trimEnd } from './characters.ts';
 import type { Sign, Token } from './lexer.ts';
 import { scanToken } from './lexer.ts';
 import { halt } from './messages.ts';
 import { isJoiningWord } from './reserved.ts';
 import type { NameRef, Span } from './syntax.ts';
+import { scanUnitAt } from './unit-memo.ts';
 
 /** Parentheses, signs, roots and powers inside one another. */
 const DEEPEST = 100;
@@ -64,16 +65,26 @@ export class Reader {
     return this.ahead.type === 'end';
   }
 
-  atSign(...signs: readonly Sign[]): boolean {
+  /** The sign that comes next; null where another token does. */
+  get sign(): Sign | null {
     const { ahead } = this;
-    return ahead.type === 'sign' && signs.includes(ahead.sign);
+    return ahead.type === 'sign' ? ahead.sign : null;
+  }
+
+  atSign(sign: Sign): boolean {
+    return this.sign === sign;
   }
 
   takeSign(sign: Sign): Token | null {
     return this.atSign(sign) ? this.take() : null;
   }
 
-  atWord(...words: readonly string[]): boolean {
+  atWord(word: string): boolean {
+    const { ahead } = this;
+    return ahead.type === 'name' && ahead.name === word;
+  }
+
+  atOneOf(words: readonly string[]): boolean {
     const { ahead } = this;
     return ahead.type === 'name' && words.includes(ahead.name);
   }
@@ -92,11 +103,6 @@ export class Reader {
 
   textOf(span: Span): string {
     return this.text.slice(span.start, span.end);
-  }
-
-  /** The name token that stands at `span`, in its canonical spelling. */
-  nameOf(span: Span): NameRef {
-    return { name: canonicalName(this.textOf(span)), span };
   }
 
   /** From `start` to the end of the token taken last. */
@@ -150,7 +156,7 @@ export class Reader {
     const span = { start: last.start, end: ahead.end };
     if (last.type === 'sign' || ahead.type === 'sign') halt('operator-missing-plain', span);
     if (last.type === 'number' && !last.unit && ahead.type === 'name') {
-      const read = scanUnit(this.text, ahead.start);
+      const read = scanUnitAt(this.text, ahead.start, this.limit);
       if (isUnitFault(read) && read.hint)
         halt('operator-missing-unit', span, this.textOf(last), this.textOf(ahead), read.hint);
     }

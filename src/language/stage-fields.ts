@@ -63,9 +63,9 @@ function readLegs(reader: Reader): FieldBody {
 
 function readLeg(reader: Reader): Leg {
   const { start } = reader.ahead;
-  const element = reader.atWord('to', 'from') ? null : readSum(reader);
+  const element = reader.atOneOf(['to', 'from']) ? null : readSum(reader);
   if (reader.atSign('±') || reader.atWord('in')) halt('spread-in-leg', spanOf(reader.ahead));
-  if (!reader.atWord('to', 'from')) {
+  if (!reader.atOneOf(['to', 'from'])) {
     if (!reader.atEnd() && !reader.atSign(',')) reader.refuse();
     halt('leg-form', { start, end: reader.last.end });
   }

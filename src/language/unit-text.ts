@@ -1,11 +1,12 @@
 // Units that stand alone: behind `as`, and in the brackets of a bench's columns.
 
 import type { Unit } from '../quantity/index.ts';
-import { describeUnitFault, isUnitFault, scanUnit } from '../quantity/index.ts';
+import { describeUnitFault, isUnitFault } from '../quantity/index.ts';
 import { skipBlanks } from './characters.ts';
 import { halt } from './messages.ts';
 import type { Reader } from './reader.ts';
 import type { Span } from './syntax.ts';
+import { scanUnitAt } from './unit-memo.ts';
 
 /** Reads `as kohm` from its first word. */
 export function readAs(reader: Reader): { unit: Unit; span: Span } {
@@ -20,7 +21,7 @@ export function readAs(reader: Reader): { unit: Unit; span: Span } {
 export function unitAt(text: string, at: number, limit: number): { unit: Unit; span: Span } {
   const start = text.startsWith('1/', at) ? at + 1 : at;
   if (start >= limit) halt('unit-missing', { start: at, end: at });
-  const read = scanUnit(text, start);
+  const read = scanUnitAt(text, start, limit);
   const fault = isUnitFault(read) ? read : read.behind;
   if (!fault && !isUnitFault(read)) return { unit: read.unit, span: { start: at, end: read.end } };
   const span = { start: Math.min(fault!.start, limit), end: Math.min(fault!.end, limit) };
