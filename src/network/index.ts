@@ -12,6 +12,8 @@ export { DEVICE_FIELDS } from './device-field.ts';
 export type { DeviceField, DeviceFieldInfo, DeviceHandles, OptionalDeviceField } from './device-field.ts';
 export type { NetElement, NetFet, NetLeg, PlaceRef, StageFault, StageFaultCode, StageNet } from './stage-net.ts';
 export { lowerStage } from './lower-stage.ts';
+export { lowerPoint } from './lower-specimen.ts';
+export type { SpecimenHeld, SpecimenLowering } from './lower-specimen.ts';
 export type { BiasLines, MidbandPorts, StageLowering, StagePath } from './stage-lowering.ts';
 export { OFFERED_VALUES, REGIONS, offeredValue } from './offered-values.ts';
 export type { OfferedUnit, OfferedValue } from './offered-values.ts';

@@ -6,6 +6,7 @@
 // the shape of the stage and from nominal values, never from a number of the running program.
 
 import type { Emitter, Handle } from './emitter.ts';
+import { lowerCapacitances } from './lower-capacitances.ts';
 import { MIDBAND_SHORT, buildGraph, terminalName } from './place-graph.ts';
 import type { PlaceGraph } from './place-graph.ts';
 import { gainOf, inputResistance, midbandNetworks, outputResistance } from './midband.ts';
@@ -34,14 +35,13 @@ export function lowerStage(net: StageNet, emitter: Emitter): StageLowering {
   const [fet] = net.fets;
   const point = solvePoint(e, graph, fet, net.ambient, forcing);
   const values = new Map<string, Handle>(point.values);
-  const absent = new Map<string, string>();
   for (const [name, c] of graph.classOf) values.set(placeValueName(name), emit(e, point.voltages[c]));
   for (const terminal of ['gate', 'drain', 'source', 'bulk']) {
     const c = graph.classOf.get(terminalName(fet, terminal));
     if (c !== undefined) values.set(`V_${terminal}`, emit(e, point.voltages[c]));
   }
   values.set('P_total', emit(e, totalPower(e, graph, point)));
-  lowerCapacitances(e, fet, values, absent);
+  const absent = lowerCapacitances(e, fet, values);
   const small = lowerSmallSignals(e, net, fet, point, values, absent);
   for (const { name, later } of OFFERED_VALUES) if (later) absent.set(name, `${name} is not computed yet.`);
   return {
@@ -112,22 +112,6 @@ function totalPower(e: Emitter, graph: PlaceGraph, point: SolvedPoint): Term {
     if (taken) total = plus(e, total, term(e.max(e.constant(0), emit(e, taken))));
   }
   return plus(e, total, point.leakagePower);
-}
-
-function lowerCapacitances(e: Emitter, fet: NetFet, values: Map<string, Handle>, absent: Map<string, string>): void {
-  const { C_GS, C_GD, PB, M } = fet.device;
-  if (C_GS === null || C_GD === null) {
-    for (const name of ['C_gs', 'C_gd', 'f_T']) {
-      absent.set(name, `${name} needs C_iss and C_rss, or C_GS and C_GD, of the part.`);
-    }
-    return;
-  }
-  const kernel = fet.family === 'JFET' ? 'jfet-capacitances' : 'mosfet-capacitances';
-  const channel = e.constant(fet.channel);
-  const [cgs, cgd] = e.call(kernel, [channel, C_GS, C_GD, PB, M, values.get('V_GS')!, values.get('V_DS')!], 2);
-  values.set('C_gs', cgs);
-  values.set('C_gd', cgd);
-  values.set('f_T', e.div(values.get('g_m')!, e.mul(e.constant(2 * Math.PI), e.add(cgs, cgd))));
 }
 
 function lowerSmallSignals(
