@@ -21,12 +21,13 @@ export const SATURATION = 2;
 
 /** Drain current in A, negative when V_DS is. */
 export function channelCurrent(beta: number, lambda: number, vov: number, vds: number): number {
-  return vds < 0 ? -forwardCurrent(beta, lambda, vov - vds, -vds) : forwardCurrent(beta, lambda, vov, vds);
+  // 0 - x and not -x: a channel that is off carries 0, not -0.
+  return vds < 0 ? 0 - forwardCurrent(beta, lambda, vov - vds, -vds) : forwardCurrent(beta, lambda, vov, vds);
 }
 
 /** g_m = dI_D/dV_GS at constant V_DS, in S; negative when V_DS is. */
 export function transconductance(beta: number, lambda: number, vov: number, vds: number): number {
-  return vds < 0 ? -forwardDriveSlope(beta, lambda, vov - vds, -vds) : forwardDriveSlope(beta, lambda, vov, vds);
+  return vds < 0 ? 0 - forwardDriveSlope(beta, lambda, vov - vds, -vds) : forwardDriveSlope(beta, lambda, vov, vds);
 }
 
 /** g_ds = dI_D/dV_DS at constant V_GS, in S. */

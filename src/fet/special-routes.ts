@@ -16,6 +16,8 @@ import {
 
 const RECORD = new Float64Array(RECORD_LENGTH);
 const FIRST = COMMON_INPUTS.length;
+/** R_0 of lines without any comes out this far below 0 at most, as a part of R. */
+const ROUNDING = 1e-9;
 const orZero = (x: number): number => (x !== x ? 0 : x);
 
 /** |V_TO| = sqrt(I_DSS / beta); where I_DSS stands in the ohmic region, I_DSS = beta V_DS (2 |V_TO| - V_DS). */
@@ -122,10 +124,11 @@ export const THREE_R_DSON: NamedKernel = {
     const vto = z3 + (za * zb * (rb - ra)) / determinant;
     const beta = 1 / (2 * (z3 - vto) * (r3 - series));
     let status = checkLines(s, a, at, 3);
-    if (status === OK && !(series >= 0 && r1 > series && r2 > series && r3 > series)) status = LINES_DISAGREE;
+    if (status === OK && !(series >= -ROUNDING * r3 && r1 > series && r2 > series && r3 > series))
+      status = LINES_DISAGREE;
     if (status === OK) status = lineStatus(s, a, p, at, 3, beta, vto);
     writePair(s, a, at + 9, beta, vto, status);
-    s[a[at + 12]] = status === OK ? series : NaN;
+    s[a[at + 12]] = status === OK ? Math.max(0, series) : NaN;
   },
 };
 
