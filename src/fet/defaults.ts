@@ -3,7 +3,7 @@
 
 import type { Family } from './kinds.ts';
 
-export interface Default {
+interface Default {
   /** SI, n-channel frame. */
   readonly value: number;
   /** SI unit in the sheet's spelling, `1` for a plain number. */

@@ -18,10 +18,10 @@ export {
 } from './channel.ts';
 export { BOLTZMANN, ELEMENTARY_CHARGE, thermalVoltage } from './constants.ts';
 export { DEFAULTS } from './defaults.ts';
-export type { Default, DefaultField } from './defaults.ts';
+export type { DefaultField } from './defaults.ts';
 export { DEVICE_POINT, devicePoint } from './device-point.ts';
 export type { ChannelConstants } from './device-point.ts';
-export type { Kernel, NamedKernel } from './kernel.ts';
+export type { NamedKernel } from './kernel.ts';
 export type { ChannelSign, Family } from './kinds.ts';
 export { FORMS } from './forms.ts';
 export { LAMBDA_ROUTES } from './lambda-routes.ts';
@@ -29,5 +29,4 @@ export { ROUTE_STATUS } from './route-status.ts';
 export { ROUTES } from './routes.ts';
 export type { Route } from './routes.ts';
 export { signReason, wantedSign } from './signs.ts';
-export type { Sign } from './signs.ts';
 export { betaAt, leakageAt, thresholdAt, zeroDriftDrive } from './temperature.ts';

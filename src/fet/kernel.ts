@@ -3,7 +3,7 @@
 // A program is a tape over one array of slots. A kernel reads s[a[p]], s[a[p + 1]], .. in the order of
 // its inputs and writes its outputs to the slots that follow; it allocates nothing and keeps nothing.
 
-export type Kernel = (s: Float64Array, a: Int32Array, p: number) => void;
+type Kernel = (s: Float64Array, a: Int32Array, p: number) => void;
 
 /** A kernel with the names of its slots. A slot of a test condition that the sheet does not state holds NaN. */
 export interface NamedKernel {

@@ -30,7 +30,7 @@ function kernel(current: string, vds: string): NamedKernel {
   };
 }
 
-export interface LambdaRoute extends NamedKernel {
+interface LambdaRoute extends NamedKernel {
   readonly id: string;
   /** Names that must be given. */
   readonly needs: readonly string[];

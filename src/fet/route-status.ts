@@ -15,7 +15,7 @@ export const LINES_DISAGREE = 10;
 export const TOO_STEEP = 11;
 export const OUTPUT_CONDUCTANCE = 12;
 
-export interface RouteStatus {
+interface RouteStatus {
   readonly name: string;
   /** What is wrong, what would be right; empty for `ok`. */
   readonly sentence: string;

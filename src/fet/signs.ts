@@ -5,7 +5,7 @@
 
 import type { ChannelSign, Family } from './kinds.ts';
 
-export type Sign = 'positive' | 'negative' | 'not negative' | 'any';
+type Sign = 'positive' | 'negative' | 'not negative' | 'any';
 
 interface SignRule {
   readonly n: Sign;

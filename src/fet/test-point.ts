@@ -33,13 +33,6 @@ export function testPointDrive(current: number, beta: number, unit: number): num
   return unit * lnExpm1(Math.sqrt(current / beta) / unit);
 }
 
-/** The current at a drive, the inverse of `testPointDrive`. */
-export function testPointCurrent(drive: number, beta: number, unit: number): number {
-  const x = drive / unit;
-  const root = unit * (x > 0 ? x + log1p(exp(-x)) : log1p(exp(x)));
-  return beta * root * root;
-}
-
 /**
  * U = V_ref - V_TO in V where the other line ties beta to U; NaN where there is none. `distance` is V_ref - V_test > 0;
  * sqrt(I_test / beta) is ratio U up to `knee`, sqrt(slope (2 U - knee)) beyond; unit is 2 n V_T.

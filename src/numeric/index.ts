@@ -7,6 +7,5 @@ export { hypot } from './hypotenuse.ts';
 export { ln, log10, log1p } from './logarithm.ts';
 export { pow } from './power.ts';
 export { solveBracketed } from './root.ts';
-export type { Root, RootOptions, RootStatus } from './root.ts';
 export { sha256Hex } from './sha256.ts';
 export { cos, sin, tan } from './trigonometry.ts';

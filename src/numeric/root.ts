@@ -9,9 +9,9 @@
 import { powerOfTwo } from './bits.ts';
 
 /** `left domain`: the function gave NaN; `not bracketed`: the signs at the ends are equal. */
-export type RootStatus = 'solved' | 'not bracketed' | 'left domain' | 'cap reached';
+type RootStatus = 'solved' | 'not bracketed' | 'left domain' | 'cap reached';
 
-export interface Root {
+interface Root {
   /** The best point found, NaN unless there was a bracket. */
   readonly value: number;
   readonly status: RootStatus;
@@ -20,7 +20,7 @@ export interface Root {
   readonly residual: number;
 }
 
-export interface RootOptions {
+interface RootOptions {
   /** Half width of the final bracket, in the unit of x, beside two ulp of x. */
   readonly tolerance: number;
   readonly cap: number;

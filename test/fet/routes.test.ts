@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { DEFAULTS, FORMS, LAMBDA_ROUTES, ROUTES, ROUTE_STATUS, wantedSign } from '../../src/fet/index.ts';
+import { DEFAULTS, FORMS, LAMBDA_ROUTES, ROUTES, ROUTE_STATUS, signReason, wantedSign } from '../../src/fet/index.ts';
 import type { ChannelSign, Family, NamedKernel, Route } from '../../src/fet/index.ts';
 import { call } from './call.ts';
 import { between, decade, generator } from './seeded.ts';
@@ -331,6 +331,7 @@ describe('the sign of a field', () => {
     ];
     for (const [field, family, n, p] of rows) {
       expect([field, wantedSign(field, family, 1), wantedSign(field, family, -1)]).toEqual([field, n, p]);
+      expect(signReason(field, family)).toMatch(n === 'any' ? /^$/ : /^[A-Za-z].*\.$/);
     }
   });
 });

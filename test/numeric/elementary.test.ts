@@ -113,7 +113,7 @@ const ROWS: readonly Row[] = [
     worst: 0.55,
   },
 ];
-const POINTS_PER_SAMPLER = 4000;
+const POINTS_PER_SAMPLER = 2500;
 
 describe('elementary functions', () => {
   for (const row of ROWS) {
