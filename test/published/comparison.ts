@@ -1,6 +1,6 @@
 // The published cases as data, and how a quantity of a case is compared with the sheet that computes it.
 
-import { readFileSync } from 'node:fs';
+import { readFileSync, readdirSync } from 'node:fs';
 
 /** One expected quantity of a case. */
 export interface PublishedQuantity {
@@ -89,6 +89,14 @@ export function publishedParts(): {
 /** The text of sheets/<name>.txt. */
 export function sheetText(name: string): string {
   return text(`sheets/${name}.txt`);
+}
+
+/** The names of the sheets in a folder of sheets/, sorted; '' for the cases, 'parts' for the parts. */
+export function sheetNames(folder: '' | 'parts'): string[] {
+  return readdirSync(new URL(`sheets/${folder}`, HERE))
+    .filter((name) => name.endsWith('.txt'))
+    .map((name) => name.slice(0, -'.txt'.length))
+    .toSorted();
 }
 
 function text(path: string): string {

@@ -253,7 +253,7 @@ export const JFET_COMPARISONS: Readonly<Record<string, Comparison>> = {
         path: 'steady',
         value: true,
         unit: '',
-        because: 'at that V_ov the current does not move with T_A, 1.4 V above it it does',
+        because: 'at that V_ov the current does not move with temperature, 1.4 V above it it does',
       },
     ],
   },

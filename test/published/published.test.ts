@@ -5,7 +5,7 @@
 import { describe, expect, test } from 'vitest';
 import { TOLERANCE, compareCase, comparedNumbers } from './compare-case.ts';
 import type { CaseResult } from './compare-case.ts';
-import { publishedCases, sheetText } from './comparison.ts';
+import { publishedCases, sheetNames, sheetText } from './comparison.ts';
 import { JFET_COMPARISONS } from './jfet-comparisons.ts';
 import { MOSFET_COMPARISONS } from './mosfet-comparisons.ts';
 import { JFET_IDS, MOSFET_IDS } from './published-ids.ts';
@@ -15,6 +15,10 @@ const COLLECTIONS = [
   { name: 'jfet', ids: JFET_IDS, cases: publishedCases('jfet'), comparisons: JFET_COMPARISONS },
   { name: 'mosfet', ids: MOSFET_IDS, cases: publishedCases('mosfet'), comparisons: MOSFET_COMPARISONS },
 ] as const;
+
+test('every sheet belongs to a published case', () => {
+  expect(sheetNames('')).toEqual([...JFET_IDS, ...MOSFET_IDS].toSorted());
+});
 
 for (const { name, ids, cases, comparisons } of COLLECTIONS) {
   describe(`the published ${name} cases`, () => {

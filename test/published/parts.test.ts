@@ -3,7 +3,7 @@
 
 import { describe, expect, test } from 'vitest';
 import { comparePart } from './compare-part.ts';
-import { publishedParts, sheetText } from './comparison.ts';
+import { publishedParts, sheetNames, sheetText } from './comparison.ts';
 import { PART_SHEETS } from './part-sheets.ts';
 import { PART_NAMES } from './published-ids.ts';
 import { readSheet } from './read-sheet.ts';
@@ -14,6 +14,7 @@ describe('the published parts', () => {
   test('stand in the data and in the table, each once and none besides', () => {
     expect(parts.map((one) => one.part)).toEqual(PART_NAMES);
     expect(PART_SHEETS.map((one) => one.part)).toEqual(PART_NAMES);
+    expect(PART_SHEETS.map((one) => one.sheet).toSorted()).toEqual(sheetNames('parts'));
   });
 
   test.each(PART_SHEETS.map((one, k) => [one.part, k] as const))('%s', (_, k) => {
