@@ -26,7 +26,7 @@ export interface SolvedPoint {
   /** beta and V_TO at the junction temperature. */
   readonly beta: Handle;
   readonly vto: Handle;
-  /** The threshold moves with the current, by body effect. */
+  /** The part has a body effect. */
   readonly bodyMoves: boolean;
   /** Heat of the gate leakage on its way from drain to gate, W. */
   readonly leakagePower: Term;
@@ -38,7 +38,7 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
   const at = terminalsOf(graph, fet);
   const datum = forcing ? at[forcing] : -1;
   const leaks = device.I_GSS !== null;
-  const bodyMoves = device.gamma !== null && at.bulk !== at.source;
+  const bodyMoves = device.gamma !== null;
   const heats = device.R_thJA !== null;
   const path: StagePath = forcing ? 'forced' : bodyMoves || heats ? 'general' : 'line';
   const rest = restVoltages(e, graph, at, datum, leaks);
@@ -114,11 +114,6 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
       const vsb = plus(e, idle(at.source, at.bulk), times(e, R_b, trueSense(term(out.get('I_D')!))));
       out.set('V_SB', emit(e, vsb));
       out.set('g_mb', zero);
-      if (device.gamma !== null) {
-        // The bulk lies on the source: V_SB = 0, dV_T/dV_SB = gamma / (2 sqrt(phi)).
-        const slope = e.div(device.gamma, e.mul(e.constant(2), e.sqrt(device.phi)));
-        out.set('g_mb', e.mul(out.get('g_m')!, slope));
-      }
     } else {
       const results = e.call(
         'general-point',

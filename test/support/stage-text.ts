@@ -25,6 +25,7 @@ export interface StageSetup {
 }
 
 export interface LoweredStage {
+  readonly net: StageNet;
   readonly lowering: StageLowering;
   readonly emitter: DirectEmitter;
   /** Status of the solve; -1 where there are faults. */
@@ -36,8 +37,10 @@ export interface LoweredStage {
 /** Lowers and computes one stage. */
 export function lowerText(setup: StageSetup): LoweredStage {
   const emitter = createDirectEmitter();
-  const lowering = lowerStage(netOf(setup, emitter), emitter);
+  const net = netOf(setup, emitter);
+  const lowering = lowerStage(net, emitter);
   return {
+    net,
     lowering,
     emitter,
     status: lowering.status === null ? -1 : emitter.value(lowering.status),
