@@ -17,7 +17,7 @@ const FURTHER_UNITS: Readonly<Record<string, string>> = {
 /** What does not agree, in sentences: a fault, an end that was not kept, a nominal that is not the geometric mean. */
 export function comparePart(
   { data }: PublishedPart,
-  { rows, incomplete }: PartSheet,
+  { rows, law, incomplete }: PartSheet,
   units: Readonly<Record<string, string>>,
   sheet: ComputedSheet,
 ): string[] {
@@ -41,6 +41,12 @@ export function comparePart(
     if (!same(low, wanted.low)) findings.push(`${row}: low end ${low} ${unit}, not ${wanted.low}`);
     if (!same(high, wanted.high)) findings.push(`${row}: high end ${high} ${unit}, not ${wanted.high}`);
     if (spread.nominalChosen !== (data[row]!.typ === null)) findings.push(`${row}: who chose the nominal`);
+  }
+  for (const [k, name] of ['beta', 'V_TO', 'lambda'].entries()) {
+    const found = sheet.value(`Q1.${name}`);
+    if (law && !(typeof found === 'number' && Math.abs(found - law[k]!) <= 1e-9 * Math.abs(law[k]!))) {
+      findings.push(`${name}: ${found}, not ${law[k]}`);
+    }
   }
   return findings;
 }

@@ -7,6 +7,11 @@ export interface PartSheet {
   readonly sheet: string;
   /** Row of the data to path in the sheet. */
   readonly rows: Readonly<Record<string, string>>;
+  /**
+   * Square-law constant (A/V²), threshold (V, n-channel frame) and lambda (1/V) of the nominal rows, worked out apart:
+   * V_TO by bisection of V_TO = V_GS - 2 n V_T ln(exp(sqrt(I / (4 n² beta V_T²))) - 1), n = 1.1, 25 °C.
+   */
+  readonly law?: readonly [beta: number, threshold: number, lambda: number];
   /** The rows do not determine a device: the message of the part says what is missing. */
   readonly incomplete?: string;
 }
@@ -28,6 +33,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00116168788645, -1.56630992413, 0.00350877192982],
   },
   {
     part: '2N5458',
@@ -42,6 +48,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000946605014908, -2.48595654358, 0.0017094017094],
   },
   {
     part: '2N5459',
@@ -55,6 +62,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000606173136699, -3.85321206656, 0],
   },
   {
     part: '2N3819',
@@ -70,6 +78,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00128930713857, -2.78497824093, 0],
   },
   {
     part: '2N5484 (as PMBF5484)',
@@ -86,6 +95,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00257293664124, -0.759984600054, 0.0336458363662],
   },
   {
     part: '2N5485 (as PMBF5485)',
@@ -102,6 +112,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00367283214662, -1.2152944954, 0.0110608144736],
   },
   {
     part: '2N5486 (as PMBF5486; 2N5486 sheet agrees)',
@@ -118,6 +129,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00105753209289, -3.3010867068, 0.00650809440646],
   },
   {
     part: 'J111',
@@ -132,6 +144,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000666889569289, -5.47631013865, 0],
   },
   {
     part: 'J112',
@@ -146,6 +159,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00101523277622, -2.2192293479, 0],
   },
   {
     part: 'J113',
@@ -160,6 +174,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00139734495088, -1.19636357772, 0],
   },
   {
     part: '2N4391',
@@ -175,6 +190,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [0.0023483721729, -6.07270036612, 0],
   },
   {
     part: '2N4392',
@@ -190,6 +206,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00519204637207, -2.88789259198, 0],
   },
   {
     part: '2N4393',
@@ -205,21 +222,25 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [0.0144264155167, -0.921390216177, 0],
   },
   {
     part: 'J201',
     sheet: 'J201',
     rows: { IDSS: 'Q1.I_DSS', VGSoff: 'Q1.V_GSoff', gfs: 'Q1.g_fs', V: 'Q1.V_DGmax' },
+    law: [0.00185038858746, -0.491616022009, 0],
   },
   {
     part: 'J202',
     sheet: 'J202',
     rows: { IDSS: 'Q1.I_DSS', VGSoff: 'Q1.V_GSoff', gfs: 'Q1.g_fs', V: 'Q1.V_DGmax' },
+    law: [0.000752122641205, -1.63575939957, 0],
   },
   {
     part: 'J204',
     sheet: 'J204',
     rows: { IDSS: 'Q1.I_DSS', VGSoff: 'Q1.V_GSoff', gfs: 'Q1.g_fs', V: 'Q1.V_DGmax' },
+    law: [0.00222457687192, -0.590084359708, 0],
   },
   {
     part: '2N4338',
@@ -238,6 +259,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00136891131858, -0.445272008468, 0.0184223021427],
   },
   {
     part: '2N4339',
@@ -256,6 +278,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000699154748959, -0.957526858031, 0.0234000086603],
   },
   {
     part: '2N4340',
@@ -274,6 +297,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000594203405099, -1.65546921415, 0.0184223021427],
   },
   {
     part: '2N4341',
@@ -292,6 +316,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000371066710267, -3.40262308109, 0.0139659849317],
   },
   {
     part: '2N4117',
@@ -308,6 +333,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [2.60976692103e-5, -0.917340099894, 0.136602540378],
   },
   {
     part: '2N4118',
@@ -324,6 +350,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [3.45155259239e-5, -1.60184880805, 0.0564563067681],
   },
   {
     part: '2N4119',
@@ -340,6 +367,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [2.19918289541e-5, -3.34733078875, 0.0405827419558],
   },
   {
     part: 'J309',
@@ -355,6 +383,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00542383301269, -1.72437585428, 0.0176470588235],
   },
   {
     part: 'J310',
@@ -370,6 +399,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00287773044866, -3.34791967693, 0.0176470588235],
   },
   {
     part: '2N4859',
@@ -384,6 +414,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00255507751578, -6.0506213171, 0],
   },
   {
     part: '2N4860',
@@ -398,6 +429,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00443773195526, -3.17451194482, 0],
   },
   {
     part: '2N4861',
@@ -412,6 +444,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       IGSS: 'Q1.I_GSS',
       V: 'Q1.V_DGmax',
     },
+    law: [0.0116777583759, -1.47185575729, 0],
   },
   {
     part: 'BF245A',
@@ -428,6 +461,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00188130636626, -1.26395702552, 0.0133087065679],
   },
   {
     part: 'BF245B',
@@ -444,6 +478,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00105602107628, -2.9009297777, 0.0045010410444],
   },
   {
     part: 'BF245C',
@@ -460,6 +495,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000552630766172, -5.50056378649, 0.00239227180292],
   },
   {
     part: '2N5460',
@@ -477,6 +513,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       derate: 'derate',
       V: 'Q1.V_DGmax',
     },
+    law: [0.000237104100495, -2.16471528164, 0.0675026204686],
   },
   {
     part: '2N5461',
@@ -495,6 +532,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       V: 'Q1.V_DGmax',
       rDSon: 'Q1.R_DSon',
     },
+    law: [0.000410022243479, -2.75746063672, 0.0240566529395],
   },
   {
     part: '2N5462',
@@ -513,6 +551,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       V: 'Q1.V_DGmax',
       rDSon: 'Q1.R_DSon',
     },
+    law: [0.000420661191966, -4.04268708636, 0.0109090909091],
   },
   {
     part: 'J174',
@@ -527,6 +566,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00108912577322, -6.90719828303, 0],
   },
   {
     part: 'J175',
@@ -541,6 +581,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00133442506651, -4.07288290481, 0],
   },
   {
     part: 'J176',
@@ -555,6 +596,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00254941765747, -1.81156539166, 0],
   },
   {
     part: 'J177',
@@ -569,6 +611,7 @@ export const PART_SHEETS: readonly PartSheet[] = [
       TJ: 'Q1.T_Jmax',
       V: 'Q1.V_DGmax',
     },
+    law: [0.00422407424165, -1.13871369111, 0],
   },
   {
     part: 'LSK389 (each half)',
@@ -580,15 +623,18 @@ export const PART_SHEETS: readonly PartSheet[] = [
     part: '2N4416/A',
     sheet: '2N4416',
     rows: { IDSS: 'Q1.I_DSS', VGSoff: 'Q1.V_GSoff', gfs: 'Q1.g_fs', Ciss: 'Q1.C_iss', Crss: 'Q1.C_rss' },
+    law: [0.000647261452501, -3.65784622685, 0],
   },
   {
     part: 'VCR2N',
     sheet: 'VCR2N',
     rows: { VGSoff: 'Q1.V_GSoff', rDSon: 'Q1.R_DSon' },
+    law: [0.00294817865358, -4.89582159895, 0],
   },
   {
     part: 'VCR4N',
     sheet: 'VCR4N',
     rows: { VGSoff: 'Q1.V_GSoff', rDSon: 'Q1.R_DSon' },
+    law: [0.000289610831545, -4.98384561542, 0],
   },
 ];
