@@ -4,7 +4,17 @@
 import type { CellTree, SheetTree, Span, Splice } from '../language/index.ts';
 import type { Unit, ValueKind } from '../quantity/index.ts';
 
-export type CellKind = 'quantity' | 'part' | 'another' | 'point' | 'stage' | 'bench' | 'check' | 'plot' | 'inverse' | 'broken';
+export type CellKind =
+  | 'quantity'
+  | 'part'
+  | 'another'
+  | 'point'
+  | 'stage'
+  | 'bench'
+  | 'check'
+  | 'plot'
+  | 'inverse'
+  | 'broken';
 
 /** What an expression yields: a quantity of some kind, a condition (holds or not), or a region. */
 export type ValueType = ValueKind | 'condition' | 'region';
@@ -74,7 +84,12 @@ export interface WorkingStep {
   readonly name: string | null;
   /** In the sheet's own expression language. */
   readonly formula: string;
-  readonly operands: readonly { readonly name: string; readonly value: number | string; readonly type: ValueType; readonly as: Unit | null }[];
+  readonly operands: readonly {
+    readonly name: string;
+    readonly value: number | string;
+    readonly type: ValueType;
+    readonly as: Unit | null;
+  }[];
   readonly value: number | string | boolean | null;
   readonly type: ValueType;
   readonly as: Unit | null;

@@ -1,0 +1,10 @@
+// The compiled form of a sheet: plain data that one evaluation, an incremental one, a sweep and many samples share.
+
+export { createBuilder } from './builder.ts';
+export type { Builder } from './builder.ts';
+export { runOperations } from './evaluate.ts';
+export { PROGRAM_KERNELS } from './kernels.ts';
+export type { OperationName } from './operations.ts';
+export { assemble, createPropagation, createSlots, markDependents, propagate, runAll } from './program.ts';
+export type { Program, Propagation } from './program.ts';
+export type { Kernel, KernelTable, Segment } from './segment.ts';

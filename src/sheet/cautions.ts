@@ -1,0 +1,129 @@
+// Cautions of a stage: what its numbers do not say. Each is looked at after every run.
+// Thresholds without a source are common practice and named as such beside them.
+
+import type { CellTree } from '../language/index.ts';
+import { pathsOf } from '../language/index.ts';
+import { VOLTAGE, formatValue } from '../quantity/index.ts';
+import type { PartInterface } from './interface.ts';
+import type { StageInHand } from './stage-in-hand.ts';
+
+/** Extra-low voltage that may be touched in dry conditions, d.c. Source: IEC 62368-1, ES1 (60 V d.c.). */
+const TOUCH_LIMIT = 60;
+/** Forward gate voltage of a JFET from which its gate conducts (common practice, no source). */
+const GATE_FORWARD = 0.5;
+/** Reverse V_DS from which a MOSFET's body diode conducts (common practice, no source). */
+const BODY_DIODE = 0.5;
+/** Below this V_ov the channel leaves the square law for weak inversion (common practice, no source). */
+const WEAK = 0.15;
+/** V_DG of a JFET from which its gate current grows beyond the stated leakage (common practice, no source). */
+const GATE_CURRENT_GROWTH = 10;
+
+type Found = { readonly text: string; readonly line: CellTree['line'] };
+
+/** Every caution that is due as the stage stands. */
+export function stageCautions(stage: StageInHand): Found[] {
+  const { tree } = stage;
+  const name = tree.name.name;
+  const own = (text: string): Found => ({ text: `${name}: ${text}`, line: tree.line });
+  return [...deviceCautions(stage).map(own), ...voltageCautions(stage).map(own), ...legCautions(stage)];
+}
+
+function deviceCautions({ fets, lowering, read }: StageInHand): string[] {
+  const found: string[] = [];
+  const { part, partName } = fets[0]!;
+  const value = (offered: string): number => (lowering.values.has(offered) ? read(lowering.values.get(offered)!) : NaN);
+  const vgs = part.channel * value('V_GS');
+  const vds = part.channel * value('V_DS');
+  const vdg = vds - vgs;
+  const vov = value('V_ov');
+  const volts = (x: number): string => formatValue(x, VOLTAGE).text;
+  if (part.family === 'JFET' && Math.max(vgs, -vdg) > GATE_FORWARD) {
+    found.push(
+      `the gate of ${partName} is forward by ${volts(Math.max(vgs, -vdg))}: it conducts, and the sheet does not count that current.`,
+    );
+  }
+  if (part.family === 'MOSFET' && vds < -BODY_DIODE) {
+    found.push(
+      `the body diode of ${partName} conducts at V_DS = ${volts(part.channel * vds)}; the sheet does not count that current.`,
+    );
+  }
+  if (vov > 0 && vov < WEAK) {
+    found.push(`V_ov is ${volts(vov)}; below 0.15 V the square law promises more g_m than there is.`);
+  }
+  if (part.family === 'JFET' && part.device.I_GSS !== null && vdg > GATE_CURRENT_GROWTH) {
+    found.push(`V_DG is ${volts(vdg)}: the gate current of a JFET grows with V_DG, which is not modelled here.`);
+  }
+  const limit = (field: keyof PartInterface['limits']): number => {
+    const handle = part.limits[field];
+    return handle === undefined ? Infinity : Math.abs(read(handle));
+  };
+  const over = (what: string, x: number, field: keyof PartInterface['limits']): void => {
+    if (Math.abs(x) > limit(field)) found.push(`${what} of ${partName} lies beyond its limit ${field}.`);
+  };
+  over('V_DS', vds, 'V_DSmax');
+  over('V_GS', vgs, 'V_GSmax');
+  over('V_DG', vdg, 'V_DGmax');
+  over('I_D', value('I_D'), 'I_Dmax');
+  if (value('T_J') > limit('T_Jmax')) found.push(`the junction of ${partName} is hotter than its limit T_Jmax.`);
+  if (lowering.lines && Math.abs(read(lowering.lines.V_L)) > limit('V_DSmax')) {
+    found.push(`with ${partName} off, V_DS is ${volts(read(lowering.lines.V_L))}, beyond its limit V_DSmax.`);
+  }
+  return found;
+}
+
+function voltageCautions({ lowering, legs, read }: StageInHand): string[] {
+  let low = 0;
+  let high = 0;
+  const see = (volts: number): void => {
+    low = Math.min(low, volts);
+    high = Math.max(high, volts);
+  };
+  for (const [name, handle] of lowering.values) {
+    if (name.startsWith('V_') && !['V_GS', 'V_DS', 'V_SB', 'V_ov', 'V_DSsat'].includes(name)) see(read(handle));
+  }
+  for (const { net } of legs) if (net.to.type === 'rail' && net.to.volts !== null) see(read(net.to.volts));
+  if (high - low <= TOUCH_LIMIT) return [];
+  const between = formatValue(high - low, VOLTAGE).text;
+  const found = [
+    `up to ${between} d.c. between its places, above 60 V d.c.: dangerous to touch. Local codes and licensed practice decide, not the sheet.`,
+  ];
+  if (legs.some(({ net }) => net.element?.kind === 'capacitor')) {
+    found.push('its capacitors hold that charge after switching off: discharge them and measure before touching.');
+  }
+  return found;
+}
+
+function legCautions({ legs, context, tree }: StageInHand): Found[] {
+  const found: Found[] = [];
+  const hangs = new Map<string, number>();
+  for (const { net, leg, field } of legs) {
+    if (net.element?.kind === 'source') {
+      found.push({
+        line: field.line,
+        text: `${tree.name.name}: the current source ${net.element.label} is ideal; its compliance is not checked.`,
+      });
+    }
+    if (leg.place.type === 'expr' && net.to.type === 'rail') {
+      for (const path of pathsOf(leg.place.expr)) {
+        if (context.look(path.names[0]!.name)?.kind === 'stage') {
+          found.push({
+            line: field.line,
+            text: `${tree.name.name}: the rail ${net.to.label} is taken from a stage and loads it with nothing.`,
+          });
+        }
+      }
+    }
+    if (leg.element?.type === 'path' && leg.element.names.length === 1) {
+      const { name } = leg.element.names[0]!;
+      const count = (hangs.get(name) ?? 0) + 1;
+      hangs.set(name, count);
+      if (count === 2 && context.look(name)?.toleranced) {
+        found.push({
+          line: field.line,
+          text: `${tree.name.name}: ${name} has a tolerance and hangs in two legs, as one component in two places. For two pieces write ${name}b = another ${name}.`,
+        });
+      }
+    }
+  }
+  return found;
+}

@@ -1,0 +1,178 @@
+// A part: its data-sheet rows checked, turned into the constants of the square law by the first complete
+// route, and shown in every convention of the trade.
+
+import { sameKind } from '../../quantity/index.ts';
+import { nearestNames } from '../../language/index.ts';
+import type { FieldTree, Line, PartEntry } from '../../language/index.ts';
+import type { Handle } from '../../network/index.ts';
+import { EMPTY_DRAFT } from '../draft.ts';
+import type { CellContext, Draft, FieldDraft, OfferDraft, Placed, Read } from '../draft.ts';
+import type { LimitName } from '../interface.ts';
+import { CONDITION_KINDS, PART_FIELDS } from '../part-fields.ts';
+import type { GivenField, GivenFields } from '../part-given.ts';
+import { partDevice } from '../part-device.ts';
+import { partLaw } from '../part-law.ts';
+import { partWorkings } from '../part-workings.ts';
+import { stop } from '../stop.ts';
+import { typeName } from '../value-type.ts';
+import { compileQuantityEntry } from './quantity.ts';
+import { labelOf } from './stage-places.ts';
+import { signFault } from '../part-signs.ts';
+
+const LIMITS: readonly LimitName[] = ['V_DSmax', 'V_DGmax', 'V_GSmax', 'I_Dmax', 'T_Jmax'];
+
+/** Compiles a part cell. */
+export function compilePartCell(context: CellContext): Draft {
+  const { tree, builder } = context;
+  const entry = tree.entry as PartEntry;
+  const channel = entry.channel === 'n' ? 1 : -1;
+  const given = readFields(entry, context);
+  if (entry.fittedTo) {
+    context.look(entry.fittedTo.name);
+    context.later('A part that takes its numbers from a bench', entry.span, tree.line);
+  }
+  const law = partLaw(entry, channel, given, context);
+  const { device, statedTemperatureLaws, assumptions } = partDevice(entry.family, law, given, builder);
+  const limits: Partial<Record<LimitName, Handle>> = {};
+  for (const name of LIMITS) {
+    const field = given.get(name)?.[0];
+    if (field) limits[name] = field.handle;
+  }
+  const fields = [...given.values()].flat();
+  return {
+    ...EMPTY_DRAFT,
+    offers: [
+      ...fields.map((field, i): OfferDraft => offerOf(field, fields, i)),
+      ...law.forms.filter((form) => !given.has(form.name)),
+    ],
+    verify: (read) => verifyPart(entry, channel, fields, law.verify, read),
+    cautions: (read) => law.cautions(read),
+    assumptions: [
+      ...fields.filter((field) => field.quantity.chosen).map((field) => chosenText(tree.name.name, field)),
+      ...law.assumptions,
+      ...assumptions,
+    ].map((text) => text),
+    workings: (read) => partWorkings(tree.name.name, entry, given, law, read),
+    fields: (read) => fields.map((field) => fieldReading(field, read)),
+    extra: { type: 'part', channel, family: entry.family, device, limits, statedTemperatureLaws },
+  };
+}
+
+function readFields(entry: PartEntry, context: CellContext): GivenFields {
+  const given = new Map<string, GivenField[]>();
+  for (const field of context.tree.fields) {
+    const { body, line } = field;
+    const name = labelOf(field);
+    if (body.type !== 'quantity') throw new Error('A field of a part is a quantity.');
+    const known = PART_FIELDS[name];
+    if (!known) {
+      const near = nearestNames(name, Object.keys(PART_FIELDS));
+      stop(
+        'unknown-field',
+        `A part has no field ${name}.${near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ''}`,
+        field.labelSpan,
+        line,
+      );
+    }
+    if (!known.families.includes(entry.family)) stop('field-family', familyText(name, entry), field.labelSpan, line);
+    const present = given.get(name) ?? [];
+    if (present.length > 0 && !known.repeats) {
+      stop('field-twice', `${name} stands twice in this part. Keep one of the two lines.`, field.labelSpan, line);
+    }
+    const quantity = compileQuantityEntry(body, line, context);
+    if (typeof quantity.type === 'string' || !sameKind(quantity.type, known.kind)) {
+      stop(
+        'field-dimension',
+        `${name} is ${typeName(known.kind)}; this is ${typeName(quantity.type)}.`,
+        body.span,
+        line,
+      );
+    }
+    given.set(name, [
+      ...present,
+      { name, handle: quantity.handle, kind: known.kind, quantity, conditions: conditionsOf(field, line), tree: field },
+    ]);
+  }
+  return given;
+}
+
+function familyText(name: string, entry: PartEntry): string {
+  if (name === 'beta')
+    return 'beta is not used for MOSFETs, because half of the books mean twice the other half by it. Write K, with I_D = K (V_GS - V_TO)².';
+  return `${name} is no field of a ${entry.family}.`;
+}
+
+function conditionsOf(field: FieldTree, line: Line): Map<string, number> {
+  const { body } = field;
+  const found = new Map<string, number>();
+  if (body.type !== 'quantity') return found;
+  for (const { name, literal } of body.conditions) {
+    const kind = CONDITION_KINDS[name.name];
+    if (!kind) {
+      const near = nearestNames(name.name, Object.keys(CONDITION_KINDS));
+      stop(
+        'unknown-condition',
+        `${name.name} is no test condition.${near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ` Conditions are ${Object.keys(CONDITION_KINDS).join(', ')}.`}`,
+        name.span,
+        line,
+      );
+    }
+    if (!sameKind(kind, literal.kind)) {
+      stop(
+        'condition-dimension',
+        `${name.name} is ${typeName(kind)}; ${line.text.slice(literal.span.start, literal.span.end)} is ${typeName(literal.kind)}.`,
+        literal.span,
+        line,
+      );
+    }
+    if (found.has(name.name))
+      stop('condition-twice', `${name.name} stands twice behind at. Keep one.`, name.span, line);
+    found.set(name.name, literal.value);
+  }
+  return found;
+}
+
+function verifyPart(
+  entry: PartEntry,
+  channel: 1 | -1,
+  fields: readonly GivenField[],
+  law: (read: Read) => Placed | null,
+  read: Read,
+): Placed | null {
+  for (const field of fields) {
+    const fault = signFault(entry, channel, field, read);
+    if (fault) return fault;
+  }
+  return law(read);
+}
+
+function offerOf(field: GivenField, all: readonly GivenField[], index: number): OfferDraft {
+  const nth = all.slice(0, index).filter((earlier) => earlier.name === field.name).length;
+  const { body } = field.tree;
+  return {
+    name: nth === 0 ? field.name : `${field.name}_${nth + 1}`,
+    type: field.kind,
+    handle: field.handle,
+    sentence: PART_FIELDS[field.name]!.sentence,
+    missing: null,
+    as: body.type === 'quantity' ? (body.as?.unit ?? null) : null,
+  };
+}
+
+function fieldReading(field: GivenField, read: Read): FieldDraft {
+  return {
+    name: field.name,
+    type: field.kind,
+    value: read(field.handle),
+    as: null,
+    line: field.tree.line,
+    spread: field.quantity.spread?.(read) ?? null,
+    isInput: field.quantity.isInput,
+  };
+}
+
+function chosenText(part: string, field: GivenField): string {
+  const { spread } = field.tree.body as { spread: { bounds: { first: unknown; last: unknown } } };
+  const middle = spread.bounds.first && spread.bounds.last ? 'the geometric mean of its limits' : 'its one limit';
+  return `${part}.${field.name}: no nominal is given; ${middle} stands in.`;
+}

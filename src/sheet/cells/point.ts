@@ -1,0 +1,105 @@
+// A point: one specimen of a part held at given terminal voltages, or at a drain current.
+
+import { CURRENT, VOLTAGE, sameKind } from '../../quantity/index.ts';
+import type { ValueKind } from '../../quantity/index.ts';
+import { nearestNames } from '../../language/index.ts';
+import type { FieldTree, PointEntry } from '../../language/index.ts';
+import { OFFERED_VALUES, POINT_STATUS_SENTENCES, lowerPoint } from '../../network/index.ts';
+import { EMPTY_DRAFT } from '../draft.ts';
+import type { CellContext, Draft, OfferDraft } from '../draft.ts';
+import { OFFERED_KIND } from '../offered-kind.ts';
+import { pointWorkings } from '../stage-workings.ts';
+import { stop } from '../stop.ts';
+import { typeName } from '../value-type.ts';
+import { partOf } from './part-of.ts';
+import { compileQuantityEntry } from './quantity.ts';
+import type { CompiledQuantity } from './quantity.ts';
+import { labelOf } from './stage-places.ts';
+
+const FIELDS: Readonly<Record<string, ValueKind>> = { V_GS: VOLTAGE, I_D: CURRENT, V_DS: VOLTAGE, V_SB: VOLTAGE };
+
+/** Compiles a point cell. */
+export function compilePointCell(context: CellContext): Draft {
+  const { tree, builder } = context;
+  const entry = tree.entry as PointEntry;
+  const part = partOf(entry.of, context);
+  const given = readFields(tree.fields, context);
+  const [vgs, id, vds] = [given.get('V_GS'), given.get('I_D'), given.get('V_DS')];
+  if (!vgs && !id) stop('point-incomplete', `A point wants V_GS or I_D. Write a line V_GS: -1 V below it.`, entry.span);
+  if (vgs && id)
+    stop('point-overdone', `V_GS and I_D both stand here; one follows from the other. Keep one of them.`, entry.span);
+  if (!vds) stop('point-incomplete', `A point wants V_DS. Write a line V_DS: 10 V below it.`, entry.span);
+  const lowering = lowerPoint(
+    {
+      channel: part.channel,
+      family: part.family,
+      device: part.device,
+      held: vgs ? { type: 'V_GS', value: vgs.handle } : { type: 'I_D', value: id!.handle },
+      V_DS: vds.handle,
+      V_SB: given.get('V_SB')?.handle ?? null,
+      ambient: context.ambient(),
+    },
+    builder,
+  );
+  return {
+    ...EMPTY_DRAFT,
+    offers: OFFERED_VALUES.filter((row) => row.point).map((row): OfferDraft => {
+      const handle = lowering.values.get(row.name) ?? null;
+      const text = lowering.absent.get(row.name) ?? `${row.name} is not computed yet.`;
+      return {
+        name: row.name,
+        type: OFFERED_KIND[row.unit],
+        handle,
+        sentence: row.sentence,
+        missing: handle === null ? { code: 'not-computed-yet', text, span: entry.span } : null,
+      };
+    }),
+    verify: (read) => {
+      const status = read(lowering.status);
+      if (status === 0) return null;
+      const text = `${tree.name.name} was not solved. ${POINT_STATUS_SENTENCES[status] ?? ''} No value is shown that rests on it.`;
+      return { line: tree.line, message: { code: 'not-solved', text, span: entry.span } };
+    },
+    workings: (read) => pointWorkings({ tree, part, partName: entry.of.name, lowering, read, context }),
+    fields: (read) =>
+      [...given].map(([name, field]) => ({
+        name,
+        type: field.type,
+        value: read(field.handle),
+        as: null,
+        line: field.tree.line,
+        spread: field.spread?.(read) ?? null,
+        isInput: field.isInput,
+      })),
+  };
+}
+
+function readFields(
+  fields: readonly FieldTree[],
+  context: CellContext,
+): Map<string, CompiledQuantity & { tree: FieldTree }> {
+  const given = new Map<string, CompiledQuantity & { tree: FieldTree }>();
+  for (const field of fields) {
+    const { body, line } = field;
+    const name = labelOf(field);
+    if (body.type !== 'quantity') throw new Error('A field of a point is a quantity.');
+    const kind = FIELDS[name];
+    if (!kind) {
+      const near = nearestNames(name, Object.keys(FIELDS));
+      stop(
+        'unknown-field',
+        `A point has no field ${name}. Its fields are V_GS or I_D, V_DS and V_SB.${near.length > 0 ? ` Did you mean ${near[0]}?` : ''}`,
+        field.labelSpan,
+        line,
+      );
+    }
+    if (given.has(name))
+      stop('field-twice', `${name} stands twice in this point. Keep one of the two lines.`, field.labelSpan, line);
+    const quantity = compileQuantityEntry(body, line, context);
+    if (typeof quantity.type === 'string' || !sameKind(quantity.type, kind)) {
+      stop('field-dimension', `${name} is ${typeName(kind)}; this is ${typeName(quantity.type)}.`, body.span, line);
+    }
+    given.set(name, { ...quantity, tree: field });
+  }
+  return given;
+}

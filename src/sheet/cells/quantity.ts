@@ -1,0 +1,204 @@
+// A quantity cell, and the fields of parts and points, which are written alike: one value with or
+// without spread.
+
+import { PLAIN, TEMPERATURE_DIFFERENCE, TEMPERATURE_POINT, sameDimension, sameKind } from '../../quantity/index.ts';
+import type { ValueKind } from '../../quantity/index.ts';
+import type { Expr, Line, Literal, QuantityEntry } from '../../language/index.ts';
+import type { Handle } from '../../network/index.ts';
+import { diagnose } from '../diagnose.ts';
+import { EMPTY_DRAFT } from '../draft.ts';
+import type { CellContext, Draft, Read } from '../draft.ts';
+import type { DeclaredSpread, ValueType } from '../model.ts';
+import { operandText } from '../scope.ts';
+import { stop } from '../stop.ts';
+import { isQuantity, typeName } from '../value-type.ts';
+import { expressionStep } from '../workings.ts';
+
+export interface CompiledQuantity {
+  readonly type: ValueType;
+  readonly handle: Handle;
+  /** null where no spread is declared. */
+  readonly spread: ((read: Read) => DeclaredSpread) | null;
+  /** The entry is one number. */
+  readonly isInput: boolean;
+  /** The sheet chose the nominal between the limits: a sentence for the list of assumptions. */
+  readonly chosen: boolean;
+}
+
+/** Compiles value and spread of an entry; stops where limits do not fit the value. */
+export function compileQuantityEntry(entry: QuantityEntry, line: Line, context: CellContext): CompiledQuantity {
+  const scope = context.scope(line);
+  if (entry.value === null) {
+    const { kind, value } = standIn(entry, line);
+    checkUnit(entry, kind, line);
+    const handle = context.builder.constant(value);
+    return { type: kind, handle, spread: declared(entry, handle, kind, line), isInput: true, chosen: true };
+  }
+  const value = scope.compile(entry.value);
+  if (isQuantity(value.type)) checkUnit(entry, value.type, line);
+  else if (entry.spread)
+    stop('spread-of-word', `A spread belongs to a number; this is ${typeName(value.type)}.`, entry.spread.span);
+  const spread = entry.spread && isQuantity(value.type) ? declared(entry, value.handle, value.type, line) : null;
+  return { type: value.type, handle: value.handle, spread, isInput: isNumber(entry.value), chosen: false };
+}
+
+/** Compiles a quantity cell. */
+export function compileQuantityCell(context: CellContext): Draft {
+  const { tree } = context;
+  const entry = tree.entry as QuantityEntry;
+  const compiled = compileQuantityEntry(entry, tree.line, context);
+  const as = entry.as?.unit ?? null;
+  if (tree.name.name === 'T_A') checkAmbient(compiled.type, entry, tree.line);
+  return {
+    ...EMPTY_DRAFT,
+    type: compiled.type,
+    value: compiled.handle,
+    isInput: compiled.isInput,
+    spread: compiled.spread,
+    assumptions: compiled.chosen
+      ? [`${tree.name.name}: no nominal is given; the sheet takes the middle of the limits.`]
+      : [],
+    verify: (read) => {
+      const value = read(compiled.handle);
+      if (tree.name.name === 'T_A' && !(value > 0)) {
+        return {
+          line: tree.line,
+          message: { code: 'ambient-range', text: 'T_A lies at or below absolute zero.', span: entry.span },
+        };
+      }
+      if (!Number.isNaN(value)) return null;
+      return { line: tree.line, message: diagnose(entry.value!, context, tree.line) };
+    },
+    workings: (read) =>
+      entry.value === null || isNumber(entry.value)
+        ? []
+        : [expressionStep(tree.name.name, entry.value, tree.line, compiled.type, read(compiled.handle), as, context)],
+  };
+}
+
+/** Whether an expression is one number, with or without a sign. */
+function isNumber(expr: Expr): boolean {
+  return (
+    expr.type === 'number' ||
+    (expr.type === 'unary' && expr.operator !== 'not' && expr.operator !== '√' && isNumber(expr.operand))
+  );
+}
+
+/** The nominal that stands in where limits alone are given: their geometric mean in magnitude, their middle where signs differ, the one where there is one. */
+function standIn(entry: QuantityEntry, line: Line): { kind: ValueKind; value: number } {
+  const { first, last } = entry.spread!.bounds!;
+  if (first && last) {
+    if (!sameKind(first.kind, last.kind)) {
+      stop(
+        'limits-differ',
+        `${text(line, first)} is ${typeName(first.kind)} and ${text(line, last)} is ${typeName(last.kind)}: both limits are of one kind.`,
+        last.span,
+      );
+    }
+    const product = first.value * last.value;
+    const middle = (first.value + last.value) / 2;
+    const useMiddle = product <= 0 || first.kind.scale !== 'linear';
+    return { kind: first.kind, value: useMiddle ? middle : Math.sign(first.value) * Math.sqrt(product) };
+  }
+  const only = (first ?? last)!;
+  return { kind: only.kind, value: only.value };
+}
+
+function declared(entry: QuantityEntry, nominal: Handle, kind: ValueKind, line: Line): (read: Read) => DeclaredSpread {
+  const spread = entry.spread!;
+  const common = {
+    law: spread.law ?? 'uniform',
+    service: spread.service,
+    nominalChosen: entry.value === null,
+  } as const;
+  if (spread.tolerance) {
+    const { tolerance } = spread;
+    const relative = tolerance.unit?.symbol === '%' || tolerance.unit?.symbol === 'ppm';
+    const wanted = kind.scale === 'celsius' ? TEMPERATURE_DIFFERENCE : kind;
+    if (relative ? kind.scale !== 'linear' : !sameKind(tolerance.kind, wanted)) {
+      stop(
+        'tolerance-dimension',
+        `The value is ${typeName(kind)} and its tolerance ${text(line, tolerance)} is ${typeName(tolerance.kind)}. Write it in the unit of the value${kind.scale === 'linear' ? ' or in %' : ''}.`,
+        tolerance.span,
+      );
+    }
+    if (tolerance.value < 0)
+      stop('tolerance-sign', `A tolerance is not negative: it reaches to both sides.`, tolerance.span);
+    return (read) => {
+      const middle = read(nominal);
+      const half = relative ? Math.abs(middle) * tolerance.value : tolerance.value;
+      return { ...common, form: 'tolerance', low: middle - half, nominal: middle, high: middle + half };
+    };
+  }
+  const { first, last } = spread.bounds!;
+  for (const limit of [first, last]) {
+    if (limit && !sameKind(limit.kind, kind)) {
+      stop(
+        'limit-dimension',
+        `The value is ${typeName(kind)} and its limit ${text(line, limit)} is ${typeName(limit.kind)}. Both are of one kind.`,
+        limit.span,
+      );
+    }
+  }
+  if (entry.value !== null && isNumber(entry.value) && first && last) {
+    const x = numberOf(entry.value);
+    const [low, high] = [Math.min(first.value, last.value), Math.max(first.value, last.value)];
+    if (x < low || x > high) {
+      stop(
+        'nominal-outside',
+        `The nominal value lies outside its own limits ${line.text.slice(first.span.start, last.span.end)}.`,
+        entry.value.span,
+      );
+    }
+  }
+  return (read) => {
+    const middle = read(nominal);
+    const ends = openEnds(first, last, middle);
+    return { ...common, form: 'limits', ...ends, nominal: middle };
+  };
+}
+
+/** Limits in order of value. With one end open, `5 mA ..` leaves the high end open and `.. 1 nA` the low one; for negative values magnitude counts, as data sheets print them. */
+function openEnds(
+  first: Literal | null,
+  last: Literal | null,
+  nominal: number,
+): { low: number | null; high: number | null } {
+  if (first && last) return { low: Math.min(first.value, last.value), high: Math.max(first.value, last.value) };
+  const only = (first ?? last)!.value;
+  const isLeast = first !== null; // least by magnitude where negative
+  if (nominal < 0) return isLeast ? { low: null, high: only } : { low: only, high: null };
+  return isLeast ? { low: only, high: null } : { low: null, high: only };
+}
+
+function numberOf(expr: Expr): number {
+  if (expr.type === 'number') return expr.value;
+  if (expr.type !== 'unary') throw new Error('Not a number.');
+  return expr.operator === '-' ? -numberOf(expr.operand) : numberOf(expr.operand);
+}
+
+function checkUnit(entry: QuantityEntry, kind: ValueKind, line: Line): void {
+  if (!entry.as) return;
+  const { unit, span } = entry.as;
+  const pointInKelvin = kind.scale === 'celsius' && sameKind(unit.kind, TEMPERATURE_DIFFERENCE);
+  const percent = sameKind(kind, PLAIN) && sameKind(unit.kind, PLAIN);
+  if (sameKind(unit.kind, kind) || pointInKelvin || percent) return;
+  stop(
+    'unit-dimension',
+    `The value is ${typeName(kind)}, and ${line.text.slice(span.start, span.end)} is a unit of ${typeName(unit.kind)}. Choose a unit of its own kind.`,
+    span,
+  );
+}
+
+function checkAmbient(type: ValueType, entry: QuantityEntry, line: Line): void {
+  if (isQuantity(type) && sameDimension(type.dimension, TEMPERATURE_POINT.dimension)) return;
+  stop(
+    'ambient-kind',
+    `T_A is the ambient temperature at which every stage stands; ${operandText({ text: line.text }, entry.span, 'this')} is ${typeName(type)}. Write it as 25 degC, or give the cell another name.`,
+    entry.span,
+  );
+}
+
+function text(line: Line, literal: Literal): string {
+  return line.text.slice(literal.span.start, literal.span.end);
+}

@@ -1,0 +1,140 @@
+// Compiles one cell: from its tree to a segment of the program, an interface for its users, and what
+// the readings need. What the user wrote wrongly comes back as a fault, never as an exception.
+
+import type { CellTree, Expr, Line, Message } from '../language/index.ts';
+import { createBuilder } from '../program/index.ts';
+import type { Segment } from '../program/index.ts';
+import type { Handle } from '../network/index.ts';
+import { CELL_KINDS } from './cell-kinds.ts';
+import type { CellContext, Draft, Placed } from './draft.ts';
+import { EMPTY_DRAFT } from './draft.ts';
+import type { Interface, Offer } from './interface.ts';
+import { KERNELS } from './kernels.ts';
+import type { ValueType } from './model.ts';
+import { Waiting, createScope } from './resolve.ts';
+import { Stop } from './stop.ts';
+
+/** 25 degC, where the sheet has no cell T_A. */
+const DEFAULT_AMBIENT = 298.15;
+
+interface Surroundings {
+  look(name: string): Interface | null;
+  names(): readonly string[];
+  /** The present value of an expression, computed on the side. */
+  now(expr: Expr, line: Line): { type: ValueType; value: number };
+  /** A block of slots for the cell: its present one where that is wide enough. */
+  allocate(size: number): number;
+}
+
+export interface CompiledCell {
+  readonly draft: Draft;
+  readonly segment: Segment;
+  readonly slot: (handle: Handle) => number;
+  readonly interface: Interface;
+  /** What the user wrote wrongly; the cell has no value then. */
+  readonly fault: Placed | null;
+  /** Understood, but not computed by now. */
+  readonly later: Placed | null;
+  /** A cell whose type is not settled and is needed here. */
+  readonly waitsFor: string | null;
+  /** Every cell that was looked up and the interface it had. */
+  readonly seen: Map<string, Interface | null>;
+  readonly shape: string | null;
+}
+
+/** Compiles the cell that `tree` describes. */
+export function compileCell(tree: CellTree, surroundings: Surroundings): CompiledCell {
+  const builder = createBuilder(KERNELS);
+  const seen = new Map<string, Interface | null>();
+  let later: Placed | null = null;
+  const look = (name: string): Interface | null => {
+    const found = surroundings.look(name);
+    seen.set(name, found);
+    return found;
+  };
+  const note = (message: Message, line: Line): void => {
+    later ??= { message, line };
+  };
+  const context: CellContext = {
+    tree,
+    builder,
+    look,
+    names: surroundings.names,
+    now: surroundings.now,
+    scope: (line) =>
+      createScope(builder, line, { look, names: surroundings.names, later: (message) => note(message, line) }),
+    later: (what, span, line) => note({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span }, line),
+    ambient() {
+      const cell = look('T_A');
+      if (cell && !cell.settled) throw new Waiting('T_A');
+      return cell && cell.type !== null ? cell.slot : builder.constant(DEFAULT_AMBIENT);
+    },
+  };
+
+  let draft = EMPTY_DRAFT;
+  let fault: Placed | null = brokenPart(tree);
+  let waitsFor: string | null = null;
+  if (!fault) {
+    try {
+      draft = CELL_KINDS[tree.entry.type as keyof typeof CELL_KINDS](context);
+    } catch (thrown) {
+      if (thrown instanceof Stop) fault = { message: thrown.fault, line: thrown.line ?? tree.line };
+      else if (thrown instanceof Waiting) waitsFor = thrown.cell;
+      else throw thrown;
+    }
+  }
+  const failed = fault !== null || waitsFor !== null;
+  const value = failed || draft.value === null ? null : builder.own(draft.value);
+  const offers = draft.offers.map((offer) => ({
+    ...offer,
+    handle: failed || offer.handle === null ? null : builder.own(offer.handle),
+  }));
+  const { segment, slot } = failed ? emptySegment() : builder.finish(surroundings.allocate(builder.size()), value);
+  const cellInterface: Interface = {
+    kind: tree.entry.type,
+    type: draft.type,
+    slot: value === null ? -1 : slot(value),
+    offers: new Map(
+      offers.map((offer): [string, Offer] => [
+        offer.name,
+        { type: offer.type, slot: offer.handle === null ? -1 : slot(offer.handle), missing: offer.missing },
+      ]),
+    ),
+    extra: draft.extra && relocate(draft.extra, slot),
+    toleranced: draft.spread !== null,
+    settled: !failed,
+  };
+  return {
+    draft,
+    segment,
+    slot,
+    interface: cellInterface,
+    fault,
+    later,
+    waitsFor,
+    seen,
+    shape: draft.shape?.() ?? null,
+  };
+}
+
+/** A broken entry, or the first broken field, breaks the whole cell. */
+function brokenPart(tree: CellTree): Placed | null {
+  if (tree.entry.type === 'broken') return { message: tree.entry.message, line: tree.line };
+  for (const field of tree.fields)
+    if (field.body.type === 'broken') return { message: field.body.message, line: field.line };
+  return null;
+}
+
+function emptySegment(): { segment: Segment; slot: (handle: Handle) => number } {
+  const none = new Int32Array(0);
+  const segment = { base: 0, size: 0, ops: none, args: none, constantSlots: none, constantValues: new Float64Array(0) };
+  return { segment, slot: (handle) => handle };
+}
+
+function relocate(extra: NonNullable<Interface['extra']>, slot: (handle: Handle) => number): Interface['extra'] {
+  const at = <T extends object>(handles: T): T =>
+    Object.fromEntries(
+      Object.entries(handles).map(([name, handle]) => [name, handle === null ? null : slot(handle as Handle)]),
+    ) as T;
+  return { ...extra, device: at(extra.device), limits: at(extra.limits) };
+}

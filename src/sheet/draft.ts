@@ -1,0 +1,87 @@
+// What compiling a cell of any kind answers with, before its slots have addresses.
+
+import type { CellTree, Line, Message, Span } from '../language/index.ts';
+import type { Builder } from '../program/index.ts';
+import type { Handle } from '../network/index.ts';
+import type { Unit } from '../quantity/index.ts';
+import type { CheckReading, DeclaredSpread, FieldReading, ValueType, WorkingStep } from './model.ts';
+import type { Scope } from './scope.ts';
+import type { Expr } from '../language/index.ts';
+import type { Interface } from './interface.ts';
+
+/** Reads a handle after the cell has run. */
+export type Read = (handle: Handle) => number;
+
+/** A message and the line of the cell it belongs to. */
+export interface Placed {
+  readonly message: Message;
+  readonly line: Line;
+}
+
+/** A value that the cell offers to others under a name. */
+export interface OfferDraft {
+  readonly name: string;
+  readonly type: ValueType;
+  /** null where it is not computed; `missing` then says why. */
+  readonly handle: Handle | null;
+  readonly sentence: string;
+  readonly missing: Message | null;
+  /** Unit in which the author asked for it. */
+  readonly as?: Unit | null;
+}
+
+/** A field with the line it stands in. */
+export type FieldDraft = Omit<FieldReading, 'line'> & { readonly line: Line };
+
+export interface Draft {
+  readonly type: ValueType | null;
+  readonly value: Handle | null;
+  readonly offers: readonly OfferDraft[];
+  /** Looked at after each run: a message means that the cell has no values. */
+  readonly verify: ((read: Read) => Placed | null) | null;
+  readonly cautions: (read: Read) => readonly { readonly text: string; readonly line: Line }[];
+  readonly assumptions: readonly string[];
+  readonly workings: (read: Read) => readonly WorkingStep[];
+  readonly check: ((read: Read) => CheckReading) | null;
+  readonly fields: (read: Read) => readonly FieldDraft[];
+  readonly spread: ((read: Read) => DeclaredSpread | null) | null;
+  readonly isInput: boolean;
+  /** Something that decides the shape of the code, worked out again before each run; where it has changed, the cell is compiled anew. */
+  readonly shape: (() => string) | null;
+  /** What a kind of cell tells those that are built on it (a part its device). */
+  readonly extra: Interface['extra'];
+}
+
+export interface CellContext {
+  readonly tree: CellTree;
+  readonly builder: Builder;
+  /** The scope for an expression that stands in `line`. */
+  scope(line: Line): Scope;
+  /** The cell of this name as others see it; null where there is none. Notes the dependence. */
+  look(name: string): Interface | null;
+  /** The value of an expression as the sheet stands now (its cells are evaluated already). */
+  now(expr: Expr, line: Line): { type: ValueType; value: number };
+  /** Ambient temperature in kelvin: the cell T_A, else 25 degC. */
+  ambient(): Handle;
+  /** Names of all cells, for proposals. */
+  names(): readonly string[];
+  /** Something is understood but not computed by now: the cell gets no value. */
+  later(what: string, span: Span, line: Line): void;
+}
+
+/** A draft of a cell that has no code of its own; kinds override what they have. */
+export const EMPTY_DRAFT: Draft = {
+  type: null,
+  value: null,
+  offers: [],
+  verify: null,
+  cautions: () => [],
+  assumptions: [],
+  workings: () => [],
+  check: null,
+  fields: () => [],
+  spread: null,
+  isInput: false,
+  shape: null,
+  extra: null,
+};

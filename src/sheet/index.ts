@@ -1,0 +1,24 @@
+// A sheet that computes. Conventions: values are SI numbers (kelvin for a point of the temperature
+// scale, dB for levels), voltages true node differences, I_D and margin in the device's own sense.
+
+export { evaluateExpression } from './evaluate-expression.ts';
+export { FUNCTIONS } from './functions.ts';
+export type { SheetFunction } from './functions.ts';
+export { KERNELS } from './kernels.ts';
+export type {
+  Assumption,
+  Caution,
+  CellKind,
+  CellReading,
+  CheckReading,
+  DeclaredSpread,
+  Fault,
+  FieldReading,
+  OfferedReading,
+  Reading,
+  Sheet,
+  ValueType,
+  WorkingStep,
+} from './model.ts';
+export { createSheet } from './sheet.ts';
+export type { CompiledSheet } from './sheet.ts';

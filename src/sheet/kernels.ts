@@ -1,0 +1,48 @@
+// The kernels a sheet may call: those of the FETs and stages, and the few of the language itself.
+
+import { junctionRatio } from '../fet/index.ts';
+import { SERIES, preferredValue } from '../quantity/index.ts';
+import type { PreferredDirection, SeriesName } from '../quantity/index.ts';
+import { PROGRAM_KERNELS } from '../program/index.ts';
+import type { Kernel, KernelTable } from '../program/index.ts';
+
+const DIRECTIONS: readonly PreferredDirection[] = ['nearest', 'up', 'down'];
+
+/** The kernel that answers with a preferred value. */
+export function preferredKernel(series: SeriesName, direction: PreferredDirection): string {
+  return `${series} ${direction}`;
+}
+
+/** Inputs: condition (1 or 0), a, b. Output: a or b. */
+const select: Kernel = (s, a, p) => {
+  s[a[p + 3]!] = s[a[p]!] === 1 ? s[a[p + 1]!]! : s[a[p + 2]!]!;
+};
+
+/** Inputs: x, digits. Output: x rounded to so many significant digits, as the shortest decimal reads. */
+const round: Kernel = (s, a, p) => {
+  const x = s[a[p]!]!;
+  s[a[p + 2]!] = Number.isFinite(x) ? Number(x.toPrecision(s[a[p + 1]!]!)) : x;
+};
+
+/** Inputs: capacitance at a forward voltage, that voltage, PB, M. Output: the capacitance at 0 V. */
+const zeroBias: Kernel = (s, a, p) => {
+  s[a[p + 4]!] = s[a[p]!]! / junctionRatio(s[a[p + 1]!]!, s[a[p + 2]!]!, s[a[p + 3]!]!);
+};
+
+function preferred(series: SeriesName, direction: PreferredDirection): Kernel {
+  return (s, a, p) => {
+    const x = s[a[p]!]!;
+    s[a[p + 1]!] = x > 0 && x < Infinity ? preferredValue(series, x, direction) : NaN;
+  };
+}
+
+/** Every kernel of a sheet's program; a program refers to them by position. */
+export const KERNELS: KernelTable = [
+  ...PROGRAM_KERNELS,
+  { name: 'select', run: select },
+  { name: 'round', run: round },
+  { name: 'zero-bias capacitance', run: zeroBias },
+  ...(Object.keys(SERIES) as SeriesName[]).flatMap((series) =>
+    DIRECTIONS.map((direction) => ({ name: preferredKernel(series, direction), run: preferred(series, direction) })),
+  ),
+];

@@ -1,0 +1,27 @@
+// A cell as the engine keeps it between edits.
+
+import type { CellTree } from '../language/index.ts';
+import type { CompiledCell } from './compile-cell.ts';
+import type { Placed } from './draft.ts';
+import type { CellReading } from './model.ts';
+
+/** A cell of the sheet as the engine keeps it. */
+export interface Node {
+  readonly key: string;
+  tree: CellTree;
+  /** The tree its code was compiled from: the same text, perhaps on other lines. */
+  compiledTree: CellTree;
+  compiled: CompiledCell;
+  /** Its block of slots. */
+  base: number;
+  capacity: number;
+  /** Why it has no values just now; own faults before waiting. */
+  fault: Placed | null;
+  waitsFor: string | null;
+  uses: readonly number[];
+  usedBy: number[];
+  /** The pass in which its values last changed. */
+  changedAt: number;
+  /** Reading of the pass it was made in. */
+  reading: CellReading | null;
+}

@@ -1,0 +1,232 @@
+// The constants of a part's square law: which of its rows settle them, what the other rows would say,
+// and the same law in every convention of the trade.
+
+import { DEFAULTS, LAMBDA_ROUTES, ROUTES, ROUTE_STATUS } from '../fet/index.ts';
+import type { Route } from '../fet/index.ts';
+import type { PartEntry } from '../language/index.ts';
+import type { Handle } from '../network/index.ts';
+import { PLAIN, formatValue } from '../quantity/index.ts';
+import type { GivenField, GivenFields, RouteResult } from './part-given.ts';
+import type { CellContext, OfferDraft, Placed, Read } from './draft.ts';
+import { lawForms } from './part-forms.ts';
+import { stop } from './stop.ts';
+
+/** Beyond this the routes of a part do not speak of one square law (design: 25 %). */
+const DISAGREEMENT = 0.25;
+
+export interface PartLaw {
+  /** The first complete route: it computes. */
+  readonly used: RouteResult;
+  /** The other complete routes, for comparison. */
+  readonly others: readonly RouteResult[];
+  readonly lambda: Handle;
+  readonly forms: readonly OfferDraft[];
+  readonly assumptions: readonly string[];
+  readonly verify: (read: Read) => Placed | null;
+  readonly cautions: (read: Read) => { text: string; line: Placed['line'] }[];
+}
+
+/** Settles the law of a part from what it was given; stops when no route is complete. */
+export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, context: CellContext): PartLaw {
+  const { builder, tree } = context;
+  const assumptions: string[] = [];
+  const defaults = DEFAULTS[entry.family];
+  const slope = lambdaOf({ channel, given, lambda: NO_HANDLE, defaults, context });
+  if (!slope)
+    assumptions.push(`${tree.name.name}: lambda is 0 /V, since neither lambda nor g_os is given; r_o is infinite.`);
+  const lambda = slope?.handle ?? builder.constant(0);
+
+  const complete = ROUTES.filter((route) => route.families.includes(entry.family) && isComplete(route, given));
+  if (complete.length === 0 && !entry.fittedTo) incomplete(entry, given, context);
+  const results = complete.map((route): RouteResult => {
+    const inputs = route.inputs.map((input) => inputHandle(input, { channel, given, lambda, defaults, context }));
+    const [beta, vto, status] = builder.call(route.id, inputs, route.outputs.length);
+    return { route, inputs, beta: beta!, V_TO: vto!, status: status! };
+  });
+  const used = results[0] ?? unknownLaw(context);
+  const thresholds = ['V_GSoff', 'V_GSth']
+    .flatMap((name) => given.get(name) ?? [])
+    .filter((field) => field.conditions.has('I_D'));
+  if (thresholds.length > 0 && used.route.inputs.includes('n')) {
+    assumptions.push(
+      `${tree.name.name}: n = ${defaults.n.value} in the law near the threshold, which turns ${thresholds[0]!.name} at its test current into V_TO.`,
+    );
+  }
+  for (const field of fieldsOf(used.route, given)) {
+    if (['I_DSS', 'I_on', 'g_fs'].includes(field.name) && slope && !field.conditions.has('V_DS')) {
+      assumptions.push(
+        `${tree.name.name}.${field.name}: no V_DS is stated; it is taken at the edge of saturation, without lambda.`,
+      );
+    }
+  }
+  return {
+    used,
+    others: results.slice(1),
+    lambda,
+    forms: lawForms(entry.family, channel, used, lambda, given, builder),
+    assumptions,
+    verify(read) {
+      const bad = [
+        { status: slope?.status ? read(slope.status) : 0, field: given.get('g_os')?.[0] },
+        { status: read(used.status), field: fieldsOf(used.route, given)[0] },
+      ].find(({ status }) => status !== 0);
+      if (!bad) return null;
+      const line = bad.field?.tree.line ?? tree.line;
+      const span = bad.field?.tree.body.span ?? tree.entry.span;
+      const text = `${tree.name.name} does not settle its square law. ${ROUTE_STATUS[bad.status]!.sentence}`;
+      return { line, message: { code: 'no-law', text, span } };
+    },
+    cautions: (read) =>
+      results
+        .slice(1)
+        .flatMap((other) =>
+          disagreement(used, other, read).map((text) => ({
+            text: `${tree.name.name}: ${text}`,
+            line: lineOf(other.route, given, context),
+          })),
+        ),
+  };
+}
+
+/** The fields a route takes, in its order. */
+export function fieldsOf(route: Route, given: GivenFields): GivenField[] {
+  return fieldNames(route).flatMap((name) => given.get(name) ?? []);
+}
+
+/** The names of the fields a route takes, each once. */
+function fieldNames(route: Route): string[] {
+  return [...new Set(route.needs.map((need) => parseInput(need).field))];
+}
+
+/** beta of one route against the used one: 0.12 is 12 % more; null where the other has no solution. */
+export function routeDifference(used: RouteResult, other: RouteResult, read: Read): number | null {
+  return read(other.status) === 0 ? read(other.beta) / read(used.beta) - 1 : null;
+}
+
+/** How a route is called: `I_DSS with V_GSoff`. */
+export function routeName(route: Route): string {
+  return fieldNames(route).join(' with ');
+}
+
+function disagreement(used: RouteResult, other: RouteResult, read: Read): string[] {
+  const difference = routeDifference(used, other, read);
+  if (difference === null) return [`${routeName(other.route)} gives no square law beside ${routeName(used.route)}.`];
+  if (Math.abs(difference) <= DISAGREEMENT) return [];
+  const percent = formatValue(Math.abs(difference) * 100, PLAIN, { digits: 2 }).text;
+  return [
+    `${routeName(other.route)} puts the square-law constant ${percent} % ${difference > 0 ? 'above' : 'below'} ${routeName(used.route)}: the square law is not supported over that range.`,
+  ];
+}
+
+function lineOf(route: Route, given: GivenFields, context: CellContext): Placed['line'] {
+  const fields = fieldsOf(route, given);
+  return fields[fields.length - 1]?.tree.line ?? context.tree.line;
+}
+
+function isComplete(route: Route, given: GivenFields): boolean {
+  return isGiven(route.needs, given);
+}
+
+function isGiven(needs: readonly string[], given: GivenFields): boolean {
+  return needs.every((input) => {
+    const { field, nth, condition } = parseInput(input);
+    const found = given.get(field)?.[nth];
+    return found !== undefined && (condition === null || found.conditions.has(condition));
+  });
+}
+
+/** Stands where lambda itself is being worked out. */
+const NO_HANDLE: Handle = -1;
+
+interface Inputs {
+  readonly channel: 1 | -1;
+  readonly given: GivenFields;
+  readonly lambda: Handle;
+  readonly defaults: (typeof DEFAULTS)['JFET'];
+  readonly context: CellContext;
+}
+
+/** The slot of a route's input: a field, a field's test condition (NaN where none is stated), or a constant of the family. */
+function inputHandle(input: string, { channel, given, lambda, defaults, context }: Inputs): Handle {
+  const { builder } = context;
+  switch (input) {
+    case 'channel':
+      return builder.constant(channel);
+    case 'lambda':
+      return lambda;
+    case 'n':
+      return builder.constant(defaults.n.value);
+    case 'T_nom':
+      return given.get('T_nom')?.[0]?.handle ?? builder.constant(defaults.T_nom.value);
+    case 'r_s':
+    case 'r_d':
+      return given.get(input)?.[0]?.handle ?? builder.constant(0);
+  }
+  const { field, nth, condition } = parseInput(input);
+  const found = given.get(field)?.[nth];
+  if (condition !== null) return builder.constant(found?.conditions.get(condition) ?? NaN);
+  if (found) return found.handle;
+  return builder.constant(field === 'W' || field === 'L' ? 1 : NaN);
+}
+
+/** `R_DSon2@V_GS` is the condition V_GS of the second R_DSon. */
+function parseInput(input: string): { field: string; nth: number; condition: string | null } {
+  const [name, condition = null] = input.split('@') as [string, string?];
+  const numbered = /^(R_DSon)([23])$/.exec(name);
+  return { field: numbered ? numbered[1]! : name, nth: numbered ? Number(numbered[2]) - 1 : 0, condition };
+}
+
+/** lambda as given, or from g_os with its status; null where neither is given. */
+function lambdaOf(inputs: Inputs): { handle: Handle; status: Handle | null } | null {
+  const { given, context } = inputs;
+  const lambda = given.get('lambda')?.[0];
+  if (lambda) return { handle: lambda.handle, status: null };
+  const slope = given.get('g_os')?.[0];
+  if (!slope) return null;
+  const route = LAMBDA_ROUTES.find((candidate) => isGiven(candidate.needs, given));
+  if (!route) {
+    stop(
+      'g_os-current',
+      `g_os belongs to a drain current: write g_os: 20 uS at I_D = 1 mA, V_DS = 10 V.`,
+      slope.tree.body.span,
+      slope.tree.line,
+    );
+  }
+  const [handle, status] = context.builder.call(
+    route.id,
+    route.inputs.map((input) => inputHandle(input, inputs)),
+    route.outputs.length,
+  );
+  return { handle: handle!, status: status! };
+}
+
+function incomplete(entry: PartEntry, given: GivenFields, context: CellContext): never {
+  const wanted =
+    entry.family === 'JFET'
+      ? 'I_DSS with V_P or V_GSoff, or beta with V_TO, or I_DSS with beta, or g_fs0 with I_DSS, or V_P with g_fs at a drain current'
+      : 'V_TO or V_GSth with one of K, K_P, I_on at a V_GS, g_fs at an I_D, R_DSon at a V_GS; or I_DSS with V_P or V_GSoff; or two R_DSon at different V_GS';
+  const missing = ['I_on', 'R_DSon'].find((name) => given.has(name) && !given.get(name)![0]!.conditions.has('V_GS'));
+  const noCurrent = given.has('g_fs') && !given.get('g_fs')![0]!.conditions.has('I_D');
+  const hint =
+    missing && entry.family === 'MOSFET'
+      ? ` ${missing} counts only with its V_GS: write at V_GS = 10 V behind it.`
+      : noCurrent
+        ? ' g_fs counts only with its current: write at I_D = 10 mA behind it.'
+        : '';
+  stop(
+    'part-incomplete',
+    `${context.tree.name.name} does not settle its square law. It wants ${wanted}.${hint}`,
+    entry.span,
+  );
+}
+
+function unknownLaw({ builder }: CellContext): RouteResult {
+  const none = builder.constant(NaN);
+  return {
+    route: { ...ROUTES[0]!, inputs: [], needs: [] },
+    inputs: [],
+    beta: none,
+    V_TO: none,
+    status: builder.constant(0),
+  };
+}

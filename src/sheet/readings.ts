@@ -1,0 +1,73 @@
+// What others read of a cell, made from its compiled form and the slots as they stand.
+
+import type { CellTree, Line, Message } from '../language/index.ts';
+import type { Placed, Read } from './draft.ts';
+import type { CellReading, Fault, OfferedReading, Reading } from './model.ts';
+import type { Node } from './node.ts';
+import { readable } from './workings.ts';
+
+/** A message as a fault of the line it stands in. */
+export function faultAt(message: Message, line: Line): Fault {
+  return { code: message.code, text: message.text, span: message.span, line: line.index };
+}
+
+/** The reading of a node; `slot` reads a slot. */
+export function readCell(node: Node, nodes: readonly Node[], slot: (index: number) => number): CellReading {
+  const { tree, compiled } = node;
+  const { draft } = compiled;
+  const read: Read = (handle) => slot(compiled.slot(handle));
+  const present = (line: Line): Line => lineNow(node, line);
+  const place = (placed: Placed): Fault => faultAt(placed.message, present(placed.line));
+  const alive = !node.fault && !node.waitsFor;
+  const fault = node.fault ? place(node.fault) : node.waitsFor ? waitsFor(node.waitsFor, tree) : null;
+  const as = tree.entry.type === 'quantity' ? (tree.entry.as?.unit ?? null) : null;
+  const own: Reading | null =
+    draft.type === null || compiled.fault || compiled.waitsFor
+      ? null
+      : { type: draft.type, value: alive ? readable(draft.type, slot(compiled.interface.slot)) : null, as };
+  const values: OfferedReading[] = draft.offers.map((offer) => ({
+    name: offer.name,
+    type: offer.type,
+    as: offer.as ?? null,
+    sentence: offer.sentence,
+    value:
+      alive && offer.handle !== null
+        ? readable(offer.type, slot(compiled.interface.offers.get(offer.name)!.slot))
+        : null,
+    missing: offer.missing ? faultAt(offer.missing, tree.line) : null,
+  }));
+  const names = (indices: readonly number[]): string[] => indices.map((i) => nodes[i]!.tree.name.name);
+  return {
+    name: tree.name.name,
+    kind: tree.entry.type,
+    tree,
+    fault,
+    waitsFor: node.waitsFor,
+    reading: own,
+    values,
+    fields: alive ? draft.fields(read).map((field) => ({ ...field, line: present(field.line).index })) : [],
+    check: alive && draft.check ? draft.check(read) : null,
+    isInput: draft.isInput,
+    spread: alive && draft.spread ? draft.spread(read) : null,
+    uses: names(node.uses),
+    usedBy: names(node.usedBy),
+    cautions: alive
+      ? draft
+          .cautions(read)
+          .map((caution) => ({ cell: tree.name.name, line: present(caution.line).index, text: caution.text }))
+      : [],
+    assumptions: alive ? draft.assumptions.map((text) => ({ cell: tree.name.name, text })) : [],
+  };
+}
+
+function waitsFor(name: string, tree: CellTree): Fault {
+  return { code: 'waits-for', text: `waits for ${name}`, line: tree.line.index, span: tree.name.span };
+}
+
+/** Where a line of the compiled tree stands now. */
+function lineNow(node: Node, line: Line): Line {
+  const { compiledTree, tree } = node;
+  if (line === compiledTree.line) return tree.line;
+  const field = compiledTree.fields.findIndex((candidate) => candidate.line === line);
+  return field >= 0 ? tree.fields[field]!.line : tree.line;
+}

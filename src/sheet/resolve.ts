@@ -1,0 +1,121 @@
+// Finding what a path names: a constant, a region, a cell's value, a value that a cell offers.
+
+import { nearestNames } from '../language/index.ts';
+import type { Line, Message, PathExpr, Span } from '../language/index.ts';
+import { REGIONS } from '../network/index.ts';
+import type { Builder } from '../program/index.ts';
+import { PLAIN, linearKind } from '../quantity/index.ts';
+import type { Interface } from './interface.ts';
+import type { CellKind, ValueType } from './model.ts';
+import { compileExpression } from './expression.ts';
+import type { Scope, Typed } from './scope.ts';
+import { stop } from './stop.ts';
+
+/** Thrown while compiling when a cell that is used has no settled type; caught where the cell is compiled. */
+export class Waiting extends Error {
+  constructor(readonly cell: string) {
+    super(cell);
+  }
+}
+
+interface Lookup {
+  look(name: string): Interface | null;
+  names(): readonly string[];
+  later(message: Message): void;
+}
+
+/** Constants of the language: exact SI values since 2019 (Boltzmann constant, elementary charge). */
+const CONSTANTS: ReadonlyMap<string, { type: ValueType; value: number }> = new Map([
+  ['pi', { type: PLAIN, value: Math.PI }],
+  ['k_B', { type: linearKind([1, 1, 1, -1, 0]), value: 1.380649e-23 }],
+  ['q_e', { type: linearKind([0, 1, 1, 0, 0]), value: 1.602176634e-19 }],
+]);
+
+/** A scope for expressions of one line. */
+export function createScope(builder: Builder, line: Pick<Line, 'text'>, lookup: Lookup): Scope {
+  const later = (what: string, span: Span): void =>
+    lookup.later({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span });
+  return {
+    builder,
+    text: line.text,
+    compile(expr) {
+      return compileExpression(expr, this);
+    },
+    later,
+    resolve: (path) => resolve(path, builder, lookup),
+    stageOf(path) {
+      const { name, span } = path.names[0]!;
+      const cell = find(path, lookup);
+      if (cell.kind !== 'stage')
+        stop('stage-expected', `${name} is ${kindName(cell.kind)}; a stage is wanted here.`, span);
+      return name;
+    },
+  };
+}
+
+/** "a stage", "a quantity", with its article. */
+export function kindName(kind: CellKind): string {
+  switch (kind) {
+    case 'another':
+    case 'inverse':
+      return `an ${kind === 'another' ? 'other piece' : 'inverse cell'}`;
+    case 'broken':
+      return 'a broken line';
+    default:
+      return `a ${kind}`;
+  }
+}
+
+function resolve(path: PathExpr, builder: Builder, lookup: Lookup): Typed {
+  const [first, ...rest] = path.names;
+  if (rest.length === 0) {
+    const constant = CONSTANTS.get(first!.name);
+    if (constant) return { type: constant.type, handle: builder.constant(constant.value) };
+    const region = (REGIONS as readonly string[]).indexOf(first!.name);
+    if (region >= 0) return { type: 'region', handle: builder.constant(region) };
+  }
+  const cell = find(path, lookup);
+  if (rest.length === 0) {
+    if (cell.type !== null) return { type: cell.type, handle: cell.slot };
+    const example = cell.offers.keys().next().value;
+    stop(
+      'value-not-named',
+      `${first!.name} is ${kindName(cell.kind)}, not a number.${example ? ` Name one of its values, such as ${first!.name}.${example}.` : ''}`,
+      path.span,
+    );
+  }
+  const name = rest.map((part) => part.name).join('.');
+  const offer = cell.offers.get(name);
+  if (!offer) {
+    const span = { start: rest[0]!.span.start, end: rest[rest.length - 1]!.span.end };
+    if (cell.offers.size === 0)
+      stop('offers-nothing', `${first!.name} is ${kindName(cell.kind)} and offers no further values.`, span);
+    const near = nearestNames(name, [...cell.offers.keys()]);
+    const hint =
+      near.length > 0
+        ? ` Did you mean ${near.join(' or ')}?`
+        : ` It offers ${[...cell.offers.keys()].slice(0, 6).join(', ')} and others.`;
+    stop('unknown-value', `${first!.name} offers no value ${name}.${hint}`, span);
+  }
+  if (offer.slot < 0) {
+    const text = offer.missing?.text ?? `${first!.name}.${name} is not computed yet.`;
+    lookup.later({ code: offer.missing?.code ?? 'not-computed-yet', text, span: path.span });
+    return { type: offer.type, handle: builder.constant(NaN) };
+  }
+  return { type: offer.type, handle: offer.slot };
+}
+
+function find(path: PathExpr, lookup: Lookup): Interface {
+  const { name, span } = path.names[0]!;
+  const cell = lookup.look(name);
+  if (!cell) {
+    const near = nearestNames(name, lookup.names());
+    stop(
+      'unknown-name',
+      `There is no cell ${name}.${near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ''}`,
+      span,
+    );
+  }
+  if (!cell.settled) throw new Waiting(name);
+  return cell;
+}

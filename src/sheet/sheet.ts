@@ -1,0 +1,311 @@
+// A sheet: the text, its compiled cells and their values, kept in step under edits.
+//
+// After an edit the text is parsed again (unchanged lines keep their trees), the cells are put in
+// topological order, and one pass visits them. A cell is compiled again when its tree, the interface of
+// a cell it looked up, or its own shape has changed; it is run when it was compiled or when something
+// it reads has changed. Everything else is left as it stands. Every cell owns a block of slots and
+// keeps it as long as it fits, so an edited formula does not move the addresses its users know.
+
+import { applySplices, parseSheet } from '../language/index.ts';
+import type { CellTree, Expr, Line, SheetTree } from '../language/index.ts';
+import { assemble, createBuilder, runOperations } from '../program/index.ts';
+import type { Program } from '../program/index.ts';
+import { compileCell } from './compile-cell.ts';
+import type { CompiledCell } from './compile-cell.ts';
+import { namesUsed } from './dependencies.ts';
+import type { Placed } from './draft.ts';
+import { compileExpression } from './expression.ts';
+import { topologicalOrder } from './graph.ts';
+import { sameInterface } from './interface.ts';
+import type { Interface } from './interface.ts';
+import { KERNELS } from './kernels.ts';
+import type { CellReading, Sheet, ValueType } from './model.ts';
+import type { Node } from './node.ts';
+import { faultAt, readCell } from './readings.ts';
+import { createScope } from './resolve.ts';
+
+/** The compiled form of a whole sheet, for those who evaluate it many times over. */
+export interface CompiledSheet {
+  readonly program: Program;
+  /** Slots as they stand. */
+  readonly slots: Float64Array;
+  /** Name of each segment's cell, in the order of the program. */
+  readonly cells: readonly string[];
+}
+
+/** Reads, checks and evaluates a sheet. Never throws for what the user wrote. */
+export function createSheet(text: string): Sheet & { compiled(): CompiledSheet } {
+  let tree: SheetTree = parseSheet('');
+  let nodes: Node[] = [];
+  let byName = new Map<string, Node>();
+  let order: readonly number[] = [];
+  let slots = new Float64Array(256).fill(NaN);
+  let top = 0;
+  let pass = 0;
+
+  function reserve(size: number): void {
+    if (size <= slots.length) return;
+    const wider = new Float64Array(Math.max(size, slots.length * 2)).fill(NaN);
+    wider.set(slots);
+    slots = wider;
+  }
+
+  const names = (): readonly string[] => [...byName.keys()];
+  const look = (name: string): Interface | null => byName.get(name)?.compiled.interface ?? null;
+
+  function now(expr: Expr, line: Line): { type: ValueType; value: number } {
+    const builder = createBuilder(KERNELS);
+    const scope = createScope(builder, line, { look, names, later: () => {} });
+    const { type, handle } = compileExpression(expr, scope);
+    const { segment, slot } = builder.finish(top);
+    reserve(top + segment.size);
+    install(segment, slots);
+    runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
+    return { type, value: slots[slot(handle)]! };
+  }
+
+  function compile(node: Node, cellTree: CellTree): void {
+    const previous = node.compiled as CompiledCell | undefined;
+    const compiled = compileCell(cellTree, {
+      look,
+      names,
+      now,
+      allocate(size) {
+        if (size > node.capacity) {
+          node.base = top;
+          node.capacity = size;
+          top += size;
+          reserve(top);
+        }
+        return node.base;
+      },
+    });
+    install(compiled.segment, slots);
+    node.compiledTree = cellTree;
+    const same = previous && sameInterface(previous.interface, compiled.interface);
+    node.compiled = same ? { ...compiled, interface: previous.interface } : compiled;
+  }
+
+  function needsCompiling(node: Node, cellTree: CellTree): boolean {
+    if (!sameCell(node.compiledTree, cellTree)) return true;
+    for (const [name, seen] of node.compiled.seen) if (look(name) !== seen) return true;
+    return false;
+  }
+
+  /** Compiles and runs what the change reaches; gives the keys of the nodes whose readings changed. */
+  function evaluate(cycles: ReadonlyMap<number, readonly number[]>): Set<string> {
+    pass++;
+    const changed = new Set<string>();
+    for (const k of order) {
+      const node = nodes[k]!;
+      const { tree: cellTree } = node;
+      const wasFault = node.fault;
+      const wasWaiting = node.waitsFor;
+      let fresh = false;
+      const outside =
+        byName.get(cellTree.name.name) !== node ? duplicate(cellTree, byName) : cycleFault(k, cycles, nodes);
+      if (outside) {
+        node.compiled = unsettled(node, cellTree);
+        node.compiledTree = cellTree;
+        node.fault = wasFault?.message.text === outside.message.text ? wasFault : outside;
+        node.waitsFor = null;
+      } else {
+        const shape = node.compiled?.draft.shape;
+        const reached = node.uses.some((u) => nodes[u]!.changedAt === pass);
+        if (!node.compiled || needsCompiling(node, cellTree) || (reached && shape && shape() !== node.compiled.shape)) {
+          compile(node, cellTree);
+          fresh = true;
+        }
+        const { compiled } = node;
+        node.waitsFor = compiled.fault ? null : (compiled.waitsFor ?? waiting(compiled, byName));
+        node.fault = compiled.fault ?? (node.waitsFor ? null : compiled.later);
+        if (!node.fault && !node.waitsFor && (fresh || reached || wasFault || wasWaiting)) {
+          if (run(node, fresh)) node.changedAt = pass;
+          node.fault = compiled.draft.verify?.((handle) => slots[compiled.slot(handle)]!) ?? null;
+        } else if (!node.fault && !node.waitsFor) {
+          node.fault = wasFault;
+        }
+      }
+      if (fresh || node.fault !== wasFault || node.waitsFor !== wasWaiting) node.changedAt = pass;
+      if (node.changedAt === pass) {
+        node.reading = null;
+        changed.add(node.key);
+      }
+    }
+    return changed;
+  }
+
+  /** Runs a node's segment; says whether any of its slots came out otherwise. */
+  function run(node: Node, fresh: boolean): boolean {
+    const { segment } = node.compiled;
+    const before = fresh ? null : slots.slice(segment.base, segment.base + segment.size);
+    runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
+    return before === null || before.some((value, i) => !Object.is(value, slots[segment.base + i]!));
+  }
+
+  function update(newText: string): Set<string> {
+    const newTree = parseSheet(newText, tree);
+    const old = new Map(nodes.map((node) => [node.key, node]));
+    const seenNames = new Map<string, number>();
+    byName = new Map();
+    nodes = newTree.cells.map((cellTree) => {
+      const { name } = cellTree.name;
+      const occurrence = (seenNames.get(name) ?? 0) + 1;
+      seenNames.set(name, occurrence);
+      const key = occurrence === 1 ? name : `${name} (${occurrence})`;
+      const node = old.get(key) ?? createNode(key, cellTree);
+      old.delete(key);
+      if (node.tree !== cellTree) {
+        // The same cell on another line still has to be read anew: its messages name lines.
+        node.reading = null;
+        node.tree = cellTree;
+      }
+      node.usedBy = [];
+      if (occurrence === 1) byName.set(name, node);
+      return node;
+    });
+    tree = newTree;
+    const indexOf = new Map(nodes.map((node, k) => [node, k]));
+    nodes.forEach((node, k) => {
+      node.uses = namesUsed(node.tree)
+        .map((name) => byName.get(name))
+        .filter((used) => used !== undefined)
+        .map((used) => indexOf.get(used)!);
+      for (const u of node.uses) nodes[u]!.usedBy.push(k);
+    });
+    const sorted = topologicalOrder(nodes.map((node) => node.uses));
+    order = sorted.order;
+    const changed = evaluate(sorted.cycles);
+    for (const key of old.keys()) changed.add(key);
+    return changed;
+  }
+
+  function reading(node: Node): CellReading {
+    node.reading ??= readCell(node, nodes, (slot) => slots[slot]!);
+    return node.reading;
+  }
+
+  update(text);
+
+  const sheet: Sheet & { compiled(): CompiledSheet } = {
+    get tree() {
+      return tree;
+    },
+    cells: () => nodes.map(reading),
+    cell(name) {
+      const node = byName.get(name);
+      return node ? reading(node) : null;
+    },
+    loose: () => tree.loose.map(({ line, message }) => faultAt(message, line)),
+    cautions: () => nodes.flatMap((node) => reading(node).cautions),
+    assumptions: () => nodes.flatMap((node) => reading(node).assumptions),
+    error: (name) => sheet.cell(name)?.fault ?? null,
+    value(path) {
+      const [name, ...rest] = path.split('.');
+      const cell = sheet.cell(name!);
+      if (!cell || cell.fault || cell.waitsFor) return null;
+      if (rest.length === 0) return cell.reading?.value ?? null;
+      return cell.values.find((value) => value.name === rest.join('.'))?.value ?? null;
+    },
+    workings(name) {
+      const node = byName.get(name);
+      if (!node || node.fault || node.waitsFor) return [];
+      const { draft, slot } = node.compiled;
+      return draft.workings((handle) => slots[slot(handle)]!);
+    },
+    update,
+    edit: (splices) => update(applySplices(tree.text, splices)),
+    compiled() {
+      const live = order.filter((k) => !nodes[k]!.fault && !nodes[k]!.waitsFor);
+      const position = new Map(live.map((k, i) => [k, i]));
+      const program = assemble(
+        live.map((k) => nodes[k]!.compiled.segment),
+        live.map((k) => nodes[k]!.usedBy.map((d) => position.get(d)).filter((d) => d !== undefined)),
+      );
+      return { program, slots: slots.slice(0, program.slotCount), cells: live.map((k) => nodes[k]!.key) };
+    },
+  };
+  return sheet;
+}
+
+function createNode(key: string, tree: CellTree): Node {
+  return {
+    key,
+    tree,
+    compiledTree: tree,
+    compiled: undefined as unknown as CompiledCell,
+    base: 0,
+    capacity: 0,
+    fault: null,
+    waitsFor: null,
+    uses: [],
+    usedBy: [],
+    changedAt: 0,
+    reading: null,
+  };
+}
+
+function install(segment: { constantSlots: Int32Array; constantValues: Float64Array }, slots: Float64Array): void {
+  for (let i = 0; i < segment.constantSlots.length; i++) slots[segment.constantSlots[i]!] = segment.constantValues[i]!;
+}
+
+/** Whether two cells are the same text, wherever they stand. */
+function sameCell(a: CellTree, b: CellTree): boolean {
+  if (a === b) return true;
+  if (a.line.tree !== b.line.tree || a.fields.length !== b.fields.length || a.rows.length !== b.rows.length)
+    return false;
+  return (
+    a.fields.every((field, i) => field.line.tree === b.fields[i]!.line.tree) &&
+    a.rows.every((row, i) => row.line.tree === b.rows[i]!.line.tree)
+  );
+}
+
+/** The first cell used that has no values just now. */
+function waiting(compiled: CompiledCell, byName: ReadonlyMap<string, Node>): string | null {
+  for (const name of compiled.seen.keys()) {
+    const node = byName.get(name);
+    if (node && (node.fault || node.waitsFor)) return name;
+  }
+  return null;
+}
+
+function duplicate(tree: CellTree, byName: ReadonlyMap<string, Node>): Placed {
+  const { name, span } = tree.name;
+  const first = byName.get(name)!.tree.line.index + 1;
+  return {
+    line: tree.line,
+    message: {
+      code: 'name-taken',
+      text: `${name} already stands in line ${first}. Give this cell another name.`,
+      span,
+    },
+  };
+}
+
+/** Longest cycle that is written out whole. */
+const LONGEST_PATH = 50;
+
+function cycleFault(k: number, cycles: ReadonlyMap<number, readonly number[]>, nodes: readonly Node[]): Placed | null {
+  const path = cycles.get(k);
+  if (!path) return null;
+  const cell = nodes[k]!;
+  const named = path.slice(0, LONGEST_PATH).map((i) => nodes[i]!.tree.name.name);
+  if (path.length > LONGEST_PATH) named.push('..', nodes[path[path.length - 1]!]!.tree.name.name);
+  const text = `${cell.tree.name.name} depends on itself: ${named.join(' → ')}. Break the circle by entering one of them as a number.`;
+  return { line: cell.tree.line, message: { code: 'cycle', text, span: cell.tree.name.span } };
+}
+
+/** Stands in for the code of a cell that cannot have any: users wait for it. */
+function unsettled(node: Node, tree: CellTree): CompiledCell {
+  const present = node.compiled as CompiledCell | undefined;
+  if (present && !present.interface.settled && present.seen.size === 0 && present.segment.size === 0) return present;
+  const broken: CellTree = {
+    ...tree,
+    entry: { type: 'broken', message: { code: '', text: '', span: tree.name.span }, span: tree.name.span },
+    fields: [],
+  };
+  const nothing = (): never => {
+    throw new Error('A broken cell asks for nothing.');
+  };
+  return compileCell(broken, { look: nothing, names: nothing, now: nothing, allocate: nothing });
+}
