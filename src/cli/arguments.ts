@@ -1,6 +1,6 @@
 // What was asked on the command line.
 
-export interface ComputeCall {
+interface ComputeCall {
   readonly kind: 'compute';
   /** Path as given; `-` is standard input. */
   readonly file: string;
@@ -9,7 +9,7 @@ export interface ComputeCall {
   readonly workings: string | null;
 }
 
-export type Call = ComputeCall | { readonly kind: 'help' } | { readonly kind: 'wrong'; readonly text: string };
+type Call = ComputeCall | { readonly kind: 'help' } | { readonly kind: 'wrong'; readonly text: string };
 
 export const USAGE = 'Usage: npm run -s sheet -- FILE [--json] [--workings NAME]';
 

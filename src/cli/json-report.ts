@@ -8,7 +8,7 @@ import { checkText, shownCell, shownReading, workingsOf } from '../record/index.
 import type { CellKind, CellReading, Fault, Reading, Sheet } from '../sheet/index.ts';
 import { entryText } from './entry-text.ts';
 
-export interface JsonValue {
+interface JsonValue {
   /** In `unit`; a region's word; null where there is none or it is infinite. */
   readonly value: number | string | null;
   /** SI unit, `1` for plain numbers; null for regions, conditions, and where the kind is not known. */
@@ -17,14 +17,14 @@ export interface JsonValue {
   readonly text: string | null;
 }
 
-export interface JsonFault {
+interface JsonFault {
   readonly code: string;
   readonly message: string;
   readonly line: number;
   readonly column: number;
 }
 
-export interface JsonCell extends JsonValue {
+interface JsonCell extends JsonValue {
   readonly kind: CellKind;
   readonly line: number;
   /** As written, without name, source and note. */
@@ -45,7 +45,7 @@ export interface JsonReport {
   readonly workings?: readonly JsonStep[];
 }
 
-export interface JsonStep {
+interface JsonStep {
   readonly name: string | null;
   readonly formula: string;
   readonly substitution: string | null;

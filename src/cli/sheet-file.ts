@@ -1,7 +1,7 @@
 // Reading a sheet text from a file or from standard input.
 
 /** The text without a byte order mark, or a sentence that says why there is none. */
-export type SheetFile = { readonly text: string } | { readonly fault: string };
+type SheetFile = { readonly text: string } | { readonly fault: string };
 
 /** Reads all bytes with `read` and takes them as UTF-8; `name` is what the sentences call the file. */
 export function readSheetFile(name: string, read: () => Uint8Array): SheetFile {

@@ -17,7 +17,11 @@ interface Row {
   readonly value: string;
   readonly remark: string;
 }
-type Item = Row | { readonly type: 'section' | 'message'; readonly text: string };
+interface Block {
+  readonly type: 'section' | 'message';
+  readonly text: string;
+}
+type Item = Row | Block;
 
 const INDENT = '  ';
 /** The entries take at most this share of what names and values leave. */
@@ -25,6 +29,7 @@ const ENTRY_SHARE = 0.6;
 const LEAST_ENTRY = 16;
 /** Sources and notes that have less room than this stand under their row. */
 const LEAST_REMARK = 8;
+const REMARK_LINES = 2;
 
 /** The report in lines of at most `width` characters, as far as names and values fit in it. */
 export function textReport(sheet: Sheet, width: number): string {
@@ -45,7 +50,7 @@ export function textReport(sheet: Sheet, width: number): string {
     ),
     listed(
       'Assumptions, to be confirmed',
-      sheet.assumptions().map(({ cell, text }) => `${cell}: ${text}`),
+      sheet.assumptions().map(({ cell, text }) => (text.startsWith(cell) ? text : `${cell}: ${text}`)),
       width,
     ),
   ];
@@ -98,11 +103,14 @@ function cellItems(cell: CellReading, lines: readonly Line[]): Item[] {
   message(cell.tree.line.index);
   for (const field of cell.tree.fields) {
     const reading = fieldAt.get(field.line.index);
-    const value = reading ? (shownOwn(reading, reading.isInput) ?? '') : '';
+    const value = reading ? (shownOwn(reading, reading) ?? '') : '';
     items.push(fieldRow(field, value, reading?.isInput ?? false));
     message(field.line.index);
   }
+  // A part offers what was written in it, too; that stands in the fields' own rows.
+  const written = new Set(cell.fields.map((field) => field.name));
   for (const value of cell.values) {
+    if (written.has(value.name)) continue;
     const text = shownReading(value);
     const name = INDENT.repeat(2) + value.name;
     items.push({ type: 'row', name, entry: '', value: text ?? '–', remark: value.missing?.text ?? '' });
@@ -148,21 +156,27 @@ function table(items: readonly Item[], width: number): string[] {
   const rows = items.filter((item) => item.type === 'row');
   const aligned = alignNumbers(rows.map((row) => row.value));
   const name = widest(rows.map((row) => row.name));
-  const value = widest(aligned);
+  // What stands alone in its row may run on where remarks stand in others.
+  const value = widest(aligned.filter((_, i) => rows[i]!.remark !== '' || /^ *[−∞\d]/.test(aligned[i]!)));
   const free = widthLeft(width, [name, value]);
   const entry = Math.min(widest(rows.map((row) => row.entry)), Math.max(LEAST_ENTRY, Math.floor(free * ENTRY_SHARE)));
-  const columns: Column[] = [name, entry, value].map((each) => ({ width: each, overflow: 'wrap' }));
+  const alone = [
+    { width: name, mostLines: Infinity },
+    { width: entry, mostLines: Infinity },
+    { width: Math.max(value, widthLeft(width, [name, entry])), mostLines: Infinity },
+  ];
+  const columns: Column[] = [name, entry, value].map((each) => ({ width: each, mostLines: Infinity }));
   const left = widthLeft(width, [name, entry, value]);
   const isBeside = left >= LEAST_REMARK;
-  if (isBeside) columns.push({ width: left, overflow: 'cut' });
+  if (isBeside) columns.push({ width: left, mostLines: REMARK_LINES });
   const below = (text: string): string[] =>
     wrapText(text, Math.max(LEAST_ENTRY, width - 2 * INDENT.length)).map((line) => INDENT.repeat(2) + line);
   let index = 0;
   return items.flatMap((item) => {
-    if (item.type === 'section') return ['', item.text];
-    if (item.type === 'message') return below(item.text);
-    const lines = rowLines([item.name, item.entry, aligned[index++]!, item.remark], columns);
-    return isBeside || item.remark === '' ? lines : [...lines, ...below(item.remark)];
+    if (item.type !== 'row') return item.type === 'section' ? ['', item.text] : below(item.text);
+    const cells = [item.name, item.entry, aligned[index++]!, item.remark];
+    if (item.remark === '') return rowLines(cells, alone);
+    return isBeside ? rowLines(cells, columns) : [...rowLines(cells, columns), ...below(item.remark)];
   });
 }
 

@@ -3,12 +3,14 @@
 /** Between two columns. */
 const GAP = '  ';
 const CUT = '…';
+/** Where a line may be broken: not between a number and its unit. */
+const BREAK = /(?<!\d) | (?![\p{L}%°/])/u;
 
 export interface Column {
   /** In characters. */
   readonly width: number;
-  /** Whether what is too long goes on in the next line or ends in a mark. */
-  readonly overflow: 'wrap' | 'cut';
+  /** What is too long goes on in further lines, up to so many; the last of them ends in a mark where more would follow. */
+  readonly mostLines: number;
 }
 
 /** How many characters a text takes: code points, since neither numbers nor names hold combining ones. */
@@ -20,9 +22,11 @@ export function characterCount(text: string): number {
 
 /** One row of cells as lines of text; the last column is not padded. */
 export function rowLines(cells: readonly string[], columns: readonly Column[]): string[] {
-  const wrapped = columns.map(({ width, overflow }, i) => {
-    const text = cells[i] ?? '';
-    return overflow === 'wrap' ? wrapText(text, width) : [cutText(text, width)];
+  const wrapped = columns.map(({ width, mostLines }, i) => {
+    const lines = wrapText(cells[i] ?? '', width);
+    return lines.length <= mostLines
+      ? lines
+      : [...lines.slice(0, mostLines - 1), cutText(lines.slice(mostLines - 1).join(' '), width)];
   });
   const height = Math.max(...wrapped.map((lines) => lines.length));
   const rows: string[] = [];
@@ -47,7 +51,7 @@ export function wrapText(text: string, width: number): string[] {
   if (characterCount(text) <= width) return [text];
   const lines: string[] = [];
   let line = '';
-  for (const word of text.split(' ')) {
+  for (const word of text.split(BREAK)) {
     const longer = line === '' ? word : `${line} ${word}`;
     if (characterCount(longer) <= width) {
       line = longer;
@@ -63,7 +67,7 @@ export function wrapText(text: string, width: number): string[] {
 }
 
 /** The text, or its beginning and a mark. */
-export function cutText(text: string, width: number): string {
+function cutText(text: string, width: number): string {
   const characters = [...text];
   return characters.length <= width
     ? text

@@ -1,13 +1,14 @@
 // The workings of one cell as text for a terminal.
 
-import { stepText, workingsOf } from '../record/index.ts';
+import { stepSides, stepText, workingsOf } from '../record/index.ts';
+import type { PrintedStep } from '../record/index.ts';
 import type { Sheet } from '../sheet/index.ts';
 import { faultText } from './text-report.ts';
-import { wrapText } from './text-table.ts';
+import { characterCount, wrapText } from './text-table.ts';
 
 const INDENT = '  ';
 
-/** Sentence, then formula, numbers in place and result of every step; lines are broken between words. */
+/** Sentence, then formula, numbers in place and result of every step. */
 export function workingsReport(sheet: Sheet, name: string, width: number): string {
   const lines = [`Workings of ${name}`];
   const fault = sheet.error(name);
@@ -16,12 +17,25 @@ export function workingsReport(sheet: Sheet, name: string, width: number): strin
   if (steps.length === 0 && !fault) lines.push(`${INDENT}Nothing is computed in this cell.`);
   for (const step of steps) {
     if (step.sentence !== '') lines.push('', ...wrapText(step.sentence, width));
-    lines.push(...indented(stepText(step), width));
+    lines.push(...stepLines(step, width));
   }
   return `${lines.join('\n')}\n`;
 }
 
-function indented(text: string, width: number): string[] {
-  const [first, ...rest] = wrapText(text, width - 3 * INDENT.length);
-  return [INDENT + first!, ...rest.map((line) => INDENT.repeat(3) + line)];
+/** The step in one line, or, where it is too long, each side of its equation in lines of its own. */
+function stepLines(step: PrintedStep, width: number): string[] {
+  const whole = INDENT + stepText(step);
+  if (characterCount(whole) <= width) return [whole];
+  const [left, first, ...sides] = stepSides(step);
+  if (first === undefined) return indented(left!, width);
+  return [
+    ...indented(`${left} = ${first}`, width),
+    ...sides.flatMap((side) => indented(`= ${side}`, width, INDENT.repeat(2))),
+  ];
+}
+
+function indented(text: string, width: number, indent = INDENT): string[] {
+  const behind = indent + INDENT.repeat(2);
+  const [first, ...rest] = wrapText(text, width - behind.length);
+  return [indent + first!, ...rest.map((line) => behind + line)];
 }

@@ -3,13 +3,11 @@
 
 export { checkText, reserveText } from './check-text.ts';
 export { proseParts } from './prose.ts';
-export type { ProsePart } from './prose.ts';
 export { shownCell, shownOwn, shownReading } from './shown.ts';
 export { texOfExpression } from './tex.ts';
-export type { TexOptions } from './tex.ts';
 export { texOfName, texOfPath } from './tex-name.ts';
 export { texOfUnit } from './tex-number.ts';
-export { lacksValue, verdictOf } from './verdict.ts';
+export { verdictOf } from './verdict.ts';
 export type { Verdict } from './verdict.ts';
-export { printStep, stepText, workingsOf } from './workings.ts';
-export type { PrintedStep, StepLine } from './workings.ts';
+export { printStep, stepSides, stepText, workingsOf } from './workings.ts';
+export type { PrintedStep } from './workings.ts';

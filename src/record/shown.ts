@@ -12,16 +12,20 @@ export function shownReading(reading: Reading): string | null {
   return formatValue(value, type, { unit: as }).text;
 }
 
-/** A cell's own value: an input with the digits typed, 1.6 kΩ where three digits would be 1.60 kΩ exactly. */
-export function shownCell(cell: Pick<CellReading, 'reading' | 'isInput'>): string | null {
-  return cell.reading === null ? null : shownOwn(cell.reading, cell.isInput);
-}
-
-/** The value of a cell or a field, as `shownCell` says. */
-export function shownOwn(reading: Reading, isInput: boolean): string | null {
+/**
+ * The value of a cell or of a field: the digits typed where it is an input whose nominal value the author gave, and
+ * 1.6 kΩ where three digits would be 1.60 kΩ exactly; null where there is none.
+ */
+export function shownOwn(reading: Reading, of: Pick<CellReading, 'isInput' | 'spread'>): string | null {
   const { value, type, as } = reading;
   if (typeof value !== 'number' || Number.isNaN(value) || typeof type === 'string') return shownReading(reading);
   const exact = formatValue(value, type, { unit: as, digits: 'all' }).text;
   const short = formatValue(value, type, { unit: as, zeros: 'drop' }).text;
-  return isInput || exact === short ? exact : shownReading(reading);
+  const isTyped = of.isInput && of.spread?.nominalChosen !== true;
+  return isTyped || exact === short ? exact : shownReading(reading);
+}
+
+/** The value of a cell, as `shownOwn` says. */
+export function shownCell(cell: Pick<CellReading, 'reading' | 'isInput' | 'spread'>): string | null {
+  return cell.reading === null ? null : shownOwn(cell.reading, cell);
 }

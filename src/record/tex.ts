@@ -10,7 +10,7 @@ import { texOfName, texOfPath } from './tex-name.ts';
 import type { NumberTex } from './tex-number.ts';
 import { texOfNumber, texOfShown } from './tex-number.ts';
 
-export interface TexOptions {
+interface TexOptions {
   /** The text that the spans of the tree point into: numbers show the digits that stand there. */
   readonly text: string;
   /** The cell whose workings are shown: its own values go without its name. */

@@ -68,7 +68,7 @@ export function verdictOf(sheet: Sheet): Verdict {
 }
 
 /** Whether a cell that should have a value has none: broken, waiting, or not computed. */
-export function lacksValue(cell: CellReading): boolean {
+function lacksValue(cell: CellReading): boolean {
   if (cell.fault !== null || cell.waitsFor !== null) return true;
   if (cell.kind === 'check') return cell.check === null;
   if (cell.kind === 'quantity' || cell.kind === 'inverse') return cell.reading === null || cell.reading.value === null;

@@ -20,7 +20,7 @@ import { texOfPath } from './tex-name.ts';
 import { texOfShown } from './tex-number.ts';
 
 /** The pieces of a line, as plain text in the sheet language or as TeX. */
-export interface StepLine {
+interface StepLine {
   /** What the step is the value of; null for a comparison that has no name. */
   readonly left: string | null;
   readonly formula: string;
@@ -77,15 +77,20 @@ export function printStep(step: WorkingStep, subject: string): PrintedStep {
   };
 }
 
-/** `V_GS = −R_S * I_D = −1.2 kΩ * 1.16 mA = −1.39 V`; for a comparison `V_DS >= V_ov, 10.7 V >= 1.09 V: holds`. */
-export function stepText(step: PrintedStep): string {
+/** The pieces of `stepText` that equal each other: left side, formula, numbers in place, result; none of them twice. */
+export function stepSides(step: PrintedStep): readonly string[] {
   const { left, formula, substitution, result } = step.text;
   if (step.isCondition) {
     const sides = substitution === null ? formula : `${formula}, ${substitution}`;
-    return `${left === null ? '' : `${left}: `}${sides}: ${result}`;
+    return [`${left === null ? '' : `${left}: `}${sides}: ${result}`];
   }
-  const parts = [left, formula, substitution, result].filter((part) => part !== null);
-  return parts.filter((part, i) => part !== parts[i - 1]).join(' = ');
+  const sides = [left, formula, substitution, result].filter((side) => side !== null);
+  return sides.filter((side, i) => side !== sides[i - 1]);
+}
+
+/** `V_GS = -R_S * I_D = -1.2 kΩ * 1.16 mA = −1.39 V`; for a comparison `V_DS >= V_ov, 10.7 V >= 1.09 V: holds`. */
+export function stepText(step: PrintedStep): string {
+  return stepSides(step).join(' = ');
 }
 
 function parseFormula(formula: string): Expr {

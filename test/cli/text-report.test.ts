@@ -1,0 +1,110 @@
+import { describe, expect, it } from 'vitest';
+import { AMPLIFIER } from '../record/sheets.ts';
+import { runOn, runSheet } from './run.ts';
+
+const SMALL = `# Small
+## Supply
+V_DD = 15 V ± 5 %   [power note 7] ; main
+R_long_name = 4.7 kohm
+  ; a note between
+I_1 = V_DD / R_long_name
+## Requirements
+enough = check I_1 > 5 mA
+much = check I_1 > 1 mA
+broken = 1 V + 2 mA
+half = broken / 2
+`;
+
+describe('the plain report', () => {
+  it('is a title, the verdict, failing checks, and the sheet with its columns aligned', () => {
+    expect(runSheet(SMALL)).toEqual({
+      status: 2,
+      complaints: '',
+      out: `Small
+1 cell is broken: broken. 1 cell has no value: half. 1 of 2 checks holds at the nominal values.
+enough fails, 1.81 mA short.
+
+Failing checks
+  enough  check I_1 > 5 mA  fails, 1.81 mA short  line 8
+
+Supply
+  V_DD         15 V ± 5 %            15 V   power note 7; main
+  R_long_name  4.7 kohm             4.7 kΩ  no source
+  I_1          V_DD / R_long_name  3.19 mA
+
+Requirements
+  enough       check I_1 > 5 mA    fails, 1.81 mA short
+  much         check I_1 > 1 mA    holds, 2.19 mA to spare
+  broken       1 V + 2 mA
+    line 10, column 10: 1 V is a voltage and 2 mA is a current: they cannot be added. Multiply the
+    current by a resistance first.
+  half         broken / 2          waits for broken
+`,
+    });
+  });
+
+  it('keeps to the width where names and values leave room, cutting only with a mark', () => {
+    for (const width of [60, 80, 100, 140]) {
+      const { out } = runOn({ a: AMPLIFIER }, ['a'], width);
+      for (const line of out.split('\n')) expect([...line].length, line).toBeLessThanOrEqual(width);
+    }
+    const { out } = runOn({ a: `R = 1 kohm [${'a long source '.repeat(9)}]` }, ['a'], 60);
+    expect(out).toContain('…');
+  });
+
+  it('wraps a long entry instead of cutting it', () => {
+    const terms = Array.from({ length: 30 }, (_, i) => `${i + 1} V`);
+    const { out } = runOn({ a: `x_1 = ${terms.join(' + ')}` }, ['a'], 60);
+    for (const term of terms) expect(out).toContain(term);
+  });
+
+  it('shows the values of parts and stages under them', () => {
+    const { out } = runSheet(AMPLIFIER);
+    expect(out).toMatch(/^ {4}I_DSS +6 mA in 3 mA \.\. 12 mA at V_DS = 15 V +6 mA +no source$/m);
+    expect(out).toMatch(/^ {4}gate +R_G to 0 V, 22 nF to signal$/m);
+    expect(out).toMatch(/^ {4}region +saturation$/m);
+    expect(out).toMatch(/^ {4}I_D +1\.\d\d mA$/m);
+  });
+
+  it('says what an empty sheet comes to', () => {
+    expect(runSheet('')).toEqual({
+      status: 0,
+      complaints: '',
+      out: 'Sheet without a title\nNothing is required of this sheet yet.\n',
+    });
+  });
+
+  it('lists a line that belongs to no cell with its message', () => {
+    const { status, out } = runSheet('# T\n??? what\n');
+    expect(status).toBe(2);
+    expect(out).toMatch(/^ {2}line 2 +\?\?\? what\n {4}line 2, column \d+: /m);
+  });
+});
+
+describe('the exit status', () => {
+  it.each([
+    ['a = check 2 V > 1 V', 0],
+    ['R = 1 kohm', 0],
+    ['a = check 2 V > 1 V\nb = check 1 V > 2 V', 1],
+    ['b = check 1 V > 2 V\nx = 1 V + 1 A', 2],
+    ['a = check 2 V > 1 V\n???', 2],
+    ['a = check 2 V > 1 V\nx = low(3 V)', 2],
+  ])('of %j is %d, with and without --json', (text, status) => {
+    expect(runSheet(text).status).toBe(status);
+    expect(runSheet(text, '--json').status).toBe(status);
+  });
+});
+
+describe('the printed workings', () => {
+  it('are formula, numbers and result', () => {
+    expect(runSheet('R_S = 3 kohm\nR_2 = R_S / 2', '--workings', 'R_2').out).toBe(
+      'Workings of R_2\n  R_2 = R_S / 2 = 3 kΩ / 2 = 1.5 kΩ\n',
+    );
+  });
+
+  it('of a broken cell are its message', () => {
+    const { status, out } = runSheet('x_1 = 1 V + 2 mA', '--workings', 'x_1');
+    expect(status).toBe(2);
+    expect(out).toMatch(/^Workings of x_1\n {2}line 1, column 7: 1 V is a voltage and 2 mA is a current/);
+  });
+});
