@@ -48,7 +48,7 @@ function readBracket(reader: Reader): Unit {
   const open = reader.take();
   const { unit, span } = unitAt(reader.text, skipBlanks(reader.text, open.end, reader.limit), reader.limit);
   const close = skipBlanks(reader.text, span.end, reader.limit);
-  if (close >= reader.limit || reader.text[close] !== ']') halt('source-open', spanOf(open));
+  if (close >= reader.limit || reader.text[close] !== ']') halt('bracket-open', spanOf(open));
   reader.jump({ start: open.start, end: close + 1 });
   return unit;
 }

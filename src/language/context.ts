@@ -2,8 +2,8 @@
 // There are few contexts, each one object, so that a line's tree can be kept by (context, text).
 
 import type { EntryKind } from './entry-kind.ts';
-import { kindOfEntry } from './entries.ts';
-import type { LineTree } from './syntax.ts';
+import { kindOfEntry, kindOfType } from './entries.ts';
+import type { Entry, LineTree } from './syntax.ts';
 
 /**
  * `none`: no cell since the last heading; `loose`: a line that should have been a cell could not be read;
@@ -35,8 +35,7 @@ export const FIRST_CONTEXT = context('none', false);
 /** The context below a line; blank lines, notes, prose, fields and rows end no block. */
 export function contextBelow(above: Context, tree: LineTree, text: string): Context {
   if (tree.type === 'heading') return tree.level === 1 ? context('title', true) : context('none', above.titled);
-  if (tree.type === 'cell')
-    return contextOfCell(above, tree.entry.type, text.slice(tree.entry.span.start, tree.entry.span.end));
+  if (tree.type === 'cell') return contextOfCell(above, tree.entry, text);
   if (tree.type !== 'broken') return above;
   if (tree.name) return context('unread', above.titled);
   if (text.startsWith('#')) return context('none', above.titled);
@@ -44,8 +43,9 @@ export function contextBelow(above: Context, tree: LineTree, text: string): Cont
   return text.includes('=') ? context('loose', above.titled) : above;
 }
 
-function contextOfCell(above: Context, type: string, entry: string): Context {
-  const kind = kindOfEntry(entry);
+/** A head that cannot be read still tells of which kind its fields are, so that they are read and renamed with the rest. */
+function contextOfCell(above: Context, { type, span }: Entry, text: string): Context {
+  const kind = type === 'broken' ? kindOfEntry(text.slice(span.start, span.end)) : kindOfType(type);
   if (kind.fields) return context(kind.type, above.titled, kind.fields);
   return context(type === 'broken' && kind.type === 'quantity' ? 'unread' : 'plain', above.titled);
 }

@@ -17,3 +17,10 @@ const KINDS: readonly EntryKind[] = [PART, ANOTHER, POINT, STAGE, BENCH, CHECK, 
 export function kindOfEntry(body: string): EntryKind {
   return KINDS.find((kind) => kind.starts(body))!;
 }
+
+const BY_TYPE = new Map(KINDS.map((kind) => [kind.type, kind]));
+
+/** The kind of an entry that was read. */
+export function kindOfType(type: EntryKind['type']): EntryKind {
+  return BY_TYPE.get(type)!;
+}

@@ -190,6 +190,7 @@ function readOperand(reader: Reader): Expr {
   const written = reader.textOf(span);
   if (isJoiningWord(token.name) && token.name !== 'if') halt('word-as-value', span, written);
   reader.take();
+  refuseDigitBehindDot(reader, [{ name: token.name, span }]);
   if (reader.atSign('(')) return readCall(reader, { name: token.name, span });
   if (token.name === 'if') halt('word-as-value', span, written);
   if (isUnitSymbol(written)) halt('unit-without-number', span, written);
@@ -216,7 +217,7 @@ function closeParenthesis(reader: Reader, open: Span): void {
 /** path = name { "." name } ; the dots stand glued, and behind a dot any name may stand, a unit's too (`Q1.K`). */
 export function readPathFrom(reader: Reader, first: NameRef): PathExpr {
   const names = [first];
-  while (dotAhead(reader, names)) {
+  while (reader.atSign('.')) {
     const dot = reader.take();
     const { ahead } = reader;
     const glued = dot.start === names.at(-1)!.span.end && ahead.start === dot.end;
@@ -224,18 +225,16 @@ export function readPathFrom(reader: Reader, first: NameRef): PathExpr {
       halt('path-name-missing', spanOf(dot), reader.textOf({ start: first.span.start, end: names.at(-1)!.span.end }));
     reader.take();
     names.push({ name: ahead.name, span: spanOf(ahead) });
+    refuseDigitBehindDot(reader, names);
   }
   return { type: 'path', names, span: reader.spanFrom(first.span.start) };
 }
 
-function dotAhead(reader: Reader, names: readonly NameRef[]): boolean {
+/** `A1.5`: else its `.5` would be taken for a number without whole part. */
+function refuseDigitBehindDot(reader: Reader, names: readonly NameRef[]): void {
   const { end } = names.at(-1)!.span;
-  // Else `.5` in `A1.5` would be looked at as a number.
-  if (/^\.\d/.test(reader.text.slice(end, end + 2)) && end < reader.limit) {
-    const span = { start: end, end: end + 1 };
-    halt('path-name-missing', span, reader.textOf({ start: names[0].span.start, end }));
-  }
-  return reader.atSign('.');
+  if (!/^\.\d/.test(reader.text.slice(end, Math.min(end + 2, reader.limit)))) return;
+  halt('path-name-missing', { start: end, end: end + 1 }, reader.textOf({ start: names[0].span.start, end }));
 }
 
 // ---------------------------------------------------------------- parts

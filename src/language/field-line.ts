@@ -48,7 +48,9 @@ function readUnlabelled(text: string, at: number, fields: Fields): LineTree {
     const equals = nameBeforeEquals(text, at);
     const label = name ? { names: [name], span: name.span, bodyStart: name.span.end } : noLabel(at);
     const here = { start: at, end: trimEnd(text, at, text.length) };
-    if (!equals) return brokenField(message('field-unreadable', here, 'gate: R_G to 0 V'), label, text);
+    if (!name) return brokenField(message('field-unreadable', here, 'gate: R_G to 0 V'), label, text);
+    if (!equals)
+      return brokenField(message('colon-missing', name.span, text.slice(name.span.start, name.span.end)), label, text);
     const written = text.slice(equals.span.start, equals.span.end);
     return brokenField(message('field-equals', equals.span, written), label, text);
   }

@@ -12,7 +12,7 @@ const TEXTS = {
   'decimals-missing': (found: string, right: string) => `${found} has no digit behind its point: write ${right}.`,
   'whole-part-missing': (right: string) => `The number has no digit before its point: write ${right}.`,
   'number-range': (found: string) =>
-    `${found} is beyond what can be computed: its magnitude lies outside 1e-307 .. 1e308.`,
+    `${found} is too large or too small to be computed with: magnitudes lie between 1e-323 and 1e308.`,
   'number-length': (most: number) => `This number has more than ${most} digits; no measured value has so many.`,
   'decimal-comma': (found: string, point: string, two: string) =>
     `${found} has a comma between its digits: write ${point} for one number, or ${two} for two.`,
@@ -70,7 +70,7 @@ const TEXTS = {
 
   // Quantities
   'limit-not-literal': (found: string) => `${found} is no number: limits and tolerances are written as numbers.`,
-  'bounds-empty': () => 'Both limits are missing here: at least one end stands beside .., as in .. 1 nA or 5 mA ..',
+  'bounds-empty': () => 'Both limits are missing here: at least one end stands beside .., as in 5 mA .. or .. 1 nA.',
   'law-without-spread': (word: string) =>
     `${word} says how a spread is distributed and there is none before it, as in 15 V ± 5 % ${word}.`,
   'law-order': (right: string) => `service stands behind the law: write ${right}.`,
@@ -105,6 +105,7 @@ const TEXTS = {
   'field-unreadable': (example: string) =>
     `An indented line is a field, a name with a colon behind it, as in ${example}.`,
   'field-not-indented': (label: string) => `${label}: is a field and stands at the margin: put two blanks before it.`,
+  'colon-missing': (label: string) => `${label} has no colon behind it: a field reads ${label}: and its value.`,
   'field-equals': (label: string) => `${label} has = where a field has a colon: write ${label}: and its value.`,
   'field-empty': (label: string, example: string) => `${label} has no value: write ${label}: ${example}.`,
   'title-field-unknown': (found: string, hints: readonly string[]) =>
@@ -137,6 +138,7 @@ const TEXTS = {
   'heading-level': () => 'There are two levels of heading, # for the title and ## for sections.',
   'heading-indented': () => 'A heading begins at the margin: remove the blanks before it.',
   'source-open': () => 'This source is never closed: a ] is missing.',
+  'bracket-open': () => 'This unit is never closed: a ] is missing.',
   'source-behind': (found: string) =>
     `${found} stands behind the source, where only a note may follow: put ; before it.`,
 } satisfies Record<string, (...args: never[]) => string>;

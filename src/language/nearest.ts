@@ -1,8 +1,8 @@
 // Which known name was probably meant: the edit distance in which swapping two neighbouring letters
-// counts once (optimal string alignment), with a different case counting half.
+// counts once (optimal string alignment), with a different case counting a tenth.
 
 /** Cost of a letter in the wrong case. */
-const CASE_COST = 0.5;
+const CASE_COST = 0.1;
 
 /** The candidates close enough to `name` to be a slip for it, nearest first, at most three; ties keep the candidates' order. */
 export function nearestNames(name: string, candidates: Iterable<string>): string[] {

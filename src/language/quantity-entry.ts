@@ -60,7 +60,7 @@ function readSpread(reader: Reader): Spread | null {
   if (!reader.takeWord('in')) return null;
   const inner = reader.ahead.start;
   const low = reader.atSign('..') ? null : literalExpr(reader);
-  if (!reader.atSign('..')) halt('range-missing', { start, end: reader.last.end }, 'in', 'in 2 mA .. 9 mA');
+  if (!reader.atSign('..')) halt('range-missing', { start, end: reader.last.end }, 'in', '5 mA in 2 mA .. 9 mA');
   return readLaw(reader, start, null, readBounds(reader, inner, low));
 }
 
