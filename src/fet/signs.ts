@@ -58,7 +58,7 @@ const SIGNS: Readonly<Record<string, SignRule>> = {
   gamma: both('not negative', 'gamma is 0 or more on both channels.'),
   phi: both('positive', 'The surface potential is above 0 on both channels.'),
   PB: both('positive', 'The built-in potential is above 0 on both channels.'),
-  M: both('positive', 'The grading exponent is above 0.'),
+  M: both('not negative', 'The grading exponent is 0 for a constant capacitance, else above 0.'),
   C_iss: capacitance,
   C_rss: capacitance,
   C_oss: capacitance,

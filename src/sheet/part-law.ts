@@ -44,6 +44,7 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, c
     return { route, inputs, beta: beta!, V_TO: vto!, status: status! };
   });
   const used = results[0] ?? unknownLaw(context);
+  const others = results.slice(1).filter(({ route }) => !hasLimitsAlone(route, used.route, given));
   const thresholds = ['V_GSoff', 'V_GSth']
     .flatMap((name) => given.get(name) ?? [])
     .filter((field) => field.conditions.has('I_D'));
@@ -61,7 +62,7 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, c
   }
   return {
     used,
-    others: results.slice(1),
+    others,
     lambda,
     forms: lawForms(entry.family, channel, used, lambda, given, builder),
     assumptions,
@@ -77,15 +78,19 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, c
       return { line, message: { code: 'no-law', text, span } };
     },
     cautions: (read) =>
-      results
-        .slice(1)
-        .flatMap((other) =>
-          disagreement(used, other, read).map((text) => ({
-            text: `${tree.name.name}: ${text}`,
-            line: lineOf(other.route, given, context),
-          })),
-        ),
+      others.flatMap((other) =>
+        disagreement(used, other, read).map((text) => ({
+          text: `${tree.name.name}: ${text}`,
+          line: lineOf(other.route, given, context),
+        })),
+      ),
   };
+}
+
+/** Whether a route rests on a row of limits alone that the used one does not need: such a row cuts the declared set and names no number to compare. */
+function hasLimitsAlone(route: Route, used: Route, given: GivenFields): boolean {
+  const needed = fieldNames(used);
+  return fieldsOf(route, given).some((field) => field.quantity.chosen && !needed.includes(field.name));
 }
 
 /** The fields a route takes, in its order. */

@@ -15,7 +15,7 @@ import { partLaw } from '../part-law.ts';
 import { partWorkings } from '../part-workings.ts';
 import { stop } from '../stop.ts';
 import { typeName } from '../value-type.ts';
-import { compileQuantityEntry } from './quantity.ts';
+import { compileQuantityEntry, standInText } from './quantity.ts';
 import { labelOf } from './stage-places.ts';
 import { signFault } from '../part-signs.ts';
 
@@ -172,7 +172,7 @@ function fieldReading(field: GivenField, read: Read): FieldDraft {
 }
 
 function chosenText(part: string, field: GivenField): string {
-  const { spread } = field.tree.body as { spread: { bounds: { first: unknown; last: unknown } } };
-  const middle = spread.bounds.first && spread.bounds.last ? 'the geometric mean of its limits' : 'its one limit';
-  return `${part}.${field.name}: no nominal is given; ${middle} stands in.`;
+  const { body } = field.tree;
+  if (body.type !== 'quantity') throw new Error('A field of a part is a quantity.');
+  return `${part}.${field.name}: no nominal is given; ${standInText(body)} stands in.`;
 }

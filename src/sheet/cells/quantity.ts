@@ -55,9 +55,7 @@ export function compileQuantityCell(context: CellContext): Draft {
     value: compiled.handle,
     isInput: compiled.isInput,
     spread: compiled.spread,
-    assumptions: compiled.chosen
-      ? [`${tree.name.name}: no nominal is given; the sheet takes the middle of the limits.`]
-      : [],
+    assumptions: compiled.chosen ? [`${tree.name.name}: no nominal is given; ${standInText(entry)} stands in.`] : [],
     verify: (read) => {
       const value = read(compiled.handle);
       if (tree.name.name === 'T_A' && !(value > 0)) {
@@ -74,6 +72,15 @@ export function compileQuantityCell(context: CellContext): Draft {
         ? []
         : [expressionStep(tree.name.name, entry.value, tree.line, compiled.type, read(compiled.handle), as, context)],
   };
+}
+
+/** What stands in for a nominal that is not given. */
+export function standInText(entry: QuantityEntry): string {
+  const { first, last } = entry.spread!.bounds!;
+  if (!first || !last) return 'its one limit';
+  return first.value * last.value <= 0 || first.kind.scale !== 'linear'
+    ? 'the middle of its limits'
+    : 'the geometric mean of its limits';
 }
 
 /** Whether an expression is one number, with or without a sign. */
@@ -140,13 +147,13 @@ function declared(entry: QuantityEntry, nominal: Handle, kind: ValueKind, line: 
       );
     }
   }
-  if (entry.value !== null && isNumber(entry.value) && first && last) {
+  if (entry.value !== null && isNumber(entry.value)) {
     const x = numberOf(entry.value);
-    const [low, high] = [Math.min(first.value, last.value), Math.max(first.value, last.value)];
-    if (x < low || x > high) {
+    const { low, high } = openEnds(first, last, x);
+    if (x < (low ?? -Infinity) || x > (high ?? Infinity)) {
       stop(
         'nominal-outside',
-        `The nominal value lies outside its own limits ${line.text.slice(first.span.start, last.span.end)}.`,
+        `The nominal value lies outside its own limits ${line.text.slice(spread.bounds!.span.start, spread.bounds!.span.end)}.`,
         entry.value.span,
       );
     }
