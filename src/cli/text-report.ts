@@ -4,7 +4,7 @@
 import { lineColumn } from '../language/index.ts';
 import type { FieldTree, Line, Note, Source } from '../language/index.ts';
 import { checkText, shownCell, shownOwn, shownReading, verdictOf } from '../record/index.ts';
-import type { CellReading, Fault, Sheet } from '../sheet/index.ts';
+import type { CellReading, Fault, OfferedReading, Sheet } from '../sheet/index.ts';
 import { entryText } from './entry-text.ts';
 import type { Column } from './text-table.ts';
 import { characterCount, rowLines, widthLeft, wrapText } from './text-table.ts';
@@ -107,15 +107,15 @@ function cellItems(cell: CellReading, lines: readonly Line[]): Item[] {
     items.push(fieldRow(field, value, reading?.isInput ?? false));
     message(field.line.index);
   }
+  if (cell.fault !== null) return items;
   // A part offers what was written in it, too; that stands in the fields' own rows.
   const written = new Set(cell.fields.map((field) => field.name));
-  for (const value of cell.values) {
-    if (written.has(value.name)) continue;
-    const text = shownReading(value);
-    const name = INDENT.repeat(2) + value.name;
-    items.push({ type: 'row', name, entry: '', value: text ?? '–', remark: value.missing?.text ?? '' });
-  }
-  return items;
+  return [...items, ...cell.values.filter((value) => !written.has(value.name)).map(offeredRow)];
+}
+
+function offeredRow(value: OfferedReading): Row {
+  const name = INDENT.repeat(2) + value.name;
+  return { type: 'row', name, entry: '', value: shownReading(value) ?? '–', remark: value.missing?.text ?? '' };
 }
 
 function cellRow(cell: CellReading): Row {

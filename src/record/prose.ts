@@ -7,7 +7,8 @@ export type ProsePart =
   | { readonly type: 'text'; readonly text: string }
   | { readonly type: 'name'; readonly text: string; readonly tex: string };
 
-const NAME = /(?<![\w.])(?:[A-Za-z][A-Za-z0-9]*\.)*[A-Za-z][A-Za-z0-9]*_\w*/g;
+/** Function names such as E24_up are words. */
+const NAME = /(?<![\w.])(?!E\d+_)(?:[A-Za-z][A-Za-z0-9]*\.)*[A-Za-z][A-Za-z0-9]*_\w*/g;
 
 /** The sentence in parts; every name with `_` in it is a part of its own. */
 export function proseParts(sentence: string, subject: string | null): readonly ProsePart[] {

@@ -67,12 +67,12 @@ export function verdictOf(sheet: Sheet): Verdict {
   };
 }
 
-/** Whether a cell that should have a value has none: broken, waiting, or not computed. */
+/** Whether a cell that should have a value, or offer some, has none: broken, waiting, or not computed. */
 function lacksValue(cell: CellReading): boolean {
   if (cell.fault !== null || cell.waitsFor !== null) return true;
   if (cell.kind === 'check') return cell.check === null;
   if (cell.kind === 'quantity' || cell.kind === 'inverse') return cell.reading === null || cell.reading.value === null;
-  return false;
+  return cell.values.length > 0 && cell.values.every(({ value }) => value === null);
 }
 
 function list(names: readonly string[]): string {

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import katex from 'katex';
 import { describe, expect, it } from 'vitest';
 import { parseExpression } from '../../src/language/index.ts';
+import { OFFERED_VALUES } from '../../src/network/index.ts';
 import { texOfExpression, texOfName, texOfPath, texOfUnit } from '../../src/record/index.ts';
 import { anyArithmetic, anyExpression, ARITHMETIC_SYMBOLS } from './random-expression.ts';
 import { texValue } from './tex-value.ts';
@@ -47,6 +48,16 @@ describe('names', () => {
     expect(texOfPath(['A1', 'margin'], null)).toBe('\\mathrm{margin}_{\\mathrm{A1}}');
     expect(texOfPath(['A1', 'swing_up'], null)).toBe('{\\hat{v}_{\\mathrm{up}}}_{\\mathrm{A1}}');
   });
+});
+
+describe('offered values', () => {
+  const shown = (tex: string): string => rendered(tex).replace(/<[^>]*>/g, '');
+  it.each(OFFERED_VALUES.filter(({ per }) => per !== 'place').map(({ name, tex }) => [name, tex]))(
+    '%s reads as in the table of what a stage offers',
+    (name, tex) => {
+      expect(shown(texOfName(name))).toBe(shown(tex));
+    },
+  );
 });
 
 describe('units', () => {
