@@ -1,0 +1,6 @@
+// The shared state of the panes and the commands of the page, without any DOM.
+
+export { commandForKey, keyOf } from './command.ts';
+export type { Command } from './command.ts';
+export { COLUMNS, createDesk } from './desk.ts';
+export type { Column, Desk, Selection, Status } from './desk.ts';
