@@ -105,10 +105,10 @@ export interface GroupItem {
   readonly box: Box;
   readonly items: readonly Item[];
 }
-/** Items of which only what lies inside the box is seen. */
+/** Items of which only what lies inside the outline (x, y, x, y, ..) is seen. */
 export interface ClipItem {
   readonly kind: 'clip';
-  readonly box: Box;
+  readonly outline: ArrayLike<number>;
   readonly items: readonly Item[];
 }
 export type Item = LineItem | RectItem | CircleItem | ArcsItem | TextItem | GroupItem | ClipItem;

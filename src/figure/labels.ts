@@ -80,6 +80,11 @@ export function plain(text: string): Run[] {
   return text === '' ? [] : [{ text, style: 'upright' }];
 }
 
+/** A sentence with the names in it typeset: `bias line, 1/R_S`. */
+export function proseRuns(text: string): Run[] {
+  return text.split(/([A-Za-z][A-Za-z0-9]*_\w+)/).flatMap((part, at) => (at % 2 === 1 ? typeset(part) : plain(part)));
+}
+
 /** Two texts one behind the other, with a blank between them where both say something. */
 export function joinRuns(first: readonly Run[], second: readonly Run[]): Run[] {
   if (first.length === 0 || second.length === 0) return [...first, ...second];
@@ -104,11 +109,6 @@ export function textBox({ x, y, anchor, size, runs, role }: TextItem): Box {
   const x0 = anchor === 'start' ? x : anchor === 'end' ? x - width : x - width / 2;
   const below = runs.some(({ style }) => style === 'subscript') ? DESCENT + 0.1 : DESCENT;
   return { x0, y0: y - ASCENT * size, x1: x0 + width, y1: y + below * size };
-}
-
-/** What the runs say, without style: `V_DD` reads VDD. */
-export function textOf(runs: readonly Run[]): string {
-  return runs.map(({ text }) => text).join('');
 }
 
 function characterWidth(character: string): number {

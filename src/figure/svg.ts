@@ -2,7 +2,7 @@
 // it looks right in a page that styles it, in one that does not, and as a file of its own. There is no
 // style attribute and no script in it; text is escaped and characters that XML forbids are dropped.
 
-import type { Box, Drawing, GroupItem, Item, LineItem, Role, Run, TextItem } from './geometry.ts';
+import type { ClipItem, Drawing, GroupItem, Item, LineItem, Role, Run, TextItem } from './geometry.ts';
 import { ROLE_STYLES, TOKENS } from './style.ts';
 import type { Token } from './style.ts';
 
@@ -86,16 +86,12 @@ class Writer {
       case 'group':
         return this.#group(item);
       case 'clip':
-        return this.#clip(item.box, item.items);
+        return this.#clip(item);
     }
   }
 
   #line({ points, role, closed, filled }: LineItem): string {
-    let d = '';
-    for (let at = 0; at + 1 < points.length; at += 2) {
-      d += `${at === 0 ? 'M' : 'L'}${number(points[at]!)} ${number(points[at + 1]!)}`;
-    }
-    return `<path d="${d}${closed ? 'Z' : ''}"${filled ? this.#area(role) : this.#stroke(role)}/>`;
+    return `<path d="${pathOf(points)}${closed ? 'Z' : ''}"${filled ? this.#area(role) : closed ? this.#outline(role) : this.#stroke(role)}/>`;
   }
 
   #text({ x, y, anchor, size, runs, role, halo }: TextItem): string {
@@ -135,11 +131,10 @@ class Writer {
     return `<g class="${classes}"${access}>${button ? '' : `<title>${escapeXml(sentence)}</title>`}${target}${body}</g>`;
   }
 
-  #clip({ x0, y0, x1, y1 }: Box, items: readonly Item[]): string {
+  #clip({ outline, items }: ClipItem): string {
     const name = `${this.#options.id}-clip-${++this.#clips}`;
-    const rect = `<rect x="${number(x0)}" y="${number(y0)}" width="${number(x1 - x0)}" height="${number(y1 - y0)}"/>`;
     const body = items.map((item) => this.#item(item)).join('');
-    return `<clipPath id="${name}">${rect}</clipPath><g clip-path="url(#${name})">${body}</g>`;
+    return `<clipPath id="${name}"><path d="${pathOf(outline)}Z"/></clipPath><g clip-path="url(#${name})">${body}</g>`;
   }
 
   #stroke(role: Role): string {
@@ -165,6 +160,14 @@ class Writer {
     const token = this.#failing && asked === 'ink' ? 'fail' : asked;
     return this.#options.colors?.[token] ?? `var(--${token}, ${TOKENS[token]})`;
   }
+}
+
+function pathOf(points: ArrayLike<number>): string {
+  let d = '';
+  for (let at = 0; at + 1 < points.length; at += 2) {
+    d += `${at === 0 ? 'M' : 'L'}${number(points[at]!)} ${number(points[at + 1]!)}`;
+  }
+  return d;
 }
 
 /** At most two decimals, no exponent, no minus zero. */
