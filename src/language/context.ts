@@ -18,15 +18,14 @@ export interface Context {
   readonly fields: EntryKind['fields'];
 }
 
-const CONTEXTS = new Map<string, Context>();
+const UNTITLED = new Map<Block, Context>();
+const TITLED = new Map<Block, Context>();
 
 function context(block: Block, titled: boolean, fields: EntryKind['fields'] = null): Context {
-  const key = `${block} ${titled}`;
-  const known = CONTEXTS.get(key);
-  if (known) return known;
-  const made = { block, titled, fields };
-  CONTEXTS.set(key, made);
-  return made;
+  const contexts = titled ? TITLED : UNTITLED;
+  let known = contexts.get(block);
+  if (!known) contexts.set(block, (known = { block, titled, fields }));
+  return known;
 }
 
 /** The context of a sheet's first line. */

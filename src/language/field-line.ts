@@ -48,7 +48,7 @@ function readUnlabelled(text: string, at: number, fields: Fields): LineTree {
     const equals = nameBeforeEquals(text, at);
     const label = name ? { names: [name], span: name.span, bodyStart: name.span.end } : noLabel(at);
     const here = { start: at, end: trimEnd(text, at, text.length) };
-    if (!name) return brokenField(message('field-unreadable', here, 'gate: R_G to 0 V'), label, text);
+    if (!name) return brokenField(unlabelled(text, here), label, text);
     if (!equals)
       return brokenField(message('colon-missing', name.span, text.slice(name.span.start, name.span.end)), label, text);
     const written = text.slice(equals.span.start, equals.span.end);
@@ -110,8 +110,13 @@ function refuseUnlabelled(text: string, at: number, context: Context): LineTree 
   const name = nameBeforeEquals(text, at);
   if (name) return loose(message('cell-indented', name.span, text.slice(name.span.start, name.span.end)), name);
   const here = { start: at, end: trimEnd(text, at, text.length) };
-  const fault = message('field-unreadable', here, 'gate: R_G to 0 V');
+  const fault = unlabelled(text, here);
   return context.block === 'plain' ? brokenField(fault, noLabel(at), text) : loose(fault);
+}
+
+function unlabelled(text: string, here: Span): Message {
+  if (/^[-+−]?\d/.test(text.slice(here.start))) return message('row-without-bench', here);
+  return message('field-unreadable', here, 'gate: R_G to 0 V');
 }
 
 function nameBeforeEquals(text: string, at: number): NameRef | null {

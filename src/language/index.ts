@@ -50,7 +50,6 @@ export type {
 export { entrySpan, setEntry, setLine, setNote, setSource } from './edits.ts';
 export { parseExpression } from './expression.ts';
 export { literalOf } from './literal.ts';
-export type { LineRange } from './line-edits.ts';
 export { blockOf, deleteLines, insertLines, moveLines } from './line-edits.ts';
 export { nearestNames } from './nearest.ts';
 export { lineColumn } from './position.ts';
@@ -58,5 +57,5 @@ export { printExpr } from './print.ts';
 export { isCellName, RESERVED } from './reserved.ts';
 export { renameCell } from './rename.ts';
 export { parseSheet } from './sheet.ts';
-export { exprsOfBody, exprsOfEntry, partsOf, pathsOf, placesOfBody, walkExpr } from './walk.ts';
+export { pathsOf, walkExpr } from './walk.ts';
 export { applySplices, invertSplices } from './splice.ts';

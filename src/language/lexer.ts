@@ -152,7 +152,13 @@ function scanSign(text: string, start: number, limit: number): SignToken {
     return sign ? { type: 'sign', start, end, sign } : halt('operator-spelling', { start, end }, spelling, right);
   }
   const character = String.fromCodePoint(text.codePointAt(start)!);
-  return halt('character-unknown', { start, end: start + character.length }, character);
+  return halt('character-unknown', { start, end: start + character.length }, visible(character));
+}
+
+/** The character, or its number where nothing would be seen. */
+function visible(character: string): string {
+  const hidden = /[\p{C}\p{Z}\p{M}]/u.test(character);
+  return hidden ? `U+${character.codePointAt(0)!.toString(16).toUpperCase().padStart(4, '0')}` : character;
 }
 
 function scanSuperscript(text: string, start: number, limit: number): SuperscriptToken | null {

@@ -29,8 +29,8 @@ const TEXTS = {
     `${found} names its unit twice: ${code} alone already is ${kind}.`,
 
   // Units
-  'unit-unknown': (found: string, right: string | null) =>
-    `${found} is no unit${right ? `: write ${right}` : ' that the sheet knows'}.`,
+  'unit-unknown': (left: string, found: string, right: string | null) =>
+    `${found} is no unit: write ${right ? `${left} ${right}` : `${left} * ${found} for a product`}.`,
   'unit-glued': (found: string, right: string) =>
     `${found} has no blanks around its operator, so it reads as one unit, and it is none: write ${right}.`,
   'unit-blank': (found: string, right: string) => `${found} has a blank inside its unit: write ${right}.`,
@@ -104,6 +104,8 @@ const TEXTS = {
     'The cell above takes no fields: only the title, parts, points, stages and benches have some.',
   'field-unreadable': (example: string) =>
     `An indented line is a field, a name with a colon behind it, as in ${example}.`,
+  'row-without-bench': () =>
+    'This reads as a row of numbers: rows stand below the line columns: of a bench, and nowhere else.',
   'field-not-indented': (label: string) => `${label}: is a field and stands at the margin: put two blanks before it.`,
   'colon-missing': (label: string) => `${label} has no colon behind it: a field reads ${label}: and its value.`,
   'field-equals': (label: string) => `${label} has = where a field has a colon: write ${label}: and its value.`,
@@ -144,7 +146,7 @@ const TEXTS = {
 } satisfies Record<string, (...args: never[]) => string>;
 
 /** The stable codes of all messages. */
-export type MessageCode = keyof typeof TEXTS;
+type MessageCode = keyof typeof TEXTS;
 
 /** Every code there is. */
 export const MESSAGE_CODES = Object.keys(TEXTS) as readonly MessageCode[];

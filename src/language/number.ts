@@ -114,7 +114,7 @@ function unitBehind(text: string, at: number, end: number, limit: number): { uni
     const stop = text[wordEnd] === '.' ? digitsEnd(text, wordEnd + 1, limit) : wordEnd;
     halt('code-end', { start: at, end: stop }, text.slice(at, stop));
   }
-  return halt('unit-unknown', { start, end: wordEnd }, word, read.hint);
+  return halt('unit-unknown', { start, end: wordEnd }, numeral, word, read.hint);
 }
 
 /** `10 V/R`, `10 V*2`, `10 V^x`, `10 V /A`: behind a unit these signs need blanks on both sides, or on none if they belong to it. */

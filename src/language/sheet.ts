@@ -1,45 +1,65 @@
-// A sheet from its lines. Each line is read on its own in the context of the block above it, and its tree is
-// kept by (context, text) for the next parse: an edit reads anew only what it touched, and every other
-// line keeps the very object it had.
+// A sheet from its lines. Each line is read on its own in the context of the block above it, so a line with the
+// same text in the same context has the same tree: an edit reads anew only what it touched, and every
+// other line keeps the very object it had.
 
 import type { Context } from './context.ts';
 import { contextBelow, FIRST_CONTEXT } from './context.ts';
 import { parseLine } from './line.ts';
 import { message } from './messages.ts';
+import type { RawLine } from './split-lines.ts';
 import { splitLines } from './split-lines.ts';
 import type { CellTree, FieldTree, Line, LineTree, LooseLine, NameRef, RowTree, SheetTree } from './syntax.ts';
 import { CHECKED } from './title-fields.ts';
 
-type Kept = Map<Context, Map<string, LineTree>>;
-
-/** The line trees of sheets that were parsed, for parsing what an edit makes of them. */
-const KEPT = new WeakMap<SheetTree, Kept>();
+/** The context of each line of the sheets that were parsed. */
+const CONTEXTS = new WeakMap<SheetTree, readonly Context[]>();
 
 /** Reads a sheet; faults are in the tree. Lines that `previous` has in the same context keep their tree objects. */
 export function parseSheet(text: string, previous?: SheetTree): SheetTree {
-  const before = previous && KEPT.get(previous);
-  const kept: Kept = new Map();
+  const raw = splitLines(text);
+  const known = previous ? knownTrees(raw, previous) : () => null;
   const lines: Line[] = [];
+  const contexts: Context[] = [];
   let context = FIRST_CONTEXT;
-  for (const raw of splitLines(text)) {
-    const tree = lineTree(raw.text, context, kept, before);
-    lines.push({ index: lines.length, offset: raw.offset, text: raw.text, tree });
-    context = contextBelow(context, tree, raw.text);
+  for (let index = 0; index < raw.length; index++) {
+    const { offset, text: line } = raw[index];
+    const tree = known(index, context) ?? parseLine(line, context);
+    lines.push({ index, offset, text: line, tree });
+    contexts.push(context);
+    context = contextBelow(context, tree, line);
   }
   const sheet = { text, lines, ...assemble(lines) };
-  KEPT.set(sheet, kept);
+  CONTEXTS.set(sheet, contexts);
   return sheet;
 }
 
-function lineTree(text: string, context: Context, kept: Kept, before: Kept | undefined): LineTree {
-  let trees = kept.get(context);
-  if (!trees) kept.set(context, (trees = new Map()));
-  let tree = trees.get(text);
-  if (!tree) {
-    tree = before?.get(context)?.get(text) ?? parseLine(text, context);
-    trees.set(text, tree);
+type KnownTree = (index: number, context: Context) => LineTree | null;
+
+/** Looks lines up in another sheet: those that stand alike from the top or from the end by place, the others by their text. */
+function knownTrees(raw: readonly RawLine[], previous: SheetTree): KnownTree {
+  const { lines } = previous;
+  const contexts = CONTEXTS.get(previous) ?? [];
+  const shift = lines.length - raw.length;
+  const shorter = Math.min(lines.length, raw.length);
+  let top = 0;
+  while (top < shorter && lines[top].text === raw[top].text) top++;
+  let end = 0;
+  while (end < shorter - top && lines[lines.length - 1 - end].text === raw[raw.length - 1 - end].text) end++;
+  const others = new Map<string, number[]>();
+  for (let index = top; index < lines.length - end; index++) {
+    const alike = others.get(lines[index].text);
+    if (alike) alike.push(index);
+    else others.set(lines[index].text, [index]);
   }
-  return tree;
+  return (index, context) => {
+    const found =
+      index < top
+        ? index
+        : index >= raw.length - end
+          ? index + shift
+          : others.get(raw[index].text)?.find((each) => contexts[each] === context);
+    return found !== undefined && contexts[found] === context ? lines[found].tree : null;
+  };
 }
 
 // ---------------------------------------------------------------- assembly

@@ -1,7 +1,7 @@
 // The lines of a text with their offsets. A line ends with LF, with or without CR before it; the line
 // end is no part of its text. A text that ends with a line end has no further, empty line behind it.
 
-interface RawLine {
+export interface RawLine {
   /** UTF-16 offset of its first character. */
   readonly offset: number;
   readonly text: string;

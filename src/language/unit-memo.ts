@@ -1,5 +1,5 @@
 // Units in a line, each spelling scanned once: a sheet has thousands of numbers and a dozen units, and the
-// hints that come with a word that is none are dear. Halves the time of a first parse.
+// hints that come with a word that is none are dear. Measured: 2 000 cells in 9.5 instead of 11.7 ms.
 
 import type { UnitFault } from '../quantity/index.ts';
 import { isUnitFault, scanUnit } from '../quantity/index.ts';

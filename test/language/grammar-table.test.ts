@@ -164,6 +164,7 @@ describe('a quantity', () => {
     ['2 mA .. 9 mA', [null, null, ['0.002[A]', '0.009[A]'], null, false, [], null]],
     ['.. 1 nA', [null, null, [null, '1e-9[A]'], null, false, [], null]],
     ['5 mA ..', [null, null, ['0.005[A]', null], null, false, [], null]],
+    ['1k..10k', [null, null, ['1000[ohm]', '10000[ohm]'], null, false, [], null]],
     ['1..5', [null, null, ['1', '5'], null, false, [], null]],
     ['-40 degC .. 85 degC', [null, null, ['233.15[degC]', '358.15[degC]'], null, false, [], null]],
     ['0 degC..60 degC uniform', [null, null, ['273.15[degC]', '333.15[degC]'], 'uniform', false, [], null]],

@@ -72,8 +72,16 @@ const CASES: readonly (readonly [code: string, sheet: string, line: number, colu
   ],
   ['code-with-unit', 'x = 4k7 ohm', 1, 5, '4k7 ohm names its unit twice: 4k7 alone already is a resistance.'],
   ['code-with-unit', 'x = 10p/V', 1, 5, '10p/V names its unit twice: 10p alone already is a capacitance.'],
-  ['unit-unknown', 'x = 3kOhm', 1, 6, 'kOhm is no unit: write kohm.'],
-  ['unit-unknown', 'x = 3blub', 1, 6, 'blub is no unit that the sheet knows.'],
+  ['character-unknown', 'x = 5 \u2003V', 1, 7, 'U+2003 has no meaning here.'],
+  [
+    'row-without-bench',
+    'Q1 = n-JFET\n  -1, 5',
+    2,
+    3,
+    'This reads as a row of numbers: rows stand below the line columns: of a bench, and nowhere else.',
+  ],
+  ['unit-unknown', 'x = 3kOhm', 1, 6, 'kOhm is no unit: write 3 kohm.'],
+  ['unit-unknown', 'x = 3blub', 1, 6, 'blub is no unit: write 3 * blub for a product.'],
   [
     'unit-glued',
     'x = 10 V/R_D',
