@@ -5,7 +5,7 @@
 import type { CellTree, SheetTree, Splice } from './syntax.ts';
 
 /** Lines `first`, .. , `first + count - 1`. */
-export interface LineRange {
+interface LineRange {
   readonly first: number;
   readonly count: number;
 }
