@@ -54,7 +54,21 @@ export function chartFrame({ y, yAt }: Chart, size: Size): Box {
   return { x0, y0: TOP, x1, y1 };
 }
 
+/** A chart in the order it is painted: what lies under the curves, the curves, what stands over them. */
+export interface ChartLayers {
+  readonly frame: Box;
+  readonly under: readonly Item[];
+  readonly curves: readonly Item[];
+  readonly over: readonly Item[];
+}
+
 function chartItems(chart: Chart, size: Size): Item[] {
+  const { under, curves, over } = chartLayers(chart, size);
+  return [...under, ...curves, ...over];
+}
+
+/** The layers of a chart, for those who draw the curves themselves. Throws RangeError where the size leaves no room for them. */
+export function chartLayers(chart: Chart, size: Size): ChartLayers {
   const { x, y } = chart;
   const frame = chartFrame(chart, size);
   const scale: Scale = {
@@ -74,18 +88,14 @@ function chartItems(chart: Chart, size: Size): Item[] {
     return { role: post.passed ? 'limit' : 'label', points: posts[at]!.line, label: post.label, at: 0.9 };
   });
   const labels = placeLabels([...lines, ...postLines], frame, taken);
-  return [
-    ...gridItems(chart, frame, scale),
-    clip(frame, [
-      ...chart.areas.flatMap((area) => areaItems(area, frame, scale)),
-      ...posts.flatMap(({ items }) => items),
-      ...lines.flatMap(({ role, points }, at) => curveItems(role, points, chart.curves[at]!.rings ?? 'none')),
-    ]),
-    ...marks,
-    ...markLabels,
-    ...labels,
-    ...axisTexts(chart, frame, scale, size),
-  ];
+  const areas = chart.areas.flatMap((area) => areaItems(area, frame, scale));
+  const curves = lines.flatMap(({ role, points }, at) => curveItems(role, points, chart.curves[at]!.rings ?? 'none'));
+  return {
+    frame,
+    under: [...gridItems(chart, frame, scale), clip(frame, [...areas, ...posts.flatMap(({ items }) => items)])],
+    curves: [clip(frame, curves)],
+    over: [...marks, ...markLabels, ...labels, ...axisTexts(chart, frame, scale, size)],
+  };
 }
 
 interface Scale {

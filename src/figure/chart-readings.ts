@@ -1,0 +1,61 @@
+// Charts in words and numbers: what the curves say at one value of the axis, and the whole chart as a table.
+
+import { formatValue } from '../quantity/index.ts';
+import type { Axis } from './axis.ts';
+import type { Chart, Curve } from './chart.ts';
+
+export interface ChartTable {
+  /** Headings as names with units: `V_GS (V)`, `nominal (mA)`. */
+  readonly columns: readonly string[];
+  readonly rows: readonly (readonly string[])[];
+}
+
+/** Lines that bound something and are no value to be read. */
+const SILENT: ReadonlySet<Curve['role']> = new Set(['edge', 'limit']);
+const TABLE_DIGITS = 3;
+
+/** `V_GS −1.20 V: nominal 1.30 mA, bias line 1.00 mA`; curves that have no value there are left out. */
+export function readOut({ x, y, curves }: Chart, at: number): string {
+  const values = spoken(curves).flatMap((curve) => {
+    const value = heightAt(curve, at);
+    if (value === null) return [];
+    const name = curve.label === '' ? y.symbol : curve.label;
+    return [`${name} ${formatValue(value, y.kind, { prefix: y.prefix }).text}`];
+  });
+  const place = `${x.symbol} ${formatValue(at, x.kind, { prefix: x.prefix }).text}`;
+  return values.length === 0 ? `${place}: no curve here` : `${place}: ${values.join(', ')}`;
+}
+
+/** The curves at the ticks of the x axis and at its marked points. */
+export function chartTable({ x, y, curves, marks }: Chart): ChartTable {
+  const shown = spoken(curves);
+  const places = [...new Set([...x.ticks, ...marks.map((mark) => mark.x)])].toSorted((a, b) => a - b);
+  const heading = (symbol: string, { unit }: Axis): string => (unit === '' ? symbol : `${symbol} (${unit})`);
+  const number = (value: number, { kind, prefix }: Axis): string =>
+    formatValue(value, kind, { prefix, digits: TABLE_DIGITS, zeros: 'drop' }).number;
+  return {
+    columns: [heading(x.symbol, x), ...shown.map(({ label }) => heading(label === '' ? y.symbol : label, y))],
+    rows: places.map((place) => [
+      number(place, x),
+      ...shown.map((curve) => {
+        const value = heightAt(curve, place);
+        return value === null ? '–' : number(value, y);
+      }),
+    ]),
+  };
+}
+
+/** Height of a curve at x, by straight lines between its points; null beyond its ends and in its gaps. */
+export function heightAt({ x, y }: Pick<Curve, 'x' | 'y'>, at: number): number | null {
+  for (let i = 1; i < x.length; i++) {
+    const [x0, x1, y0, y1] = [x[i - 1]!, x[i]!, y[i - 1]!, y[i]!];
+    if (at < Math.min(x0, x1) || at > Math.max(x0, x1) || x0 === x1) continue;
+    const value = y0 + ((y1 - y0) * (at - x0)) / (x1 - x0);
+    if (Number.isFinite(value)) return value;
+  }
+  return null;
+}
+
+function spoken(curves: readonly Curve[]): readonly Curve[] {
+  return curves.filter(({ role }) => !SILENT.has(role));
+}

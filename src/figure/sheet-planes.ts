@@ -1,0 +1,50 @@
+// From a solved stage of a sheet to its two planes.
+
+import type { Sheet, StageReading } from '../sheet/index.ts';
+import type { Chart } from './chart.ts';
+import type { OutputDevice } from './output-plane.ts';
+import { outputPlane } from './output-plane.ts';
+import { requirementsOf } from './requirements.ts';
+import type { StraightLine } from './straight-line.ts';
+import { transferPlane } from './transfer-plane.ts';
+
+type LabelledLine = StraightLine & { readonly label: string };
+
+/** How near a resistor must be to the slope of a line to be named on it. */
+const SAME_SLOPE = 1e-9;
+
+/** Transfer and output plane of a stage; null where it is not solved. */
+export function planesOf(
+  stage: StageReading,
+  sheet: Sheet,
+): { readonly transfer: Chart; readonly output: Chart } | null {
+  const { name, q, threshold, law, lines } = stage;
+  if (q === null || threshold === null) return null;
+  const channel = stage.channel > 0 ? 'n' : 'p';
+  const forced = (label: string): LabelledLine => ({ volts: 0, ohms: Infinity, amps: q.id, label });
+  const bias = lines
+    ? { volts: lines.V_GG, ohms: lines.R_m, amps: q.id, label: slopeLabel('bias line', lines.R_m, stage) }
+    : forced('forced current');
+  const load = lines
+    ? { volts: lines.V_L, ohms: lines.R_L, amps: q.id, label: slopeLabel('load line', lines.R_L, stage) }
+    : forced('forced current');
+  const device: OutputDevice = { role: 'nominal', label: 'nominal', law, threshold, q, load };
+  return {
+    transfer: transferPlane({ name, channel, devices: [device], bias }),
+    output: outputPlane({ name, channel, devices: [device], margin: marginAsked(name, sheet) }),
+  };
+}
+
+/** `bias line, 1/R_S` where one resistor of the stage alone makes the slope. */
+function slopeLabel(label: string, ohms: number, { legs }: StageReading): string {
+  const alone = legs.filter(({ kind, value, label: name }) => {
+    return kind === 'resistor' && name !== '' && Math.abs(value! - ohms) <= SAME_SLOPE * Math.abs(ohms);
+  });
+  return alone.length === 1 ? `${label}, 1/${alone[0]!.label}` : label;
+}
+
+/** The largest margin in volts that a check asks of the stage; null where none does. */
+function marginAsked(name: string, sheet: Sheet): number | null {
+  const asked = requirementsOf(sheet).filter(({ text, forbids }) => text === `${name}.margin` && forbids === 'below');
+  return asked.length === 0 ? null : Math.max(...asked.map(({ value }) => value));
+}
