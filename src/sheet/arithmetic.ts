@@ -48,7 +48,11 @@ export function compileUnary(expr: UnaryExpr, scope: Scope): Typed {
       expr.span,
     );
   }
-  return expr.operator === '-' ? { type: operand.type, handle: scope.builder.neg(operand.handle) } : operand;
+  if (expr.operator === '+') return operand;
+  // A negative number is one constant, so that a sweep can turn it like any other input.
+  if (expr.operand.type === 'number')
+    return { type: operand.type, handle: scope.builder.constant(-expr.operand.value) };
+  return { type: operand.type, handle: scope.builder.neg(operand.handle) };
 }
 
 /** The square root of a quantity: half of its exponents. */

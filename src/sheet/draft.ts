@@ -4,7 +4,7 @@ import type { CellTree, Line, Message, Span } from '../language/index.ts';
 import type { Builder } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { Unit } from '../quantity/index.ts';
-import type { CheckReading, DeclaredSpread, FieldReading, ValueType, WorkingStep } from './model.ts';
+import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueType, WorkingStep } from './model.ts';
 import type { Scope } from './scope.ts';
 import type { Expr } from '../language/index.ts';
 import type { Interface } from './interface.ts';
@@ -46,6 +46,8 @@ export interface Draft {
   readonly fields: (read: Read) => readonly FieldDraft[];
   readonly spread: ((read: Read) => DeclaredSpread | null) | null;
   readonly isInput: boolean;
+  /** A stage for figures. */
+  readonly stage: ((read: Read, solved: boolean) => StageReading) | null;
   /** Something that decides the shape of the code, worked out again before each run; where it has changed, the cell is compiled anew. */
   readonly shape: (() => string) | null;
   /** What a kind of cell tells those that are built on it (a part its device). */
@@ -82,6 +84,7 @@ export const EMPTY_DRAFT: Draft = {
   fields: () => [],
   spread: null,
   isInput: false,
+  stage: null,
   shape: null,
   extra: null,
 };

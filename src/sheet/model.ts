@@ -128,6 +128,70 @@ export interface CellReading {
   readonly assumptions: readonly Assumption[];
 }
 
+/** One leg of a stage with its number. */
+export interface LegReading {
+  /** The place on whose line it stands. */
+  readonly from: string;
+  readonly kind: 'resistor' | 'capacitor' | 'inductor' | 'source' | 'tie';
+  /** `R_S`, or '' for an element without a name. */
+  readonly label: string;
+  /** SI; null for a tie. */
+  readonly value: number | null;
+  readonly type: ValueKind | null;
+  /** A source that drives from the far place into `from`. */
+  readonly reversed: boolean;
+  readonly to: {
+    readonly kind: 'node' | 'rail' | 'signal' | 'common';
+    readonly name: string;
+    readonly volts: number | null;
+  };
+  /** The cell that the element is named after, or null. */
+  readonly cell: string | null;
+}
+
+/** A one-FET stage as figures want it. Voltages are true node differences, currents in the device's own sense. */
+export interface StageReading {
+  readonly name: string;
+  readonly channel: 1 | -1;
+  readonly family: 'JFET' | 'MOSFET';
+  readonly enhancement: boolean;
+  readonly fetName: string;
+  readonly fetCell: string;
+  /** Named nodes in sheet order, terminals not among them. */
+  readonly nodes: readonly string[];
+  readonly legs: readonly LegReading[];
+  /** Volts of terminals and nodes; empty where the stage is not solved. */
+  readonly voltages: ReadonlyMap<string, number>;
+  readonly current: number | null;
+  readonly q: { readonly vgs: number; readonly vds: number; readonly id: number } | null;
+  /** V_GS = V_GG - R_m I and V_DS = V_L - R_L I in the true frame, I from drain to source; null for a forced current. */
+  readonly lines: { readonly V_GG: number; readonly R_m: number; readonly V_L: number; readonly R_L: number } | null;
+  /** V_GS at which the channel opens, at the junction temperature and back bias. */
+  readonly threshold: number | null;
+  /** Drain current from V_GS and V_DS, at the junction temperature of the operating point. */
+  readonly law: (vgs: number, vds: number) => number;
+  /** The places where gain is taken: none, one or two. */
+  readonly output: readonly string[];
+}
+
+/** Values against an input, as a plot cell asks for them. */
+export interface Sweep {
+  readonly input: {
+    readonly label: string;
+    readonly type: ValueType;
+    readonly values: Float64Array;
+    readonly log: boolean;
+    readonly present: number;
+  };
+  /** NaN where a value is not known. */
+  readonly series: readonly {
+    readonly label: string;
+    readonly type: ValueType;
+    readonly values: Float64Array;
+    readonly present: number;
+  }[];
+}
+
 export interface Sheet {
   readonly tree: SheetTree;
   /** In sheet order; the second of two cells of one name is there, too, with a fault. */
@@ -143,6 +207,10 @@ export interface Sheet {
   value(path: string): number | string | boolean | null;
   /** The formulas, operands and results that stand behind a cell. */
   workings(name: string): readonly WorkingStep[];
+  /** The stage as figures want it; null where there is none of that name, or it cannot be read. */
+  stage(name: string): StageReading | null;
+  /** The curves of a plot cell over its range, at so many points; null where there is none. */
+  sweep(plot: string, points: number): Sweep | null;
   /** Takes a new text; recompiles and recomputes just what that reaches; gives the names whose readings changed. */
   update(text: string): ReadonlySet<string>;
   /** The same for splices of the present text. */

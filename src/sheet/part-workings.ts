@@ -25,7 +25,8 @@ import { fieldsOf, routeDifference, routeName } from './part-law.ts';
 type Operand = WorkingStep['operands'][number];
 
 interface Constants {
-  readonly letter: 'beta' | 'K';
+  readonly part: string;
+  readonly letter: string;
   readonly beta: number;
   readonly V_TO: number;
   readonly lambda: number;
@@ -52,7 +53,9 @@ export function partWorkings(
     0,
   );
   const constants: Constants = {
-    letter: entry.family === 'JFET' ? 'beta' : 'K',
+    part: name,
+    // Bare K, W and L are units in a formula, so those of a MOSFET bear the part's name.
+    letter: entry.family === 'JFET' ? 'beta' : `${name}.K`,
     beta: read(law.used.beta),
     V_TO: read(law.used.V_TO),
     lambda: read(law.lambda),
@@ -105,7 +108,11 @@ function solvedForm(field: GivenField, c: Constants): { target: string; formula:
         operands: [row, condition('I_D', field, c), ...at.operands],
       };
     case 'K_P':
-      return { target: c.letter, formula: 'K_P / 2 * W / L', operands: [row, size('W', c), size('L', c)] };
+      return {
+        target: c.letter,
+        formula: `K_P / 2 * ${c.part}.W / ${c.part}.L`,
+        operands: [row, size('W', c), size('L', c)],
+      };
     case 'V_P':
       return { target: 'V_TO', formula: 'V_P', operands: [row] };
     case 'V_GSoff':
@@ -233,7 +240,8 @@ function condition(name: 'V_GS' | 'I_D', field: GivenField, c: Constants): Opera
 
 function size(name: 'W' | 'L', c: Constants): Operand {
   const field = c.given.get(name)?.[0];
-  return field ? operand(name, c.read(field.handle), field.kind) : operand(name, 1, PLAIN);
+  const path = `${c.part}.${name}`;
+  return field ? operand(path, c.read(field.handle), field.kind) : operand(path, 1, PLAIN);
 }
 
 /** A row's value in the n-channel frame. */

@@ -23,6 +23,7 @@ import type { CellReading, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { faultAt, readCell } from './readings.ts';
 import { createScope } from './resolve.ts';
+import { sweepPlot } from './sweep.ts';
 
 /** The compiled form of a whole sheet, for those who evaluate it many times over. */
 export interface CompiledSheet {
@@ -212,6 +213,17 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
       if (!node || node.fault || node.waitsFor) return [];
       const { draft, slot } = node.compiled;
       return draft.workings((handle) => slots[slot(handle)]!);
+    },
+    stage(name) {
+      const node = byName.get(name);
+      if (!node || node.waitsFor || !node.compiled.draft.stage) return null;
+      const { draft, slot } = node.compiled;
+      return draft.stage!((handle) => slots[slot(handle)]!, node.fault === null);
+    },
+    sweep(plot, points) {
+      const node = byName.get(plot);
+      if (!node || node.fault || node.waitsFor) return null;
+      return sweepPlot(node, points, { nodes, byName, order, slots, now });
     },
     update,
     edit: (splices) => update(applySplices(tree.text, splices)),

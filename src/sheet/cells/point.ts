@@ -29,6 +29,7 @@ export function compilePointCell(context: CellContext): Draft {
   if (vgs && id)
     stop('point-overdone', `V_GS and I_D both stand here; one follows from the other. Keep one of them.`, entry.span);
   if (!vds) stop('point-incomplete', `A point wants V_DS. Write a line V_DS: 10 V below it.`, entry.span);
+  const ambient = context.ambient();
   const lowering = lowerPoint(
     {
       channel: part.channel,
@@ -37,7 +38,7 @@ export function compilePointCell(context: CellContext): Draft {
       held: vgs ? { type: 'V_GS', value: vgs.handle } : { type: 'I_D', value: id!.handle },
       V_DS: vds.handle,
       V_SB: given.get('V_SB')?.handle ?? null,
-      ambient: context.ambient(),
+      ambient,
     },
     builder,
   );
@@ -60,7 +61,7 @@ export function compilePointCell(context: CellContext): Draft {
       const text = `${tree.name.name} was not solved. ${POINT_STATUS_SENTENCES[status] ?? ''} No value is shown that rests on it.`;
       return { line: tree.line, message: { code: 'not-solved', text, span: entry.span } };
     },
-    workings: (read) => pointWorkings({ tree, part, partName: entry.of.name, lowering, read, context }),
+    workings: (read) => pointWorkings({ part, lowering, ambient: read(ambient), read }),
     fields: (read) =>
       [...given].map(([name, field]) => ({
         name,

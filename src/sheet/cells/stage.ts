@@ -13,6 +13,7 @@ import { compileQuantity } from '../operand.ts';
 import type { PartInterface } from '../interface.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
 import { operandText } from '../scope.ts';
+import { readStage } from '../stage-reading.ts';
 import { stageWorkings } from '../stage-workings.ts';
 import { stop } from '../stop.ts';
 import { typeName } from '../value-type.ts';
@@ -75,8 +76,8 @@ export function compileStageCell(context: CellContext): Draft {
     offers: offersOf(lowering, places, entry, ''),
     verify: (read) => verify(lowering, read, context),
     cautions: (read) => stageCautions({ tree, fets, legs, lowering, read, context }),
-    assumptions: [],
-    workings: (read) => stageWorkings({ tree, fets, legs, lowering, net, read, context }),
+    workings: (read) => stageWorkings({ lowering, net, read }),
+    stage: (read, solved) => readStage({ tree, fets, legs, lowering, net, read, context, solved }),
     shape: () => legs.map((leg) => shapeOf(leg, context)).join(' '),
   };
 }
