@@ -1,5 +1,3 @@
-// Waits for the workings of stages and for MOSFET formulas that the language can read; then a test file.
-
 import { readdirSync, readFileSync } from 'node:fs';
 import path from 'node:path';
 import katex from 'katex';
