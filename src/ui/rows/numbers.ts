@@ -1,0 +1,94 @@
+// The numbers of a row: nominal value, its ends and its bar. Inputs as typed, in the unit they were typed in;
+// computed values to three digits; ends rounded outward, in the unit of the nominal value.
+
+import { spreadBar } from '../../figure/index.ts';
+import type { SpreadBar } from '../../figure/index.ts';
+import type { Literal } from '../../language/index.ts';
+import { formatRow, formatValue } from '../../quantity/index.ts';
+import type { FormatOptions, FormattedValue, Unit, ValueKind } from '../../quantity/index.ts';
+import type { DeclaredSpread, Reading } from '../../sheet/index.ts';
+import type { Figure } from './row.ts';
+
+export interface Numbers {
+  readonly low: Figure | null;
+  readonly nominal: Figure | null;
+  readonly high: Figure | null;
+  readonly bar: SpreadBar | null;
+}
+
+export const NO_NUMBERS: Numbers = { low: null, nominal: null, high: null, bar: null };
+
+/** Ends that a tolerance gives are shown to so many digits. */
+const END_DIGITS = 4;
+
+/** The value of a formula, a region or a condition; null where there is none. */
+export function valueFigure(reading: Reading): Figure | null {
+  const { value, type, as } = reading;
+  if (value === null || Number.isNaN(value)) return null;
+  if (typeof value === 'boolean') return word(value ? 'holds' : 'fails');
+  if (typeof value === 'string' || typeof type === 'string') return word(String(value));
+  const exact = formatValue(value, type, { unit: as, digits: 'all' });
+  const short = formatValue(value, type, { unit: as, zeros: 'drop' });
+  return figure(exact.text === short.text ? exact : formatValue(value, type, { unit: as }), 'plain');
+}
+
+/** The numbers of an input: as typed, with what its spread is declared to be. */
+export function inputNumbers(
+  reading: Reading,
+  spread: DeclaredSpread | null,
+  typed: { readonly unit: Unit | null; readonly endsTyped: boolean },
+): Numbers {
+  const { value, type } = reading;
+  if (typeof value !== 'number' || typeof type === 'string' || Number.isNaN(value)) {
+    return { ...NO_NUMBERS, nominal: valueFigure(reading) };
+  }
+  const unit = reading.as ?? typed.unit;
+  const nominal = formatValue(value, type, spread?.nominalChosen ? { unit } : { unit, digits: 'all' });
+  const bar = barOf(value, type, spread);
+  const look = spread?.nominalChosen ? 'chosen' : 'plain';
+  if (spread === null) return { low: null, nominal: figure(nominal, look), high: null, bar };
+  const options: FormatOptions = typed.endsTyped
+    ? { unit, digits: 'all' }
+    : { unit, digits: END_DIGITS, zeros: 'drop' };
+  const ends = formatRow({ low: spread.low, nominal: value, high: spread.high }, type, options);
+  return {
+    low: endFigure(ends.low, nominal),
+    nominal: figure(nominal, look),
+    high: endFigure(ends.high, nominal),
+    bar,
+  };
+}
+
+/** The unit a number was typed in; null for bare numbers and for codes such as 4k7, which choose a prefix of their own. */
+export function typedUnit(literal: Literal | null, lineText: string): Unit | null {
+  const unit = literal?.unit ?? null;
+  if (!literal || !unit) return null;
+  return lineText.slice(literal.span.start, literal.span.end).trimEnd().endsWith(unit.text) ? unit : null;
+}
+
+function barOf(nominal: number, kind: ValueKind, spread: DeclaredSpread | null): SpreadBar | null {
+  if (!Number.isFinite(nominal)) return null;
+  return spreadBar({
+    low: spread ? spread.low : nominal,
+    nominal,
+    high: spread ? spread.high : nominal,
+    own: kind.scale !== 'linear',
+    limits: { low: null, high: null },
+    devices: { low: null, high: null },
+    refining: false,
+  });
+}
+
+/** An end shows its unit only where it is another than the nominal's; an open end says so. */
+function endFigure(end: FormattedValue | null, nominal: FormattedValue): Figure {
+  if (end === null) return word('open');
+  return { number: end.number, unit: end.unit === nominal.unit ? '' : end.unit, look: 'plain' };
+}
+
+function figure({ number, unit }: FormattedValue, look: Figure['look']): Figure {
+  return { number, unit, look };
+}
+
+function word(text: string): Figure {
+  return { number: text, unit: '', look: 'words' };
+}

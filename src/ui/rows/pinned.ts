@@ -1,0 +1,64 @@
+// Which of the values that a cell offers have a row of their own at once: the few that settle whether it works, and
+// all that the sheet uses elsewhere. The others are folded under one row.
+
+import { pathsOf } from '../../language/index.ts';
+import type { Entry, Expr, FieldBody, SheetTree } from '../../language/index.ts';
+import type { CellReading, OfferedReading } from '../../sheet/index.ts';
+
+const BIAS: ReadonlySet<string> = new Set(['I_D', 'V_GS', 'V_DS', 'margin', 'region']);
+const LAW: ReadonlySet<string> = new Set(['beta', 'K', 'V_P', 'V_TO']);
+
+/** Every path that the sheet's formulas read, such as `A1.I_D`. */
+export function usedPaths(tree: SheetTree): ReadonlySet<string> {
+  const found = new Set<string>();
+  const add = (expr: Expr): void => {
+    for (const path of pathsOf(expr)) found.add(path.names.map((part) => part.name).join('.'));
+  };
+  for (const cell of tree.cells) {
+    for (const expr of entryExprs(cell.entry)) add(expr);
+    for (const field of cell.fields) for (const expr of bodyExprs(field.body)) add(expr);
+  }
+  return found;
+}
+
+/** Splits the offered values of a cell into those with a row and those that are folded. */
+export function splitValues(
+  cell: CellReading,
+  used: ReadonlySet<string>,
+): { pinned: readonly OfferedReading[]; folded: readonly OfferedReading[] } {
+  const given = new Set(cell.fields.map((field) => field.name));
+  const offered = cell.kind === 'part' ? cell.values.filter((value) => !isField(value.name, given)) : cell.values;
+  const own = cell.kind === 'part' || cell.kind === 'another' ? LAW : BIAS;
+  const isPinned = ({ name }: OfferedReading): boolean =>
+    own.has(name.slice(name.lastIndexOf('.') + 1)) || used.has(`${cell.name}.${name}`);
+  return { pinned: offered.filter(isPinned), folded: offered.filter((value) => !isPinned(value)) };
+}
+
+/** Offered fields that repeat bear a number: `R_DSon_2`. */
+function isField(name: string, given: ReadonlySet<string>): boolean {
+  return given.has(name) || given.has(name.replace(/_\d+$/, ''));
+}
+
+function entryExprs(entry: Entry): readonly Expr[] {
+  switch (entry.type) {
+    case 'quantity':
+      return entry.value ? [entry.value] : [];
+    case 'check':
+      return [entry.condition];
+    case 'plot':
+      return [...entry.values, ...(entry.against ? [entry.against] : [])];
+    case 'inverse':
+      return [entry.input, entry.target, entry.value];
+    default:
+      return [];
+  }
+}
+
+function bodyExprs(body: FieldBody): readonly Expr[] {
+  if (body.type === 'quantity') return body.value ? [body.value] : [];
+  if (body.type !== 'legs') return [];
+  return body.legs.flatMap((leg) => [
+    ...(leg.element ? [leg.element] : []),
+    ...(leg.place.type === 'expr' ? [leg.place.expr] : []),
+  ]);
+}
