@@ -18,3 +18,8 @@ export type { BiasLines, MidbandPorts, StageLowering, StagePath } from './stage-
 export { OFFERED_VALUES, REGIONS, offeredValue } from './offered-values.ts';
 export type { OfferedUnit, OfferedValue } from './offered-values.ts';
 export { POINT_STATUS, POINT_STATUS_SENTENCES, SWING_LIMIT } from './point-status.ts';
+export type { DerivationStep } from './derivation.ts';
+export { derivePoint } from './derive-law.ts';
+export type { SolvedFet } from './derive-law.ts';
+export { deriveStage } from './derive-stage.ts';
+export type { Operand } from './symbolic-emitter.ts';

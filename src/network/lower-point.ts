@@ -193,7 +193,13 @@ function named(names: readonly string[], handles: readonly Handle[]): Map<string
 }
 
 /** The channel current (true frame) that the sources around the island of `forcing` leave no other way. */
-function forcedCurrent(e: Emitter, graph: PlaceGraph, at: Terminals, forcing: 'drain' | 'source', leakage: Term): Term {
+export function forcedCurrent(
+  e: Emitter,
+  graph: PlaceGraph,
+  at: Terminals,
+  forcing: 'drain' | 'source',
+  leakage: Term,
+): Term {
   const island = componentsOf(graph).find(({ classes }) => classes.has(at[forcing]))!.classes;
   let into: Term = null;
   for (const { from, to, amps } of graph.drives) {
