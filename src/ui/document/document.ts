@@ -6,13 +6,13 @@
 // A preview is an edit that has not been committed yet: while its line can be read the sheet follows it;
 // while it cannot, the last values stay and `held` says so.
 
-import { createMemo, createSignal } from 'solid-js';
-import { applySplices, invertSplices, parseSheet } from '../../language/index.ts';
+import { batch, createMemo, createSignal } from 'solid-js';
+import { applySplices, parseSheet } from '../../language/index.ts';
 import type { SheetTree, Splice } from '../../language/index.ts';
 import { createSheet } from '../../sheet/index.ts';
 import type { CellReading, Sheet } from '../../sheet/index.ts';
-import { EMPTY_HISTORY, afterRedo, afterUndo, stepsToRedo, stepsToUndo, withStep } from './history.ts';
-import type { History } from './history.ts';
+import { EMPTY_HISTORY, edit, redo, splicesBetween, undo } from '../../storage/index.ts';
+import type { Edited, History } from '../../storage/index.ts';
 
 export interface SheetDocument {
   /** The committed text. */
@@ -57,12 +57,19 @@ export function createSheetDocument(initial: string, initialHistory: History = E
     }
   }
 
-  function commit(newText: string, newHistory: History): void {
-    setHeld(false);
-    setText(newText);
-    setHistory(newHistory);
-    show(newText);
+  /** The mark of the run that the last step belongs to. */
+  let lastRun: string | null = null;
+
+  function commit(edited: Edited, run: string | null = null): void {
+    lastRun = run;
+    batch(() => {
+      setHeld(false);
+      setText(edited.text);
+      setHistory(edited.history);
+      show(edited.text);
+    });
   }
+  const present = (): Edited => ({ text: text(), history: history() });
 
   const cells = createMemo(() => (version(), sheet.cells()));
 
@@ -75,18 +82,24 @@ export function createSheetDocument(initial: string, initialHistory: History = E
     cell: (name) => (version(), sheet.cell(name)),
     held,
     history,
-    canUndo: () => history().past.length > 0,
-    canRedo: () => history().future.length > 0,
-    undoLabel: () => history().past.at(-1)?.label ?? null,
+    canUndo: () => history().undo.length > 0,
+    canRedo: () => history().redo.length > 0,
+    undoLabel: () => history().undo.at(-1)?.label ?? null,
     edit(splices, label, run = null) {
-      const before = text();
-      const after = applySplices(before, splices);
-      if (after === before) {
+      const after = applySplices(text(), splices);
+      if (after === text()) {
         setHeld(false);
-        show(before);
+        show(after);
         return;
       }
-      commit(after, withStep(history(), { label, redo: splices, undo: invertSplices(before, splices), run }));
+      // A further step of a run takes the place of the one before: one undo goes back to where the run began.
+      const before = run !== null && run === lastRun ? undo(present()) : null;
+      if (before)
+        commit(
+          edit({ ...before, history: { ...before.history, redo: [] } }, splicesBetween(before.text, after), label),
+          run,
+        );
+      else commit(edit(present(), splices, label), run);
     },
     preview(splices) {
       const shown = splices === null ? text() : applySplices(text(), splices);
@@ -95,23 +108,15 @@ export function createSheetDocument(initial: string, initialHistory: History = E
       if (readable) show(shown);
     },
     undo() {
-      const steps = stepsToUndo(history());
-      if (steps.length === 0) return;
-      commit(
-        steps.reduce((present, step) => applySplices(present, step.undo), text()),
-        afterUndo(history(), steps.length),
-      );
+      const before = undo(present());
+      if (before) commit(before);
     },
     redo() {
-      const steps = stepsToRedo(history());
-      if (steps.length === 0) return;
-      commit(
-        steps.reduce((present, step) => applySplices(present, step.redo), text()),
-        afterRedo(history(), steps.length),
-      );
+      const after = redo(present());
+      if (after) commit(after);
     },
     load(newText, newHistory = EMPTY_HISTORY) {
-      commit(newText, newHistory);
+      commit({ text: newText, history: newHistory });
     },
   };
 }

@@ -2,5 +2,3 @@
 
 export { createSheetDocument } from './document.ts';
 export type { SheetDocument } from './document.ts';
-export { EMPTY_HISTORY } from './history.ts';
-export type { History, Step } from './history.ts';
