@@ -10,7 +10,20 @@ export type { ChartTable } from './chart-readings.ts';
 export { chartTable, readOut } from './chart-readings.ts';
 export type { ChartLayers, Size } from './draw-chart.ts';
 export { chartFrame, chartLayers, drawChart, stackCharts } from './draw-chart.ts';
-export type { Box, Drawing, GroupItem, Item, Role, Run, TextItem } from './geometry.ts';
+export type {
+  ArcsItem,
+  Box,
+  CircleItem,
+  ClipItem,
+  Drawing,
+  GroupItem,
+  Item,
+  LineItem,
+  RectItem,
+  Role,
+  Run,
+  TextItem,
+} from './geometry.ts';
 export type { HistogramInput } from './histogram.ts';
 export { histogramChart } from './histogram.ts';
 export type { OutputDevice, OutputInput } from './output-plane.ts';

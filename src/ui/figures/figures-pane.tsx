@@ -1,0 +1,65 @@
+// The figures: first those of the stage that is spoken of, then the plots of the sheet, in sheet order.
+
+import { For, Show, createMemo } from 'solid-js';
+import type { Desk } from '../desk/index.ts';
+import { Prose } from '../typeset/index.ts';
+import { PlotFigure } from './plot-figure.tsx';
+import { StageFigure } from './stage-figure.tsx';
+import './figures.css';
+
+const NO_STAGE = 'No stage yet. Insert one, or write A1 = stage of Q1, and its schematic and curves appear here.';
+
+/** What a pane lets others do with it. */
+export interface PaneControls {
+  /** Puts the keyboard into the pane. */
+  focus(): void;
+}
+
+/** The pane of figures. */
+export function FiguresPane(props: { readonly desk: Desk; readonly controls?: (controls: PaneControls) => void }) {
+  const { desk } = props;
+  const plots = createMemo(
+    () =>
+      desk.document
+        .cells()
+        .filter(({ kind }) => kind === 'plot')
+        .map(({ name }) => name),
+    [],
+    { equals: (a, b) => a.join() === b.join() },
+  );
+  let pane!: HTMLElement;
+  props.controls?.({ focus: () => pane.focus() });
+
+  return (
+    <section class="figures-pane" id="figures" aria-label="Figures" tabindex="-1" ref={(element) => (pane = element)}>
+      <header class="pane-head">
+        <h2>{desk.stage() ?? 'Figures'}</h2>
+        <Show when={desk.stage()}>
+          <label>
+            <input
+              type="checkbox"
+              checked={desk.following()}
+              onChange={(event) => desk.setFollowing(event.currentTarget.checked)}
+            />
+            follows the selection
+          </label>
+        </Show>
+      </header>
+      <Show when={desk.strayed() && desk.stage()}>
+        {(stage) => <p class="figure-message">Still showing {stage()}: the selected line belongs to no stage.</p>}
+      </Show>
+      <Show
+        when={desk.stage()}
+        keyed
+        fallback={
+          <p class="figure-message">
+            <Prose text={NO_STAGE} />
+          </p>
+        }
+      >
+        {(stage) => <StageFigure desk={desk} stage={stage} />}
+      </Show>
+      <For each={plots()}>{(name) => <PlotFigure desk={desk} name={name} />}</For>
+    </section>
+  );
+}

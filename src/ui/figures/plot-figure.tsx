@@ -1,0 +1,54 @@
+// A plot cell of the sheet as a figure that folds.
+
+import { Index, Match, Show, Switch, createMemo, createSignal } from 'solid-js';
+import { sheetPlot } from '../../figure/index.ts';
+import type { Desk } from '../desk/index.ts';
+import { Prose } from '../typeset/index.ts';
+import { ChartView } from './chart-view.tsx';
+import { plotTitle } from './plot-title.ts';
+
+/** One plot cell; while it is folded nothing of it is computed. */
+export function PlotFigure(props: { readonly desk: Desk; readonly name: string }) {
+  const { document } = props.desk;
+  const [open, setOpen] = createSignal(true);
+  const plot = createMemo(() => {
+    document.version();
+    return open() ? sheetPlot(document.sheet, props.name) : null;
+  });
+  const charts = createMemo(() => {
+    const shown = plot();
+    return shown && 'charts' in shown ? shown.charts : null;
+  });
+  const message = (): string | null => {
+    const shown = plot();
+    return shown && 'message' in shown ? shown.message : null;
+  };
+
+  return (
+    <details class="plot-figure" open onToggle={(event) => setOpen(event.currentTarget.open)}>
+      <summary>
+        <strong>{props.name}</strong>{' '}
+        <span class="plot-title">
+          <Prose text={plotTitle(document.cell(props.name))} />
+        </span>
+      </summary>
+      <Switch>
+        <Match when={message()}>
+          {(text) => (
+            <p class="figure-message">
+              <Prose text={text()} />
+            </p>
+          )}
+        </Match>
+        <Match when={charts()}>
+          {(shown) => <Index each={shown()}>{(chart) => <ChartView chart={chart()} />}</Index>}
+        </Match>
+      </Switch>
+      <Show when={open()}>
+        <button type="button" class="to-cell" onClick={() => props.desk.jump(props.name)}>
+          to {props.name} in the sheet
+        </button>
+      </Show>
+    </details>
+  );
+}

@@ -1,0 +1,16 @@
+// What a plot cell shows, in a few words.
+
+import type { CellReading } from '../../sheet/index.ts';
+
+/** `transfer of A1`, `A1.I_D against R_S2`; a range stands on the axis and is left out. */
+export function plotTitle(cell: CellReading | null): string {
+  const entry = cell?.tree.entry;
+  if (!cell || entry?.type !== 'plot') return '';
+  const text = (span: { readonly start: number; readonly end: number }): string =>
+    cell.tree.line.text.slice(span.start, span.end).trim();
+  if (entry.figure === 'against' || entry.figure === 'spread') {
+    const values = entry.values.map(({ span }) => text(span)).join(', ');
+    return entry.against ? `${values} against ${text(entry.against.span)}` : `spread of ${values}`;
+  }
+  return `${entry.figure} of ${entry.of?.name ?? ''}`;
+}

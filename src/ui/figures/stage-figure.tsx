@@ -1,0 +1,94 @@
+// The stage that the figures speak of: its schematic, its values beside it, its two planes.
+
+import { For, Show, createMemo } from 'solid-js';
+import { drawSchematic, planesOf, schematicOf } from '../../figure/index.ts';
+import type { Desk } from '../desk/index.ts';
+import { Name, Prose } from '../typeset/index.ts';
+import { ChartView } from './chart-view.tsx';
+import { DrawingView } from './drawing-view.tsx';
+import { stageValues } from './stage-values.ts';
+
+/** Everything drawn of one stage; where it is not solved, its schematic without numbers and why. */
+export function StageFigure(props: { readonly desk: Desk; readonly stage: string }) {
+  const { document } = props.desk;
+  const cell = createMemo(() => document.cell(props.stage));
+  const reading = createMemo(() => (document.version(), document.sheet.stage(props.stage)));
+  const message = (): string | null => {
+    const fault = cell()?.fault;
+    if (!fault) return null;
+    return cell()!.waitsFor ? `${props.stage} waits for ${cell()!.waitsFor}.` : fault.text;
+  };
+  const schematic = createMemo(() => {
+    const stage = reading();
+    return stage ? drawSchematic(schematicOf(stage, document.sheet)) : null;
+  });
+  const planes = createMemo(() => {
+    const stage = reading();
+    return stage ? planesOf(stage, document.sheet) : null;
+  });
+  const values = createMemo(() => {
+    const stage = cell();
+    return stage ? stageValues(stage) : [];
+  });
+
+  return (
+    <>
+      <Show when={message()}>
+        {(text) => (
+          <p class="figure-message">
+            <Prose text={text()} />
+          </p>
+        )}
+      </Show>
+      <div class="stage-figure">
+        <Show when={schematic()}>
+          {(drawing) => (
+            <figure class="schematic">
+              <figcaption class="unseen">{drawing().sentence}</figcaption>
+              <DrawingView drawing={drawing()} follow={(name) => props.desk.jump(name)} />
+            </figure>
+          )}
+        </Show>
+        <Show when={values().length > 0}>
+          <table class="stage-values">
+            <caption>{props.stage} in numbers</caption>
+            <thead class="unseen">
+              <tr>
+                <th scope="col">value</th>
+                <th scope="col">nominal</th>
+                <th scope="col">unit</th>
+              </tr>
+            </thead>
+            <tbody>
+              <For each={values()}>
+                {(value) => (
+                  <tr>
+                    <th scope="row" title={value.sentence}>
+                      <Name path={value.name} />
+                    </th>
+                    <td class="number">{value.number}</td>
+                    <td class="unit">{value.unit}</td>
+                  </tr>
+                )}
+              </For>
+            </tbody>
+          </table>
+        </Show>
+      </div>
+      <Show when={planes()}>
+        {(charts) => (
+          <div class="planes">
+            <section aria-label={charts().transfer.title}>
+              <h3>Transfer</h3>
+              <ChartView chart={charts().transfer} />
+            </section>
+            <section aria-label={charts().output.title}>
+              <h3>Output</h3>
+              <ChartView chart={charts().output} />
+            </section>
+          </div>
+        )}
+      </Show>
+    </>
+  );
+}

@@ -1,0 +1,47 @@
+// The values of a stage that stand beside its schematic, in the order in which a stage is read.
+
+import { shownReading } from '../../record/index.ts';
+import type { CellReading } from '../../sheet/index.ts';
+
+export interface StageValue {
+  readonly name: string;
+  /** Number and unit; the unit is empty for plain numbers and words. */
+  readonly number: string;
+  readonly unit: string;
+  readonly sentence: string;
+}
+
+const AFTER_VOLTAGES = [
+  'I_D',
+  'V_GS',
+  'V_ov',
+  'V_DS',
+  'V_DSsat',
+  'margin',
+  'region',
+  'g_m',
+  'r_o',
+  'A_v',
+  'R_in',
+  'R_out',
+  'P_D',
+];
+/** Taken for granted where it is tied to the source. */
+const TIED = 'V_bulk';
+
+/** Those that the stage has a value for. */
+export function stageValues(stage: CellReading): readonly StageValue[] {
+  const value = (name: string): unknown => stage.values.find((each) => each.name === name)?.value;
+  const voltages = stage.values
+    .map(({ name }) => name)
+    .filter(
+      (name) => /^V_[a-z]/.test(name) && name !== 'V_ov' && !(name === TIED && value(TIED) === value('V_source')),
+    );
+  return [...voltages, ...AFTER_VOLTAGES].flatMap((name) => {
+    const reading = stage.values.find((each) => each.name === name);
+    const text = reading ? shownReading(reading) : null;
+    if (!reading || text === null) return [];
+    const [number, ...unit] = text.split(' ');
+    return [{ name, number: number!, unit: unit.join(' '), sentence: reading.sentence }];
+  });
+}

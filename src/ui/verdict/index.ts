@@ -1,0 +1,3 @@
+// The verdict line.
+
+export { VerdictLine } from './verdict-line.tsx';

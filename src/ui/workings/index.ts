@@ -1,0 +1,3 @@
+// The workings pane.
+
+export { WorkingsPane } from './workings-pane.tsx';

@@ -1,0 +1,54 @@
+// The numbers of a part or point as data sheets print them, and the forms its law can be written in.
+
+import { shownReading } from '../../record/index.ts';
+import { formatRow, formatValue } from '../../quantity/index.ts';
+import type { CellReading, FieldReading, Sheet } from '../../sheet/index.ts';
+import { sourceWords } from './source-words.ts';
+
+export interface PartRow {
+  readonly name: string;
+  readonly low: string;
+  readonly nominal: string;
+  readonly high: string;
+  readonly source: string;
+}
+
+export interface FormRow {
+  readonly name: string;
+  readonly value: string;
+  readonly sentence: string;
+}
+
+const DIGITS = 4;
+
+/** One row for each field that is a number. */
+export function partRows(cell: CellReading, sheet: Sheet): readonly PartRow[] {
+  return cell.fields.map((field) => {
+    const tree = cell.tree.fields.find(({ line }) => line.index === field.line);
+    const source = tree ? sourceWords(tree, sheet.tree.lines) : null;
+    return { name: field.name, ...numbersOf(field), source: source ?? (field.isInput ? 'no source yet' : '') };
+  });
+}
+
+/** What a part, point or inverse offers and has a value for. */
+export function formRows(cell: CellReading): readonly FormRow[] {
+  return cell.values.flatMap((offered) => {
+    const value = shownReading(offered);
+    return value === null ? [] : [{ name: offered.name, value, sentence: offered.sentence }];
+  });
+}
+
+function numbersOf({ value, type, as, spread }: FieldReading): Pick<PartRow, 'low' | 'nominal' | 'high'> {
+  if (typeof value !== 'number' || typeof type === 'string' || Number.isNaN(value)) {
+    return { low: '', nominal: value === null ? '' : String(value), high: '' };
+  }
+  if (spread === null) {
+    return { low: '', nominal: formatValue(value, type, { unit: as, digits: 'all' }).text, high: '' };
+  }
+  const { low, nominal, high } = formatRow({ low: spread.low, nominal: value, high: spread.high }, type, {
+    unit: as,
+    digits: DIGITS,
+    zeros: 'drop',
+  });
+  return { low: low?.text ?? 'open', nominal: nominal.text, high: high?.text ?? 'open' };
+}

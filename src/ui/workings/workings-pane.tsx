@@ -1,0 +1,205 @@
+// The workings of the selected cell: what it is, what keeps it from having a value, formula with numbers in place and
+// result, where its number comes from and how it spreads, what it uses and what uses it.
+
+import { For, Show, batch, createMemo } from 'solid-js';
+import type { Desk } from '../desk/index.ts';
+import type { CellReading } from '../../sheet/index.ts';
+import { Name, Prose } from '../typeset/index.ts';
+import { CellLinks } from './cell-links.tsx';
+import { kindWords, valueWords } from './cell-words.ts';
+import { faultWords } from './fault-words.ts';
+import { formRows, partRows } from './part-rows.ts';
+import { FormTable, PartTable } from './part-tables.tsx';
+import { sourceWords } from './source-words.ts';
+import { spreadSentences } from './spread-words.ts';
+import { StepLine } from './step-line.tsx';
+import { stepsFor } from './steps-for.ts';
+import './workings.css';
+
+/** What a pane lets others do with it. */
+interface PaneControls {
+  /** Puts the keyboard into the pane. */
+  focus(): void;
+}
+
+/** The pane of workings. Escape leads back to the cell in the sheet. */
+export function WorkingsPane(props: { readonly desk: Desk; readonly controls?: (controls: PaneControls) => void }) {
+  const { desk } = props;
+  const cell = createMemo(() => {
+    const name = desk.selection()?.cell;
+    return name ? desk.document.cell(name) : null;
+  });
+  let pane!: HTMLElement;
+  props.controls?.({ focus: () => pane.focus() });
+
+  const onKeyDown = (event: KeyboardEvent): void => {
+    const selection = desk.selection();
+    if (event.key !== 'Escape' || !selection?.cell) return;
+    event.preventDefault();
+    const { cell: name, value } = selection;
+    // The sheet focuses what is selected when a jump is counted: the same row and column as before.
+    batch(() => {
+      desk.jump(name, value);
+      desk.select(selection);
+    });
+  };
+
+  return (
+    <section
+      class="workings-pane"
+      id="workings"
+      aria-label="Workings"
+      tabindex="-1"
+      ref={(element) => (pane = element)}
+      onKeyDown={onKeyDown}
+    >
+      <Show when={cell()} fallback={<p class="workings-empty">Select a line of the sheet to see its workings here.</p>}>
+        {(shown) => <CellWorkings desk={desk} cell={shown()} value={desk.selection()?.value ?? null} />}
+      </Show>
+    </section>
+  );
+}
+
+function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; readonly value: string | null }) {
+  const { document } = props.desk;
+  const name = (): string => props.cell.name;
+  const fault = createMemo(() => faultWords(props.cell, document.sheet));
+  const offered = createMemo(() => props.cell.values.find((each) => each.name === props.value) ?? null);
+  const steps = createMemo(() => (document.version(), stepsFor(document.sheet, name(), props.value)));
+  const spread = createMemo(() => {
+    const { spread: declared, reading } = props.cell;
+    return declared && reading && typeof reading.type !== 'string'
+      ? spreadSentences(declared, reading.type, reading.as)
+      : [];
+  });
+  const source = createMemo(() => sourceWords(props.cell.tree, document.tree().lines));
+  const hasForms = (): boolean => ['part', 'another', 'point'].includes(props.cell.kind);
+
+  return (
+    <>
+      <header class="pane-head">
+        <h2>
+          <Name path={props.value ? `${name()}.${props.value}` : name()} />
+        </h2>
+        <p class="cell-kind">
+          {kindWords(props.cell)}
+          <Show when={valueWords(props.cell)}>
+            {(text) => (
+              <>
+                {': '}
+                <strong
+                  classList={{ fails: props.cell.check?.holds === false, holds: props.cell.check?.holds === true }}
+                >
+                  {text()}
+                </strong>
+              </>
+            )}
+          </Show>
+          <Show when={offered()}>
+            {(value) => (
+              <>
+                {': '}
+                <Prose text={value().sentence} subject={name()} />
+              </>
+            )}
+          </Show>
+        </p>
+      </header>
+
+      <Show when={fault()}>
+        {(words) => (
+          <p class="workings-fault">
+            <button type="button" onClick={() => props.desk.jump(name())}>
+              {words().place}
+            </button>{' '}
+            <Prose text={words().text} />
+          </p>
+        )}
+      </Show>
+      <Show when={props.cell.waitsFor}>
+        {(other) => (
+          <p class="workings-waits">
+            waits for{' '}
+            <button type="button" onClick={() => props.desk.jump(other())}>
+              <Name path={other()} />
+            </button>
+          </p>
+        )}
+      </Show>
+      <Show when={offered()?.missing}>
+        {(missing) => (
+          <p class="workings-note">
+            <Prose text={missing().text} subject={name()} />
+          </p>
+        )}
+      </Show>
+
+      <ol class="steps">
+        <For each={steps().first}>{(step) => <StepLine step={step} subject={name()} />}</For>
+      </ol>
+      <Show when={steps().all.length > 0}>
+        <details class="all-steps">
+          <summary>all workings of {name()}</summary>
+          <ol class="steps">
+            <For each={steps().all}>{(step) => <StepLine step={step} subject={name()} />}</For>
+          </ol>
+        </details>
+      </Show>
+
+      <PartTable rows={partRows(props.cell, document.sheet)} />
+      <Show when={hasForms()}>
+        <FormTable title={props.cell.kind === 'point' ? 'offers' : 'other forms'} rows={formRows(props.cell)} />
+      </Show>
+
+      <dl class="facts">
+        <Show when={spread().length > 0}>
+          <dt>Spread</dt>
+          <dd>{spread().join(' ')}</dd>
+        </Show>
+        <Show when={source() ?? (props.cell.isInput ? 'no source yet' : null)}>
+          {(text) => (
+            <>
+              <dt>Source</dt>
+              <dd>
+                <Prose text={text()} />
+              </dd>
+            </>
+          )}
+        </Show>
+        <Show when={props.cell.tree.note}>
+          {(note) => (
+            <>
+              <dt>Note</dt>
+              <dd>
+                <Prose text={note().text} />
+              </dd>
+            </>
+          )}
+        </Show>
+        <Show when={props.cell.cautions.length > 0}>
+          <dt>Cautions</dt>
+          <For each={props.cell.cautions}>
+            {(caution) => (
+              <dd>
+                <Prose text={caution.text} />
+              </dd>
+            )}
+          </For>
+        </Show>
+        <Show when={props.cell.assumptions.length > 0}>
+          <dt>Assumed</dt>
+          <For each={props.cell.assumptions}>
+            {(assumption) => (
+              <dd>
+                <Prose text={assumption.text} />
+              </dd>
+            )}
+          </For>
+        </Show>
+      </dl>
+
+      <CellLinks desk={props.desk} title="uses" names={props.cell.uses} />
+      <CellLinks desk={props.desk} title="used by" names={props.cell.usedBy} />
+    </>
+  );
+}
