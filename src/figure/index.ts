@@ -40,6 +40,8 @@ export { schematicOf } from './sheet-schematic.ts';
 export type { StraightLine } from './straight-line.ts';
 export type { RoleStyle, Token } from './style.ts';
 export { ROLE_STYLES, TOKENS } from './style.ts';
+export type { RoleStyle, Token } from './style.ts';
+export { ROLE_STYLES, TOKENS } from './style.ts';
 export type { SvgOptions } from './svg.ts';
 export { escapeXml, svgText } from './svg.ts';
 export type { DeviceLaw, OperatingPoint, PlaneDevice, TransferInput } from './transfer-plane.ts';

@@ -57,7 +57,7 @@ export function outputPlane({ name, channel, devices, margin }: OutputInput): Ch
   curves.push({ role: 'edge', ...sampleRising(edge, 0, far, y.high), label: '' });
   for (const { role, label, law, q, load } of devices) {
     const box = { low: x.low, high: x.high, bottom: 0, top: y.high };
-    const line = cutLine(load, box);
+    const line = cutLine({ ...load, ohms: sign * load.ohms }, box);
     const lineRole = role === 'nominal' ? 'bias' : role;
     const again = first.load !== load && first.load.volts === load.volts && first.load.ohms === load.ohms;
     if (line !== null && !again)

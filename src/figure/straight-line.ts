@@ -1,6 +1,6 @@
 // Bias and load line: the straight line V = V_0 - R I of a resistive surrounding, cut to a chart.
 
-/** V = `volts` - `ohms` I. An infinite resistance forces the current `amps`; 0 ohm forces the voltage. */
+/** V = `volts` - `ohms` I; in a p-channel plane, where V is negative, V = `volts` + `ohms` I. An infinite resistance forces the current `amps`; 0 ohm forces the voltage. */
 export interface StraightLine {
   readonly volts: number;
   readonly ohms: number;
@@ -8,14 +8,14 @@ export interface StraightLine {
   readonly amps: number;
 }
 
-/** The two ends (volts, amperes) of the line inside a rectangle; null where it passes outside. */
+/** The two ends (volts, amperes) of the line V = `volts` - `ohms` I inside a rectangle; null where it passes outside. */
 export function cutLine(
   line: StraightLine,
   box: { readonly low: number; readonly high: number; readonly bottom: number; readonly top: number },
 ): { readonly x: Float64Array; readonly y: Float64Array } | null {
   const { volts, ohms, amps } = line;
   const { low, high, bottom, top } = box;
-  if (ohms === Infinity) return amps < bottom || amps > top ? null : ends(low, amps, high, amps);
+  if (Math.abs(ohms) === Infinity) return amps < bottom || amps > top ? null : ends(low, amps, high, amps);
   if (ohms === 0) return volts < low || volts > high ? null : ends(volts, bottom, volts, top);
   const at = (v: number): number => (volts - v) / ohms;
   const points: [number, number][] = [];

@@ -53,7 +53,7 @@ export function transferPlane({ name, channel, devices, bias }: TransferInput): 
   const y = createAxis('I_D', CURRENT, { low: 0, high: top });
   const [off, on] = sign > 0 ? [x.low, x.high] : [x.high, x.low];
   const curves: Curve[] = [];
-  const line = cutLine(bias, { low: x.low, high: x.high, bottom: 0, top: y.high });
+  const line = cutLine({ ...bias, ohms: sign * bias.ohms }, { low: x.low, high: x.high, bottom: 0, top: y.high });
   if (line !== null) curves.push({ role: 'bias', ...line, label: bias.label, labelAt: 0.12 });
   for (const { role, label, law, threshold, q } of devices) {
     const start = sign * threshold > sign * off ? threshold : off;
