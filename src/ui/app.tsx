@@ -1,19 +1,18 @@
-// The whole page: shows the lines of the sheet that opens at first.
+// The whole page.
 
-import { For } from 'solid-js';
-import exampleSheet from '../../public/examples/input-stage.txt?raw';
+import exampleSheet from '../../public/examples/crevasse-listener.txt?raw';
+import { createDesk } from './desk/index.ts';
+import { createSheetDocument } from './document/index.ts';
+import { SheetGrid } from './grid/index.ts';
+import './theme.css';
 import './page.css';
-
-const lines = exampleSheet.split('\n').filter((line) => line !== '');
 
 /** The page with its one sheet. */
 export function App() {
+  const desk = createDesk(createSheetDocument(exampleSheet));
   return (
     <main>
-      <h1>Squarelaw</h1>
-      <ol aria-label="Lines of the sheet">
-        <For each={lines}>{(line) => <li>{line}</li>}</For>
-      </ol>
+      <SheetGrid desk={desk} />
     </main>
   );
 }

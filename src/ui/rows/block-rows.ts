@@ -35,7 +35,7 @@ export function blockRows(cell: CellReading, used: ReadonlySet<string>, isFolded
   const benchRows = tree.rows.map(({ line }, k): PlacedRow => {
     const text = line.text.trim();
     const row = emptyRow(`row:${cell.name}.${k + 1}`, 'bench-row');
-    const entry: RowEntry = { text, look: 'input', tex: null };
+    const entry: RowEntry = { text, look: 'input' };
     return {
       line: line.index,
       row: { ...row, cell: cell.name, inside: true, name: wordName(`${k + 1}`), entry, editable: ['entry'] },
@@ -69,7 +69,6 @@ function fieldRow(key: string, field: FieldTree, cell: CellReading): Row {
   const isInput = message === null && (reading?.isInput ?? false);
   const mark: Mark | null = message ? 'broken' : isInput ? inputMark(field.source) : reading ? 'computed' : null;
   const written = line.text.slice(field.labelSpan.start, field.labelSpan.end);
-  const names = field.label.map((part) => part.name);
   return {
     ...emptyRow(key, 'field'),
     cell: cell.name,
@@ -79,7 +78,7 @@ function fieldRow(key: string, field: FieldTree, cell: CellReading): Row {
     name:
       cell.kind === 'stage'
         ? wordName(written, `${written}, place of ${ownerText(cell)}`)
-        : innerName(written, names, ownerText(cell)),
+        : innerName(written, ownerText(cell)),
     entry: fieldEntry(field, table !== null && message === null),
     ...(message || !reading ? NO_NUMBERS : fieldNumbers(field, reading)),
     turns: isInput && table?.value !== undefined && table?.value !== null,
@@ -98,8 +97,8 @@ function isFaultHere(cell: CellReading, line: number): boolean {
 
 /** In a table the numbers stand in their columns and the entry shows what is left: the condition. */
 function fieldEntry({ line, body }: FieldTree, inTable: boolean): RowEntry {
-  if (inTable && body.type === 'quantity') return { text: conditionText(line, body), look: 'words', tex: null };
-  return { text: line.text.slice(body.span.start, body.span.end), look: 'formula', tex: null };
+  if (inTable && body.type === 'quantity') return { text: conditionText(line, body), look: 'words' };
+  return { text: line.text.slice(body.span.start, body.span.end), look: 'formula' };
 }
 
 function fieldNumbers({ line, body }: FieldTree, reading: FieldReading): Numbers {
@@ -130,7 +129,7 @@ function wiringRow(key: string, tree: CellTree, open: boolean): Row {
     inside: true,
     markText: 'wiring',
     name: wordName('wiring', `wiring of ${name}`),
-    entry: { text: `${names}: ${legs} ${legs === 1 ? 'leg' : 'legs'}`, look: 'words', tex: null },
+    entry: { text: `${names}: ${legs} ${legs === 1 ? 'leg' : 'legs'}`, look: 'words' },
     source: { text: `${open ? 'fold' : 'unfold'} ${tree.fields.length} lines`, note: '', look: 'words' },
     fold: { key, open },
   };
@@ -155,8 +154,8 @@ function valueRow(value: OfferedReading, cell: CellReading): Row {
     inside: true,
     mark: 'computed',
     markText: MARK_TEXT.computed,
-    name: innerName(value.name, value.name.split('.'), ownerText(cell)),
-    entry: { text: firstClause(value.sentence), look: 'words', tex: null },
+    name: innerName(value.name, ownerText(cell)),
+    entry: { text: firstClause(value.sentence), look: 'words' },
     nominal: valueFigure(value),
     source: missing ? { text: missing.text, note: '', look: 'words' } : null,
   };

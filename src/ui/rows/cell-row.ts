@@ -41,8 +41,8 @@ export function cellRow(key: string, cell: CellReading, sheet: Sheet): Row {
     cell: cell.name,
     mark,
     markText: MARK_TEXT[mark],
-    name: cellName(line.text.slice(tree.name.span.start, tree.name.span.end), tree.name.name),
-    entry: { text, look: cell.isInput && !broken ? 'input' : 'formula', tex: null },
+    name: cellName(line.text.slice(tree.name.span.start, tree.name.span.end)),
+    entry: { text, look: cell.isInput && !broken ? 'input' : 'formula' },
     ...(broken ? NO_NUMBERS : numbersOf(cell, sheet)),
     turns: cell.isInput && nominalOf(tree) !== null,
     source: sourceOf(cell, broken),
@@ -72,7 +72,7 @@ function brokenLineRow(key: string, cell: CellReading, line: Line): Row {
     cell: cell.name,
     mark: 'broken',
     markText: MARK_TEXT.broken,
-    entry: { text: line.text, look: 'formula', tex: null },
+    entry: { text: line.text, look: 'formula' },
     fault: cell.fault ? rowFault(cell.fault, line) : null,
     editable: ['entry'],
   };
@@ -130,5 +130,5 @@ function firstBound(entry: Entry): ReturnType<typeof literalOf> {
 
 /** The entry of a line that is text alone. */
 export function proseEntry(text: string): RowEntry {
-  return { text, look: 'prose', tex: null };
+  return { text, look: 'prose' };
 }

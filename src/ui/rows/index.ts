@@ -1,6 +1,10 @@
 // The sheet as rows of plain data, and edits of rows as splices of the text; no DOM.
 
 export type { Folding } from './block-rows.ts';
+export { rowFault } from './faults.ts';
+export { emptyRow } from './row.ts';
 export type { Figure, Mark, Row, RowEntry, RowFault, RowFold, RowName, RowSource, RowType } from './row.ts';
+export type { EditPlace } from './row-edits.ts';
+export { editLabel, editSplices, editText } from './row-edits.ts';
 export type { SheetRows } from './sheet-rows.ts';
 export { sheetRows } from './sheet-rows.ts';

@@ -40,8 +40,8 @@ export type Mark =
 export interface RowName {
   /** As it stands in the sheet. */
   readonly text: string;
-  /** How it is set; null for words that stand as they are. */
-  readonly tex: string | null;
+  /** Whether it is a name or path to be set as the trade does; words stand as they are. */
+  readonly isName: boolean;
   /** What a reader says: `I_DSS, of part Q1`. */
   readonly said: string;
 }
@@ -50,8 +50,6 @@ export interface RowEntry {
   readonly text: string;
   /** `input`: the user's own number; `formula`: other sheet text; `words`: said by the sheet, not to be edited. */
   readonly look: 'input' | 'formula' | 'words' | 'prose';
-  /** Set in place of the text while the cell is not edited. */
-  readonly tex: string | null;
 }
 
 export interface Figure {

@@ -150,7 +150,7 @@ function ghostRow(k: number, section: Section, tree: SheetTree): PlacedRow | nul
       ...emptyRow(`ghost:${k}`, 'ghost'),
       markText: 'new line',
       name: wordName('', 'new line at the end of the section'),
-      entry: { text: hint, look: 'words', tex: null },
+      entry: { text: hint, look: 'words' },
       editable: ['name', 'entry'],
     },
   };
@@ -185,7 +185,7 @@ function plainRow(line: Line, { titleFields, loose, keys, tree }: Surroundings):
       ...emptyRow(key, 'line'),
       mark: 'broken',
       markText: MARK_TEXT.broken,
-      entry: { text, look: 'formula', tex: null },
+      entry: { text, look: 'formula' },
       fault: fault ? rowFault(fault, line) : null,
       editable: ['entry'],
     };

@@ -1,0 +1,75 @@
+// What stands in the cells of a row: names, entries, numbers, sources.
+
+import { Show } from 'solid-js';
+import type { Figure, Row, RowFault, RowName, RowSource } from '../rows/index.ts';
+import { Name, Prose } from '../typeset/index.ts';
+import { markedText } from './marked-text.ts';
+
+/** A name as it is set, with what readers say in its place. */
+export function NameText(props: { readonly name: RowName }) {
+  return (
+    <>
+      <span class="unseen">{props.name.said}</span>
+      <span class="name-text" aria-hidden="true">
+        <Show when={props.name.isName} fallback={props.name.text}>
+          <Name path={props.name.text} />
+        </Show>
+      </span>
+    </>
+  );
+}
+
+/** An entry; the part that a message speaks of is underlined. */
+export function EntryText(props: { readonly row: Row; readonly fault: RowFault | null }) {
+  const text = () => props.row.entry?.text ?? '';
+  const parts = () => markedText(text(), props.fault?.at?.column === 'entry' ? props.fault.at : null);
+  return (
+    <span class="entry-text">
+      <Show
+        when={props.row.entry?.look === 'words'}
+        fallback={
+          <>
+            {parts().before}
+            <Show when={parts().marked !== ''}>
+              <span class="wavy">{parts().marked}</span>
+            </Show>
+            {parts().after}
+          </>
+        }
+      >
+        <Prose text={text()} />
+      </Show>
+    </span>
+  );
+}
+
+/** A number; its unit where asked for or where it is another than its neighbours'. */
+export function NumberText(props: { readonly figure: Figure | null; readonly withUnit?: boolean }) {
+  return (
+    <Show when={props.figure}>
+      {(figure) => (
+        <>
+          <span class={`number number-${figure().look}`}>{figure().number}</span>
+          <Show when={figure().look !== 'words' && (props.withUnit || figure().unit !== '')}>
+            <span class="unit">{figure().unit}</span>
+          </Show>
+        </>
+      )}
+    </Show>
+  );
+}
+
+/** Source and note, or what is said in their place. */
+export function SourceText(props: { readonly source: RowSource }) {
+  return (
+    <span class={`source-text source-${props.source.look}`}>
+      <Prose text={props.source.text} />
+      <Show when={props.source.note !== ''}>
+        <span class="note-text">
+          {props.source.text === '' ? '' : ' · '}
+          <Prose text={props.source.note} />
+        </span>
+      </Show>
+    </span>
+  );
+}

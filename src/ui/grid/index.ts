@@ -1,0 +1,3 @@
+// The sheet grid of the page.
+
+export { SheetGrid } from './sheet-grid.tsx';

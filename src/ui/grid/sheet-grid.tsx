@@ -1,0 +1,84 @@
+// The sheet as a grid of rows.
+
+import { For, onMount } from 'solid-js';
+import type { Desk } from '../desk/index.ts';
+import './grid.css';
+import { gridCommands } from './commands.ts';
+import { createGrid } from './grid.ts';
+import { navigate } from './keys.ts';
+import { cellAt, createFocus } from './focus.ts';
+import { RowView } from './row-view.tsx';
+
+/** The grid of a desk's sheet. */
+export function SheetGrid(props: { readonly desk: Desk }) {
+  const grid = createGrid(props.desk);
+  let table!: HTMLDivElement;
+
+  onMount(() => {
+    grid.onFocus(createFocus(table));
+    props.desk.addCommands(gridCommands(grid));
+  });
+
+  return (
+    <div class="sheet">
+      <div
+        ref={table}
+        class="grid"
+        classList={{ 'grid-held': props.desk.document.held() }}
+        role="grid"
+        aria-label="Sheet"
+        aria-colcount={8}
+        aria-rowcount={grid.keys().length + 1}
+        aria-multiselectable="true"
+        onKeyDown={(event) => {
+          if (!navigate(grid, event)) return;
+          event.preventDefault();
+          event.stopPropagation();
+        }}
+        onFocusIn={(event) => {
+          const place = cellAt(event.target);
+          if (place && !grid.editor.editing()) grid.focused(place.key, place.column);
+        }}
+        onDblClick={(event) => {
+          if (cellAt(event.target) && !grid.editor.editing()) grid.edit();
+        }}
+        onClick={(event) => {
+          const place = cellAt(event.target);
+          const row = place && grid.row(place.key);
+          if (place && row?.fold && place.column === 'name' && row.type !== 'title') grid.toggle(place.key);
+        }}
+      >
+        <div role="row" class="row row-columns" aria-rowindex={1}>
+          <span role="columnheader" class="head-mark">
+            <span class="unseen">mark</span>
+          </span>
+          <span role="columnheader">name</span>
+          <span role="columnheader">entry</span>
+          <span role="columnheader" class="head-number">
+            low
+          </span>
+          <span role="columnheader" class="head-nominal">
+            nominal
+          </span>
+          <span role="columnheader" class="head-number">
+            high
+          </span>
+          <span role="columnheader" class="head-spread">
+            <span class="unseen">spread</span>
+            <span class="scale" aria-hidden="true">
+              <span>¼</span>
+              <span>½</span>
+              <span>1</span>
+              <span>2</span>
+              <span>4</span>
+            </span>
+          </span>
+          <span role="columnheader" class="head-source">
+            source, note
+          </span>
+        </div>
+        <For each={grid.keys()}>{(key, index) => <RowView grid={grid} rowKey={key} index={index()} />}</For>
+      </div>
+    </div>
+  );
+}
