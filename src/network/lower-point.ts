@@ -26,7 +26,7 @@ export interface SolvedPoint {
   /** beta and V_TO at the junction temperature. */
   readonly beta: Handle;
   readonly vto: Handle;
-  /** The part has a body effect. */
+  /** The threshold moves with the current, by body effect. */
   readonly bodyMoves: boolean;
   /** Heat of the gate leakage on its way from drain to gate, W. */
   readonly leakagePower: Term;
@@ -38,9 +38,11 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
   const at = terminalsOf(graph, fet);
   const datum = forcing ? at[forcing] : -1;
   const leaks = device.I_GSS !== null;
-  const bodyMoves = device.gamma !== null;
+  const hasBody = device.gamma !== null;
+  // With r_s in its lead the channel's own source leaves the bulk even where the two terminals are tied.
+  const bodyMoves = hasBody && (at.bulk !== at.source || device.r_s !== null);
   const heats = device.R_thJA !== null;
-  const path: StagePath = forcing ? 'forced' : bodyMoves || heats ? 'general' : 'line';
+  const path: StagePath = forcing ? 'forced' : hasBody || heats ? 'general' : 'line';
   const rest = restVoltages(e, graph, at, datum, leaks);
   const zero = e.constant(0);
   const channel = e.constant(fet.channel);

@@ -9,7 +9,7 @@
 // Where no signal current can flow (`fixed`) w is minus the voltage of the island and the current stays I.
 // With body effect V_T moves along the line, and the limit is found by solving the point at each v_s instead.
 
-import { threshold } from '../fet/index.ts';
+import { threshold, thresholdSlope } from '../fet/index.ts';
 import { solveBracketed } from '../numeric/index.ts';
 import { solveWithBody } from './body-solve.ts';
 import type { Kernel } from './kernel.ts';
@@ -50,8 +50,11 @@ const given = new Float64Array(INPUTS.length);
 const [BETA, VTO, LAMBDA, GAMMA, PHI, LIMIT, FIXED, I, VGS, VDS, VSB] = [1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11];
 const [AGS, ADS, ASB, AOUT, RGS, RDS, RSB, ROUT, RS, RD] = [12, 13, 14, 15, 16, 17, 18, 19, 20, 21];
 
-/** What has been found so far, in the n-channel frame: nearest limit upwards and downwards, and what it is. */
-const found = { up: 0, down: 0, upLimit: 0, downLimit: 0 };
+/**
+ * What has been found so far, in the n-channel frame: the nearest limit on either side, how far the source goes for it
+ * (V), and what it is. `rise` is the sign of the gain: which way of the source leads up.
+ */
+const found = { up: 0, down: 0, upDrive: 0, downDrive: 0, upLimit: 0, downLimit: 0, rise: 0 };
 
 /**
  * Peaks in V, both counted positive, infinite where nothing limits them; their limits by the codes of `SWING_LIMIT`.
@@ -73,8 +76,11 @@ export const swing: Kernel = {
       given[RDS] += leads;
       given[RSB] += given[RS];
     }
+    if (given[VDS] < 0) changePlaces();
     found.up = Infinity;
     found.down = Infinity;
+    found.upDrive = Infinity;
+    found.downDrive = Infinity;
     found.upLimit = NONE;
     found.downLimit = NONE;
     search();
@@ -99,6 +105,7 @@ function search(): void {
     return;
   }
   if (given[AGS] === 0 && given[ADS] === 0) return;
+  found.rise = riseAt(vov);
   if (given[GAMMA] !== 0 && given[FIXED] === 0 && (given[ASB] !== 0 || given[RSB] !== 0)) {
     searchWithBody(1);
     searchWithBody(-1);
@@ -106,20 +113,50 @@ function search(): void {
   else searchFixedCurrent(vov);
 }
 
-/** Takes an output voltage at which a limit is met, if it is the nearest on its side. */
-function meet(out: number, limit: number): void {
-  if (out >= 0 && out < found.up) {
-    found.up = out;
+/** The drain terminal acts as the source: the same line seen from there, with w counted the other way. */
+function changePlaces(): void {
+  given[VGS] -= given[VDS];
+  given[VSB] += given[VDS];
+  given[VDS] = -given[VDS];
+  given[I] = -given[I];
+  given[AGS] -= given[ADS];
+  given[ASB] += given[ADS];
+  given[ADS] = -given[ADS];
+  given[RGS] = given[RDS] - given[RGS];
+  given[RSB] = given[RDS] - given[RSB];
+  given[ROUT] = -given[ROUT];
+}
+
+/** The sign of the gain at rest; 0 where the output does not move. */
+function riseAt(vov: number): number {
+  const stretch = 1 + given[LAMBDA] * given[VDS];
+  const gm = 2 * given[BETA] * vov * stretch;
+  const gds = given[BETA] * vov * vov * given[LAMBDA];
+  const body = given[GAMMA] === 0 ? 0 : gm * thresholdSlope(given[GAMMA], given[PHI], given[VSB]);
+  const asked = gm * given[AGS] + gds * given[ADS] - body * given[ASB];
+  const load = gm * given[RGS] + gds * given[RDS] + body * given[RSB];
+  return Math.sign(given[AOUT] - (given[ROUT] * asked) / (1 + load));
+}
+
+/** Takes a limit at a source of `vs` with the output at `out`, if it is the nearest on its side. */
+function meet(vs: number, out: number, limit: number): void {
+  // With the current fixed the output says which side it is: the source may not have to move at all.
+  const side = given[FIXED] === 0 ? vs * found.rise : out;
+  const drive = given[FIXED] === 0 ? Math.abs(vs) : Math.abs(out);
+  if (side >= 0 && drive < found.upDrive) {
+    found.up = Math.max(0, out);
+    found.upDrive = drive;
     found.upLimit = limit;
   }
-  if (out <= 0 && -out < found.down) {
-    found.down = 0 - out;
+  if (side <= 0 && drive < found.downDrive) {
+    found.down = Math.max(0, -out);
+    found.downDrive = drive;
     found.downLimit = limit;
   }
 }
 
-function outputAt(vs: number, w: number): number {
-  return given[AOUT] * vs - given[ROUT] * w;
+function meetLine(vs: number, w: number, limit: number): void {
+  meet(vs, given[AOUT] * vs - given[ROUT] * w, limit);
 }
 
 function searchLoadLine(vov: number): void {
@@ -128,15 +165,14 @@ function searchLoadLine(vov: number): void {
   const ads = given[ADS];
   const rgs = given[RGS];
   const rds = given[RDS];
-  if (ags !== 0) meet(outputAt(-(vov + rgs * current) / ags, -current), CUTOFF);
+  if (ags !== 0) meetLine(-(vov + rgs * current) / ags, -current, CUTOFF);
 
   const beta = given[BETA];
   const lambda = given[LAMBDA];
   const twist = ads * rgs - ags * rds;
-  const boundary = (y: number): number => {
-    const vs = y < 0 ? NaN : onsetDrive(y, beta * y * y * (1 + lambda * y) - current, vov);
-    meet(outputAt(vs, beta * y * y * (1 + lambda * y) - current), OHMIC);
-    return vs;
+  const boundary = (y: number): void => {
+    const w = beta * y * y * (1 + lambda * y) - current;
+    meetLine(onsetDrive(y, w, vov), w, OHMIC);
   };
   eachPositiveRoot(
     ads * vov - ags * given[VDS] + twist * current,
@@ -152,7 +188,7 @@ function searchLoadLine(vov: number): void {
     const level = given[VDS] + (ads / ags) * (given[LIMIT] - given[VGS]);
     const slope = (ads * rgs) / ags - rds;
     const w = (full * (1 + lambda * level) - current) / (1 - full * lambda * slope);
-    meet(outputAt((given[LIMIT] - given[VGS] + rgs * w) / ags, w), GATE);
+    meetLine((given[LIMIT] - given[VGS] + rgs * w) / ags, w, GATE);
   }
 }
 
@@ -181,7 +217,7 @@ function reach(dvgs: number, dvds: number, limit: number): void {
   if (twist === 0) return;
   const vs = (given[RGS] * dvds - given[RDS] * dvgs) / twist;
   const w = (given[AGS] * dvds - given[ADS] * dvgs) / twist;
-  meet(outputAt(vs, w), limit);
+  meetLine(vs, w, limit);
 }
 
 /** Calls `visit` with every root y > 0 of c0 + c1 y + c2 y^2 + c3 y^3. */
@@ -226,7 +262,7 @@ function searchWithBody(direction: number): void {
   headroomAt(vs);
   const limit = line[REGION] === 0 ? CUTOFF : line[MARGIN] <= gateRoom ? OHMIC : GATE;
   const cutoff = line[CURRENT] <= 1e-9 * given[I];
-  meet(outputAt(vs, line[CURRENT] - given[I]), cutoff ? CUTOFF : limit);
+  meetLine(vs, line[CURRENT] - given[I], cutoff ? CUTOFF : limit);
 }
 
 /** Room to gate conduction at the last point, in V. */
