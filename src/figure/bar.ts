@@ -20,7 +20,7 @@ export interface SpreadInput {
 }
 
 /** How an end of the bar is drawn: closed, beyond the scale, or without limit. */
-export type BarEnd = 'cap' | 'point' | 'open';
+type BarEnd = 'cap' | 'point' | 'open';
 
 export interface SpreadBar {
   readonly scale: 'shared' | 'own';
@@ -41,7 +41,7 @@ export interface SpreadBar {
 }
 
 /** Factor from the nominal to either end of the shared scale. */
-export const SHARED_FACTOR = 4;
+const SHARED_FACTOR = 4;
 /** Free room at either end of an own scale, as a share of what it shows. */
 const PADDING = 0.08;
 

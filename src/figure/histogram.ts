@@ -5,7 +5,7 @@ import type { ValueKind } from '../quantity/index.ts';
 import { createAxis } from './axis.ts';
 import type { Chart, Post } from './chart.ts';
 
-export interface HistogramInput {
+interface HistogramInput {
   /** As the sheet calls the value: `A1.I_D`. */
   readonly label: string;
   readonly kind: ValueKind;

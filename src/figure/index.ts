@@ -1,11 +1,10 @@
 // Figures as plain geometry, and geometry as SVG text. Charts are in SI with their axes, true node differences for voltages
 // and drain currents positive on both channels; drawings are in CSS pixels, y downwards.
 
-export type { Axis } from './axis.ts';
 export { createAxis, positionOn, valueOn } from './axis.ts';
-export type { BarEnd, SpreadBar, SpreadInput } from './bar.ts';
+export type { SpreadBar, SpreadInput } from './bar.ts';
 export { spreadBar } from './bar.ts';
-export type { Area, Chart, Curve, CurveRole, Mark, Post } from './chart.ts';
+export type { Chart, Curve, CurveRole } from './chart.ts';
 export type { ChartTable } from './chart-readings.ts';
 export { chartTable, readOut } from './chart-readings.ts';
 export type { ChartLayers, Size } from './draw-chart.ts';
@@ -24,25 +23,18 @@ export type {
   Run,
   TextItem,
 } from './geometry.ts';
-export type { HistogramInput } from './histogram.ts';
 export { histogramChart } from './histogram.ts';
-export type { OutputDevice, OutputInput } from './output-plane.ts';
+export type { OutputDevice } from './output-plane.ts';
 export { outputPlane } from './output-plane.ts';
-export type { PlotInput, PlotSeries } from './plot.ts';
+export type { PlotInput } from './plot.ts';
 export { plotCharts } from './plot.ts';
 export { drawSchematic } from './schematic.ts';
 export type { LegEnd, LegKind, SchematicInput, StageLeg } from './stage-input.ts';
-export { proseRuns, typeset } from './labels.ts';
+export { typeset } from './labels.ts';
 export { planesOf } from './sheet-planes.ts';
-export type { SheetPlot } from './sheet-plot.ts';
 export { sheetPlot } from './sheet-plot.ts';
 export { schematicOf } from './sheet-schematic.ts';
-export type { StraightLine } from './straight-line.ts';
-export type { RoleStyle, Token } from './style.ts';
+export type { Token } from './style.ts';
 export { ROLE_STYLES, TOKENS } from './style.ts';
-export type { RoleStyle, Token } from './style.ts';
-export { ROLE_STYLES, TOKENS } from './style.ts';
-export type { SvgOptions } from './svg.ts';
 export { escapeXml, svgText } from './svg.ts';
-export type { DeviceLaw, OperatingPoint, PlaneDevice, TransferInput } from './transfer-plane.ts';
 export { transferPlane } from './transfer-plane.ts';

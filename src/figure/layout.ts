@@ -25,7 +25,7 @@ const STEP = 8;
 const STUB = 12;
 
 /** The finished sketch with the wires' nets and pins. */
-export interface Laid {
+interface Laid {
   readonly sketch: Sketch;
   readonly pins: readonly Pin[];
   /** The net that stands for all nets joined to one by ties. */

@@ -16,7 +16,7 @@ export interface OutputDevice extends PlaneDevice {
   readonly load: StraightLine & { readonly label: string };
 }
 
-export interface OutputInput {
+interface OutputInput {
   readonly name: string;
   readonly channel: 'n' | 'p';
   /** The nominal device, or the corner, comes first; it is the one with the family. */

@@ -1,12 +1,12 @@
 // Points of a curve: evenly spaced, with some moved to where it bends, cut where it leaves the chart.
 
 /** How many points a curve has. */
-export const CURVE_POINTS = 129;
+const CURVE_POINTS = 129;
 /** Of those, how many go where the curve bends most. */
 const BEND_POINTS = 32;
 const HALVINGS = 50;
 
-export interface Sampled {
+interface Sampled {
   readonly x: Float64Array;
   readonly y: Float64Array;
 }

@@ -3,7 +3,7 @@
 
 import type { Role } from './geometry.ts';
 
-export interface RoleStyle {
+interface RoleStyle {
   readonly color: Token;
   /** Stroke width; 0 for areas without a rim. */
   readonly width: number;

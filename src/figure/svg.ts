@@ -11,7 +11,7 @@ const SERIF = 'var(--figure-serif, KaTeX_Math, Georgia, serif)';
 const SUBSCRIPT_SIZE = 0.75;
 const SUBSCRIPT_DROP = 0.25;
 
-export interface SvgOptions {
+interface SvgOptions {
   /** Makes the names of the drawing's own parts unique in a document that holds several. */
   readonly id: string;
   /** Whether symbols with a cell are told apart as buttons (`role`, `tabindex`, `data-cell`). */

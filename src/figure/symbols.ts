@@ -8,7 +8,7 @@ import type { LegKind } from './stage-input.ts';
 /** From the middle of a two-pole symbol to either pin. */
 export const HALF_LENGTH = 17;
 
-export interface Symbol2 {
+interface TwoPole {
   readonly items: readonly Item[];
   readonly box: Box;
   /** From the axis to the side on which the label stands. */
@@ -22,7 +22,7 @@ const SOURCE_ARROW = 19;
  * A two-pole symbol around (x, y) with its pins HALF_LENGTH away along `axis`; `forward` is true where a source drives
  * along +x or +y. Throws RangeError for a tie, which has no symbol.
  */
-export function twoPole(kind: LegKind, x: number, y: number, axis: 'x' | 'y', forward: boolean): Symbol2 {
+export function twoPole(kind: LegKind, x: number, y: number, axis: 'x' | 'y', forward: boolean): TwoPole {
   const place = (u: number, v: number): [number, number] => (axis === 'y' ? [x + v, y + u] : [x + u, y - v]);
   const line = (role: Role, ...pairs: readonly (readonly [number, number])[]): LineItem => ({
     kind: 'line',
@@ -115,7 +115,7 @@ export const FET = {
   bulkX: 8,
 } as const;
 
-export interface FetSymbol {
+interface FetSymbol {
   readonly items: readonly Item[];
   readonly boxes: readonly Box[];
 }

@@ -12,7 +12,7 @@ import { cutLine } from './straight-line.ts';
 /** Drain current in amperes, positive on both channels, from V_GS and V_DS in volts as true node differences. */
 export type DeviceLaw = (vgs: number, vds: number) => number;
 
-export interface OperatingPoint {
+interface OperatingPoint {
   readonly vgs: number;
   readonly vds: number;
   readonly id: number;
@@ -28,7 +28,7 @@ export interface PlaneDevice {
   readonly q: OperatingPoint;
 }
 
-export interface TransferInput {
+interface TransferInput {
   readonly name: string;
   readonly channel: 'n' | 'p';
   /** The nominal device, or the corner, comes first. */
