@@ -1,18 +1,16 @@
-// The whole page.
+// The whole page: a session with its sheet, shown as soon as one is open.
 
-import exampleSheet from '../../public/examples/crevasse-listener.txt?raw';
-import { createDesk } from './desk/index.ts';
-import { createSheetDocument } from './document/index.ts';
-import { SheetGrid } from './grid/index.ts';
+import { Show } from 'solid-js';
+import { createSession } from './session/index.ts';
+import { Shell } from './shell/index.ts';
 import './theme.css';
-import './page.css';
 
-/** The page with its one sheet. */
+/** The page. */
 export function App() {
-  const desk = createDesk(createSheetDocument(exampleSheet));
+  const session = createSession(window);
   return (
-    <main>
-      <SheetGrid desk={desk} />
-    </main>
+    <Show when={session.ready()}>
+      <Shell session={session} />
+    </Show>
   );
 }

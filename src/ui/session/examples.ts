@@ -1,0 +1,14 @@
+// The worked sheets that come with the program; the first opens at the first visit.
+
+import crevasse from '../../../public/examples/crevasse-listener.txt?raw';
+
+export interface Example {
+  readonly title: string;
+  readonly text: string;
+}
+
+/** In the order of the shelf. */
+export const EXAMPLES: readonly Example[] = [crevasse].map((text) => ({
+  text,
+  title: /^# (.*)$/m.exec(text)?.[1] ?? 'Example',
+}));

@@ -1,0 +1,3 @@
+// The page around the panes.
+
+export { Shell } from './shell.tsx';

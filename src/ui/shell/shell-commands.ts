@@ -1,0 +1,41 @@
+// The commands of the page as a whole.
+
+import type { Command } from '../desk/index.ts';
+
+export type DialogName = 'shelf' | 'share' | 'help' | 'record';
+
+export interface ShellActions {
+  readonly show: (dialog: DialogName) => void;
+  readonly find: () => void;
+  readonly toggleText: () => void;
+  readonly turnTheme: () => void;
+  readonly themeTitle: () => string;
+  readonly textTitle: () => string;
+}
+
+/** Undo, redo and the rows' own commands come with the grid. */
+export function shellCommands(actions: ShellActions): Command[] {
+  return [
+    { id: 'find', title: 'Find', keys: ['Ctrl+F'], run: actions.find },
+    {
+      id: 'text',
+      get title() {
+        return actions.textTitle();
+      },
+      keys: [],
+      run: actions.toggleText,
+    },
+    { id: 'shelf', title: 'Shelf', keys: ['Ctrl+O'], run: () => actions.show('shelf') },
+    { id: 'share', title: 'Share', keys: [], run: () => actions.show('share') },
+    { id: 'record', title: 'Record', keys: [], run: () => actions.show('record') },
+    {
+      id: 'theme',
+      get title() {
+        return actions.themeTitle();
+      },
+      keys: [],
+      run: actions.turnTheme,
+    },
+    { id: 'help', title: 'Help', keys: ['F1'], run: () => actions.show('help') },
+  ];
+}
