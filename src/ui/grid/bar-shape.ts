@@ -41,6 +41,15 @@ export function factorOf(pixels: number): number {
   return 4 ** ((2 * pixels) / BAR_WIDTH);
 }
 
+/** Room at either end of a scale of its own, as a share of it. */
+const OWN_ROOM = 0.08;
+
+/** How much of a value one pixel is on a scale of its own; null where that is not between two ends. */
+export function ownSpan(low: number | null, high: number | null): number | null {
+  if (low === null || high === null || low === high) return null;
+  return (high - low) / ((1 - 2 * OWN_ROOM) * BAR_WIDTH);
+}
+
 /** The share of the scale by which a value stands off the one in its middle. */
 export function shiftOf(value: number, middle: number): number {
   const ratio = value / middle;

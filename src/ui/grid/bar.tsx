@@ -5,7 +5,12 @@ import type { SpreadBar } from '../../figure/index.ts';
 import { BAR_HEIGHT, BAR_WIDTH, barShape } from './bar-shape.ts';
 
 /** Draws a bar; a tick that can be dragged is given by `turns`. */
-export function Bar(props: { readonly bar: SpreadBar; readonly turns: boolean; readonly shift: number }) {
+export function Bar(props: {
+  readonly bar: SpreadBar;
+  readonly turns: boolean;
+  readonly shift: number;
+  readonly onGrip?: (event: PointerEvent) => void;
+}) {
   const shape = () => barShape(props.bar, props.shift);
   return (
     <svg
@@ -30,7 +35,7 @@ export function Bar(props: { readonly bar: SpreadBar; readonly turns: boolean; r
       </For>
       <path class="bar-tick" d={`M${shape().tick} 6V19`} />
       <Show when={props.turns}>
-        <path class="bar-grip" d={`M${shape().tick} 2V23`} />
+        <path class="bar-grip" d={`M${shape().tick} 2V23`} onPointerDown={(event) => props.onGrip?.(event)} />
       </Show>
     </svg>
   );

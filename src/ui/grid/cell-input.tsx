@@ -6,18 +6,18 @@ import { whileEditing } from './keys.ts';
 
 /** Edits the text of the grid's editor. */
 export function CellInput(props: { readonly grid: Grid; readonly label: string }) {
-  let field!: HTMLInputElement;
+  let field: HTMLInputElement | undefined;
   const { editor } = props.grid;
 
   onMount(() => {
     const caret = editor.editing()?.caret ?? editor.text().length;
-    field.focus({ preventScroll: true });
-    field.setSelectionRange(caret, caret);
+    field?.focus({ preventScroll: true });
+    field?.setSelectionRange(caret, caret);
   });
 
   return (
     <input
-      ref={field}
+      ref={(element) => (field = element)}
       class="cell-input"
       type="text"
       autocomplete="off"

@@ -43,3 +43,8 @@ export function typedColumn(row: Row, column: Column): Column | null {
   if (row.type === 'ghost') return 'name';
   return row.editable.includes('entry') ? 'entry' : null;
 }
+
+/** Whether a click in a column (null: left of them all) folds or unfolds the row. */
+export function foldsByClick({ type }: Row, column: Column | null): boolean {
+  return type === 'more' || type === 'wiring' || column === null || column === 'mark';
+}

@@ -3,6 +3,7 @@
 import type { Command } from '../desk/index.ts';
 import type { Grid } from './grid.ts';
 import { moveRows, newLineBeside, nextFault, removeRows } from './row-commands.ts';
+import { stepNumber } from './turn-commands.ts';
 
 /** The commands of a grid. */
 export function gridCommands(grid: Grid): Command[] {
@@ -52,6 +53,20 @@ export function gridCommands(grid: Grid): Command[] {
       run: () => {
         if (grid.edit({ text: '' })) grid.commit('stay');
       },
+    },
+    {
+      id: 'step-up',
+      title: 'Next value up',
+      keys: ['Alt+PageUp'],
+      unavailable: noRow,
+      run: () => stepNumber(grid, 'up'),
+    },
+    {
+      id: 'step-down',
+      title: 'Next value down',
+      keys: ['Alt+PageDown'],
+      unavailable: noRow,
+      run: () => stepNumber(grid, 'down'),
     },
     { id: 'next-fault', title: 'Next failing or broken', keys: ['F8'], run: () => nextFault(grid, 1) },
     { id: 'previous-fault', title: 'Previous failing or broken', keys: ['Shift+F8'], run: () => nextFault(grid, -1) },

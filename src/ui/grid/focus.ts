@@ -6,13 +6,18 @@ import type { Column } from '../desk/index.ts';
 /** How long the ring around a row that was jumped to stays, in milliseconds. */
 const RING = 600;
 
-/** The row and column that an element inside the grid belongs to. */
-export function cellAt(target: EventTarget | null): { key: string; column: Column } | null {
+/** The row that an element inside the grid belongs to, and the column where it is in one. */
+export function rowAt(target: EventTarget | null): { key: string; column: Column | null } | null {
   if (!(target instanceof Element)) return null;
   const key = target.closest<HTMLElement>('[data-key]')?.dataset['key'];
   const written = target.closest<HTMLElement>('[data-column]')?.dataset['column'];
-  const column = COLUMNS.find((each) => each === written);
-  return key === undefined || column === undefined ? null : { key, column };
+  return key === undefined ? null : { key, column: COLUMNS.find((each) => each === written) ?? null };
+}
+
+/** The row and column that an element inside the grid belongs to. */
+export function cellAt(target: EventTarget | null): { key: string; column: Column } | null {
+  const place = rowAt(target);
+  return place && place.column !== null ? { key: place.key, column: place.column } : null;
 }
 
 /** The element of a cell. */

@@ -22,6 +22,12 @@ export interface Draft {
   readonly line: number;
 }
 
+export interface Dragged {
+  readonly key: string;
+  readonly from: number;
+  readonly to: number;
+}
+
 export interface Grid {
   readonly desk: Desk;
   readonly editor: Editor;
@@ -55,6 +61,11 @@ export interface Grid {
   toggle(key: string): boolean;
   /** Focuses the row of a line, or the one nearest. */
   focusLine(line: number, column: Column): void;
+  /** The mark of a run of steps: the same as long as the same thing is done to the same cell. */
+  runOf(what: string): string;
+  /** The tick that is being dragged, in SI. */
+  dragged(): Dragged | null;
+  setDragged(dragged: Dragged | null): void;
   onFocus(listener: (key: string, column: Column, jump: boolean) => void): void;
 }
 
@@ -64,6 +75,7 @@ export function createGrid(desk: Desk): Grid {
   const folds = createFolds();
   const editor = createEditor(document);
   const [draft, setDraft] = createSignal<Draft | null>(null);
+  const [dragged, setDragged] = createSignal<Dragged | null>(null);
   const [anchor, setAnchor] = createSignal<string | null>(null);
   /** Where vertical moves come back to after a row that has fewer columns. */
   let wished: Column = 'entry';
@@ -226,6 +238,20 @@ export function createGrid(desk: Desk): Grid {
     if (key.startsWith('field')) folds.set([`wiring:${cell}`], false);
   }
 
+  let run = { what: '', selection: desk.selection(), count: 0, text: '' };
+  /** A run ends when something else is selected or done. */
+  function runOf(what: string): string {
+    const selection = desk.selection();
+    const goes = run.what === what && run.selection === selection && run.text === document.undoLabel();
+    run = {
+      what,
+      selection,
+      count: goes ? run.count : run.count + 1,
+      text: `step ${row(selection?.row ?? '')?.name?.text}`,
+    };
+    return `${what} ${run.count}`;
+  }
+
   // A row that is gone (deleted, undone, folded) leaves the focus to its neighbour.
   let lastIndex = 0;
   createEffect(() => {
@@ -328,6 +354,9 @@ export function createGrid(desk: Desk): Grid {
       return true;
     },
     focusLine,
+    runOf,
+    dragged,
+    setDragged,
     onFocus(heard) {
       listener = heard;
     },

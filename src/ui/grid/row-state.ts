@@ -4,6 +4,7 @@ import { createMemo } from 'solid-js';
 import type { Column } from '../desk/index.ts';
 import { emptyRow } from '../rows/index.ts';
 import type { Row, RowFault } from '../rows/index.ts';
+import { shiftOf } from './bar-shape.ts';
 import { columnsOf } from './columns.ts';
 import type { Editing } from './editor.ts';
 import type { Grid } from './grid.ts';
@@ -19,6 +20,8 @@ export interface RowState {
   editedColumn(): Column | null;
   /** What is wrong, once there is time to say it. */
   fault(): RowFault | null;
+  /** How far the tick is dragged off its place, as a share of the scale. */
+  shift(): number;
   /** Id of the element that says it. */
   readonly messageId: string;
 }
@@ -49,6 +52,10 @@ export function createRowState(grid: Grid, key: string): RowState {
     editing,
     editedColumn,
     fault,
+    shift() {
+      const dragged = grid.dragged();
+      return dragged?.key === key && row().bar?.scale === 'shared' ? shiftOf(dragged.to, dragged.from) : 0;
+    },
     messageId: `about-${key.replace(/[^\w-]/g, '_')}`,
   };
 }

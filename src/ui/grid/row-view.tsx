@@ -7,6 +7,7 @@ import { EntryText, NameText, NumberText, SourceText } from './cell-texts.tsx';
 import type { Grid } from './grid.ts';
 import { MarkShape } from './mark.tsx';
 import { RowMessage } from './row-message.tsx';
+import { dragTick } from './drag.ts';
 import { createRowState } from './row-state.ts';
 import type { RowState } from './row-state.ts';
 
@@ -114,7 +115,16 @@ function Numbers(props: { readonly state: RowState }) {
         <NumberText figure={row().high} />
       </Cell>
       <Cell state={state} column="spread">
-        <Show when={row().bar}>{(bar) => <Bar bar={bar()} turns={row().turns} shift={0} />}</Show>
+        <Show when={row().bar}>
+          {(bar) => (
+            <Bar
+              bar={bar()}
+              turns={row().turns}
+              shift={state.shift()}
+              onGrip={(event) => dragTick(state.grid, state.key, event)}
+            />
+          )}
+        </Show>
       </Cell>
       <Cell state={state} column="source">
         <Show

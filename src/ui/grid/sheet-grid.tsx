@@ -6,23 +6,24 @@ import './grid.css';
 import { gridCommands } from './commands.ts';
 import { createGrid } from './grid.ts';
 import { navigate } from './keys.ts';
-import { cellAt, createFocus } from './focus.ts';
+import { cellAt, createFocus, rowAt } from './focus.ts';
+import { foldsByClick } from './columns.ts';
 import { RowView } from './row-view.tsx';
 
 /** The grid of a desk's sheet. */
 export function SheetGrid(props: { readonly desk: Desk }) {
   const grid = createGrid(props.desk);
-  let table!: HTMLDivElement;
+  let table: HTMLDivElement | undefined;
 
   onMount(() => {
-    grid.onFocus(createFocus(table));
+    if (table) grid.onFocus(createFocus(table));
     props.desk.addCommands(gridCommands(grid));
   });
 
   return (
     <div class="sheet">
       <div
-        ref={table}
+        ref={(element) => (table = element)}
         class="grid"
         classList={{ 'grid-held': props.desk.document.held() }}
         role="grid"
@@ -43,9 +44,9 @@ export function SheetGrid(props: { readonly desk: Desk }) {
           if (cellAt(event.target) && !grid.editor.editing()) grid.edit();
         }}
         onClick={(event) => {
-          const place = cellAt(event.target);
+          const place = rowAt(event.target);
           const row = place && grid.row(place.key);
-          if (place && row?.fold && place.column === 'name' && row.type !== 'title') grid.toggle(place.key);
+          if (place && row?.fold && foldsByClick(row, place.column)) grid.toggle(place.key);
         }}
       >
         <div role="row" class="row row-columns" aria-rowindex={1}>

@@ -13,6 +13,7 @@ import { conditionText, tableEntry } from './part-numbers.ts';
 import { splitValues } from './pinned.ts';
 import { emptyRow, MARK_TEXT } from './row.ts';
 import type { Figure, Mark, Row, RowEntry } from './row.ts';
+import { valueWords } from './value-words.ts';
 
 /** A row and the line it stands for; null for a row that is no line of the text. */
 export interface PlacedRow {
@@ -155,7 +156,7 @@ function valueRow(value: OfferedReading, cell: CellReading): Row {
     mark: 'computed',
     markText: MARK_TEXT.computed,
     name: innerName(value.name, ownerText(cell)),
-    entry: { text: firstClause(value.sentence), look: 'words' },
+    entry: { text: valueWords(value), look: 'words' },
     nominal: valueFigure(value),
     source: missing ? { text: missing.text, note: '', look: 'words' } : null,
   };
@@ -172,10 +173,6 @@ function moreRow(key: string, cell: CellReading, count: number, open: boolean): 
     name: wordName(text, `${text} of ${cell.name}`),
     fold: { key, open },
   };
-}
-
-function firstClause(sentence: string): string {
-  return sentence.replace(/[,:;.].*$/s, '').replace(/^./, (letter) => letter.toLowerCase());
 }
 
 function ownerText(cell: CellReading): string {

@@ -88,7 +88,7 @@ function numbersOf(cell: CellReading, sheet: Sheet): Numbers {
   const { tree } = cell;
   if (cell.kind === 'check' && tree.entry.type === 'check' && cell.check !== null) {
     const compared = comparedFigure(tree.entry.condition, tree.line, sheet);
-    return { ...NO_NUMBERS, nominal: compared ?? (cell.reading && valueFigure(cell.reading)) };
+    return { ...NO_NUMBERS, nominal: compared };
   }
   if (cell.reading === null) return NO_NUMBERS;
   if (!cell.isInput && cell.spread === null) return { ...NO_NUMBERS, nominal: valueFigure(cell.reading) };

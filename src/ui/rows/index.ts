@@ -8,3 +8,4 @@ export type { EditPlace } from './row-edits.ts';
 export { editLabel, editSplices, editText } from './row-edits.ts';
 export type { SheetRows } from './sheet-rows.ts';
 export { sheetRows } from './sheet-rows.ts';
+export { nextValue, setTurned, snapped, turnedNumber } from './turning.ts';

@@ -27,7 +27,10 @@ export function splitValues(
   used: ReadonlySet<string>,
 ): { pinned: readonly OfferedReading[]; folded: readonly OfferedReading[] } {
   const given = new Set(cell.fields.map((field) => field.name));
-  const offered = cell.kind === 'part' ? cell.values.filter((value) => !isField(value.name, given)) : cell.values;
+  const offered =
+    cell.kind === 'part' || cell.kind === 'point'
+      ? cell.values.filter((value) => !isField(value.name, given))
+      : cell.values;
   const own = cell.kind === 'part' || cell.kind === 'another' ? LAW : BIAS;
   const isPinned = ({ name }: OfferedReading): boolean =>
     own.has(name.slice(name.lastIndexOf('.') + 1)) || used.has(`${cell.name}.${name}`);

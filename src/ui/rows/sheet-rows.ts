@@ -26,6 +26,14 @@ export interface SheetRows {
 /** Marks that a folded row passes on, worst first. */
 const WORST: readonly Mark[] = ['broken', 'fails', 'fails-at-an-end'];
 
+const TITLE_FOLD = 'title';
+const SHOWN_IN_TITLE = ['number', 'revision', 'status'] as const;
+const TITLE_WORDS: Readonly<Record<(typeof SHOWN_IN_TITLE)[number], string>> = {
+  number: '',
+  revision: 'revision ',
+  status: '',
+};
+
 const EMPTY_SHEET = 'V_DD = 15 V ± 5 %';
 
 /** The rows of a sheet; rows that are as they were in `previous` are the same objects. */
@@ -49,7 +57,7 @@ export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows |
         const key = keys(`cell:${cell.name}`);
         inner.push(...blockOfCell(key, cell, sheet, used, isFolded));
       } else {
-        const row = plainRow(line, { titleFields, loose, keys, tree });
+        const row = plainRow(line, { titleFields, loose, keys, tree, isFolded });
         if (row) inner.push({ row, line: line.index });
       }
     }
@@ -163,18 +171,18 @@ interface Surroundings {
   readonly loose: ReadonlyMap<number, Parameters<typeof rowFault>[0]>;
   readonly keys: (wanted: string) => string;
   readonly tree: SheetTree;
+  readonly isFolded: Folding;
 }
 
-function plainRow(line: Line, { titleFields, loose, keys, tree }: Surroundings): Row | null {
+function plainRow(line: Line, { titleFields, loose, keys, tree, isFolded }: Surroundings): Row | null {
   const read = line.tree;
   const { start, end } = entrySpan(line);
   const text = line.text.slice(start, end);
   const key = `line:${line.index}`;
-  if (line.index === tree.title?.line.index) {
-    return { ...emptyRow('title', 'title'), markText: 'title', name: wordName(text), editable: ['name'] };
-  }
+  if (line.index === tree.title?.line.index) return titleRow(text, tree, isFolded);
   const field = titleFields.get(line.index);
   if (field) {
+    if (isFolded(TITLE_FOLD, true)) return null;
     const label = labelText(field.label);
     const row = emptyRow(keys(`title:${label}`), 'title-field');
     return { ...row, markText: 'title', name: wordName(label), entry: proseEntry(text), editable: ['entry'] };
@@ -194,6 +202,21 @@ function plainRow(line: Line, { titleFields, loose, keys, tree }: Surroundings):
     return { ...emptyRow(key, read.type), markText: read.type, entry: proseEntry(text), editable: ['entry'] };
   }
   return null;
+}
+
+/** The title, with what is filled in below it said in one line while that is folded. */
+function titleRow(text: string, tree: SheetTree, isFolded: Folding): Row {
+  const fields = tree.title?.fields ?? [];
+  const open = fields.length > 0 && !isFolded(TITLE_FOLD, true);
+  const row: Row = { ...emptyRow('title', 'title'), markText: 'title', name: wordName(text), editable: ['name'] };
+  if (fields.length === 0) return row;
+  const said = SHOWN_IN_TITLE.flatMap((label) => {
+    const field = fields.find((each) => labelText(each.label) === label);
+    return field?.body.type === 'text' && field.body.text !== '' ? [TITLE_WORDS[label] + field.body.text] : [];
+  });
+  const count = `${fields.length} lines`;
+  const source: RowSource = { text: open ? '' : [...said, count].join(' · '), note: '', look: 'words' };
+  return { ...row, source, fold: { key: TITLE_FOLD, open } };
 }
 
 // ---------------------------------------------------------------- identity
