@@ -42,7 +42,7 @@ describe('a random stage', () => {
     for (const { stage, label } of stages) {
       const { value, emitter } = stage;
       const imbalance = currentImbalance(stage.net, emitter.value, (p) => value(`V_${p}`), value('I_D'), value('I_G'));
-      expect(imbalance, label).toBeLessThan(1e-11);
+      expect(imbalance, label).toBeLessThan(1e-12);
     }
   });
 

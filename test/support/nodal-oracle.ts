@@ -14,7 +14,7 @@ export interface OracleSlopes {
 }
 
 /**
- * Largest sum of currents (A) at any place that is free at rest, beyond what the last digits of the voltages make, divided by the largest current that flows anywhere.
+ * Largest sum of currents (A) at any place that is free at rest, beyond what the last digits of the highest voltage make, divided by the largest current that flows anywhere.
  * `voltage` gives each place's voltage, `current` the channel current from drain to source in the true frame.
  */
 export function currentImbalance(
@@ -37,12 +37,14 @@ export function currentImbalance(
     if (place.startsWith('=')) return valueOf(Number(place.slice(1)));
     return place === '0' || place === 'signal' ? 0 : voltage(place);
   };
+  // A voltage may be the difference of two of the order of the highest one in the stage.
+  const highest = Math.max(...net.legs.flatMap((leg) => [Math.abs(at(leg.from)), Math.abs(at(farPlace(leg)))]));
   for (const leg of net.legs) {
     const far = farPlace(leg);
     if (leg.element?.kind === 'resistor') {
       const ohms = valueOf(leg.element.value);
       flow(leg.from, far, (at(leg.from) - at(far)) / ohms);
-      const rounding = (2 ** -50 * (Math.abs(at(leg.from)) + Math.abs(at(far)))) / ohms;
+      const rounding = (2 ** -50 * highest) / ohms;
       for (const place of [leg.from, far]) roundings.set(groups(place), (roundings.get(groups(place)) ?? 0) + rounding);
     }
     if (leg.element?.kind === 'source') {
