@@ -65,13 +65,23 @@ const WIDTHS: Readonly<Record<string, number>> = {
   Ω: 0.77,
 };
 
-/** `V_DD` as an italic V with an upright DD below, `Q1` and `load` upright and whole; no underscore is left. */
-export function typeset(name: string): Run[] {
+/**
+ * `V_DD` as an italic V with an upright DD below, `Q1` and `load` upright and whole; no underscore is left. The owner of
+ * a value, as in `A1.I_D`, stands in the subscript.
+ */
+export function typeset(path: string): Run[] {
+  const names = path.split('.');
+  const name = names[names.length - 1]!;
+  const owner = names.slice(0, -1).join('.');
   const [head = '', ...rest] = name.split('_').filter((part) => part !== '');
   const letter = GREEK[head];
-  if (!name.includes('_')) return [{ text: letter ?? head, style: letter === undefined ? 'upright' : 'italic' }];
-  const runs: Run[] = [{ text: letter ?? head, style: 'italic' }];
-  if (rest.length > 0) runs.push({ text: rest.map((part) => GREEK[part] ?? part).join(','), style: 'subscript' });
+  const isQuantity = name.includes('_') || letter !== undefined;
+  const runs: Run[] = [{ text: letter ?? head, style: isQuantity ? 'italic' : 'upright' }];
+  const subscript = [
+    ...(rest.length > 0 ? [rest.map((part) => GREEK[part] ?? part).join(',')] : []),
+    ...(owner === '' ? [] : [owner]),
+  ];
+  if (subscript.length > 0) runs.push({ text: subscript.join(', '), style: 'subscript' });
   return runs;
 }
 
@@ -82,7 +92,9 @@ export function plain(text: string): Run[] {
 
 /** A sentence with the names in it typeset: `bias line, 1/R_S`. */
 export function proseRuns(text: string): Run[] {
-  return text.split(/([A-Za-z][A-Za-z0-9]*_\w+)/).flatMap((part, at) => (at % 2 === 1 ? typeset(part) : plain(part)));
+  return text
+    .split(/((?:[A-Za-z][A-Za-z0-9]*\.)*[A-Za-z][A-Za-z0-9]*_\w+)/)
+    .flatMap((part, at) => (at % 2 === 1 ? typeset(part) : plain(part)));
 }
 
 /** Two texts one behind the other, with a blank between them where both say something. */

@@ -4,19 +4,22 @@
 // of a horizontal and a vertical wire, never of a wire and a symbol.
 
 import { Board } from './board.ts';
+import { currentArrow } from './current-arrow.ts';
 import type { Built } from './elements.ts';
 import { hangingLeg, lyingLeg, lyingLength, railNeedsName, uprightLeg, WIRE_HALF } from './elements.ts';
-import type { Box, Item } from './geometry.ts';
+import type { Box } from './geometry.ts';
 import { boxAround } from './geometry.ts';
 import { joinRuns, LABEL_SIZE, plain, textBox, typeset, widthOf } from './labels.ts';
 import type { Piece, Plan } from './pieces.ts';
 import { BULK_PIN_ROW, GATE_ROW } from './rows.ts';
 import type { Rows, Spot } from './rows.ts';
-import { fetSentence, legSentence, placeSentence } from './sentences.ts';
+import { CIRCLE_RADIUS, circlePlace } from './places.ts';
+import { Reach } from './reach.ts';
+import { fetSentence, legSentence, sourceName } from './sentences.ts';
 import type { Pin } from './sketch.ts';
 import { labelText, Sketch } from './sketch.ts';
 import type { SchematicInput, StageLeg } from './stage-input.ts';
-import { arrowHead, FET, fetSymbol } from './symbols.ts';
+import { FET, fetSymbol } from './symbols.ts';
 import { leafOf } from './topology.ts';
 import type { LineStep, Side, Topology } from './topology.ts';
 
@@ -47,10 +50,7 @@ class Layout {
   readonly #topology: Topology;
   readonly #plan: Plan;
   readonly #rows: Rows;
-  /** How far the wire of a node reaches, by side. */
-  readonly #reach = new Map<string, number>();
-  /** All x at which something meets the wire of a node. */
-  readonly #touch = new Map<string, number[]>();
+  readonly #reach = new Reach();
 
   constructor(input: SchematicInput, topology: Topology, plan: Plan) {
     this.#input = input;
@@ -65,9 +65,8 @@ class Layout {
     this.#placeLine(this.#topology.upper, this.#topology.above, true);
     this.#placeLine(this.#topology.lower, this.#topology.below, false);
     for (const piece of this.#plan.pieces) this.#place(piece);
-    for (const [node, xs] of this.#touch) {
-      const y = this.#yOf(node);
-      this.sketch.wire(node, Math.min(...xs), y, Math.max(...xs), y);
+    for (const { node, from, to } of this.#reach.spans()) {
+      this.sketch.wire(node, from, this.#yOf(node), to, this.#yOf(node));
     }
   }
 
@@ -156,29 +155,16 @@ class Layout {
     this.pins.push({ net: this.#topology.upper, x: 0, y: -FET.reach, towards: 'south' });
     this.pins.push({ net: this.#topology.lower, x: 0, y: FET.reach, towards: 'north' });
     this.pins.push({ net: 'gate', x: FET.gateX, y: this.#rows.yOf(GATE_ROW), towards: 'east' });
-    this.#touchAt('gate', 'left', FET.gateX);
+    this.#reach.touch('gate', 'left', FET.gateX);
     if (this.#topology.hasBulk) {
       this.pins.push({ net: 'bulk', x: FET.bulkX, y: 0, towards: 'west' });
-      if (this.#rowOf('bulk') === BULK_PIN_ROW) this.#touchAt('bulk', 'right', FET.bulkX);
+      if (this.#rowOf('bulk') === BULK_PIN_ROW) this.#reach.touch('bulk', 'right', FET.bulkX);
     }
-    this.#placeCurrent(top);
-  }
-
-  /** The arrow of the current stands beside the upper lead, its value at the tail, on the side that the gate leaves free. */
-  #placeCurrent(top: number): void {
-    const { current, channel } = this.#input;
-    if (current === null) return;
-    const down = (channel === 'n') === (this.#topology.upper === 'drain');
-    const side = this.#topology.upper === 'source' ? 1 : -1;
-    const x = 8 * side;
-    const y = (top - FET.reach) / 2;
-    const [tail, tip] = down ? [y - 7, y + 7] : [y + 7, y - 7];
-    const text = labelText('current', x + 5 * side, y + 4, side > 0 ? 'start' : 'end', plain(current));
-    const box = boxAround([textBox(text), { x0: x - 3, y0: y - 7, x1: x + 3, y1: y + 7 }]);
-    this.sketch.mark({ kind: 'line', role: 'current', points: [x, tail, x, tip - Math.sign(tip - tail) * 6] }, box);
-    for (const item of arrowHead([x, tip], [x, tail], 'current')) this.sketch.mark(item, box);
-    this.sketch.text(text);
-    this.#board.occupy([box]);
+    if (this.#input.current === null) return;
+    const down = (this.#input.channel === 'n') === !sourceUp;
+    const arrow = currentArrow(this.#input.current, (top - FET.reach) / 2, { down, right: sourceUp });
+    for (const item of arrow.items) this.sketch.mark(item, arrow.box);
+    this.#board.occupy([arrow.box]);
   }
 
   #placeLine(start: 'drain' | 'source', steps: readonly LineStep[], up: boolean): void {
@@ -196,8 +182,8 @@ class Layout {
   }
 
   #placeLineNode(node: string): void {
-    this.#touchAt(node, 'right', 0);
-    this.#touchAt(node, 'left', 0);
+    this.#reach.touch(node, 'right', 0);
+    this.#reach.touch(node, 'left', 0);
     const runs = this.#nodeRuns(node);
     if (runs.length === 0) return;
     const text = labelText('voltage', 7, this.#yOf(node) - 6, 'start', runs);
@@ -210,7 +196,7 @@ class Layout {
   #place(piece: Piece): void {
     const { side, node } = piece;
     const direction = side === 'left' ? -1 : 1;
-    const start = this.#reachOf(node, side) + direction * STEP;
+    const start = this.#reach.of(node, side) + direction * STEP;
     const y = this.#yOf(node);
     switch (piece.kind) {
       case 'label':
@@ -228,7 +214,7 @@ class Layout {
           direction,
         );
         for (const { leg, parts } of built(x)) this.#addLeg(leg, parts);
-        return this.#touchAt(node, side, x);
+        return this.#reach.touch(node, side, x);
       }
       case 'chord':
         return this.#placeColumn(piece.leg, node, piece.far, side, start);
@@ -249,13 +235,13 @@ class Layout {
       case 'begin': {
         // A branch that hangs on nothing: its wire begins at whatever comes first.
         const x = this.#fit([{ x0: -WIRE_HALF, y0: y - 8, x1: WIRE_HALF, y1: y + 8 }], 60, 1);
-        this.#reach.set(`${node} ${side}`, x);
+        this.#reach.extend(node, side, x);
         return;
       }
       case 'terminal':
         return this.#placeTerminal(node, side, start, y, piece.last);
       case 'settle': {
-        const far = this.#reachOf(node, side);
+        const far = this.#reach.of(node, side);
         this.#board.occupy([{ x0: Math.min(0, far), y0: y - 2, x1: Math.max(0, far), y1: y + 2 }]);
       }
     }
@@ -268,18 +254,18 @@ class Layout {
     const box = { x0: side === 'left' ? -width : 0, y0: y - 17, x1: side === 'left' ? 0 : width, y1: y - 3 };
     const x = this.#fit([box], start, side === 'left' ? -1 : 1);
     this.sketch.text(labelText('voltage', x, y - 6, side === 'left' ? 'end' : 'start', runs));
-    this.#reach.set(`${node} ${side}`, side === 'left' ? x - width : x + width);
+    this.#reach.extend(node, side, side === 'left' ? x - width : x + width);
   }
 
   #placeColumn(index: number, node: string, far: string, side: Side, start: number): void {
     const spot = this.#rows.betweenSpot(this.#rowOf(node), this.#rowOf(far));
     const direction = side === 'left' ? -1 : 1;
-    const known = this.#touch.has(far) ? this.#reachOf(far, side) + direction * STEP : start;
+    const known = this.#reach.knows(far) ? this.#reach.of(far, side) + direction * STEP : start;
     const from = direction < 0 ? Math.min(start, known) : Math.max(start, known);
     const x = this.#fit(this.#upright(index, node, far, 0, spot, false).boxes, from, direction);
     this.#addLeg(index, this.#upright(index, node, far, x, spot, false));
-    this.#touchAt(node, side, x);
-    this.#touchAt(far, side, x);
+    this.#reach.touch(node, side, x);
+    this.#reach.touch(far, side, x);
   }
 
   #placeLying(index: number, node: string, child: string, side: Side, start: number, y: number): void {
@@ -289,8 +275,8 @@ class Layout {
       lyingLeg(leg, index, { x, y, near: node, far: child, direction, words: 'above' });
     const x = this.#fit(build(0).boxes, start, direction);
     this.#addLeg(index, build(x));
-    this.#touchAt(node, side, x);
-    this.#touchAt(child, side, x + direction * lyingLength(leg));
+    this.#reach.touch(node, side, x);
+    this.#reach.touch(child, side, x + direction * lyingLength(leg));
   }
 
   #placeBridge(index: number, node: string, start: number, y: number): void {
@@ -303,9 +289,9 @@ class Layout {
     const x = this.#fit([...build(0).boxes, drop], start, -1);
     this.#addLeg(index, build(x));
     this.sketch.wire('gate', x - width, y, x - width, gateY);
-    this.#touchAt(node, 'left', x);
+    this.#reach.touch(node, 'left', x);
     // On the gate's row: the lying element ends on the same net, but at another height.
-    this.#touchAt('gate', 'left', x - width);
+    this.#reach.touch('gate', 'left', x - width);
   }
 
   #placeRiser(): void {
@@ -318,40 +304,36 @@ class Layout {
     this.#board.occupy([{ x0: 0, y0: -2, x1: x, y1: 2 }]);
     this.sketch.wire('bulk', FET.bulkX, 0, x, 0);
     this.sketch.wire('bulk', x, 0, x, y);
-    this.#touchAt('bulk', 'right', x);
-    this.#touchAt('bulk', 'left', x);
+    this.#reach.touch('bulk', 'right', x);
+    this.#reach.touch('bulk', 'left', x);
   }
 
   /** The circle at which the signal comes in. */
   #placeLeaf(index: number, side: Side): void {
-    const { to } = this.#leg(index);
     const leaf = leafOf(index);
+    const name = sourceName(this.#leg(index));
     const y = this.#yOf(leaf);
     const direction = side === 'left' ? -1 : 1;
-    const name = to.kind === 'common' ? 'common' : to.name.replace('-', '−');
-    const label = labelText('note', 0, y + 17, 'middle', plain(name));
-    const circle: Box = { x0: -4, y0: y - 4, x1: 4, y1: y + 4 };
-    const x = this.#fit([circle, textBox(label)], this.#reachOf(leaf, side) + direction * STUB, direction);
-    this.sketch.wire(leaf, this.#reachOf(leaf, side), y, x - direction * 3, y);
-    this.#addPlace(placeSentence(name), [circleAt(x, y), { ...label, x }]);
-    this.pins.push({ net: leaf, x: x - direction * 3, y, towards: direction < 0 ? 'west' : 'east' });
+    const start = this.#reach.of(leaf, side);
+    const x = this.#fit(circlePlace(name, plain(name), 0, y, 'below').boxes, start + direction * STUB, direction);
+    this.sketch.group(circlePlace(name, plain(name), x, y, 'below').group);
+    this.sketch.wire(leaf, start, y, x - direction * CIRCLE_RADIUS, y);
+    this.#endAtCircle(leaf, x, y, direction);
   }
 
   /** The circle at which a node is taken out: at the end of its wire, or on it with the name above. */
   #placeTerminal(node: string, side: Side, start: number, y: number, last: boolean): void {
     const direction = side === 'left' ? -1 : 1;
-    const circle: Box = { x0: -4, y0: y - 4, x1: 4, y1: y + 4 };
-    const beside = last && side === 'right';
-    const label = beside
-      ? labelText('note', 9, y + 4, 'start', typeset(node))
-      : labelText('note', 0, last ? y + 17 : y - 9, 'middle', typeset(node));
-    const x = this.#fit([circle, textBox(label)], start + (last ? direction * 4 : 0), direction);
-    this.#addPlace(placeSentence(node), [circleAt(x, y), { ...label, x: label.x + x }]);
-    if (last) {
-      this.pins.push({ net: node, x: x - direction * 3, y, towards: direction < 0 ? 'west' : 'east' });
-      return this.#touchAt(node, side, x - direction * 3);
-    }
-    return this.#touchAt(node, side, x);
+    const words = !last ? 'above' : side === 'right' ? 'right' : 'below';
+    const from = start + (last ? direction * 4 : 0);
+    const x = this.#fit(circlePlace(node, typeset(node), 0, y, words).boxes, from, direction);
+    this.sketch.group(circlePlace(node, typeset(node), x, y, words).group);
+    if (last) this.#endAtCircle(node, x, y, direction);
+    this.#reach.touch(node, side, last ? x - direction * CIRCLE_RADIUS : x);
+  }
+
+  #endAtCircle(net: string, x: number, y: number, direction: 1 | -1): void {
+    this.pins.push({ net, x: x - direction * CIRCLE_RADIUS, y, towards: direction < 0 ? 'west' : 'east' });
   }
 
   // -------------------------------------------------------------- elements
@@ -387,20 +369,6 @@ class Layout {
     });
   }
 
-  #addPlace(sentence: string, items: readonly Item[]): void {
-    const boxes = items.map((item) => (item.kind === 'text' ? textBox(item) : circleBox(item)));
-    this.sketch.group({
-      kind: 'group',
-      of: 'place',
-      leg: null,
-      cell: null,
-      sentence,
-      fails: false,
-      box: boxAround(boxes),
-      items,
-    });
-  }
-
   #nodeRuns(node: string): ReturnType<typeof plain> {
     const voltage = plain(this.#input.voltages[node] ?? '');
     const isTerminal = node === 'gate' || node === 'drain' || node === 'source' || node === 'bulk';
@@ -425,22 +393,4 @@ class Layout {
   #isChannel(node: string): boolean {
     return node === this.#topology.upper || node === this.#topology.lower;
   }
-  #reachOf(node: string, side: Side): number {
-    return this.#reach.get(`${node} ${side}`) ?? this.#touch.get(node)?.[0] ?? 0;
-  }
-  #touchAt(node: string, side: Side, x: number): void {
-    this.#touch.set(node, [...(this.#touch.get(node) ?? []), x]);
-    const key = `${node} ${side}`;
-    const before = this.#reach.get(key) ?? x;
-    this.#reach.set(key, side === 'left' ? Math.min(before, x) : Math.max(before, x));
-  }
-}
-
-function circleAt(x: number, y: number): Item {
-  return { kind: 'circle', role: 'terminal', x, y, radius: 3, filled: false };
-}
-
-function circleBox(item: Item): Box {
-  if (item.kind !== 'circle') throw new RangeError(`${item.kind} is not a circle`);
-  return { x0: item.x - item.radius, y0: item.y - item.radius, x1: item.x + item.radius, y1: item.y + item.radius };
 }

@@ -2,7 +2,7 @@
 // and pushed outwards in turn. What comes first stands nearest to the channel. Chords come before
 // branches, because a branch takes the rest of its row.
 
-import type { SchematicInput } from './stage-input.ts';
+import type { SchematicInput, StageLeg } from './stage-input.ts';
 import type { Chord, Hang, Side, Topology, TreeEdge } from './topology.ts';
 import { BULK_PIN_ROW, GATE_ROW, Rows } from './rows.ts';
 
@@ -116,6 +116,12 @@ class Planner {
     return new Rows(this.#above, this.#topology.upper, this.#topology.lower, this.#below);
   }
 
+  /** Nothing but ties: its voltage stands where it is tied to. */
+  #bulkIsTied(): boolean {
+    const isBulk = ({ from, to }: StageLeg): boolean => from === 'bulk' || (to.kind === 'node' && to.name === 'bulk');
+    return this.#input.legs.every((leg) => !isBulk(leg) || leg.kind === 'tie');
+  }
+
   #bulkHangsUp(): boolean {
     const hangs = this.#topology.hangs.get('bulk') ?? [];
     return hangs.length > 0 && hangs.every(({ up }) => up);
@@ -179,7 +185,7 @@ class Planner {
     };
     chords.filter(isBulk).forEach(add);
     if (hasBulk) {
-      this.#pieces.push({ kind: 'label', side: 'right', node: 'bulk' });
+      if (!this.#bulkIsTied()) this.#pieces.push({ kind: 'label', side: 'right', node: 'bulk' });
       this.#outwards('bulk', 'right', true);
       if (this.#bulkOnPin) this.#pieces.push({ kind: 'settle', side: 'right', node: 'bulk' });
     }

@@ -29,6 +29,11 @@ export function placeSentence(name: string): string {
   return `place ${name}`;
 }
 
+/** How a leg to the test source names its end: `signal`, `−signal`, `common`. */
+export function sourceName({ to }: StageLeg): string {
+  return to.kind === 'common' ? 'common' : to.name.replace('-', '−');
+}
+
 /** The whole stage: its FET, what hangs on each place, and what is known of voltages and current. */
 export function stageSentence(input: SchematicInput): string {
   const parts = [`${fetSentence(input)}.`, ...input.legs.map((leg) => `${legSentence(leg)}.`)];

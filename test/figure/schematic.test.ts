@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { SchematicInput } from '../../src/figure/index.ts';
+import type { GroupItem, Item, SchematicInput } from '../../src/figure/index.ts';
 import { drawSchematic } from '../../src/figure/index.ts';
 import { findOverlaps } from './overlap.ts';
 import { readBack } from './read-back.ts';
@@ -97,4 +97,73 @@ describe('the schematic of a stage', () => {
     }
     expect(faults).toEqual([]);
   }, 60_000);
+});
+
+describe('the search for overlaps', () => {
+  const drawing = drawSchematic(KNOWN_STAGES['common source']!);
+  const planted = (item: Item): string[] => {
+    const changed = { ...drawing, items: [...drawing.items, item] };
+    return findOverlaps(changed, readBack(changed));
+  };
+  const resistor = drawing.items.find((item): item is GroupItem => item.kind === 'group' && item.cell === 'R_D')!;
+
+  it('finds a wire across a symbol and its words', () => {
+    const { x0, x1 } = resistor.box;
+    const words = resistor.items.findLast((item) => item.kind === 'text')!;
+    const y = words.kind === 'text' ? words.y - 4 : NaN;
+    const found = planted({ kind: 'line', role: 'wire', points: [x0 - 20, y, x1 + 20, y] });
+    expect(found).toContain(`a wire covers ${resistor.sentence}`);
+    expect(found.some((each) => each.startsWith('a wire covers text'))).toBe(true);
+    expect(found.some((each) => each.startsWith('a wire ends in nothing'))).toBe(true);
+  });
+
+  it('finds words upon words', () => {
+    const text = resistor.items.find((item) => item.kind === 'text')!;
+    expect(planted(text)[0]).toMatch(/^text ".*" covers text/);
+  });
+
+  it('finds what is cut off', () => {
+    const text: Item = {
+      kind: 'text',
+      role: 'label',
+      x: -3,
+      y: 20,
+      anchor: 'start',
+      size: 12,
+      runs: [{ text: 'out', style: 'upright' }],
+    };
+    expect(planted(text)).toContain('text "out" is cut off');
+  });
+
+  it('finds a leg that is joined to the wrong node', () => {
+    const input = KNOWN_STAGES['common source']!;
+    const wrong = {
+      ...input,
+      legs: input.legs.map((each) => (each.label === 'R_D' ? { ...each, from: 'source' } : each)),
+    };
+    expect(wrongConnections(wrong, readBack(drawing))).not.toEqual([]);
+  });
+});
+
+describe('what a schematic says', () => {
+  it('is one sentence for each symbol', () => {
+    const { items, sentence } = drawSchematic(KNOWN_STAGES['current source load']!);
+    const said = items.flatMap((item) => (item.kind === 'group' ? [item.sentence] : []));
+    expect(said).toContain('I_0, current source of 2 mA, from V_DD, 18 V to drain');
+    expect(said).toContain('Q1, n-JFET');
+    expect(sentence).toContain('Channel current 1.16 mA. Output at drain.');
+  });
+
+  it('shows no underscore', () => {
+    const texts: string[] = [];
+    const collect = (list: readonly Item[]): void => {
+      for (const item of list) {
+        if (item.kind === 'group') collect(item.items);
+        if (item.kind === 'text') texts.push(item.runs.map(({ text }) => text).join(''));
+      }
+    };
+    collect(drawSchematic(KNOWN_STAGES['current source load']!).items);
+    expect(texts.filter((text) => text.includes('_'))).toEqual([]);
+    expect(texts).toContain('RG');
+  });
 });
