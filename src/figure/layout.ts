@@ -372,7 +372,9 @@ class Layout {
   #nodeRuns(node: string): ReturnType<typeof plain> {
     const voltage = plain(this.#input.voltages[node] ?? '');
     const isTerminal = node === 'gate' || node === 'drain' || node === 'source' || node === 'bulk';
-    const marked = node === 'load' || this.#input.output.includes(node);
+    // A node with a circle has its name there.
+    const isEnd = (this.#topology.degree.get(node) ?? 0) < 2;
+    const marked = isEnd || node === 'load' || this.#input.output.includes(node);
     return isTerminal || marked ? voltage : joinRuns(typeset(node), voltage);
   }
 
