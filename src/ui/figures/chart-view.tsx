@@ -54,12 +54,14 @@ export function ChartView(props: { readonly chart: Chart }) {
           )}
         </Show>
       </div>
-      <p class="read-out" aria-hidden="true">
-        <Show when={cursor() !== null}>
-          <Prose text={readOut(props.chart, cursor()!)} />
-        </Show>
-      </p>
-      <FigureTable table={() => chartTable(props.chart)} caption={props.chart.title} />
+      <div class="chart-foot">
+        <p class="read-out" aria-hidden="true">
+          <Show when={cursor() !== null}>
+            <Prose text={readOut(props.chart, cursor()!)} />
+          </Show>
+        </p>
+        <FigureTable table={() => chartTable(props.chart)} caption={props.chart.title} />
+      </div>
     </div>
   );
 }

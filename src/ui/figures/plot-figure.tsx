@@ -45,8 +45,13 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
         </Match>
       </Switch>
       <Show when={open()}>
-        <button type="button" class="to-cell" onClick={() => props.desk.jump(props.name)}>
-          to {props.name} in the sheet
+        <button
+          type="button"
+          class="to-cell"
+          aria-label={`${props.name} in the sheet`}
+          onClick={() => props.desk.jump(props.name)}
+        >
+          in the sheet
         </button>
       </Show>
     </details>

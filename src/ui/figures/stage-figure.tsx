@@ -6,7 +6,8 @@ import type { Desk } from '../desk/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
 import { DrawingView } from './drawing-view.tsx';
-import { stageValues } from './stage-values.ts';
+import { NO_VALUES, stageValues } from './stage-values.ts';
+import type { StageValue } from './stage-values.ts';
 
 /** Everything drawn of one stage; where it is not solved, its schematic without numbers and why. */
 export function StageFigure(props: { readonly desk: Desk; readonly stage: string }) {
@@ -28,7 +29,7 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
   });
   const values = createMemo(() => {
     const stage = cell();
-    return stage ? stageValues(stage) : [];
+    return stage ? stageValues(stage) : NO_VALUES;
   });
 
   return (
@@ -49,32 +50,26 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
             </figure>
           )}
         </Show>
-        <Show when={values().length > 0}>
-          <table class="stage-values">
-            <caption>{props.stage} in numbers</caption>
-            <thead class="unseen">
-              <tr>
-                <th scope="col">value</th>
-                <th scope="col">nominal</th>
-                <th scope="col">unit</th>
-              </tr>
-            </thead>
-            <tbody>
-              <For each={values()}>
-                {(value) => (
-                  <tr>
-                    <th scope="row" title={value.sentence}>
-                      <Name path={value.name} />
-                    </th>
-                    <td class="number">{value.number}</td>
-                    <td class="unit">{value.unit}</td>
-                  </tr>
-                )}
-              </For>
-            </tbody>
-          </table>
+        <Show when={values().atRest.length > 0}>
+          <RestTable stage={props.stage} rows={values().atRest} />
         </Show>
       </div>
+      <Show when={values().inMotion.length > 0}>
+        <dl class="motion-values" aria-label={`Small signals and power of ${props.stage}`}>
+          <For each={values().inMotion}>
+            {(value) => (
+              <div title={value.sentence}>
+                <dt>
+                  <Name path={value.name} />
+                </dt>
+                <dd>
+                  {value.number} <span class="unit">{value.unit}</span>
+                </dd>
+              </div>
+            )}
+          </For>
+        </dl>
+      </Show>
       <Show when={planes()}>
         {(charts) => (
           <div class="planes">
@@ -90,5 +85,33 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
         )}
       </Show>
     </>
+  );
+}
+
+function RestTable(props: { readonly stage: string; readonly rows: readonly StageValue[] }) {
+  return (
+    <table class="stage-values">
+      <caption>{props.stage} at rest</caption>
+      <thead class="unseen">
+        <tr>
+          <th scope="col">value</th>
+          <th scope="col">nominal</th>
+          <th scope="col">unit</th>
+        </tr>
+      </thead>
+      <tbody>
+        <For each={props.rows}>
+          {(value) => (
+            <tr>
+              <th scope="row" title={value.sentence}>
+                <Name path={value.name} />
+              </th>
+              <td class="number">{value.number}</td>
+              <td class="unit">{value.unit}</td>
+            </tr>
+          )}
+        </For>
+      </tbody>
+    </table>
   );
 }

@@ -23,8 +23,8 @@ export function Formula(props: { readonly tex: string; readonly text: string }) 
   createEffect(() => {
     const { tex, text } = props;
     const katexNow = renderer();
-    // Rendering into the element keeps to the page's policy; markup as text would need style attributes.
-    if (katexNow) katexNow.render(tex, place, { throwOnError: false, output: 'htmlAndMathml' });
+    // Fractions at full size: numbers in place are to be read. Rendering into the element keeps to the page's policy; markup as text would need style attributes.
+    if (katexNow) katexNow.render(`\\displaystyle ${tex}`, place, { throwOnError: false, output: 'htmlAndMathml' });
     else place.textContent = text;
   });
   return <span class="formula" ref={(element) => (place = element)} />;

@@ -21,7 +21,7 @@ export function CellLinks(props: { readonly desk: Desk; readonly title: string; 
               <li>
                 <button type="button" onClick={() => props.desk.jump(name)}>
                   <Name path={name} />
-                  <Show when={value(name)}>{(text) => <span class="link-value"> {text()}</span>}</Show>
+                  <Show when={value(name)}>{(text) => <span class="link-value">{text()}</span>}</Show>
                 </button>
               </li>
             )}

@@ -30,11 +30,12 @@ export function partRows(cell: CellReading, sheet: Sheet): readonly PartRow[] {
   });
 }
 
-/** What a part, point or inverse offers and has a value for. */
+/** What a part or point offers beyond what was given, as far as it has a value. */
 export function formRows(cell: CellReading): readonly FormRow[] {
+  const given = new Set(cell.fields.map(({ name }) => name));
   return cell.values.flatMap((offered) => {
     const value = shownReading(offered);
-    return value === null ? [] : [{ name: offered.name, value, sentence: offered.sentence }];
+    return value === null || given.has(offered.name) ? [] : [{ name: offered.name, value, sentence: offered.sentence }];
   });
 }
 

@@ -25,7 +25,7 @@ export function StepLine(props: { readonly step: PrintedStep; readonly subject: 
             </span>
           )}
         </Show>
-        <div class="equation-sides">
+        <div class="equation-sides" classList={{ 'equation-condition': equation().verdict !== null }}>
           <Index each={equation().sides}>
             {(side, at) => (
               <SideView side={side()} sign={equation().verdict === null && (at > 0 || equation().left !== null)} />

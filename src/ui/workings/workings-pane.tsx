@@ -3,6 +3,7 @@
 
 import { For, Show, batch, createMemo } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
+import { shownReading } from '../../record/index.ts';
 import type { CellReading } from '../../sheet/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { CellLinks } from './cell-links.tsx';
@@ -79,10 +80,11 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
     <>
       <header class="pane-head">
         <h2>
-          <Name path={props.value ? `${name()}.${props.value}` : name()} />
+          <Name path={name()} />
+          <Show when={props.value}>{(value) => <Name path={value()} />}</Show>
         </h2>
         <p class="cell-kind">
-          {kindWords(props.cell)}
+          <Show when={offered() === null}>{kindWords(props.cell)}</Show>
           <Show when={valueWords(props.cell)}>
             {(text) => (
               <>
@@ -98,7 +100,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
           <Show when={offered()}>
             {(value) => (
               <>
-                {': '}
+                <Show when={shownReading(value())}>{(text) => <strong>{text()}</strong>}</Show>{' '}
                 <Prose text={value().sentence} subject={name()} />
               </>
             )}
