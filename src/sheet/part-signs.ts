@@ -20,9 +20,9 @@ export function signFault(entry: PartEntry, channel: 1 | -1, field: GivenField, 
   );
   if (wrong === undefined) return null;
   const kind = `${entry.channel === 'n' ? 'an n' : 'a p'}-${entry.family}`;
-  const shown = formatValue(wrong, field.kind).text;
+  const shown = formatValue(wrong, field.kind, { zeros: 'drop' }).text;
   const word = wanted === 'not negative' ? 'not negative' : wanted;
   if (wrong === 0) return place('field-sign', `${field.name} of ${kind} is ${word}; 0 will not do.`);
-  const mended = formatValue(-wrong, field.kind).text;
+  const mended = formatValue(-wrong, field.kind, { zeros: 'drop' }).text;
   return place('field-sign', `${field.name} of ${kind} is ${word}. You wrote ${shown}; did you mean ${mended}?`);
 }
