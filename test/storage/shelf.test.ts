@@ -66,9 +66,16 @@ test('a sheet comes back with its text, history, folding and times', async () =>
   expect(result.status).toBe('kept');
   const record = await loaded(createTestShelf(clock), draft.id);
   expect(record).toEqual({
-    ...{ format: FORMAT, id: draft.id, revision: 1, writer: shelf.writer, asideOf: null },
-    ...{ text: edited.text, history: edited.history, folded: ['Q1'] },
-    ...{ created: draft.created, changed: draft.created + 1000 },
+    format: FORMAT,
+    id: draft.id,
+    revision: 1,
+    writer: shelf.writer,
+    asideOf: null,
+    text: edited.text,
+    history: edited.history,
+    folded: ['Q1'],
+    created: draft.created,
+    changed: draft.created + 1000,
   });
 });
 
@@ -102,8 +109,14 @@ test('a line of the list tells times, length and revision', async () => {
   expect(await shelf.list()).toEqual({
     sheets: [
       {
-        ...{ format: FORMAT, id: record.id, title: 'A', created: clock.now(), changed: clock.now() },
-        ...{ revision: 2, asideOf: null, length: 3 },
+        format: FORMAT,
+        id: record.id,
+        title: 'A',
+        created: clock.now(),
+        changed: clock.now(),
+        revision: 2,
+        asideOf: null,
+        length: 3,
       },
     ],
   });
