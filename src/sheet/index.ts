@@ -23,5 +23,6 @@ export type {
   ValueType,
   WorkingStep,
 } from './model.ts';
+export { PART_FIELDS } from './part-fields.ts';
 export { createSheet } from './sheet.ts';
 export type { CompiledSheet } from './sheet.ts';

@@ -9,3 +9,6 @@ export { editLabel, editSplices, editText } from './row-edits.ts';
 export type { SheetRows } from './sheet-rows.ts';
 export { sheetRows } from './sheet-rows.ts';
 export { nextValue, setTurned, snapped, turnedNumber } from './turning.ts';
+export { complete } from './completion.ts';
+export type { Completion } from './completion.ts';
+export type { Suggestion } from './suggestions.ts';
