@@ -19,7 +19,9 @@ const DEFAULT_AMBIENT = 298.15;
 
 interface Surroundings {
   look(name: string): Interface | null;
+  /** The same array as long as the names are the same. */
   names(): readonly string[];
+  has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
   /** A block of slots for the cell: its present one where that is wide enough. */
@@ -39,6 +41,10 @@ export interface CompiledCell {
   readonly waitsFor: string | null;
   /** Every cell that was looked up and the interface it had. */
   readonly seen: Map<string, Interface | null>;
+  /** The names of all cells, where something was proposed from them. */
+  readonly proposedFrom: readonly string[] | null;
+  /** Names whose mere presence was asked for. */
+  readonly presence: Map<string, boolean>;
   readonly shape: string | null;
 }
 
@@ -46,7 +52,10 @@ export interface CompiledCell {
 export function compileCell(tree: CellTree, surroundings: Surroundings): CompiledCell {
   const builder = createBuilder(KERNELS);
   const seen = new Map<string, Interface | null>();
+  const presence = new Map<string, boolean>();
+  let proposedFrom: readonly string[] | null = null;
   let later: Placed | null = null;
+  const names = (): readonly string[] => (proposedFrom = surroundings.names());
   const look = (name: string): Interface | null => {
     const found = surroundings.look(name);
     seen.set(name, found);
@@ -59,10 +68,13 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     tree,
     builder,
     look,
-    names: surroundings.names,
+    names,
+    has(name) {
+      presence.set(name, surroundings.has(name));
+      return presence.get(name)!;
+    },
     now: surroundings.now,
-    scope: (line) =>
-      createScope(builder, line, { look, names: surroundings.names, later: (message) => note(message, line) }),
+    scope: (line) => createScope(builder, line, { look, names, later: (message) => note(message, line) }),
     later: (what, span, line) => note({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span }, line),
     ambient() {
       const cell = look('T_A');
@@ -113,6 +125,8 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     later,
     waitsFor,
     seen,
+    proposedFrom,
+    presence,
     shape: draft.shape?.() ?? null,
   };
 }

@@ -65,8 +65,10 @@ export interface CellContext {
   now(expr: Expr, line: Line): { type: ValueType; value: number };
   /** Ambient temperature in kelvin: the cell T_A, else 25 degC. */
   ambient(): Handle;
-  /** Names of all cells, for proposals. */
+  /** Names of all cells, for proposals; the cell is compiled again when they change. */
   names(): readonly string[];
+  /** Whether there is a cell of this name, without using it; the cell is compiled again when that changes. */
+  has(name: string): boolean;
   /** Something is understood but not computed by now: the cell gets no value. */
   later(what: string, span: Span, line: Line): void;
 }

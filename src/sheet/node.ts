@@ -12,6 +12,8 @@ export interface Node {
   /** The tree its code was compiled from: the same text, perhaps on other lines. */
   compiledTree: CellTree;
   compiled: CompiledCell;
+  /** `compiled` only stands in for code: the cell is on a circle, or its name is taken. */
+  standsIn: boolean;
   /** Its block of slots. */
   base: number;
   capacity: number;

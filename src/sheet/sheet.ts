@@ -38,6 +38,8 @@ export interface CompiledSheet {
 export function createSheet(text: string): Sheet & { compiled(): CompiledSheet } {
   let tree: SheetTree = parseSheet('');
   let nodes: Node[] = [];
+  /** The nodes that `uses` and `usedBy` last counted. */
+  let linked: readonly Node[] = [];
   let byName = new Map<string, Node>();
   let order: readonly number[] = [];
   let slots = new Float64Array(256).fill(NaN);
@@ -51,7 +53,9 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     slots = wider;
   }
 
-  const names = (): readonly string[] => [...byName.keys()];
+  let allNames: readonly string[] = [];
+  const names = (): readonly string[] => allNames;
+  const has = (name: string): boolean => byName.has(name);
   const look = (name: string): Interface | null => byName.get(name)?.compiled.interface ?? null;
 
   function now(expr: Expr, line: Line): { type: ValueType; value: number } {
@@ -70,6 +74,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     const compiled = compileCell(cellTree, {
       look,
       names,
+      has,
       now,
       allocate(size) {
         if (size > node.capacity) {
@@ -83,14 +88,17 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     });
     install(compiled.segment, slots);
     node.compiledTree = cellTree;
+    node.standsIn = false;
     const same = previous && sameInterface(previous.interface, compiled.interface);
     node.compiled = same ? { ...compiled, interface: previous.interface } : compiled;
   }
 
   function needsCompiling(node: Node, cellTree: CellTree): boolean {
-    if (!sameCell(node.compiledTree, cellTree)) return true;
-    for (const [name, seen] of node.compiled.seen) if (look(name) !== seen) return true;
-    return false;
+    if (node.standsIn || !sameCell(node.compiledTree, cellTree)) return true;
+    const { seen, proposedFrom, presence } = node.compiled;
+    for (const [name, then] of seen) if (look(name) !== then) return true;
+    for (const [name, then] of presence) if (has(name) !== then) return true;
+    return proposedFrom !== null && proposedFrom !== allNames;
   }
 
   /** Compiles and runs what the change reaches; gives the keys of the nodes whose readings changed. */
@@ -107,6 +115,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
         byName.get(cellTree.name.name) !== node ? duplicate(cellTree, byName) : cycleFault(k, cycles, nodes);
       if (outside) {
         node.compiled = unsettled(node, cellTree);
+        node.standsIn = true;
         node.compiledTree = cellTree;
         node.fault = wasFault?.message.text === outside.message.text ? wasFault : outside;
         node.waitsFor = null;
@@ -161,12 +170,29 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
         node.reading = null;
         node.tree = cellTree;
       }
-      node.usedBy = [];
       if (occurrence === 1) byName.set(name, node);
       return node;
     });
     tree = newTree;
+    const newNames = [...byName.keys()];
+    if (newNames.length !== allNames.length || newNames.some((name, i) => name !== allNames[i])) allNames = newNames;
+    const relinked = link();
+    const sorted = topologicalOrder(nodes.map((node) => node.uses));
+    order = sorted.order;
+    const changed = evaluate(sorted.cycles);
+    for (const node of relinked) {
+      node.reading = null;
+      changed.add(node.key);
+    }
+    for (const key of old.keys()) changed.add(key);
+    return changed;
+  }
+
+  /** Finds anew which cells each uses and is used by; gives the nodes for which that is not what it was. */
+  function link(): Node[] {
     const indexOf = new Map(nodes.map((node, k) => [node, k]));
+    const before = nodes.map(({ uses, usedBy }) => ({ uses, usedBy }));
+    for (const node of nodes) node.usedBy = [];
     nodes.forEach((node, k) => {
       node.uses = namesUsed(node.tree)
         .map((name) => byName.get(name))
@@ -174,11 +200,13 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
         .map((used) => indexOf.get(used)!);
       for (const u of node.uses) nodes[u]!.usedBy.push(k);
     });
-    const sorted = topologicalOrder(nodes.map((node) => node.uses));
-    order = sorted.order;
-    const changed = evaluate(sorted.cycles);
-    for (const key of old.keys()) changed.add(key);
-    return changed;
+    const same = (a: readonly number[], b: readonly number[]): boolean =>
+      a.length === b.length && a.every((index, i) => linked[index] === nodes[b[i]!]);
+    const relinked = nodes.filter(
+      (node, k) => !same(before[k]!.uses, node.uses) || !same(before[k]!.usedBy, node.usedBy),
+    );
+    linked = nodes;
+    return relinked;
   }
 
   function reading(node: Node): CellReading {
@@ -246,6 +274,7 @@ function createNode(key: string, tree: CellTree): Node {
     tree,
     compiledTree: tree,
     compiled: undefined as unknown as CompiledCell,
+    standsIn: false,
     base: 0,
     capacity: 0,
     fault: null,
@@ -319,5 +348,5 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
   const nothing = (): never => {
     throw new Error('A broken cell asks for nothing.');
   };
-  return compileCell(broken, { look: nothing, names: nothing, now: nothing, allocate: nothing });
+  return compileCell(broken, { look: nothing, names: nothing, has: nothing, now: nothing, allocate: nothing });
 }

@@ -33,7 +33,7 @@ export function placesOf(tree: CellTree, entry: StageEntry, context: CellContext
     if (SETTINGS.includes(label) || terminals.includes(label)) continue;
     const [first] = field.label;
     if (field.label.length > 1 || TERMINALS.includes(label)) unknownTerminal(field, terminals);
-    if (context.names().includes(label)) {
+    if (context.has(label)) {
       stop(
         'node-named-like-cell',
         `${label} is a cell of this sheet, so it cannot also be a node of the stage. Give the node another name.`,

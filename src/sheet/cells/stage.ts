@@ -117,10 +117,12 @@ function elementOf(expr: Expr, field: FieldTree, context: CellContext): NetEleme
       field.line,
     );
   }
+  const nominal = context.now(expr, field.line).value;
   return {
     kind: found.kind,
     value: value.handle,
-    nominal: context.now(expr, field.line).value,
+    // Without a value the stage waits for it; until then any sound number will do.
+    nominal: Number.isNaN(nominal) ? 1 : nominal,
     label: field.line.text.slice(expr.span.start, expr.span.end).trim(),
   };
 }
