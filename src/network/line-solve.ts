@@ -36,7 +36,7 @@ const given = new Float64Array(6);
 const STEP_CAP = 200;
 
 /** A step of Newton's below this share is the last one: the error squares, so what remains is below rounding. */
-const SETTLED = 1e-10;
+const SETTLED = 2e-9;
 
 /** |H| below this share of its largest term is rounding. */
 const NOISE = 2 ** -51;

@@ -31,6 +31,10 @@ function faultsOf(setup: StageSetup): string[] {
     // A difference is as exact as its terms: the largest operand's last digits are allowed in a sum.
     const scale = / [+-] /.test(formula) ? Math.max(Math.abs(shown), 1e-3 * Math.abs(again)) : Math.abs(shown);
     if (!(again === shown || Math.abs(again - shown) <= 1e-9 * scale)) faults.push(`${where}: evaluates to ${again}`);
+    if (name.endsWith('_rest')) {
+      const left = steps.find((step) => step.name === name.replace('_rest', '_left'))!.value;
+      if (!(Math.abs(shown) <= 1e-7 * Math.abs(left))) faults.push(`${where}: too much is left beside ${left}`);
+    }
     for (const operand of operands) {
       const offered = value(operand.name);
       const close = Math.abs(offered - operand.value) <= 1e-9 * Math.abs(offered);

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { currentPoint } from '../../src/network/current-point.ts';
 import { generalPoint } from '../../src/network/general-point.ts';
 import { THERMAL_CEILING } from '../../src/network/thermal-balance.ts';
+import { POINT_STATUS } from '../../src/network/index.ts';
 import { createDraw } from '../support/counter-random.ts';
 import { runKernel } from '../support/run-kernel.ts';
 import { lowerText } from '../support/stage-text.ts';
@@ -74,7 +75,7 @@ describe('the general-point kernel', () => {
       beta: 0.05,
       R_thJA: 300,
     });
-    expect(point.status).toBe(2);
+    expect(POINT_STATUS[point.status]).toBe('thermal runaway');
     expect(point.I_D).toBeNaN();
     expect(point.T_J).toBeNaN();
     expect(THERMAL_CEILING).toBe(600);
@@ -179,12 +180,12 @@ describe('a forced current', () => {
 
   it('that the channel cannot carry is said so', () => {
     const stage = lowerText({ ...follower, lines: ['gate: 1e6 to source', 'drain: to 15 V', 'source: 5e-3 A to 0 V'] });
-    expect(stage.status).toBe(1);
+    expect(POINT_STATUS[stage.status]).toBe('cannot carry it');
     expect(stage.value('V_DS')).toBeNaN();
   });
 
   it('of 0 A leaves the voltage open', () => {
     const stage = lowerText({ ...follower, lines: ['gate: 1e6 to 0 V', 'drain: to 15 V', 'source: 0 A to 0 V'] });
-    expect(stage.status).toBe(4);
+    expect(POINT_STATUS[stage.status]).toBe('left open');
   });
 });

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { SWING_LIMIT } from '../../src/network/index.ts';
 import { createDraw } from '../support/counter-random.ts';
 import { randomStage } from '../support/random-stage.ts';
 import { lowerText } from '../support/stage-text.ts';
@@ -10,8 +11,11 @@ const SELF_BIASED: StageSetup = {
   output: 'drain',
 };
 
-const limits = ({ lowering, emitter }: LoweredStage): number[] =>
-  lowering.swingLimits ? [emitter.value(lowering.swingLimits.up), emitter.value(lowering.swingLimits.down)] : [];
+/** What limits the swing upwards and downwards. */
+function limits({ lowering, emitter }: LoweredStage): string[] {
+  const { up, down } = lowering.swingLimits!;
+  return [up, down].map((handle) => SWING_LIMIT[emitter.value(handle)]);
+}
 
 /** Peaks found by following the source in small steps and solving the whole point by bisection at each. */
 function plainSwing(setup: StageSetup, stage: LoweredStage): { up: number; down: number } {
@@ -72,14 +76,14 @@ describe('the swing', () => {
     // Downwards: the gate, at -1 V, conducts at +0.5 V: i = 1 mA/V² (2.5 V)² would need more than 15 V, so ohmic first:
     // 9 V - 5 kohm (i - 1 mA) = y with i = 1 mA/V² y², y = 1.564 V.
     expect(stage.value('swing_down')).toBeCloseTo(9 - (-1 + Math.sqrt(1 + 4 * 5 * 14)) / 10, 9);
-    expect(limits(stage)).toEqual([1, 2]);
+    expect(limits(stage)).toEqual(['cutoff', 'ohmic']);
   });
 
   it('ends at gate conduction where the drain has room', () => {
     const stage = lowerText({ ...SELF_BIASED, lines: SELF_BIASED.lines.map((line) => line.replace('5e3', '1e3')) });
     // v_gs rises by 1.5 V: i = 6.25 mA, the drain falls by 5.25 V from 14 V; ohmic would begin at 2.5 V only.
     expect(stage.value('swing_down')).toBeCloseTo(5.25, 10);
-    expect(limits(stage)).toEqual([1, 3]);
+    expect(limits(stage)).toEqual(['cutoff', 'gate conduction']);
   });
 
   it('of a follower on an ideal current source has no lower limit', () => {
@@ -90,7 +94,7 @@ describe('the swing', () => {
     });
     expect(stage.value('swing_up')).toBeCloseTo(13, 9);
     expect(stage.value('swing_down')).toBe(Infinity);
-    expect(limits(stage)).toEqual([2, 0]);
+    expect(limits(stage)).toEqual(['ohmic', 'none']);
   });
 
   it('is zero where the stage at rest is not in saturation', () => {
