@@ -12,6 +12,8 @@ import type { EditPlace, RowFault } from '../rows/index.ts';
 
 /** Messages about what is being typed wait for this much rest, in milliseconds. */
 const REST = 600;
+/** The narrowest field, in characters. */
+const LEAST_WIDTH = 8;
 
 export interface Editing {
   readonly place: EditPlace;
@@ -26,6 +28,8 @@ export interface Editor {
   editing(): Editing | null;
   text(): string;
   setText(text: string): void;
+  /** Characters that the field makes room for. */
+  width(): number;
   /** Whether typing has paused long enough for messages to be shown. */
   rested(): boolean;
   /** Why what is being typed cannot be read, or null. */
@@ -78,6 +82,7 @@ export function createEditor(document: SheetDocument): Editor {
         preview(present, written);
       });
     },
+    width: () => Math.max(LEAST_WIDTH, text().length + 2),
     rested,
     unread() {
       const present = editing();

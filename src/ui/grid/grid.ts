@@ -6,6 +6,8 @@ import type { Column, Desk } from '../desk/index.ts';
 import { emptyRow, sheetRows } from '../rows/index.ts';
 import type { Row, SheetRows } from '../rows/index.ts';
 import { columnBeside, nearestColumn, typedColumn } from './columns.ts';
+import { createCompleting } from './completing.ts';
+import type { Completing } from './completing.ts';
 import { createEditor } from './editor.ts';
 import type { Editor } from './editor.ts';
 import { createFolds } from './folds.ts';
@@ -61,6 +63,14 @@ export interface Grid {
   toggle(key: string): boolean;
   /** Focuses the row of a line, or the one nearest. */
   focusLine(line: number, column: Column): void;
+  readonly completing: Completing;
+  /** The text field of the cell that is edited. */
+  field(): HTMLInputElement | null;
+  setField(field: HTMLInputElement | null): void;
+  /** Lets the list of suggestions follow the text and the caret. */
+  followText(asked: boolean): void;
+  /** Takes a line of the list, the marked one unless told; says whether there was one. */
+  take(index?: number): boolean;
   /** The mark of a run of steps: the same as long as the same thing is done to the same cell. */
   runOf(what: string): string;
   /** The tick that is being dragged, in SI. */
@@ -74,6 +84,8 @@ export function createGrid(desk: Desk): Grid {
   const { document } = desk;
   const folds = createFolds();
   const editor = createEditor(document);
+  const completing = createCompleting(document, editor);
+  const [field, setField] = createSignal<HTMLInputElement | null>(null);
   const [draft, setDraft] = createSignal<Draft | null>(null);
   const [dragged, setDragged] = createSignal<Dragged | null>(null);
   const [anchor, setAnchor] = createSignal<string | null>(null);
@@ -238,6 +250,16 @@ export function createGrid(desk: Desk): Grid {
     if (key.startsWith('field')) folds.set([`wiring:${cell}`], false);
   }
 
+  function take(index?: number): boolean {
+    if (index !== undefined) completing.mark(index);
+    const taken = completing.taken();
+    if (!taken) return false;
+    editor.setText(taken.text);
+    completing.close();
+    field()?.setSelectionRange(taken.caret, taken.caret);
+    return true;
+  }
+
   let run = { what: '', selection: desk.selection(), count: 0, text: '' };
   /** A run ends when something else is selected or done. */
   function runOf(what: string): string {
@@ -354,6 +376,11 @@ export function createGrid(desk: Desk): Grid {
       return true;
     },
     focusLine,
+    completing,
+    field,
+    setField,
+    followText: (asked) => completing.follow(field()?.selectionStart ?? editor.text().length, asked),
+    take,
     runOf,
     dragged,
     setDragged,

@@ -67,15 +67,24 @@ export function navigate(grid: Grid, event: KeyboardEvent): boolean {
 /** Does what a key stands for in the text field of a cell; all that is left to the field is false. */
 export function whileEditing(grid: Grid, event: KeyboardEvent): boolean {
   if (event.isComposing) return false;
+  const { completing } = grid;
+  const open = completing.list() !== null;
   switch (keyOf(event)) {
     case 'Enter':
-      return done(grid.commit('down'));
+      return open && grid.take() ? true : done(grid.commit('down'));
     case 'Tab':
-      return done(grid.commit('right'));
+      return open && grid.take() ? true : done(grid.commit('right'));
+    case 'Down':
+      return open && done(completing.move(1));
+    case 'Up':
+      return open && done(completing.move(-1));
+    case 'Alt+Down':
+    case 'Ctrl+ ':
+      return done(grid.followText(true));
     case 'Shift+Tab':
       return done(grid.commit('left'));
     case 'Escape':
-      return done(grid.cancel());
+      return done(open ? completing.close() : grid.cancel());
     case 'Ctrl+Enter':
     case 'Ctrl+Shift+Enter': {
       grid.commit('stay');

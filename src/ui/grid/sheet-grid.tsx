@@ -9,6 +9,7 @@ import { navigate } from './keys.ts';
 import { cellAt, createFocus, rowAt } from './focus.ts';
 import { foldsByClick } from './columns.ts';
 import { RowView } from './row-view.tsx';
+import { SuggestionList } from './suggestion-list.tsx';
 
 /** The grid of a desk's sheet. */
 export function SheetGrid(props: { readonly desk: Desk }) {
@@ -80,6 +81,7 @@ export function SheetGrid(props: { readonly desk: Desk }) {
         </div>
         <For each={grid.keys()}>{(key, index) => <RowView grid={grid} rowKey={key} index={index()} />}</For>
       </div>
+      <SuggestionList grid={grid} take={(index) => grid.take(index)} />
     </div>
   );
 }

@@ -95,11 +95,11 @@ function entryContext(before: string, place: EditPlace, self: string | null, she
   const unit = units(before, place, sheet);
   if (unit) return unit;
   const token = tokenOf(before);
-  const first = before.slice(0, before.length - token.length).trim() === '';
+  // The name of a kind may hold a hyphen.
   const start = /^\s*([\w-]*)$/.exec(before);
   return {
-    token: first && start ? start[1]! : token,
-    items: [...(first ? kindSuggestions() : []), ...nameSuggestions(sheet, self), ...functionSuggestions()],
+    token: start ? start[1]! : token,
+    items: [...(start ? kindSuggestions() : []), ...nameSuggestions(sheet, self), ...functionSuggestions()],
     expected: expectedKind(before.slice(0, before.length - token.length), place, sheet),
   };
 }
@@ -167,7 +167,7 @@ function rankOf(item: Suggestion, token: string, loose: string, expected: ValueK
   if (fit === null) return null;
   const wanted = expected !== null && item.kind !== null && sameKind(expected, item.kind);
   // Values inside blocks come behind names of cells, unless their block was named.
-  const inner = text.includes('.') && !token.includes('.') ? 3 : 0;
+  const inner = /^\w+\.\w/.test(text) && !token.includes('.') ? 3 : 0;
   return (wanted ? 0 : 10) + fit + inner;
 }
 
