@@ -2,11 +2,18 @@
 // All of it is text or plain trees; nothing is rendered here.
 
 export { checkText, reserveText } from './check-text.ts';
+export { recordHtml } from './html.ts';
+export { openPoints } from './open-points.ts';
+export type { OpenPoint } from './open-points.ts';
 export { proseParts } from './prose.ts';
+export { recordOf } from './record.ts';
+export type { RecordTree } from './record-tree.ts';
 export { shownCell, shownOwn, shownReading } from './shown.ts';
 export { texOfExpression } from './tex.ts';
 export { texOfName, texOfPath } from './tex-name.ts';
 export { texOfUnit } from './tex-number.ts';
+export { TITLE_LABELS, paperOf, titleField } from './title-fields.ts';
+export type { TitleField } from './title-fields.ts';
 export { verdictOf } from './verdict.ts';
 export type { Verdict } from './verdict.ts';
 export { printStep, stepSides, stepText, workingsOf } from './workings.ts';

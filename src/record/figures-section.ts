@@ -1,0 +1,54 @@
+// The figures: the planes of every stage that is solved, then the plots that the sheet asks for.
+
+import { drawChart, planesOf, sheetPlot, stackCharts, svgText, TOKENS } from '../figure/index.ts';
+import type { Chart, Drawing } from '../figure/index.ts';
+import type { CellReading, Sheet } from '../sheet/index.ts';
+import { sentence } from './inline.ts';
+import type { Block, Figure, Inlines } from './record-tree.ts';
+
+/** In CSS pixels; two stand side by side and are printed a little larger than drawn. */
+const CHART = { width: 288, height: 205 };
+
+/** Figures with their captions, and a sentence for each plot that could not be drawn. */
+export function figuresBlocks(sheet: Sheet): readonly Block[] {
+  const figures: Figure[] = [];
+  const messages: Inlines[] = [];
+  const asked = new Map<string, string[]>();
+  const add = (drawing: Drawing, cells: readonly string[]): void => {
+    const number = figures.length + 1;
+    const svg = svgText(drawing, { id: `record-figure-${number}`, colors: TOKENS });
+    const lead = `Figure ${number}${cells.length > 0 ? ` (${cells.join(', ')})` : ''}. `;
+    figures.push({ kind: 'chart', svg, caption: [{ type: 'strong', text: lead }, ...sentence(drawing.sentence)] });
+  };
+  const plots = sheet.cells().filter(({ tree }) => tree.entry.type === 'plot');
+  for (const cell of plots) {
+    const key = planeKey(cell);
+    if (key !== null) asked.set(key, [...(asked.get(key) ?? []), cell.name]);
+  }
+  for (const cell of sheet.cells().filter(({ kind, fault }) => kind === 'stage' && fault === null)) {
+    const stage = sheet.stage(cell.name);
+    const planes = stage === null ? null : planesOf(stage, sheet);
+    if (planes === null) continue;
+    for (const plane of ['transfer', 'output'] as const) {
+      add(drawChart(planes[plane], CHART), asked.get(`${plane} of ${cell.name}`) ?? []);
+    }
+  }
+  for (const cell of plots) {
+    const plot = sheetPlot(sheet, cell.name);
+    if ('message' in plot) messages.push(sentence(`${cell.name}: ${plot.message}`));
+    else if (planeKey(cell) === null) add(stackCharts(plot.charts, sizeFor(plot.charts)), [cell.name]);
+  }
+  const blocks: Block[] = figures.length > 0 ? [{ type: 'figures', figures }] : [];
+  return [...blocks, ...messages.map((content): Block => ({ type: 'paragraph', tone: 'remark', content }))];
+}
+
+/** `transfer of A1`; null for plots that are no plane. */
+function planeKey({ tree }: CellReading): string | null {
+  const { entry } = tree;
+  if (entry.type !== 'plot' || (entry.figure !== 'transfer' && entry.figure !== 'output')) return null;
+  return `${entry.figure} of ${entry.of?.name ?? ''}`;
+}
+
+function sizeFor(charts: readonly Chart[]): typeof CHART {
+  return charts.length === 1 ? CHART : { width: CHART.width, height: Math.round(CHART.height * 0.8) };
+}

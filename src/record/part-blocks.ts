@@ -1,0 +1,76 @@
+// A part as its data sheet prints it, and the law that its rows settle.
+
+import { formatValue } from '../quantity/index.ts';
+import type { CellReading, FieldReading, Sheet } from '../sheet/index.ts';
+import type { Condition, FieldTree } from '../language/index.ts';
+import { EMPTY_CELL, name, plainText, sentence } from './inline.ts';
+import { labelOf, typed } from './open-points.ts';
+import type { Block, Cell, Inline, Inlines, TableRow } from './record-tree.ts';
+import { originCell } from './origin-cell.ts';
+import { inputCells, offeredCell } from './value-cells.ts';
+
+const COLUMNS = [
+  { title: '', kind: 'text' },
+  { title: 'min', kind: 'number' },
+  { title: 'nominal', kind: 'number' },
+  { title: 'max', kind: 'number' },
+  { title: 'condition', kind: 'text' },
+  { title: 'source and note', kind: 'text' },
+] as const;
+
+/** The rows of a part or point, and what follows from them; of negative quantities min and max are by magnitude. */
+export function partBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
+  const readings = new Map(cell.fields.map((field) => [field.line, field]));
+  const rows = cell.tree.fields.map((field) => fieldRow(field, readings.get(field.line.index) ?? null, cell, sheet));
+  const table: readonly Block[] = rows.length === 0 ? [] : [{ type: 'table', name: 'part', columns: COLUMNS, rows }];
+  return [...table, ...offeredBlocks(cell)];
+}
+
+/** What a part, point or stage offers beyond what was written in it, and why some of it has no value. */
+export function offeredBlocks(cell: CellReading): readonly Block[] {
+  const written = new Set(cell.fields.map((field) => field.name));
+  const offered = cell.values.filter((value) => !written.has(value.name));
+  if (cell.fault !== null || offered.length === 0) return [];
+  const known = offered.filter(({ value }) => value !== null);
+  const values = known.map((value) => ({ name: name(value.name), value: offeredCell(value) }));
+  const missing = offered.filter(({ value }) => value === null);
+  return [
+    { type: 'values', values },
+    ...missingSentences(missing).map((content): Block => ({ type: 'paragraph', tone: 'remark', content })),
+  ];
+}
+
+/** Values that miss the same thing are named together. */
+function missingSentences(missing: CellReading['values']): readonly Inlines[] {
+  const reasons = new Map<string, string[]>();
+  for (const { name: path, missing: fault } of missing) {
+    const reason = fault?.text ?? 'has no value.';
+    reasons.set(reason, [...(reasons.get(reason) ?? []), path]);
+  }
+  return [...reasons].map(([reason, paths]) => {
+    const names = paths.flatMap((path, at): Inlines => [...plainText(at === 0 ? '' : ', '), name(path)]);
+    return [...plainText('No value of '), ...names, ...plainText(': '), ...sentence(reason)];
+  });
+}
+
+function fieldRow(field: FieldTree, reading: FieldReading | null, cell: CellReading, sheet: Sheet): TableRow {
+  const origin = originCell(field.line, sheet, reading?.isInput ?? false);
+  const label: Cell = { content: [name(labelOf(field), cell.name)] };
+  if (reading === null || field.body.type !== 'quantity') {
+    const entry: Inline = { type: 'entry', text: typed(field.line, field.body.span) };
+    return { mark: null, cells: [label, EMPTY_CELL, EMPTY_CELL, EMPTY_CELL, { content: [entry] }, origin] };
+  }
+  const [low, nominal, high] = inputCells(reading, reading);
+  const isNegative = typeof reading.value === 'number' && reading.value < 0;
+  const [min, max] = isNegative ? [high, low] : [low, high];
+  const condition: Cell = { content: conditionInlines(field.body.conditions) };
+  return { mark: null, cells: [label, min, nominal, max, condition, origin] };
+}
+
+/** `V_DS = 15 V, T = 25 °C`. */
+function conditionInlines(conditions: readonly Condition[]): Inlines {
+  return conditions.flatMap(({ name: ref, literal }, at): Inlines => {
+    const { text } = formatValue(literal.value, literal.kind, { unit: literal.unit, digits: 'all' });
+    return [...plainText(at === 0 ? '' : ', '), name(ref.name), ...plainText(` = ${text}`)];
+  });
+}

@@ -1,0 +1,151 @@
+// The record of a sheet: title block, result, checks, what is to be confirmed, the sheet in its own order with its
+// values, workings, figures, cautions, sign-off, and the sheet text.
+
+import type { Sheet } from '../sheet/index.ts';
+import { checksBlock } from './checks-section.ts';
+import { cautionBlocks, signOffBlocks, textBlocks } from './closing-sections.ts';
+import { figuresBlocks } from './figures-section.ts';
+import { orBlank, plainText, sentence } from './inline.ts';
+import { leadProse } from './lead-prose.ts';
+import { inputLines, isAssumed, isUnsourced, openPoints } from './open-points.ts';
+import type { OpenPoint } from './open-points.ts';
+import type { Block, Inlines, Mark, RecordTree, Section } from './record-tree.ts';
+import { sheetBlocks } from './sheet-section.ts';
+import { TITLE_LABELS, paperOf, titleField } from './title-fields.ts';
+import type { TitleField } from './title-fields.ts';
+import type { Verdict } from './verdict.ts';
+import { verdictOf } from './verdict.ts';
+import { workingsBlocks } from './workings-section.ts';
+
+export interface RecordOptions {
+  /** SHA-256 of the sheet text in UTF-8, in hexadecimal. */
+  readonly digest: string;
+  /** When it is printed, as it is to be read. */
+  readonly printedAt?: string;
+}
+
+const MARKS: Readonly<Record<Verdict['state'], Mark>> = {
+  incomplete: 'unknown',
+  'nothing required': 'unknown',
+  fails: 'fails',
+  holds: 'holds',
+};
+
+/** The record of a sheet as it stands. */
+export function recordOf(sheet: Sheet, { digest, printedAt }: RecordOptions): RecordTree {
+  const { tree } = sheet;
+  const verdict = verdictOf(sheet);
+  const open = openPoints(sheet);
+  return {
+    title: tree.title?.text.trim() || 'Sheet without a title',
+    edition: editionOf(sheet),
+    paper: paperOf(tree),
+    digest,
+    printedAt: printedAt ?? null,
+    incomplete: incompleteWords(verdict, sheet),
+    titleBlock: (Object.keys(TITLE_LABELS) as TitleField[]).map((label) => ({
+      label: TITLE_LABELS[label],
+      content: orBlank(titleField(tree, label)),
+    })),
+    sections: numberedSections(sheet, verdict, open),
+  };
+}
+
+/** A title, what is said behind it, and the blocks under it once its number is known; null to leave it out. */
+type Draft = readonly [title: string, remark: string, blocks: (number: string) => readonly Block[]];
+
+function numberedSections(sheet: Sheet, verdict: Verdict, open: readonly OpenPoint[]): readonly Section[] {
+  const uncomputed = open.filter(({ kind }) => kind === 'broken' || kind === 'waiting');
+  const toConfirm = open.filter(({ kind }) => ['assumed', 'taken', 'no source'].includes(kind));
+  const drafts: readonly (Draft | null)[] = [
+    ['Result', '', () => resultBlocks(sheet, verdict, open)],
+    uncomputed.length === 0
+      ? null
+      : ['Not computed', 'broken lines, and what waits for them', () => [listOf(uncomputed, 'dot')]],
+    ['Checks', 'at the nominal values, failing ones first', () => [checksBlock(sheet)]],
+    toConfirm.length === 0 ? null : ['To be confirmed', '', () => confirmBlocks(toConfirm)],
+    ['The sheet', 'values as entered and as computed, ends rounded outward', (number) => sheetBlocks(sheet, number)],
+    ['Workings', 'formula, numbers in place, result, at the nominal values', (number) => workingsBlocks(sheet, number)],
+    ['Figures', '', () => figuresBlocks(sheet)],
+    ['Cautions and limits', '', () => cautionBlocks(sheet)],
+    ['Sign-off', '', () => signOffBlocks(sheet)],
+    ['The sheet text', 'typed in again, this gives the record above', () => textBlocks(sheet)],
+  ];
+  const sections: Section[] = [];
+  for (const draft of drafts) {
+    if (draft === null) continue;
+    const [title, remark, blocksOf] = draft;
+    const number = String(sections.length + 1);
+    const blocks = blocksOf(number);
+    if (blocks.length > 0) sections.push({ number, title, remark, blocks });
+  }
+  return sections;
+}
+
+function resultBlocks(sheet: Sheet, { state, sentence: words }: Verdict, open: readonly OpenPoint[]): readonly Block[] {
+  const content: Inlines = [
+    { type: 'strong', text: words },
+    ...plainText(' Tolerances, device limits and service are listed below but not searched in this record.'),
+    ...plainText(` ${openSentence(sheet, open)}`),
+  ];
+  const lead = leadProse(sheet.tree)
+    .map(({ tree }) => (tree.type === 'prose' ? tree.text : ''))
+    .join(' ');
+  const blocks: readonly Block[] = [{ type: 'verdict', mark: MARKS[state], content }];
+  return lead === '' ? blocks : [...blocks, { type: 'paragraph', tone: 'prose', content: sentence(lead) }];
+}
+
+/** How much is open, in one sentence. */
+function openSentence(sheet: Sheet, open: readonly OpenPoint[]): string {
+  const inputs = sheet.cells().flatMap((cell) => inputLines(cell, sheet));
+  const count = (number: number, one: string, several: string): string[] =>
+    number === 0 ? [] : [`${number} ${number === 1 ? one : several}`];
+  const taken = open.filter(({ kind }) => kind === 'taken').length;
+  const parts = [
+    ...count(inputs.filter(isAssumed).length, 'assumed input', 'assumed inputs'),
+    ...count(inputs.filter(isUnsourced).length, 'input without a source', 'inputs without a source'),
+    ...count(taken, 'number taken by the sheet', 'numbers taken by the sheet'),
+  ];
+  const all = `${inputs.length === 1 ? '1 input' : `${inputs.length} inputs`}`;
+  return parts.length === 0 ? `${all}, all with a source.` : `${all}; to be confirmed: ${parts.join(', ')}.`;
+}
+
+function confirmBlocks(open: readonly OpenPoint[]): readonly Block[] {
+  const groups: readonly (readonly [OpenPoint['kind'], string])[] = [
+    ['assumed', 'Assumed by the author:'],
+    ['no source', 'Without a source:'],
+    ['taken', 'Taken by the sheet where nothing was given:'],
+  ];
+  return groups.flatMap(([kind, title]): Block[] => {
+    const points = open.filter((point) => point.kind === kind);
+    if (points.length === 0) return [];
+    return [{ type: 'paragraph', tone: 'plain', content: plainText(title) }, listOf(points, 'box')];
+  });
+}
+
+function listOf(points: readonly OpenPoint[], mark: 'box' | 'dot'): Block {
+  const items = points.map(({ kind, text, line }): Inlines => {
+    const isEntry = kind === 'assumed' || kind === 'no source';
+    const words: Inlines = isEntry ? [{ type: 'entry', text }] : sentence(text);
+    return isEntry && line !== null ? [...words, ...plainText(` (line ${line + 1})`)] : words;
+  });
+  return { type: 'list', mark, items };
+}
+
+function incompleteWords({ broken, waiting, state }: Verdict, sheet: Sheet): Inlines | null {
+  if (state !== 'incomplete') return null;
+  const parts = [
+    ...(broken.length > 0 ? [`${broken.length === 1 ? '1 cell is' : `${broken.length} cells are`} broken`] : []),
+    ...(waiting.length > 0 ? [`${waiting.length === 1 ? '1 has' : `${waiting.length} have`} no value`] : []),
+  ];
+  const whole = sheet.cells().length;
+  return plainText(
+    `Record of an incomplete sheet: of ${whole} cells, ${parts.join(' and ')}. Not to be signed as it stands.`,
+  );
+}
+
+function editionOf({ tree }: Sheet): string {
+  const revision = titleField(tree, 'revision');
+  const status = titleField(tree, 'status');
+  return [...(revision === null ? [] : [`revision ${revision}`]), ...(status === null ? [] : [status])].join(', ');
+}

@@ -1,0 +1,168 @@
+// The sheet in its own order: headings and prose in place, inputs and formulas with their values in tables, parts as
+// data sheets print them, stages drawn, with their wiring and what they come to.
+
+import { drawSchematic, schematicOf, svgText, TOKENS } from '../figure/index.ts';
+import type { CellReading, Sheet } from '../sheet/index.ts';
+import { EMPTY_CELL, name, plainText, sentence } from './inline.ts';
+import { leadProse } from './lead-prose.ts';
+import { faultLine, labelOf, typed } from './open-points.ts';
+import { originCell } from './origin-cell.ts';
+import { offeredBlocks, partBlocks } from './part-blocks.ts';
+import type { Block, Cell, Inlines, TableRow } from './record-tree.ts';
+import { shownCell } from './shown.ts';
+import { inputCells, valueCell } from './value-cells.ts';
+
+const INPUT_COLUMNS = [
+  { title: 'name', kind: 'text' },
+  { title: 'as entered', kind: 'text' },
+  { title: 'low', kind: 'number' },
+  { title: 'nominal', kind: 'number' },
+  { title: 'high', kind: 'number' },
+  { title: 'source and note', kind: 'text' },
+] as const;
+const WIRING_COLUMNS = [
+  { title: 'place', kind: 'text' },
+  { title: 'what hangs on it', kind: 'text' },
+  { title: 'source and note', kind: 'text' },
+] as const;
+
+const KINDS: Readonly<Record<string, string>> = {
+  part: 'part',
+  another: 'part',
+  point: 'point',
+  stage: 'stage',
+  bench: 'bench',
+};
+
+/** The blocks of the sheet; `number` is that of their section. */
+export function sheetBlocks(sheet: Sheet, number: string): readonly Block[] {
+  return new SheetWriter(sheet, number).blocks();
+}
+
+class SheetWriter {
+  readonly #blocks: Block[] = [];
+  readonly #sheet: Sheet;
+  readonly #number: string;
+  #rows: TableRow[] = [];
+  #prose: string[] = [];
+  #headings = 0;
+
+  constructor(sheet: Sheet, number: string) {
+    this.#sheet = sheet;
+    this.#number = number;
+  }
+
+  blocks(): readonly Block[] {
+    const { lines, title } = this.#sheet.tree;
+    const cells = new Map(this.#sheet.cells().map((cell) => [cell.tree.line.index, cell]));
+    // That stands with the result.
+    const told = new Set(leadProse(this.#sheet.tree));
+    for (const line of lines) {
+      const { tree } = line;
+      if (tree.type !== 'prose') this.#endProse();
+      if (tree.type === 'prose') {
+        this.#endTable();
+        if (!told.has(line)) this.#prose.push(tree.text);
+      } else if (tree.type === 'heading' && line !== title?.line) this.#heading(plainText(tree.text), '');
+      else this.#cell(cells.get(line.index) ?? null);
+    }
+    this.#endProse();
+    this.#endTable();
+    return this.#blocks.filter((block, at) => !isEmptyHeading(block, this.#blocks[at + 1]));
+  }
+
+  #cell(cell: CellReading | null): void {
+    if (cell === null) return;
+    if (cell.kind === 'check' || cell.kind === 'plot') return;
+    if (!(cell.kind in KINDS)) {
+      this.#rows.push(quantityRow(cell, this.#sheet));
+      return;
+    }
+    this.#endTable();
+    const entry = typed(cell.tree.line, cell.tree.entry.span);
+    const note = originCell(cell.tree.line, this.#sheet, false).content;
+    const remark: Inlines = note.length === 0 ? [] : [...plainText(': '), ...note];
+    this.#blocks.push({
+      type: 'paragraph',
+      tone: 'plain',
+      content: [{ type: 'strong', text: cell.name }, ...plainText(', '), ...plainText(entry), ...remark],
+    });
+    if (cell.fault !== null) this.#blocks.push(faultBlock(cell, this.#sheet));
+    this.#blocks.push(...(cell.kind === 'stage' ? stageBlocks(cell, this.#sheet) : partBlocks(cell, this.#sheet)));
+  }
+
+  #heading(content: Inlines, remark: string): void {
+    this.#endTable();
+    this.#blocks.push({ type: 'heading', number: `${this.#number}.${++this.#headings}`, content, remark });
+  }
+
+  #endTable(): void {
+    if (this.#rows.length === 0) return;
+    this.#blocks.push({ type: 'table', name: 'inputs', columns: INPUT_COLUMNS, rows: this.#rows });
+    this.#rows = [];
+  }
+
+  /** Lines of prose that follow each other are one paragraph. */
+  #endProse(): void {
+    if (this.#prose.length === 0) return;
+    this.#blocks.push({ type: 'paragraph', tone: 'prose', content: sentence(this.#prose.join(' ')) });
+    this.#prose = [];
+  }
+}
+
+function quantityRow(cell: CellReading, sheet: Sheet): TableRow {
+  const { line, entry } = cell.tree;
+  const cells: Cell[] = [
+    { content: [name(cell.name)] },
+    { content: [{ type: 'entry', text: typed(line, entry.span) }] },
+    ...numbersOf(cell),
+    originCell(line, sheet, cell.isInput),
+  ];
+  return { mark: null, cells };
+}
+
+function numbersOf(cell: CellReading): [Cell, Cell, Cell] {
+  if (cell.fault !== null) {
+    const words = cell.waitsFor === null ? 'broken' : `waits for ${cell.waitsFor}`;
+    return [EMPTY_CELL, { content: [{ type: 'strong', text: words }] }, EMPTY_CELL];
+  }
+  if (cell.isInput && cell.reading) return inputCells(cell.reading, cell);
+  const shown = shownCell(cell);
+  return [EMPTY_CELL, shown === null ? { content: plainText('no value') } : valueCell(shown), EMPTY_CELL];
+}
+
+function stageBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
+  const rows = cell.tree.fields.map((field): TableRow => ({
+    mark: null,
+    cells: [
+      { content: [name(labelOf(field))] },
+      { content: [{ type: 'entry', text: typed(field.line, field.body.span) }] },
+      originCell(field.line, sheet, false),
+    ],
+  }));
+  const wiring: Block = { type: 'table', name: 'wiring', columns: WIRING_COLUMNS, rows };
+  return [...schematicBlock(cell, sheet), wiring, ...offeredBlocks(cell)];
+}
+
+function schematicBlock(cell: CellReading, sheet: Sheet): readonly Block[] {
+  const stage = cell.fault === null ? sheet.stage(cell.name) : null;
+  if (stage === null) return [];
+  const drawing = drawSchematic(schematicOf(stage, sheet));
+  const svg = svgText(drawing, { id: `record-${cell.name}`, colors: TOKENS });
+  const caption: Inlines = plainText(`${drawing.title}, at rest, nominal values`);
+  return [{ type: 'figures', figures: [{ kind: 'schematic', svg, caption }] }];
+}
+
+function faultBlock(cell: CellReading, sheet: Sheet): Block {
+  const words = cell.waitsFor === null ? faultLine(sheet, cell.fault!) : cell.fault!.text;
+  return {
+    type: 'paragraph',
+    tone: 'plain',
+    content: [{ type: 'strong', text: 'Not computed: ' }, ...sentence(words)],
+  };
+}
+
+/** A heading under which only checks, figures or nothing stand; those have sections of their own. */
+function isEmptyHeading(block: Block, next: Block | undefined): boolean {
+  return block.type === 'heading' && (next === undefined || next.type === 'heading');
+}
