@@ -14,12 +14,13 @@ export interface ChartTable {
 const SILENT: ReadonlySet<Curve['role']> = new Set(['edge', 'limit']);
 const TABLE_DIGITS = 3;
 
-/** `V_GS −1.20 V: nominal 1.30 mA, bias line 1.00 mA`; curves that have no value there are left out. */
+/** `V_GS −1.20 V: nominal 1.30 mA, bias line 1.00 mA`; families and curves that have no value there are left out. */
 export function readOut({ x, y, curves }: Chart, at: number): string {
-  const values = spoken(curves).flatMap((curve) => {
+  const lone = spoken(curves).filter(({ role }) => role !== 'family');
+  const values = lone.flatMap((curve) => {
     const value = heightAt(curve, at);
     if (value === null) return [];
-    const name = curve.label === '' ? y.symbol : curve.label;
+    const name = nameOf(curve, y);
     return [`${name} ${formatValue(value, y.kind, { prefix: y.prefix }).text}`];
   });
   const place = `${x.symbol} ${formatValue(at, x.kind, { prefix: x.prefix }).text}`;
@@ -34,7 +35,7 @@ export function chartTable({ x, y, curves, marks }: Chart): ChartTable {
   const number = (value: number, { kind, prefix }: Axis): string =>
     formatValue(value, kind, { prefix, digits: TABLE_DIGITS, zeros: 'drop' }).number;
   return {
-    columns: [heading(x.symbol, x), ...shown.map(({ label }) => heading(label === '' ? y.symbol : label, y))],
+    columns: [heading(x.symbol, x), ...shown.map((curve) => heading(nameOf(curve, y), y))],
     rows: places.map((place) => [
       number(place, x),
       ...shown.map((curve) => {
@@ -54,6 +55,11 @@ export function heightAt({ x, y }: Pick<Curve, 'x' | 'y'>, at: number): number |
     if (Number.isFinite(value)) return value;
   }
   return null;
+}
+
+/** What a curve is called away from the figure. */
+function nameOf({ said, label }: Curve, y: Axis): string {
+  return said ?? (label === '' ? y.symbol : label);
 }
 
 function spoken(curves: readonly Curve[]): readonly Curve[] {

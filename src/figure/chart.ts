@@ -12,6 +12,8 @@ export interface Curve {
   readonly y: Float64Array;
   /** What stands on the line, names as cells are named; '' for nothing. */
   readonly label: string;
+  /** What it is called in a table or a read-out, where the label leans on the figure: `V_GS −1 V`. */
+  readonly said?: string;
   /** Where along the curve its label would best stand, 0 to 1. */
   readonly labelAt?: number;
   /** Small rings: at every tenth point beside the line, or at every point instead of it (measured points). */

@@ -51,7 +51,14 @@ export function outputPlane({ name, channel, devices, margin }: OutputInput): Ch
   const prefix = bestPrefix(Math.max(0, ...family.map(Math.abs)), VOLTAGE);
   for (const vgs of family) {
     const label = formatValue(vgs, VOLTAGE, { digits: 6, zeros: 'drop', prefix }).text;
-    curves.push({ role: 'family', ...sampleRising((vds) => first.law(vgs, vds), 0, far, y.high), label, labelAt: 1 });
+    const said = `V_GS ${label}`;
+    curves.push({
+      role: 'family',
+      ...sampleRising((vds) => first.law(vgs, vds), 0, far, y.high),
+      label,
+      said,
+      labelAt: 1,
+    });
   }
   const edge = edgeOf(first.law, first.threshold);
   curves.push({ role: 'edge', ...sampleRising(edge, 0, far, y.high), label: '' });
@@ -63,7 +70,8 @@ export function outputPlane({ name, channel, devices, margin }: OutputInput): Ch
     if (line !== null && !again)
       curves.push({ role: lineRole, ...line, label: load.label, labelAt: sign > 0 ? 0.75 : 0.25 });
     const own = role === 'nominal' ? formatValue(q.vgs, VOLTAGE).text : label;
-    curves.push({ role, ...sampleRising((vds) => law(q.vgs, vds), 0, far, y.high), label: own, labelAt: 1 });
+    const said = role === 'nominal' ? `V_GS ${own}` : `V_GS ${formatValue(q.vgs, VOLTAGE).text}, ${label}`;
+    curves.push({ role, ...sampleRising((vds) => law(q.vgs, vds), 0, far, y.high), label: own, said, labelAt: 1 });
   }
   const last = devices.at(-1)!;
   const strip = margin === null ? null : stripOf(last, sign * margin, x, y);

@@ -91,8 +91,10 @@ export function createChartCanvas(
   }
 
   function pathOf(u: uPlot, index: number): Path2D {
-    const { x, y } = picture.chart.curves[index - 1]!;
     const path = new Path2D();
+    // uPlot draws in a microtask: a plot that was replaced meanwhile may have lines that are no more.
+    if (u !== plot) return path;
+    const { x, y } = picture.chart.curves[index - 1]!;
     let down = false;
     for (let at = 0; at < x.length; at++) {
       if (!Number.isFinite(y[at]!)) {
@@ -108,6 +110,7 @@ export function createChartCanvas(
   }
 
   function paint(u: uPlot, layer: 'under' | 'over'): void {
+    if (u !== plot) return;
     const { ctx } = u;
     const ratio = ctx.canvas.width / picture.size.width;
     ctx.save();

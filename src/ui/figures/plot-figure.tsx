@@ -3,16 +3,22 @@
 import { Index, Match, Show, Switch, createMemo, createSignal } from 'solid-js';
 import { sheetPlot } from '../../figure/index.ts';
 import type { Desk } from '../desk/index.ts';
+import { createRested } from '../pace/index.ts';
+import type { Pace } from '../pace/index.ts';
 import { Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
 import { plotTitle } from './plot-title.ts';
+
+/** A sweep computes the sheet many times over: it follows typing and turning a few times a second. */
+const PACE: Pace = { rest: 80, most: 400 };
 
 /** One plot cell; while it is folded nothing of it is computed. */
 export function PlotFigure(props: { readonly desk: Desk; readonly name: string }) {
   const { document } = props.desk;
   const [open, setOpen] = createSignal(true);
+  const version = createRested(document.version, PACE);
   const plot = createMemo(() => {
-    document.version();
+    version();
     return open() ? sheetPlot(document.sheet, props.name) : null;
   });
   const charts = createMemo(() => {

@@ -1,23 +1,19 @@
 // Which steps of a cell's workings lead to one of its values.
 
-import { printStep } from '../../record/index.ts';
-import type { PrintedStep } from '../../record/index.ts';
 import type { Sheet, WorkingStep } from '../../sheet/index.ts';
 
 export interface Steps {
   /** Those to be read first. */
-  readonly first: readonly PrintedStep[];
+  readonly first: readonly WorkingStep[];
   /** All of them, where `first` is a part; empty otherwise. */
-  readonly all: readonly PrintedStep[];
+  readonly all: readonly WorkingStep[];
 }
 
 /** The workings of a cell; with a `value` first the steps that it rests on. */
 export function stepsFor(sheet: Sheet, cell: string, value: string | null): Steps {
   const steps = sheet.workings(cell);
-  const print = (step: WorkingStep): PrintedStep => printStep(step, cell);
   const chain = value === null ? steps : chainTo(steps, value);
-  if (chain.length === 0 || chain.length === steps.length) return { first: steps.map(print), all: [] };
-  return { first: chain.map(print), all: steps.map(print) };
+  return chain.length === 0 || chain.length === steps.length ? { first: steps, all: [] } : { first: chain, all: steps };
 }
 
 /** The last step of that name with all steps before it whose results it uses, directly or not. */

@@ -5,6 +5,8 @@ import { For, Show, batch, createMemo } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
 import { shownReading } from '../../record/index.ts';
 import type { CellReading } from '../../sheet/index.ts';
+import { createRested } from '../pace/index.ts';
+import type { Pace } from '../pace/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { CellLinks } from './cell-links.tsx';
 import { kindWords, valueWords } from './cell-words.ts';
@@ -13,9 +15,11 @@ import { formRows, partRows } from './part-rows.ts';
 import { FormTable, PartTable } from './part-tables.tsx';
 import { sourceWords } from './source-words.ts';
 import { spreadSentences } from './spread-words.ts';
-import { StepLine } from './step-line.tsx';
+import { AllSteps, StepList } from './step-list.tsx';
 import { stepsFor } from './steps-for.ts';
 import './workings.css';
+
+const PACE: Pace = { rest: 80, most: 400 };
 
 /** What a pane lets others do with it. */
 interface PaneControls {
@@ -66,7 +70,9 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
   const name = (): string => props.cell.name;
   const fault = createMemo(() => faultWords(props.cell, document.sheet));
   const offered = createMemo(() => props.cell.values.find((each) => each.name === props.value) ?? null);
-  const steps = createMemo(() => (document.version(), stepsFor(document.sheet, name(), props.value)));
+  // Formulas cost more to set than all else: while a value is being typed or turned they follow a few times a second.
+  const version = createRested(document.version, PACE);
+  const steps = createMemo(() => (version(), stepsFor(document.sheet, name(), props.value)));
   const spread = createMemo(() => {
     const { spread: declared, reading } = props.cell;
     return declared && reading && typeof reading.type !== 'string'
@@ -136,16 +142,9 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
         )}
       </Show>
 
-      <ol class="steps">
-        <For each={steps().first}>{(step) => <StepLine step={step} subject={name()} />}</For>
-      </ol>
+      <StepList steps={steps().first} subject={name()} />
       <Show when={steps().all.length > 0}>
-        <details class="all-steps">
-          <summary>all workings of {name()}</summary>
-          <ol class="steps">
-            <For each={steps().all}>{(step) => <StepLine step={step} subject={name()} />}</For>
-          </ol>
-        </details>
+        <AllSteps steps={steps().all} subject={name()} />
       </Show>
 
       <PartTable rows={partRows(props.cell, document.sheet)} />

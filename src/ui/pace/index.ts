@@ -1,0 +1,4 @@
+// Following values at an easy pace.
+
+export { createRested } from './rested.ts';
+export type { Pace } from './rested.ts';
