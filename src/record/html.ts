@@ -103,7 +103,14 @@ function table({ name, columns, rows }: Extract<Block, { readonly type: 'table' 
     return `<th scope="col"${span}>${text(title)}</th>`;
   });
   const body = rows.map((row) => tableRow(row, columns));
-  return `<table class="record-table record-table-${name}"><thead><tr>${head.join('')}</tr></thead><tbody>${body.join('')}</tbody></table>`;
+  return `<table class="record-table record-table-${name}">${columnGroup(columns)}<thead><tr>${head.join('')}</tr></thead><tbody>${body.join('')}</tbody></table>`;
+}
+
+function columnGroup(columns: Extract<Block, { readonly type: 'table' }>['columns']): string {
+  const cols = columns.map(({ kind }) =>
+    kind === 'number' ? '<col class="record-digits"><col class="record-unit">' : '<col>',
+  );
+  return `<colgroup>${cols.join('')}</colgroup>`;
 }
 
 function tableRow(row: TableRow, columns: Extract<Block, { readonly type: 'table' }>['columns']): string {

@@ -1,0 +1,55 @@
+// The record as elements, its formulas set by KaTeX. In print there is no time to wait: what is to be typeset then is
+// loaded beforehand, with the faces, and until it has come formulas stand as text.
+
+import type katex from 'katex';
+import 'katex/dist/katex.min.css';
+import { recordHtml } from '../../record/index.ts';
+import type { RecordTree } from '../../record/index.ts';
+import '../typeset/index.ts';
+import './record.css';
+
+type Katex = typeof katex;
+
+/** The faces that formulas of a sheet use. */
+const FACES = ['10pt KaTeX_Main', 'bold 10pt KaTeX_Main', 'italic 10pt KaTeX_Math'].concat(
+  ['KaTeX_Size1', 'KaTeX_Size2', 'KaTeX_Size3', 'KaTeX_Size4'].map((face) => `10pt ${face}`),
+);
+
+let loaded: Katex | null = null;
+let loading: Promise<void> | null = null;
+
+/** Loads what typesetting takes, once. */
+export function loadTypesetter(): Promise<void> {
+  loading ??= load();
+  return loading;
+}
+
+async function load(): Promise<void> {
+  // A face that cannot be had leaves the browser's own; the record prints all the same.
+  const faces = FACES.map((face) => document.fonts.load(face).catch(() => []));
+  loaded = (await import('katex')).default;
+  await Promise.all(faces);
+}
+
+/** The record as an element that is in no document yet; its formulas are text until `typesetFormulas`. */
+export function recordElement(tree: RecordTree): HTMLElement {
+  const template = document.createElement('template');
+  // The text is escaped where it is made, and the page's policy runs no script it might hold.
+  template.innerHTML = recordHtml(tree);
+  return template.content.firstElementChild as HTMLElement;
+}
+
+/** Typesets the formulas of a record at once, and makes those smaller that their line has no room for; false where KaTeX has not come. */
+export function typesetFormulas(record: HTMLElement): boolean {
+  if (loaded === null) return false;
+  for (const place of record.querySelectorAll<HTMLElement>('[data-tex]')) {
+    // Fractions at full size: numbers in place are to be read.
+    const tex = `\\displaystyle ${place.dataset.tex}`;
+    loaded.render(tex, place, { throwOnError: false, output: 'html', strict: false });
+  }
+  const sides = [...record.querySelectorAll<HTMLElement>('.record-side, td')];
+  // All are measured before any is changed, so that there is one layout.
+  const long = sides.filter((side) => side.scrollWidth > side.clientWidth + 1);
+  for (const side of long) side.classList.add('record-long');
+  return true;
+}
