@@ -1,6 +1,7 @@
 // The text field that a cell becomes while it is edited: a combobox whose list stands outside the row.
 
 import { onCleanup, onMount } from 'solid-js';
+import { pasteLinesWhileEditing } from './clipboard.ts';
 import type { Grid } from './grid.ts';
 import { whileEditing } from './keys.ts';
 import { LIST_ID, suggestionId } from './suggestion-list.tsx';
@@ -47,6 +48,9 @@ export function CellInput(props: { readonly grid: Grid; readonly label: string }
       onKeyDown={(event) => {
         event.stopPropagation();
         if (whileEditing(grid, event)) event.preventDefault();
+      }}
+      onPaste={(event) => {
+        if (pasteLinesWhileEditing(grid, event.clipboardData?.getData('text/plain') ?? '')) event.preventDefault();
       }}
       onBlur={() => grid.commit('leave')}
     />

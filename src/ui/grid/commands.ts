@@ -24,6 +24,7 @@ export function gridCommands(grid: Grid): Command[] {
       unavailable: () => (document.canRedo() ? null : 'Nothing was taken back.'),
       run: () => document.redo(),
     },
+    { id: 'insert', title: 'Insert', keys: ['Alt+I'], run: () => grid.setInserting(true) },
     {
       id: 'new-line-below',
       title: 'New line below',

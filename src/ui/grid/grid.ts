@@ -64,6 +64,9 @@ export interface Grid {
   /** Focuses the row of a line, or the one nearest. */
   focusLine(line: number, column: Column): void;
   readonly completing: Completing;
+  /** Whether the menu of what can be inserted is open. */
+  inserting(): boolean;
+  setInserting(open: boolean): void;
   /** The text field of the cell that is edited. */
   field(): HTMLInputElement | null;
   setField(field: HTMLInputElement | null): void;
@@ -87,6 +90,7 @@ export function createGrid(desk: Desk): Grid {
   const completing = createCompleting(document, editor);
   const [field, setField] = createSignal<HTMLInputElement | null>(null);
   const [draft, setDraft] = createSignal<Draft | null>(null);
+  const [inserting, setInserting] = createSignal(false);
   const [dragged, setDragged] = createSignal<Dragged | null>(null);
   const [anchor, setAnchor] = createSignal<string | null>(null);
   /** Where vertical moves come back to after a row that has fewer columns. */
@@ -377,6 +381,8 @@ export function createGrid(desk: Desk): Grid {
     },
     focusLine,
     completing,
+    inserting,
+    setInserting,
     field,
     setField,
     followText: (asked) => completing.follow(field()?.selectionStart ?? editor.text().length, asked),

@@ -1,10 +1,12 @@
 // The sheet as a grid of rows.
 
-import { For, onMount } from 'solid-js';
+import { For, onMount, Show } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
 import './grid.css';
 import { gridCommands } from './commands.ts';
 import { createGrid } from './grid.ts';
+import { copyRows, pasteInto } from './clipboard.ts';
+import { InsertMenu } from './insert-menu.tsx';
 import { navigate } from './keys.ts';
 import { cellAt, createFocus, rowAt } from './focus.ts';
 import { foldsByClick } from './columns.ts';
@@ -41,6 +43,9 @@ export function SheetGrid(props: { readonly desk: Desk }) {
           const place = cellAt(event.target);
           if (place && !grid.editor.editing()) grid.focused(place.key, place.column);
         }}
+        onCopy={(event) => !grid.editor.editing() && copyRows(grid, event, false)}
+        onCut={(event) => !grid.editor.editing() && copyRows(grid, event, true)}
+        onPaste={(event) => !grid.editor.editing() && pasteInto(grid, event)}
         onDblClick={(event) => {
           if (cellAt(event.target) && !grid.editor.editing()) grid.edit();
         }}
@@ -81,6 +86,11 @@ export function SheetGrid(props: { readonly desk: Desk }) {
         </div>
         <For each={grid.keys()}>{(key, index) => <RowView grid={grid} rowKey={key} index={index()} />}</For>
       </div>
+      <Show when={grid.inserting()}>
+        <div class="insert-place">
+          <InsertMenu grid={grid} onClose={() => grid.setInserting(false)} />
+        </div>
+      </Show>
       <SuggestionList grid={grid} take={(index) => grid.take(index)} />
     </div>
   );

@@ -12,3 +12,6 @@ export { nextValue, setTurned, snapped, turnedNumber } from './turning.ts';
 export { complete } from './completion.ts';
 export type { Completion } from './completion.ts';
 export type { Suggestion } from './suggestions.ts';
+export { INSERTIONS, insertionLines } from './insertions.ts';
+export type { Insertion, InsertionChoice } from './insertions.ts';
+export { setNumbers } from './part-numbers.ts';

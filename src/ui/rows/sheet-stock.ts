@@ -1,0 +1,68 @@
+// What a sheet has to build on: free names, its parts, a supply.
+
+import { dimensionName } from '../../quantity/index.ts';
+import type { CellReading, Sheet } from '../../sheet/index.ts';
+
+/** A part with the constants of its square law, in the frame of an n-channel FET. */
+export interface StockPart {
+  readonly name: string;
+  readonly channel: 'n' | 'p';
+  readonly family: 'JFET' | 'MOSFET';
+  /** A/V². */
+  readonly beta: number;
+  /** V; negative for depletion. */
+  readonly threshold: number;
+}
+
+/** The first name of a kind that no cell bears: `R_1`, `Q2`. */
+export function freeName(sheet: Sheet, stem: string, taken: ReadonlySet<string> = new Set()): string {
+  const names = new Set([...sheet.tree.cells.map((cell) => cell.name.name), ...taken]);
+  let k = 1;
+  while (names.has(`${stem}${k}`)) k++;
+  return `${stem}${k}`;
+}
+
+/** The first part that computes; null where there is none. */
+export function partOf(sheet: Sheet): StockPart | null {
+  for (const cell of sheet.cells()) {
+    const { entry } = cell.tree;
+    if (entry.type !== 'part' || cell.fault !== null || cell.waitsFor !== null) continue;
+    const value = (name: string): number | null => numberOf(cell, name);
+    const beta = value('beta') ?? value('K');
+    const threshold = value('V_TO');
+    if (beta === null || threshold === null) continue;
+    const mirrored = entry.channel === 'p' && entry.family === 'MOSFET';
+    return {
+      name: cell.name,
+      channel: entry.channel,
+      family: entry.family,
+      beta,
+      threshold: mirrored ? -threshold : threshold,
+    };
+  }
+  return null;
+}
+
+/** The margin of the first stage that computes, as a path; null where there is none. */
+export function firstStage(sheet: Sheet): string | null {
+  const stage = sheet.cells().find((cell) => cell.kind === 'stage' && cell.fault === null && cell.waitsFor === null);
+  return stage ? `${stage.name}.margin` : null;
+}
+
+/** A supply: an input in volts of a few volts at least, those called V_DD and the like first; null where there is none. */
+export function supplyOf(sheet: Sheet): { readonly name: string; readonly volts: number } | null {
+  const found = sheet.cells().flatMap((cell) => {
+    const { reading, isInput } = cell;
+    if (!isInput || !reading || typeof reading.type === 'string' || typeof reading.value !== 'number') return [];
+    if (dimensionName(reading.type) !== 'a voltage' || reading.value < LEAST_SUPPLY) return [];
+    return [{ name: cell.name, volts: reading.value }];
+  });
+  return found.find(({ name }) => /^V_(?:DD|CC|S|\+)$/.test(name)) ?? found[0] ?? null;
+}
+
+const LEAST_SUPPLY = 3;
+
+function numberOf(cell: CellReading, name: string): number | null {
+  const value = cell.values.find((each) => each.name === name)?.value;
+  return typeof value === 'number' && Number.isFinite(value) ? value : null;
+}
