@@ -7,7 +7,7 @@ import { sentence } from './inline.ts';
 import type { Block, Figure, Inlines } from './record-tree.ts';
 
 /** In CSS pixels; two stand side by side and are printed a little larger than drawn. */
-const CHART = { width: 288, height: 205 };
+const CHART = { width: 288, height: 172 };
 
 /** Figures with their captions, and a sentence for each plot that could not be drawn. */
 export function figuresBlocks(sheet: Sheet): readonly Block[] {

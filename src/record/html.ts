@@ -42,16 +42,16 @@ export function recordHtml(tree: RecordTree): string {
 // ---------------------------------------------------------------- head
 
 function titleBlock({ title, titleBlock: entries, digest, printedAt }: RecordTree): string {
-  const fields = entries.map(({ label, content }) => entry(label, inlines(content)));
-  const printed = printedAt === null ? '' : entry('Printed', text(printedAt));
+  const fields = entries.map(({ field, label, content }) => entry(field, label, inlines(content)));
+  const printed = printedAt === null ? '' : entry('printed', 'Printed', text(printedAt));
   return (
     `<header class="record-title"><div class="record-name"><p class="record-label">Calculation record</p><h1>${text(title)}</h1></div>` +
-    `<dl>${fields.join('')}${printed}${entry('SHA-256 of the sheet text', `<span class="record-digest">${groups(digest)}</span>`)}</dl></header>`
+    `<dl>${fields.join('')}${printed}${entry('digest', 'SHA-256 of the sheet text', `<span class="record-digest">${groups(digest)}</span>`)}</dl></header>`
   );
 }
 
-function entry(label: string, content: string): string {
-  return `<div class="record-field"><dt>${text(label)}</dt><dd>${content}</dd></div>`;
+function entry(field: string, label: string, content: string): string {
+  return `<div class="record-field record-field-${field}"><dt>${text(label)}</dt><dd>${content}</dd></div>`;
 }
 
 /** In groups of eight, as they are compared by eye. */
@@ -64,7 +64,7 @@ function groups(digest: string): string {
 function section({ number, title, remark, blocks }: Section): string {
   const behind = remark === '' ? '' : ` <span class="record-remark">${text(remark)}</span>`;
   const name = title.toLowerCase().replace(/[^a-z]+/g, '-');
-  return `<section class="record-section record-${name}"><h2><span class="record-number">${text(number)}</span> ${text(title)}${behind}</h2>${blocks.map(block).join('')}</section>`;
+  return `<section class="record-section record-section-${name}"><h2><span class="record-number">${text(number)}</span> ${text(title)}${behind}</h2>${blocks.map(block).join('')}</section>`;
 }
 
 function block(node: Block): string {
@@ -83,6 +83,11 @@ function block(node: Block): string {
       return table(node);
     case 'values':
       return `<dl class="record-values">${node.values.map(({ name, value }) => `<div><dt>${inline(name)}</dt>${valueParts(value)}</div>`).join('')}</dl>`;
+    case 'stage': {
+      const drawing = node.drawing === null ? '' : figure(node.drawing);
+      const values = node.values === null ? '' : block(node.values);
+      return `<div class="record-stage"><div>${drawing}${block(node.wiring)}</div><div>${values}</div></div>`;
+    }
     case 'steps':
       return `<div class="record-steps">${node.steps.map(step).join('')}</div>`;
     case 'figures':
@@ -172,9 +177,9 @@ function inlines(parts: Inlines): string {
 function inline(part: Inline): string {
   switch (part.type) {
     case 'text':
-      return text(part.text);
+      return text(withUnits(part.text));
     case 'strong':
-      return `<strong>${text(part.text)}</strong>`;
+      return `<strong>${text(withUnits(part.text))}</strong>`;
     case 'entry':
       return `<code>${text(part.text)}</code>`;
     case 'name':
@@ -189,6 +194,11 @@ function inline(part: Inline): string {
 function run({ text: words, style }: Run): string {
   if (style === 'upright') return text(words);
   return style === 'italic' ? `<i>${text(words)}</i>` : `<sub>${text(words)}</sub>`;
+}
+
+/** A number and its unit stay in one line. */
+function withUnits(words: string): string {
+  return words.replace(/(\d) (?=(?:[fpnµmkMG]?(?:V|A|Ω|F|H|W|S|s|Hz|K)|°C|%|dB)(?![A-Za-z]))/g, '$1\u00a0');
 }
 
 /** Characters that turn the direction of what follows or cannot be seen, which could make a record read otherwise. */

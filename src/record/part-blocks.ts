@@ -34,23 +34,29 @@ export function offeredBlocks(cell: CellReading): readonly Block[] {
   const known = offered.filter(({ value }) => value !== null);
   const values = known.map((value) => ({ name: name(value.name), value: offeredCell(value) }));
   const missing = offered.filter(({ value }) => value === null);
-  return [
-    { type: 'values', values },
-    ...missingSentences(missing).map((content): Block => ({ type: 'paragraph', tone: 'remark', content })),
-  ];
+  return [{ type: 'values', values }, ...(missing.length === 0 ? [] : [missingBlock(missing)])];
 }
 
-/** Values that miss the same thing are named together. */
-function missingSentences(missing: CellReading['values']): readonly Inlines[] {
+/** `Without a value: C_gs, C_gd (needs C_iss and C_rss); f_low (is not computed yet).` */
+function missingBlock(missing: CellReading['values']): Block {
   const reasons = new Map<string, string[]>();
   for (const { name: path, missing: fault } of missing) {
-    const reason = fault?.text ?? 'has no value.';
+    const words = (fault?.text ?? 'unknown').replace(/[.]$/, '');
+    const reason = words.startsWith(`${path} `) ? words.slice(path.length + 1) : words;
     reasons.set(reason, [...(reasons.get(reason) ?? []), path]);
   }
-  return [...reasons].map(([reason, paths]) => {
+  const groups = [...reasons].flatMap(([reason, paths], group): Inlines => {
     const names = paths.flatMap((path, at): Inlines => [...plainText(at === 0 ? '' : ', '), name(path)]);
-    return [...plainText('No value of '), ...names, ...plainText(': '), ...sentence(reason)];
+    return [
+      ...plainText(group === 0 ? '' : '; '),
+      ...names,
+      ...plainText(' ('),
+      ...sentence(reason),
+      ...plainText(')'),
+    ];
   });
+  const content: Inlines = [...plainText('Without a value: '), ...groups, ...plainText('.')];
+  return { type: 'paragraph', tone: 'remark', content };
 }
 
 function fieldRow(field: FieldTree, reading: FieldReading | null, cell: CellReading, sheet: Sheet): TableRow {

@@ -64,6 +64,13 @@ export type Block =
     }
   /** Names and values in columns, read downwards. */
   | { readonly type: 'values'; readonly values: readonly { readonly name: Inline; readonly value: Cell }[] }
+  /** A stage: its drawing and wiring, and beside them what it comes to. */
+  | {
+      readonly type: 'stage';
+      readonly drawing: Figure | null;
+      readonly wiring: Block;
+      readonly values: Block | null;
+    }
   | { readonly type: 'steps'; readonly steps: readonly Step[] }
   | { readonly type: 'figures'; readonly figures: readonly Figure[] }
   | { readonly type: 'sign-off'; readonly people: readonly Person[] }
@@ -84,6 +91,8 @@ export interface Section {
 }
 
 export interface TitleEntry {
+  /** The field of the title, as the sheet calls it. */
+  readonly field: string;
   readonly label: string;
   readonly content: Inlines;
 }

@@ -44,6 +44,7 @@ export function recordOf(sheet: Sheet, { digest, printedAt }: RecordOptions): Re
     printedAt: printedAt ?? null,
     incomplete: incompleteWords(verdict, sheet),
     titleBlock: (Object.keys(TITLE_LABELS) as TitleField[]).map((label) => ({
+      field: label,
       label: TITLE_LABELS[label],
       content: orBlank(titleField(tree, label)),
     })),

@@ -8,7 +8,7 @@ import { leadProse } from './lead-prose.ts';
 import { faultLine, labelOf, typed } from './open-points.ts';
 import { originCell } from './origin-cell.ts';
 import { offeredBlocks, partBlocks } from './part-blocks.ts';
-import type { Block, Cell, Inlines, TableRow } from './record-tree.ts';
+import type { Block, Cell, Figure, Inline, Inlines, TableRow } from './record-tree.ts';
 import { shownCell } from './shown.ts';
 import { inputCells, valueCell } from './value-cells.ts';
 
@@ -23,7 +23,6 @@ const INPUT_COLUMNS = [
 const WIRING_COLUMNS = [
   { title: 'place', kind: 'text' },
   { title: 'what hangs on it', kind: 'text' },
-  { title: 'source and note', kind: 'text' },
 ] as const;
 
 const KINDS: Readonly<Record<string, string>> = {
@@ -132,25 +131,25 @@ function numbersOf(cell: CellReading): [Cell, Cell, Cell] {
 }
 
 function stageBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
-  const rows = cell.tree.fields.map((field): TableRow => ({
-    mark: null,
-    cells: [
-      { content: [name(labelOf(field))] },
-      { content: [{ type: 'entry', text: typed(field.line, field.body.span) }] },
-      originCell(field.line, sheet, false),
-    ],
-  }));
+  const rows = cell.tree.fields.map((field): TableRow => {
+    const origin = originCell(field.line, sheet, false).content;
+    const entry: Inline = { type: 'entry', text: typed(field.line, field.body.span) };
+    const content: Inlines = origin.length === 0 ? [entry] : [entry, ...plainText('  '), ...origin];
+    return { mark: null, cells: [{ content: [name(labelOf(field))] }, { content }] };
+  });
   const wiring: Block = { type: 'table', name: 'wiring', columns: WIRING_COLUMNS, rows };
-  return [...schematicBlock(cell, sheet), wiring, ...offeredBlocks(cell)];
+  const offered = offeredBlocks(cell);
+  const values = offered.find(({ type }) => type === 'values') ?? null;
+  const stage: Block = { type: 'stage', drawing: schematic(cell, sheet), wiring, values };
+  return [stage, ...offered.filter((block) => block !== values)];
 }
 
-function schematicBlock(cell: CellReading, sheet: Sheet): readonly Block[] {
+function schematic(cell: CellReading, sheet: Sheet): Figure | null {
   const stage = cell.fault === null ? sheet.stage(cell.name) : null;
-  if (stage === null) return [];
+  if (stage === null) return null;
   const drawing = drawSchematic(schematicOf(stage, sheet));
   const svg = svgText(drawing, { id: `record-${cell.name}`, colors: TOKENS });
-  const caption: Inlines = plainText(`${drawing.title}, at rest, nominal values`);
-  return [{ type: 'figures', figures: [{ kind: 'schematic', svg, caption }] }];
+  return { kind: 'schematic', svg, caption: plainText(`${drawing.title}, at rest, nominal values`) };
 }
 
 function faultBlock(cell: CellReading, sheet: Sheet): Block {

@@ -47,9 +47,9 @@ export function typesetFormulas(record: HTMLElement): boolean {
     const tex = `\\displaystyle ${place.dataset.tex}`;
     loaded.render(tex, place, { throwOnError: false, output: 'html', strict: false });
   }
-  const sides = [...record.querySelectorAll<HTMLElement>('.record-side, td')];
+  const lines = [...record.querySelectorAll<HTMLElement>('.record-equation, td')];
   // All are measured before any is changed, so that there is one layout.
-  const long = sides.filter((side) => side.scrollWidth > side.clientWidth + 1);
-  for (const side of long) side.classList.add('record-long');
+  const long = lines.filter((line) => line.scrollWidth > line.clientWidth + 1);
+  for (const line of long) line.classList.add('record-long');
   return true;
 }
