@@ -1,10 +1,12 @@
 // The page around the panes: head, verdict, sheet, figures and workings, status; tabs where it is narrow.
 
 import { For, Show, createEffect, createSignal, onCleanup, onMount } from 'solid-js';
+import { sha256Hex } from '../../numeric/index.ts';
 import { saveFile } from '../../storage/index.ts';
 import { commandForKey, createDesk, keyOf } from '../desk/index.ts';
 import { FiguresPane } from '../figures/index.ts';
 import { SheetGrid } from '../grid/index.ts';
+import { RecordView, installPrint } from '../record/index.ts';
 import type { Session } from '../session/index.ts';
 import { sheetTitle } from '../session/index.ts';
 import { VerdictLine } from '../verdict/index.ts';
@@ -91,7 +93,11 @@ export function Shell(props: { readonly session: Session }) {
   }
   onMount(() => {
     document.addEventListener('keydown', onKeyDown);
-    onCleanup(() => document.removeEventListener('keydown', onKeyDown));
+    const endPrint = installPrint(desk, digestOf);
+    onCleanup(() => {
+      document.removeEventListener('keydown', onKeyDown);
+      endPrint();
+    });
   });
 
   return (
@@ -161,9 +167,17 @@ export function Shell(props: { readonly session: Session }) {
       <Show when={dialog() === 'share'}>
         <ShareDialog session={session} onClose={() => setDialog(null)} saveFile={save} />
       </Show>
+      <Show when={dialog() === 'record'}>
+        <RecordView desk={desk} digest={digestOf(session.document.text())} onClose={() => setDialog(null)} />
+      </Show>
       <Show when={dialog() === 'help'}>
         <HelpDialog desk={desk} onClose={() => setDialog(null)} />
       </Show>
     </div>
   );
+}
+
+/** SHA-256 of a text's UTF-8 bytes, as the terminal prints it. */
+function digestOf(text: string): string {
+  return sha256Hex(new TextEncoder().encode(text));
 }
