@@ -57,6 +57,8 @@ export interface Grid {
   commit(then: 'stay' | 'down' | 'right' | 'left' | 'leave'): void;
   cancel(): void;
   draft(): Draft | null;
+  /** The row that the new line being typed would be. */
+  pending(): Row | null;
   openDraft(draft: Draft): void;
   /** The line number at which a row's text stands, or null. */
   lineOf(key: string): number | null;
@@ -364,6 +366,10 @@ export function createGrid(desk: Desk): Grid {
       else if (beside !== undefined) focus(beside, wished);
     },
     draft,
+    pending() {
+      const line = pendingLine();
+      return line === null ? null : model().ofLine(line);
+    },
     openDraft(wanted) {
       batch(() => {
         setDraft(wanted);

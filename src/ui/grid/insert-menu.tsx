@@ -5,6 +5,7 @@ import type { Column } from '../desk/index.ts';
 import type { Mark } from '../rows/index.ts';
 import { INSERTIONS } from '../rows/index.ts';
 import type { InsertionChoice } from '../rows/index.ts';
+import { Prose } from '../typeset/index.ts';
 import type { Grid } from './grid.ts';
 import { insertChoice } from './insert-commands.ts';
 import { MarkShape } from './mark.tsx';
@@ -65,7 +66,9 @@ export function InsertMenu(props: { readonly grid: Grid; readonly onClose: () =>
           >
             <MarkShape mark={MARKS[choice.group]} text={choice.group} />
             <span class="insert-title">{choice.title}</span>
-            <span class="insert-words">{choice.words}</span>
+            <span class="insert-words">
+              <Prose text={choice.words} />
+            </span>
           </button>
         )}
       </For>

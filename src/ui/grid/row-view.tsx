@@ -57,6 +57,15 @@ export function RowView(props: RowProps) {
         <Show when={has('nominal')}>
           <Numbers state={state} />
         </Show>
+        <Show when={row().type === 'ghost' && state.editing() && grid.pending()}>
+          {(pending) => (
+            <span class="pending" aria-hidden="true">
+              <Show when={pending().waitsFor} fallback={<NumberText figure={pending().nominal} withUnit />}>
+                {(name) => <span class="waiting">waits for {name()}</span>}
+              </Show>
+            </span>
+          )}
+        </Show>
         <Show when={row().type === 'wiring'}>
           <span class="aside wiring-aside">{row().source?.text}</span>
         </Show>

@@ -47,14 +47,16 @@ interface Rails {
 function legsOf(shape: StageShape, part: StockPart, volts: number, { near, far, named }: Rails): string[] {
   if (shape === 'switch') return switchLegs(part, volts, { near, far, named });
   const bias = biasOf(part, volts);
+  const isSink = shape === 'current sink' && isDepletion(part);
+  const gate = isSink ? `to ${near}` : gateLegs(part, bias, volts, { near, far, named });
+  const hasDrain = shape === 'common source' || shape === 'common gate';
+  const drain = hasDrain ? named.make('R_D', ((volts - bias.source - bias.overdrive) * 0.5) / bias.current) : '';
   const source = named.make('R_S', bias.source / bias.current);
-  const gate = gateLegs(part, bias, volts, { near, far, named });
-  const drain = (): string => named.make('R_D', ((volts - bias.source - bias.overdrive) * 0.5) / bias.current);
   switch (shape) {
     case 'common source':
       return [
         `gate: ${gate}, 100 nF to signal`,
-        `drain: ${drain()} to ${far}, 1 uF to load`,
+        `drain: ${drain} to ${far}, 1 uF to load`,
         `source: ${source} to ${near}, 47 uF to ${near}`,
         'load: 100 kohm to 0 V',
         'output: load',
@@ -70,13 +72,13 @@ function legsOf(shape: StageShape, part: StockPart, volts: number, { near, far, 
     case 'common gate':
       return [
         `gate: ${gate}, 1 uF to 0 V`,
-        `drain: ${drain()} to ${far}, 1 uF to load`,
+        `drain: ${drain} to ${far}, 1 uF to load`,
         `source: ${source} to ${near}, 10 uF to signal`,
         'load: 100 kohm to 0 V',
         'output: load',
       ];
     case 'current sink':
-      return [`gate: ${isDepletion(part) ? `to ${near}` : gate}`, `drain: to ${far}`, `source: ${source} to ${near}`];
+      return [`gate: ${gate}`, `drain: to ${far}`, `source: ${source} to ${near}`];
   }
 }
 
