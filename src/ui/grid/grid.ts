@@ -42,6 +42,8 @@ export interface Grid {
   isSelected(key: string): boolean;
   /** Whether this is the one cell that Tab reaches. */
   isStop(key: string, column: Column): boolean;
+  /** The row that the one cell is in that Tab reaches. */
+  stop(): string | null;
   isInRange(key: string): boolean;
   /** Keys of the rows of the range; the selected row alone where there is none. */
   range(): readonly string[];
@@ -312,6 +314,7 @@ export function createGrid(desk: Desk): Grid {
       const found = row(key);
       return found !== null && nearestColumn(found, selection?.row === key ? selection.column : 'name') === column;
     },
+    stop: stopKey,
     isInRange: (key) => rangeSet().has(key),
     range() {
       const inside = rangeSet();

@@ -4,6 +4,7 @@ import { Match, Show, Switch } from 'solid-js';
 import { Bar } from './bar.tsx';
 import { Cell } from './cell.tsx';
 import { EntryText, NameText, NumberText, SourceText } from './cell-texts.tsx';
+import { EditAids } from './edit-aids.tsx';
 import type { Grid } from './grid.ts';
 import { MarkShape } from './mark.tsx';
 import { RowMessage } from './row-message.tsx';
@@ -14,7 +15,6 @@ import type { RowState } from './row-state.ts';
 interface RowProps {
   readonly grid: Grid;
   readonly rowKey: string;
-  readonly index: number;
 }
 
 /** The row of a key. */
@@ -36,7 +36,7 @@ export function RowView(props: RowProps) {
           'row-head': row().fold !== null && row().type === 'cell',
         }}
         data-key={rowKey}
-        aria-rowindex={props.index + 2}
+        aria-rowindex={grid.indexOf(rowKey) + 2}
         aria-selected={isSelected() || grid.isInRange(rowKey)}
       >
         <Show when={has('mark')} fallback={<Gutter state={state} />}>
@@ -68,6 +68,9 @@ export function RowView(props: RowProps) {
         </Show>
         <Show when={row().type === 'wiring'}>
           <span class="aside wiring-aside">{row().source?.text}</span>
+        </Show>
+        <Show when={state.editing()}>
+          <EditAids grid={grid} />
         </Show>
       </div>
       <RowMessage state={state} />

@@ -1,6 +1,6 @@
 // The sheet as a grid of rows.
 
-import { For, onMount, Show } from 'solid-js';
+import { createMemo, createSignal, For, onMount, Show } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
 import './grid.css';
 import { gridCommands } from './commands.ts';
@@ -10,7 +10,10 @@ import { InsertMenu } from './insert-menu.tsx';
 import { navigate } from './keys.ts';
 import { cellAt, createFocus, rowAt } from './focus.ts';
 import { foldsByClick } from './columns.ts';
+import { itemOf, itemText, windowItems } from './row-window.ts';
+import type { Seen } from './row-window.ts';
 import { RowView } from './row-view.tsx';
+import { createSeen } from './seen.ts';
 import { SuggestionList } from './suggestion-list.tsx';
 
 /** The grid of a desk's sheet. */
@@ -18,8 +21,15 @@ export function SheetGrid(props: { readonly desk: Desk }) {
   const grid = createGrid(props.desk);
   let table: HTMLDivElement | undefined;
 
+  const [seen, setSeen] = createSignal<() => Seen>(() => ({ top: 0, height: 0 }));
+  const items = createMemo(() => windowItems(grid.keys(), seen()(), grid.stop()).map(itemText));
+
   onMount(() => {
-    if (table) grid.onFocus(createFocus(table));
+    if (table) {
+      const follow = createSeen(table);
+      setSeen(() => follow);
+      grid.onFocus(createFocus(table));
+    }
     props.desk.addCommands(gridCommands(grid));
   });
 
@@ -84,7 +94,16 @@ export function SheetGrid(props: { readonly desk: Desk }) {
             source, note
           </span>
         </div>
-        <For each={grid.keys()}>{(key, index) => <RowView grid={grid} rowKey={key} index={index()} />}</For>
+        <For each={items()}>
+          {(text) => {
+            const item = itemOf(text);
+            return 'key' in item ? (
+              <RowView grid={grid} rowKey={item.key} />
+            ) : (
+              <div class="gap" style={{ height: `${item.gap}px` }} aria-hidden="true" />
+            );
+          }}
+        </For>
       </div>
       <Show when={grid.inserting()}>
         <div class="insert-place">

@@ -98,7 +98,8 @@ function isFaultHere(cell: CellReading, line: number): boolean {
 
 /** In a table the numbers stand in their columns and the entry shows what is left: the condition. */
 function fieldEntry({ line, body }: FieldTree, inTable: boolean): RowEntry {
-  if (inTable && body.type === 'quantity') return { text: conditionText(line, body), look: 'words' };
+  if (inTable && body.type === 'quantity')
+    return { text: conditionText(line, body).replace(/(?<=[=\s])-(?=[\d.])/g, '−'), look: 'words' };
   return { text: line.text.slice(body.span.start, body.span.end), look: 'formula' };
 }
 
