@@ -3,7 +3,7 @@
 
 export { checkText, reserveText } from './check-text.ts';
 export { recordHtml } from './html.ts';
-export { openPoints } from './open-points.ts';
+export { inputTally, openPoints } from './open-points.ts';
 export type { OpenPoint } from './open-points.ts';
 export { proseParts } from './prose.ts';
 export { recordOf } from './record.ts';

@@ -63,6 +63,20 @@ export function inputLines(cell: CellReading, sheet: Sheet): readonly InputLine[
   return [...own, ...fields];
 }
 
+/** How many inputs a sheet has, and how well they are founded. */
+export function inputTally(sheet: Sheet): {
+  readonly inputs: number;
+  readonly assumed: number;
+  readonly unsourced: number;
+} {
+  const inputs = sheet.cells().flatMap((cell) => inputLines(cell, sheet));
+  return {
+    inputs: inputs.length,
+    assumed: inputs.filter(isAssumed).length,
+    unsourced: inputs.filter(isUnsourced).length,
+  };
+}
+
 /** `line 12, column 8: what is wrong`. */
 export function faultLine(sheet: Sheet, { line, span, text }: Fault): string {
   return `line ${line + 1}, column ${lineColumn(sheet.tree.lines[line]!, span.start)}: ${text}`;

@@ -5,9 +5,9 @@ import type { Sheet } from '../sheet/index.ts';
 import { checksBlock } from './checks-section.ts';
 import { cautionBlocks, signOffBlocks, textBlocks } from './closing-sections.ts';
 import { figuresBlocks } from './figures-section.ts';
-import { orBlank, plainText, sentence } from './inline.ts';
+import { orBlank, plainText, sentence, strong } from './inline.ts';
 import { leadProse } from './lead-prose.ts';
-import { inputLines, isAssumed, isUnsourced, openPoints } from './open-points.ts';
+import { inputTally, openPoints } from './open-points.ts';
 import type { OpenPoint } from './open-points.ts';
 import type { Block, Inlines, Mark, RecordTree, Section } from './record-tree.ts';
 import { sheetBlocks } from './sheet-section.ts';
@@ -42,7 +42,7 @@ export function recordOf(sheet: Sheet, { digest, printedAt }: RecordOptions): Re
     paper: paperOf(tree),
     digest,
     printedAt: printedAt ?? null,
-    incomplete: incompleteWords(verdict, sheet),
+    incomplete: incompleteWords(verdict),
     titleBlock: (Object.keys(TITLE_LABELS) as TitleField[]).map((label) => ({
       field: label,
       label: TITLE_LABELS[label],
@@ -85,7 +85,7 @@ function numberedSections(sheet: Sheet, verdict: Verdict, open: readonly OpenPoi
 
 function resultBlocks(sheet: Sheet, { state, sentence: words }: Verdict, open: readonly OpenPoint[]): readonly Block[] {
   const content: Inlines = [
-    { type: 'strong', text: words },
+    strong(words),
     ...plainText(' Tolerances, device limits and service are listed below but not searched in this record.'),
     ...plainText(` ${openSentence(sheet, open)}`),
   ];
@@ -98,16 +98,16 @@ function resultBlocks(sheet: Sheet, { state, sentence: words }: Verdict, open: r
 
 /** How much is open, in one sentence. */
 function openSentence(sheet: Sheet, open: readonly OpenPoint[]): string {
-  const inputs = sheet.cells().flatMap((cell) => inputLines(cell, sheet));
+  const { inputs, assumed, unsourced } = inputTally(sheet);
   const count = (number: number, one: string, several: string): string[] =>
     number === 0 ? [] : [`${number} ${number === 1 ? one : several}`];
   const taken = open.filter(({ kind }) => kind === 'taken').length;
   const parts = [
-    ...count(inputs.filter(isAssumed).length, 'assumed input', 'assumed inputs'),
-    ...count(inputs.filter(isUnsourced).length, 'input without a source', 'inputs without a source'),
+    ...count(assumed, 'assumed input', 'assumed inputs'),
+    ...count(unsourced, 'input without a source', 'inputs without a source'),
     ...count(taken, 'number taken by the sheet', 'numbers taken by the sheet'),
   ];
-  const all = `${inputs.length === 1 ? '1 input' : `${inputs.length} inputs`}`;
+  const all = `${inputs === 1 ? '1 input' : `${inputs} inputs`}`;
   return parts.length === 0 ? `${all}, all with a source.` : `${all}; to be confirmed: ${parts.join(', ')}.`;
 }
 
@@ -133,16 +133,13 @@ function listOf(points: readonly OpenPoint[], mark: 'box' | 'dot'): Block {
   return { type: 'list', mark, items };
 }
 
-function incompleteWords({ broken, waiting, state }: Verdict, sheet: Sheet): Inlines | null {
+function incompleteWords({ broken, waiting, state }: Verdict): Inlines | null {
   if (state !== 'incomplete') return null;
   const parts = [
     ...(broken.length > 0 ? [`${broken.length === 1 ? '1 cell is' : `${broken.length} cells are`} broken`] : []),
     ...(waiting.length > 0 ? [`${waiting.length === 1 ? '1 has' : `${waiting.length} have`} no value`] : []),
   ];
-  const whole = sheet.cells().length;
-  return plainText(
-    `Record of an incomplete sheet: of ${whole} cells, ${parts.join(' and ')}. Not to be signed as it stands.`,
-  );
+  return plainText(`Record of an incomplete sheet: ${parts.join(' and ')}. Not to be signed as it stands.`);
 }
 
 function editionOf({ tree }: Sheet): string {

@@ -23,8 +23,7 @@ type Found = { readonly text: string; readonly line: CellTree['line'] };
 /** Every caution that is due as the stage stands. */
 export function stageCautions(stage: StageInHand): Found[] {
   const { tree } = stage;
-  const name = tree.name.name;
-  const own = (text: string): Found => ({ text: `${name}: ${text}`, line: tree.line });
+  const own = (text: string): Found => ({ text, line: tree.line });
   return [...deviceCautions(stage).map(own), ...voltageCautions(stage).map(own), ...legCautions(stage)];
 }
 
@@ -39,12 +38,12 @@ function deviceCautions({ fets, lowering, read }: StageInHand): string[] {
   const volts = (x: number): string => formatValue(x, VOLTAGE).text;
   if (part.family === 'JFET' && Math.max(vgs, -vdg) > GATE_FORWARD) {
     found.push(
-      `the gate of ${partName} is forward by ${volts(Math.max(vgs, -vdg))}: it conducts, and the sheet does not count that current.`,
+      `The gate of ${partName} is forward by ${volts(Math.max(vgs, -vdg))}: it conducts, and the sheet does not count that current.`,
     );
   }
   if (part.family === 'MOSFET' && vds < -BODY_DIODE) {
     found.push(
-      `the body diode of ${partName} conducts at V_DS = ${volts(part.channel * vds)}; the sheet does not count that current.`,
+      `The body diode of ${partName} conducts at V_DS = ${volts(part.channel * vds)}; the sheet does not count that current.`,
     );
   }
   if (vov > 0 && vov < WEAK) {
@@ -64,9 +63,9 @@ function deviceCautions({ fets, lowering, read }: StageInHand): string[] {
   over('V_GS', vgs, 'V_GSmax');
   over('V_DG', vdg, 'V_DGmax');
   over('I_D', value('I_D'), 'I_Dmax');
-  if (value('T_J') > limit('T_Jmax')) found.push(`the junction of ${partName} is hotter than its limit T_Jmax.`);
+  if (value('T_J') > limit('T_Jmax')) found.push(`The junction of ${partName} is hotter than its limit T_Jmax.`);
   if (lowering.lines && Math.abs(read(lowering.lines.V_L)) > limit('V_DSmax')) {
-    found.push(`with ${partName} off, V_DS is ${volts(read(lowering.lines.V_L))}, beyond its limit V_DSmax.`);
+    found.push(`With ${partName} off, V_DS is ${volts(read(lowering.lines.V_L))}, beyond its limit V_DSmax.`);
   }
   return found;
 }
@@ -85,10 +84,10 @@ function voltageCautions({ lowering, legs, read }: StageInHand): string[] {
   if (high - low <= TOUCH_LIMIT) return [];
   const between = formatValue(high - low, VOLTAGE).text;
   const found = [
-    `up to ${between} d.c. between its places, above 60 V d.c.: dangerous to touch. Local codes and licensed practice decide, not the sheet.`,
+    `Up to ${between} d.c. between its places, above 60 V d.c.: dangerous to touch. Local codes and licensed practice decide, not the sheet.`,
   ];
   if (legs.some(({ net }) => net.element?.kind === 'capacitor')) {
-    found.push('its capacitors hold that charge after switching off: discharge them and measure before touching.');
+    found.push('Its capacitors hold that charge after switching off: discharge them and measure before touching.');
   }
   return found;
 }
@@ -100,7 +99,7 @@ function legCautions({ legs, context, tree }: StageInHand): Found[] {
     if (net.element?.kind === 'source') {
       found.push({
         line: field.line,
-        text: `${tree.name.name}: the current source ${net.element.label} is ideal; its compliance is not checked.`,
+        text: `The current source ${net.element.label} is ideal; its compliance is not checked.`,
       });
     }
     if (leg.place.type === 'expr' && net.to.type === 'rail') {
@@ -108,7 +107,7 @@ function legCautions({ legs, context, tree }: StageInHand): Found[] {
         if (context.look(path.names[0]!.name)?.kind === 'stage') {
           found.push({
             line: field.line,
-            text: `${tree.name.name}: the rail ${net.to.label} is taken from a stage and loads it with nothing.`,
+            text: `The rail ${net.to.label} is taken from a stage and loads it with nothing.`,
           });
         }
       }
@@ -120,7 +119,7 @@ function legCautions({ legs, context, tree }: StageInHand): Found[] {
       if (count === 2 && context.look(name)?.toleranced) {
         found.push({
           line: field.line,
-          text: `${tree.name.name}: ${name} has a tolerance and hangs in two legs, as one component in two places. For two pieces write ${name}b = another ${name}.`,
+          text: `${name} has a tolerance and hangs in two legs, as one component in two places. For two pieces write ${name}b = another ${name}.`,
         });
       }
     }

@@ -80,7 +80,7 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, c
     cautions: (read) =>
       others.flatMap((other) =>
         disagreement(used, other, read).map((text) => ({
-          text: `${tree.name.name}: ${text}`,
+          text,
           line: lineOf(other.route, given, context),
         })),
       ),

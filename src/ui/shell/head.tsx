@@ -16,7 +16,7 @@ const GROUPS: readonly (readonly string[])[] = [
 /** Title, facts and toolbar. */
 export function Head(props: { readonly desk: Desk }) {
   const { desk } = props;
-  const facts = createMemo(() => factsOf(desk.document.tree(), desk.document.cells()));
+  const facts = createMemo(() => (desk.document.version(), factsOf(desk.document.sheet)));
   const [current, setCurrent] = createSignal('undo');
   const groups = createMemo(() =>
     GROUPS.map((ids) => ids.flatMap((id) => desk.commands().find((command) => command.id === id) ?? [])),

@@ -1,7 +1,7 @@
 // What the head says about the sheet.
 
-import type { SheetTree, Source } from '../../language/index.ts';
-import type { CellReading } from '../../sheet/index.ts';
+import { inputTally } from '../../record/index.ts';
+import type { Sheet } from '../../sheet/index.ts';
 import { inputWords } from './keep-words.ts';
 
 export interface SheetFacts {
@@ -11,22 +11,14 @@ export interface SheetFacts {
 }
 
 /** Title and facts of a sheet. */
-export function factsOf(tree: SheetTree, cells: readonly CellReading[]): SheetFacts {
+export function factsOf(sheet: Sheet): SheetFacts {
+  const { tree } = sheet;
   const field = (name: string): string => {
     const found = tree.title?.fields.find(({ label }) => label[0]?.name === name);
     return found?.body.type === 'text' ? found.body.text.trim() : '';
   };
-  const sources: (Source | null)[] = [];
-  for (const { isInput, tree: cell, fields } of cells) {
-    if (isInput) sources.push(cell.source);
-    for (const reading of fields) {
-      const written = cell.fields.find(({ line }) => line.index === reading.line);
-      if (reading.isInput && written && cell.entry.type === 'part') sources.push(written.source);
-    }
-  }
-  const assumed = sources.filter((source) => source?.text.trim() === 'assumed').length;
-  const unsourced = sources.filter((source) => source === null).length;
+  const { inputs, assumed, unsourced } = inputTally(sheet);
   const revision = field('revision');
-  const parts = [revision && `rev ${revision}`, field('status'), inputWords(sources.length, assumed, unsourced)];
+  const parts = [revision && `rev ${revision}`, field('status'), inputWords(inputs, assumed, unsourced)];
   return { title: tree.title?.text || 'Sheet without a title', words: parts.filter((part) => part !== '').join(' · ') };
 }
