@@ -92,7 +92,7 @@ function voltageCautions({ lowering, legs, read }: StageInHand): string[] {
   return found;
 }
 
-function legCautions({ legs, context, tree }: StageInHand): Found[] {
+function legCautions({ legs, context }: StageInHand): Found[] {
   const found: Found[] = [];
   const hangs = new Map<string, number>();
   for (const { net, leg, field } of legs) {
