@@ -160,7 +160,8 @@ async function saved(
       const { format, id, created, asideOf } = base;
       const revision = Math.max(base.revision, standing?.revision ?? 0) + 1;
       const record = { format, id, text, history, folded, revision, writer, created, changed, asideOf };
-      put(objects, record);
+      objects.put(record, sheetKey(id));
+      objects.put(headOf(record), headKey(id));
       await done;
       return { status: 'kept', record };
     });
@@ -175,17 +176,6 @@ function finished(objects: IDBObjectStore): Promise<void> {
   // Where a request before it fails, nobody waits for this one.
   done.catch(() => undefined);
   return done;
-}
-
-function put(objects: IDBObjectStore, record: SheetRecord): void {
-  try {
-    objects.put(record, sheetKey(record.id));
-    objects.put(headOf(record), headKey(record.id));
-  } catch (thrown) {
-    // Else the first of the two would be written without the second.
-    objects.transaction.abort();
-    throw thrown;
-  }
 }
 
 async function removeFrom(objects: IDBObjectStore, id: string): Promise<boolean> {

@@ -223,6 +223,16 @@ test('the same edit in both tabs is no conflict', async () => {
   expect(await texts()).toEqual({ sheet: 'same' });
 });
 
+test('the same edit in both tabs is none either where the other one is heard of before the save', async () => {
+  const [mine, theirs] = [await openTab(), await openTab()];
+  mine.type('same');
+  theirs.type('same');
+  await theirs.keeper.flush();
+  await settle();
+  expect(await mine.keeper.flush()).toHaveProperty('state', 'kept');
+  expect(await texts()).toEqual({ sheet: 'same' });
+});
+
 test('where theirs has gone on meanwhile, the latest is taken, or replaced', async () => {
   for (const action of ['takeTheirs', 'keepMine'] as const) {
     const [mine, theirs] = await collide();
@@ -312,6 +322,20 @@ test('an edit of a sheet deleted in another tab is set aside until it is kept or
     expect(await texts()).toEqual(action === 'keepMine' ? { sheet: 'mine' } : {});
     await theirs.keeper.close();
   }
+});
+
+test('a text that was let go is not written later on, though it could not be kept before', async () => {
+  const [mine, theirs] = [await openTab({ deaf: true }), await openTab()];
+  await theirs.shelf.remove(opened.id);
+  mine.type('mine');
+  mine.touchy.fault = 'full';
+  expect(await mine.keeper.flush()).toMatchObject({ kind: 'deleted', own: 'unkept' });
+  expect(await mine.keeper.takeTheirs()).toBeNull();
+  mine.touchy.fault = 'none';
+  await clock.turn(MINUTE);
+  await settle();
+  expect(await texts()).toEqual({});
+  expect(mine.keeper.state()).toEqual({ state: 'kept', at: null });
 });
 
 test('what a newer version wrote is neither overwritten nor taken, and my text is kept beside it', async () => {
