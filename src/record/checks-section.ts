@@ -2,7 +2,7 @@
 
 import type { CellReading, Sheet } from '../sheet/index.ts';
 import { checkText } from './check-text.ts';
-import { name, plainText } from './inline.ts';
+import { name, plainText, sentence, strong } from './inline.ts';
 import type { Block, Inline, Mark, TableRow } from './record-tree.ts';
 import { typed } from './open-points.ts';
 import { workingsOf } from './workings.ts';
@@ -44,7 +44,7 @@ function row(cell: CellReading, sheet: Sheet): TableRow {
       { content: [name(cell.name)] },
       { content: [written] },
       { content: filled },
-      { content: mark === 'fails' ? [{ type: 'strong', text: result }] : plainText(result) },
+      { content: mark === 'fails' ? [strong(result)] : sentence(result) },
     ],
   };
 }

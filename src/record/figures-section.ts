@@ -3,11 +3,11 @@
 import { drawChart, planesOf, sheetPlot, stackCharts, svgText, TOKENS } from '../figure/index.ts';
 import type { Chart, Drawing } from '../figure/index.ts';
 import type { CellReading, Sheet } from '../sheet/index.ts';
-import { sentence } from './inline.ts';
+import { sentence, strong } from './inline.ts';
 import type { Block, Figure, Inlines } from './record-tree.ts';
 
 /** In CSS pixels; two stand side by side and are printed a little larger than drawn. */
-const CHART = { width: 288, height: 172 };
+const CHART = { width: 288, height: 190 };
 
 /** Figures with their captions, and a sentence for each plot that could not be drawn. */
 export function figuresBlocks(sheet: Sheet): readonly Block[] {
@@ -18,7 +18,7 @@ export function figuresBlocks(sheet: Sheet): readonly Block[] {
     const number = figures.length + 1;
     const svg = svgText(drawing, { id: `record-figure-${number}`, colors: TOKENS });
     const lead = `Figure ${number}${cells.length > 0 ? ` (${cells.join(', ')})` : ''}. `;
-    figures.push({ kind: 'chart', svg, caption: [{ type: 'strong', text: lead }, ...sentence(drawing.sentence)] });
+    figures.push({ kind: 'chart', svg, caption: [strong(lead), ...sentence(drawing.sentence)] });
   };
   const plots = sheet.cells().filter(({ tree }) => tree.entry.type === 'plot');
   for (const cell of plots) {
@@ -35,7 +35,8 @@ export function figuresBlocks(sheet: Sheet): readonly Block[] {
   }
   for (const cell of plots) {
     const plot = sheetPlot(sheet, cell.name);
-    if ('message' in plot) messages.push(sentence(`${cell.name}: ${plot.message}`));
+    if ('message' in plot)
+      messages.push(sentence(plot.message.startsWith(cell.name) ? plot.message : `${cell.name}: ${plot.message}`));
     else if (planeKey(cell) === null) add(stackCharts(plot.charts, sizeFor(plot.charts)), [cell.name]);
   }
   const blocks: Block[] = figures.length > 0 ? [{ type: 'figures', figures }] : [];

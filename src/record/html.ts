@@ -179,7 +179,7 @@ function inline(part: Inline): string {
     case 'text':
       return text(withUnits(part.text));
     case 'strong':
-      return `<strong>${text(withUnits(part.text))}</strong>`;
+      return `<strong>${inlines(part.content)}</strong>`;
     case 'entry':
       return `<code>${text(part.text)}</code>`;
     case 'name':

@@ -15,6 +15,11 @@ export function name(path: string, subject: string | null = null): Inline {
   return { type: 'name', text: path, runs: pathRuns(path, subject) };
 }
 
+/** A sentence set strongly. */
+export function strong(text: string): Inline {
+  return { type: 'strong', content: sentence(text) };
+}
+
 export function plainText(text: string): Inlines {
   return text === '' ? [] : [{ type: 'text', text }];
 }

@@ -2,7 +2,7 @@
 
 import type { Line } from '../language/index.ts';
 import type { Sheet } from '../sheet/index.ts';
-import { plainText, sentence } from './inline.ts';
+import { plainText, sentence, strong } from './inline.ts';
 import type { Cell, Inlines } from './record-tree.ts';
 import { originOf } from './source.ts';
 
@@ -15,7 +15,7 @@ export function originCell(line: Line, sheet: Sheet, isInput: boolean): Cell {
 }
 
 function sourceWords(source: string | null, isInput: boolean): Inlines {
-  if (source === 'assumed') return [{ type: 'strong', text: 'assumed' }];
+  if (source === 'assumed') return [strong('assumed')];
   if (source !== null) return sentence(source);
-  return isInput ? [{ type: 'strong', text: 'no source' }] : [];
+  return isInput ? [strong('no source')] : [];
 }

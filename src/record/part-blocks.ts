@@ -3,6 +3,7 @@
 import { formatValue } from '../quantity/index.ts';
 import type { CellReading, FieldReading, Sheet } from '../sheet/index.ts';
 import type { Condition, FieldTree } from '../language/index.ts';
+import { enteredTable } from './entered-table.ts';
 import { EMPTY_CELL, name, plainText, sentence } from './inline.ts';
 import { labelOf, typed } from './open-points.ts';
 import type { Block, Cell, Inline, Inlines, TableRow } from './record-tree.ts';
@@ -20,6 +21,7 @@ const COLUMNS = [
 
 /** The rows of a part or point, and what follows from them; of negative quantities min and max are by magnitude. */
 export function partBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
+  if (cell.fault !== null) return [enteredTable(cell, sheet, ['row', 'as entered'])];
   const readings = new Map(cell.fields.map((field) => [field.line, field]));
   const rows = cell.tree.fields.map((field) => fieldRow(field, readings.get(field.line.index) ?? null, cell, sheet));
   const table: readonly Block[] = rows.length === 0 ? [] : [{ type: 'table', name: 'part', columns: COLUMNS, rows }];

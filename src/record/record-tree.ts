@@ -6,7 +6,7 @@ import type { Run } from '../figure/index.ts';
 /** A piece of running text. */
 export type Inline =
   | { readonly type: 'text'; readonly text: string }
-  | { readonly type: 'strong'; readonly text: string }
+  | { readonly type: 'strong'; readonly content: Inlines }
   /** A name or path as the trade sets it; `text` is its spelling in the sheet. */
   | { readonly type: 'name'; readonly text: string; readonly runs: readonly Run[] }
   /** Text of the sheet as its author typed it. */

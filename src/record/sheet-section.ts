@@ -3,12 +3,13 @@
 
 import { drawSchematic, schematicOf, svgText, TOKENS } from '../figure/index.ts';
 import type { CellReading, Sheet } from '../sheet/index.ts';
-import { EMPTY_CELL, name, plainText, sentence } from './inline.ts';
+import { enteredTable } from './entered-table.ts';
+import { EMPTY_CELL, name, plainText, sentence, strong } from './inline.ts';
 import { leadProse } from './lead-prose.ts';
-import { faultLine, labelOf, typed } from './open-points.ts';
+import { faultLine, typed } from './open-points.ts';
 import { originCell } from './origin-cell.ts';
 import { offeredBlocks, partBlocks } from './part-blocks.ts';
-import type { Block, Cell, Figure, Inline, Inlines, TableRow } from './record-tree.ts';
+import type { Block, Cell, Figure, Inlines, TableRow } from './record-tree.ts';
 import { shownCell } from './shown.ts';
 import { inputCells, valueCell } from './value-cells.ts';
 
@@ -20,11 +21,6 @@ const INPUT_COLUMNS = [
   { title: 'high', kind: 'number' },
   { title: 'source and note', kind: 'text' },
 ] as const;
-const WIRING_COLUMNS = [
-  { title: 'place', kind: 'text' },
-  { title: 'what hangs on it', kind: 'text' },
-] as const;
-
 const KINDS: Readonly<Record<string, string>> = {
   part: 'part',
   another: 'part',
@@ -84,7 +80,7 @@ class SheetWriter {
     this.#blocks.push({
       type: 'paragraph',
       tone: 'plain',
-      content: [{ type: 'strong', text: cell.name }, ...plainText(', '), ...plainText(entry), ...remark],
+      content: [strong(cell.name), ...plainText(', '), ...plainText(entry), ...remark],
     });
     if (cell.fault !== null) this.#blocks.push(faultBlock(cell, this.#sheet));
     this.#blocks.push(...(cell.kind === 'stage' ? stageBlocks(cell, this.#sheet) : partBlocks(cell, this.#sheet)));
@@ -123,7 +119,7 @@ function quantityRow(cell: CellReading, sheet: Sheet): TableRow {
 function numbersOf(cell: CellReading): [Cell, Cell, Cell] {
   if (cell.fault !== null) {
     const words = cell.waitsFor === null ? 'broken' : `waits for ${cell.waitsFor}`;
-    return [EMPTY_CELL, { content: [{ type: 'strong', text: words }] }, EMPTY_CELL];
+    return [EMPTY_CELL, { content: [strong(words)] }, EMPTY_CELL];
   }
   if (cell.isInput && cell.reading) return inputCells(cell.reading, cell);
   const shown = shownCell(cell);
@@ -131,13 +127,7 @@ function numbersOf(cell: CellReading): [Cell, Cell, Cell] {
 }
 
 function stageBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
-  const rows = cell.tree.fields.map((field): TableRow => {
-    const origin = originCell(field.line, sheet, false).content;
-    const entry: Inline = { type: 'entry', text: typed(field.line, field.body.span) };
-    const content: Inlines = origin.length === 0 ? [entry] : [entry, ...plainText('  '), ...origin];
-    return { mark: null, cells: [{ content: [name(labelOf(field))] }, { content }] };
-  });
-  const wiring: Block = { type: 'table', name: 'wiring', columns: WIRING_COLUMNS, rows };
+  const wiring = enteredTable(cell, sheet, ['place', 'what hangs on it']);
   const offered = offeredBlocks(cell);
   const values = offered.find(({ type }) => type === 'values') ?? null;
   const stage: Block = { type: 'stage', drawing: schematic(cell, sheet), wiring, values };
@@ -157,7 +147,7 @@ function faultBlock(cell: CellReading, sheet: Sheet): Block {
   return {
     type: 'paragraph',
     tone: 'plain',
-    content: [{ type: 'strong', text: 'Not computed: ' }, ...sentence(words)],
+    content: [strong('Not computed: '), ...sentence(words)],
   };
 }
 

@@ -8,12 +8,12 @@ const DIGEST_SHOWN = 16;
 /** Custom properties that the margin boxes read. */
 export function pageWords(tree: RecordTree): Readonly<Record<string, string>> {
   const digest = tree.digest.slice(0, DIGEST_SHOWN).replace(/(.{8})(?=.)/g, '$1 ');
+  const state = tree.incomplete === null ? [] : ['incomplete'];
   return {
     '--record-head': cssString(tree.title),
-    '--record-edition': cssString(tree.edition),
+    '--record-edition': cssString([...state, tree.edition].filter((part) => part !== '').join(', ')),
     '--record-foot': cssString(`Squarelaw, text ${digest}`),
     '--record-when': cssString(tree.printedAt === null ? '' : `printed ${tree.printedAt}`),
-    '--record-state': cssString(tree.incomplete === null ? '' : 'incomplete'),
   };
 }
 
