@@ -47,7 +47,7 @@ export function chartTable({ x, y, curves, marks }: Chart): ChartTable {
 }
 
 /** Height of a curve at x, by straight lines between its points; null beyond its ends and in its gaps. */
-export function heightAt({ x, y }: Pick<Curve, 'x' | 'y'>, at: number): number | null {
+function heightAt({ x, y }: Pick<Curve, 'x' | 'y'>, at: number): number | null {
   for (let i = 1; i < x.length; i++) {
     const [x0, x1, y0, y1] = [x[i - 1]!, x[i]!, y[i - 1]!, y[i]!];
     if (at < Math.min(x0, x1) || at > Math.max(x0, x1) || x0 === x1) continue;

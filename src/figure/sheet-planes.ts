@@ -22,11 +22,15 @@ export function planesOf(
   if (q === null || threshold === null) return null;
   const channel = stage.channel > 0 ? 'n' : 'p';
   const forced = (label: string): LabelledLine => ({ volts: 0, ohms: Infinity, amps: q.id, label });
+  // The gate's leakage moves both lines a little: they are drawn as they stand with the leakage at Q.
+  const lineThrough = (volts: number, ohms: number, label: string): LabelledLine => {
+    return { volts: volts + stage.channel * ohms * q.id, ohms, amps: q.id, label };
+  };
   const bias = lines
-    ? { volts: lines.V_GG, ohms: lines.R_m, amps: q.id, label: slopeLabel('bias line', lines.R_m, stage) }
+    ? lineThrough(q.vgs, lines.R_m, slopeLabel('bias line', lines.R_m, stage))
     : forced('forced current');
   const load = lines
-    ? { volts: lines.V_L, ohms: lines.R_L, amps: q.id, label: slopeLabel('load line', lines.R_L, stage) }
+    ? lineThrough(q.vds, lines.R_L, slopeLabel('load line', lines.R_L, stage))
     : forced('forced current');
   const device: OutputDevice = { role: 'nominal', label: 'nominal', law, threshold, q, load };
   return {

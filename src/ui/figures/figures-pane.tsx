@@ -9,14 +9,8 @@ import './figures.css';
 
 const NO_STAGE = 'No stage yet. Insert one, or write A1 = stage of Q1, and its schematic and curves appear here.';
 
-/** What a pane lets others do with it. */
-export interface PaneControls {
-  /** Puts the keyboard into the pane. */
-  focus(): void;
-}
-
 /** The pane of figures. */
-export function FiguresPane(props: { readonly desk: Desk; readonly controls?: (controls: PaneControls) => void }) {
+export function FiguresPane(props: { readonly desk: Desk }) {
   const { desk } = props;
   const plots = createMemo(
     () =>
@@ -27,11 +21,9 @@ export function FiguresPane(props: { readonly desk: Desk; readonly controls?: (c
     [],
     { equals: (a, b) => a.join() === b.join() },
   );
-  let pane!: HTMLElement;
-  props.controls?.({ focus: () => pane.focus() });
 
   return (
-    <section class="figures-pane" id="figures" aria-label="Figures" tabindex="-1" ref={(element) => (pane = element)}>
+    <section class="figures-pane" id="figures" aria-label="Figures" tabindex="-1">
       <header class="pane-head">
         <h2>{desk.stage() ?? 'Figures'}</h2>
         <Show when={desk.stage()}>

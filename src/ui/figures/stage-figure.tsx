@@ -63,7 +63,7 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
                   <Name path={value.name} />
                 </dt>
                 <dd>
-                  {value.number} <span class="unit">{value.unit}</span>
+                  {value.number} <span class="value-unit">{value.unit}</span>
                 </dd>
               </div>
             )}
@@ -106,8 +106,8 @@ function RestTable(props: { readonly stage: string; readonly rows: readonly Stag
               <th scope="row" title={value.sentence}>
                 <Name path={value.name} />
               </th>
-              <td class="number">{value.number}</td>
-              <td class="unit">{value.unit}</td>
+              <td class="value-number">{value.number}</td>
+              <td class="value-unit">{value.unit}</td>
             </tr>
           )}
         </For>

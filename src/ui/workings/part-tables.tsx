@@ -13,13 +13,13 @@ export function PartTable(props: { readonly rows: readonly PartRow[] }) {
           <thead>
             <tr>
               <th scope="col">given</th>
-              <th scope="col" class="number">
+              <th scope="col" class="value-number">
                 low
               </th>
-              <th scope="col" class="number">
+              <th scope="col" class="value-number">
                 nominal
               </th>
-              <th scope="col" class="number">
+              <th scope="col" class="value-number">
                 high
               </th>
               <th scope="col">source</th>
@@ -32,9 +32,9 @@ export function PartTable(props: { readonly rows: readonly PartRow[] }) {
                   <th scope="row">
                     <Name path={row.name} />
                   </th>
-                  <td class="number">{row.low}</td>
-                  <td class="number">{row.nominal}</td>
-                  <td class="number">{row.high}</td>
+                  <td class="value-number">{row.low}</td>
+                  <td class="value-number">{row.nominal}</td>
+                  <td class="value-number">{row.high}</td>
                   <td class="words">{row.source}</td>
                 </tr>
               )}
@@ -54,7 +54,7 @@ export function FormTable(props: { readonly title: string; readonly rows: readon
         <thead>
           <tr>
             <th scope="col">{props.title}</th>
-            <th scope="col" class="number">
+            <th scope="col" class="value-number">
               nominal
             </th>
             <th scope="col">what it is</th>
@@ -67,7 +67,7 @@ export function FormTable(props: { readonly title: string; readonly rows: readon
                 <th scope="row">
                   <Name path={row.name} />
                 </th>
-                <td class="number">{row.value}</td>
+                <td class="value-number">{row.value}</td>
                 <td class="words">
                   <Prose text={row.sentence} />
                 </td>

@@ -21,21 +21,13 @@ import './workings.css';
 
 const PACE: Pace = { rest: 80, most: 400 };
 
-/** What a pane lets others do with it. */
-interface PaneControls {
-  /** Puts the keyboard into the pane. */
-  focus(): void;
-}
-
 /** The pane of workings. Escape leads back to the cell in the sheet. */
-export function WorkingsPane(props: { readonly desk: Desk; readonly controls?: (controls: PaneControls) => void }) {
+export function WorkingsPane(props: { readonly desk: Desk }) {
   const { desk } = props;
   const cell = createMemo(() => {
     const name = desk.selection()?.cell;
     return name ? desk.document.cell(name) : null;
   });
-  let pane!: HTMLElement;
-  props.controls?.({ focus: () => pane.focus() });
 
   const onKeyDown = (event: KeyboardEvent): void => {
     const selection = desk.selection();
@@ -50,14 +42,7 @@ export function WorkingsPane(props: { readonly desk: Desk; readonly controls?: (
   };
 
   return (
-    <section
-      class="workings-pane"
-      id="workings"
-      aria-label="Workings"
-      tabindex="-1"
-      ref={(element) => (pane = element)}
-      onKeyDown={onKeyDown}
-    >
+    <section class="workings-pane" id="workings" aria-label="Workings" tabindex="-1" onKeyDown={onKeyDown}>
       <Show when={cell()} fallback={<p class="workings-empty">Select a line of the sheet to see its workings here.</p>}>
         {(shown) => <CellWorkings desk={desk} cell={shown()} value={desk.selection()?.value ?? null} />}
       </Show>

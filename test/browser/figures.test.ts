@@ -1,0 +1,137 @@
+// The figures in the built page: what is drawn follows the selection and the text, in whatever light, and prints.
+
+import { expect } from 'vitest';
+import type { Locator, Page } from 'playwright-core';
+import { test } from '../support/page-test.ts';
+
+async function openFigures(page: Page, address: string): Promise<Locator> {
+  await page.goto(address);
+  const pane = page.getByRole('region', { name: 'Figures' });
+  await pane.locator('canvas').first().waitFor();
+  return pane;
+}
+
+function row(page: Page, name: string): Locator {
+  return page.locator(`[data-key="cell:${name}"] [data-column="name"]`);
+}
+
+/** A canvas as a hash of its pixels. */
+function pixels(canvas: Locator): Promise<string> {
+  return canvas.evaluate((element) => (element as HTMLCanvasElement).toDataURL());
+}
+
+test('figures follow the selected row to its stage, and say when it belongs to none', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  await pane.getByRole('heading', { level: 2, name: 'A1' }).waitFor();
+  await row(page, 'R_E').click();
+  await pane.getByRole('heading', { level: 2, name: 'A2' }).waitFor();
+  await row(page, 'A_chain').click();
+  await pane.getByText('Still showing A2: the selected line belongs to no stage.').waitFor();
+  await row(page, 'R_D').click();
+  await pane.getByRole('heading', { level: 2, name: 'A1' }).waitFor();
+});
+
+test('figures that do not follow stay with their stage', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  await pane.getByRole('checkbox', { name: 'follows the selection' }).uncheck();
+  await row(page, 'R_E').click();
+  await expect(pane.getByRole('heading', { level: 2 }).textContent()).resolves.toBe('A1');
+});
+
+test('a symbol leads to its cell by click and by keys', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const symbols = pane.getByRole('group', { name: 'Schematic of A1' }).getByRole('button');
+  await expect(symbols.count()).resolves.toBe(5);
+  await pane.getByRole('button', { name: /^R_D, resistor of 6\.8 kΩ/ }).click();
+  await expectFocus(page, 'cell:R_D');
+  // One stop for Tab; arrows walk through the others.
+  const stops = await symbols.evaluateAll((all) => all.filter((each) => each.getAttribute('tabindex') === '0').length);
+  expect(stops).toBe(1);
+  await symbols.first().focus();
+  await page.keyboard.press('End');
+  const last = await page.evaluate(() => document.activeElement?.getAttribute('aria-label'));
+  expect(last).toBe(await symbols.last().getAttribute('aria-label'));
+  await page.keyboard.press('Enter');
+  await expectFocus(page, 'cell:R_S2', 'cell:Q1', 'cell:R_S1', 'cell:R_G');
+});
+
+test('every figure says its values and unfolds as a table', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const plane = pane.getByRole('region', { name: 'Transfer plane of A1' });
+  await plane.getByRole('img', { name: /operating points: nominal V_GS −1\.07 V, I_D 696 µA/ }).waitFor();
+  await plane.getByText('as table').click();
+  const table = plane.getByRole('table', { name: 'Transfer plane of A1' });
+  const heads = await table.getByRole('columnheader').allTextContents();
+  expect(heads).toEqual(['VGS (V)', 'bias line (mA)', 'nominal (mA)']);
+  await table.getByRole('row', { name: /^−1\.07/ }).waitFor();
+});
+
+test('the pointer over a plane reads its curves in words', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const plane = pane.getByRole('region', { name: 'Output plane of A1' });
+  const box = (await plane.locator('canvas').boundingBox())!;
+  await page.mouse.move(box.x + box.width / 2, box.y + box.height / 2);
+  await plane.getByText(/^VDS \d.*: load line [\d.]+ mA, VGS −1\.07 V [\d.]+ mA$/).waitFor();
+  await page.mouse.move(2, 2);
+  await expect.poll(() => plane.locator('.read-out').textContent()).toBe('');
+});
+
+test('an edit moves the curves; dark and light are drawn anew', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const canvas = pane.getByRole('region', { name: 'Output plane of A1' }).locator('canvas');
+  const before = await pixels(canvas);
+  await page.evaluate(() => document.documentElement.setAttribute('data-theme', 'dark'));
+  await expect.poll(() => pixels(canvas)).not.toBe(before);
+  await page.evaluate(() => document.documentElement.setAttribute('data-theme', 'light'));
+  await expect.poll(() => pixels(canvas)).toBe(before);
+  await page.locator('[data-key="cell:R_S2"] [data-column="entry"]').click();
+  await page.keyboard.press('F2');
+  await page.keyboard.press('Control+a');
+  await page.keyboard.type('2.2 kohm');
+  await page.keyboard.press('Enter');
+  await expect.poll(() => pixels(canvas)).not.toBe(before);
+  await pane.getByRole('button', { name: /^R_S2, resistor of 2\.2 kΩ/ }).waitFor();
+});
+
+test('plots of the sheet stand below in its order and fold', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const plots = pane.locator('details.plot-figure');
+  await expect
+    .poll(() => plots.locator('> summary').allTextContents())
+    .toEqual(['F1 transfer of A1', 'F2 output of A1', 'F3 ID, A1 against RS2']);
+  await plots.nth(2).locator('> summary').click();
+  await expect.poll(() => plots.nth(2).locator('canvas').count()).toBe(0);
+  await plots.nth(2).locator('> summary').click();
+  await plots.nth(2).locator('canvas').waitFor();
+  await pane.getByRole('button', { name: 'F3 in the sheet' }).click();
+  await expectFocus(page, 'cell:F3');
+});
+
+test('in print charts are lines, not pixels', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const charts = await pane.locator('canvas').count();
+  expect(charts).toBe(5);
+  await page.evaluate(() => window.dispatchEvent(new Event('beforeprint')));
+  await expect(pane.locator('.chart-place svg').count()).resolves.toBe(charts);
+  await expect(pane.locator('canvas').count()).resolves.toBe(0);
+  await page.evaluate(() => window.dispatchEvent(new Event('afterprint')));
+  await expect.poll(() => pane.locator('canvas').count()).toBe(charts);
+});
+
+test('nothing is wider than a narrow page', async ({ context, address }) => {
+  const page = await context.newPage();
+  await page.setViewportSize({ width: 390, height: 844 });
+  await page.goto(address);
+  await page.getByRole('navigation', { name: 'Panes' }).getByRole('button', { name: 'Figures' }).click();
+  const pane = page.getByRole('region', { name: 'Figures' });
+  await pane.locator('canvas').first().waitFor();
+  const wider = await pane.evaluate((element) => element.scrollWidth - element.clientWidth);
+  expect(wider).toBeLessThanOrEqual(0);
+});
+
+/** Waits until the focus is in one of these rows of the sheet. */
+async function expectFocus(page: Page, ...keys: string[]): Promise<void> {
+  const focused = (): Promise<string> =>
+    page.evaluate(() => document.activeElement?.closest('[data-key]')?.getAttribute('data-key') ?? '');
+  await expect.poll(async () => keys.includes(await focused())).toBe(true);
+}
