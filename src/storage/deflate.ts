@@ -1,9 +1,7 @@
 // Raw deflate streams through the browser's own compressor. Source: RFC 1951.
 
 /** What came of unpacking; `damaged` is also a stream that ends too early. Bytes behind its end are damage in some browsers only. */
-export type Inflated =
-  | { readonly status: 'whole'; readonly bytes: Uint8Array }
-  | { readonly status: 'damaged' | 'too large' };
+type Inflated = { readonly status: 'whole'; readonly bytes: Uint8Array } | { readonly status: 'damaged' | 'too large' };
 
 /** Whether this browser has the compressor. */
 export function canDeflate(): boolean {

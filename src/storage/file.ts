@@ -8,7 +8,7 @@ import type { StorageFault } from './sentences.ts';
 import { titleOf } from './sheet-record.ts';
 import { TEXT_LIMIT } from './share-link.ts';
 
-export type Opened = { readonly text: string } | { readonly fault: StorageFault };
+type Opened = { readonly text: string } | { readonly fault: StorageFault };
 
 /** Milliseconds for which the browser may take to read the text it saves. */
 const SAVING_TIME = 60_000;

@@ -33,7 +33,7 @@ export type KeepState =
       readonly mine: SheetContent;
     };
 
-export interface KeeperSurroundings {
+interface KeeperSurroundings {
   readonly shelf: Shelf;
   readonly tabs: Tabs;
   readonly schedule: Schedule;

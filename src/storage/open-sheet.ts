@@ -14,12 +14,12 @@ import type { NotSaved, Saved, Shelf } from './shelf.ts';
 import type { StoreFailure } from './store.ts';
 
 /** What another tab has done; `theirs` where it can be read. */
-export interface Conflict {
+interface Conflict {
   readonly elsewhere: Elsewhere;
   readonly theirs: SheetRecord | null;
 }
 
-export interface OpenSheet {
+interface OpenSheet {
   base(): SheetRecord;
   conflict(): Conflict | null;
   /** This tab's text on a sheet of its own; null where it was not kept so. */

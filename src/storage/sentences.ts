@@ -10,7 +10,7 @@ export interface StorageFault {
 }
 
 /** The change that could not be kept, the version that is, and now. */
-export interface UnkeptTimes {
+interface UnkeptTimes {
   readonly changed: number;
   /** null where no version was ever kept. */
   readonly kept: number | null;

@@ -19,10 +19,10 @@ export const LINK_LIMIT = 100_000;
 export const TEXT_LIMIT = 2 * 1024 * 1024;
 
 /** SHA-256 of bytes as 64 hexadecimal digits. */
-export type Sha256Hex = (bytes: Uint8Array) => string;
+type Sha256Hex = (bytes: Uint8Array) => string;
 
 export type Written = { readonly fragment: string } | { readonly fault: StorageFault };
-export type Read = { readonly text: string } | { readonly fault: StorageFault };
+type Read = { readonly text: string } | { readonly fault: StorageFault };
 
 const MARK = 'sheet-';
 const VERSION = 1;

@@ -15,7 +15,7 @@ import { failureOf, transact } from './store.ts';
 import type { StoreFailure } from './store.ts';
 import type { Tabs } from './tabs.ts';
 
-export interface ShelfSurroundings {
+interface ShelfSurroundings {
   readonly store: UseStore;
   /** Told of what is kept and removed here. */
   readonly tabs: Tabs;
@@ -34,9 +34,9 @@ export type NotSaved =
   | { readonly status: 'failed'; readonly failure: StoreFailure };
 /** `record` is what stands on the shelf now, and what the next save goes out from. */
 export type Saved = { readonly status: 'kept'; readonly record: SheetRecord } | NotSaved;
-export type Loaded = { readonly record: SheetRecord } | { readonly fault: StorageFault };
-export type Listed = { readonly sheets: readonly SheetHead[] } | { readonly fault: StorageFault };
-export type Removed = { readonly removed: true } | { readonly fault: StorageFault };
+type Loaded = { readonly record: SheetRecord } | { readonly fault: StorageFault };
+type Listed = { readonly sheets: readonly SheetHead[] } | { readonly fault: StorageFault };
+type Removed = { readonly removed: true } | { readonly fault: StorageFault };
 
 export interface Shelf {
   /** Names this page among all that write to the shelf. */
