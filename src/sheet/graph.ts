@@ -3,9 +3,9 @@
 
 /** Nodes are 0..n-1; `uses[k]` lists the nodes that k reads. */
 interface Order {
-  /** Every node, each after all that it reads, as far as there are no cycles; members of cycles and what hangs on them come last. */
+  /** Every node, each after all that it reads, members of cycles apart: they come before what hangs on them. */
   readonly order: readonly number[];
-  /** For each node on a cycle, the cycle as a path of nodes that ends where it began; shared by its members. */
+  /** For each node on a cycle, a cycle through it as a path of nodes that ends where it began; shared by its members. */
   readonly cycles: ReadonlyMap<number, readonly number[]>;
 }
 
@@ -21,19 +21,29 @@ export function topologicalOrder(uses: readonly (readonly number[])[]): Order {
     }
   }
   const order: number[] = [];
+  let passed = 0;
+  const follow = (): void => {
+    for (; passed < order.length; passed++) {
+      for (const d of usedBy[order[passed]!]!) if (--waiting[d]! === 0) order.push(d);
+    }
+  };
   for (let k = 0; k < n; k++) if (waiting[k] === 0) order.push(k);
-  for (let i = 0; i < order.length; i++) {
-    for (const d of usedBy[order[i]!]!) if (--waiting[d]! === 0) order.push(d);
-  }
+  follow();
   const cycles = new Map<number, readonly number[]>();
   if (order.length < n) {
     const rest = new Set<number>();
     for (let k = 0; k < n; k++) if (waiting[k]! > 0) rest.add(k);
     for (const members of components(uses, rest)) {
-      const path = shortestCycle(uses, members);
-      if (path) for (const k of members) cycles.set(k, path);
+      for (const member of [...members].toSorted((a, b) => a - b)) {
+        const path = cycles.has(member) ? null : shortestCycle(uses, members, member);
+        for (const k of path ?? []) if (!cycles.has(k)) cycles.set(k, path!);
+      }
     }
-    order.push(...rest);
+    // Members no longer wait for anything; what hangs on them follows in order.
+    const members = [...rest].filter((k) => cycles.has(k));
+    for (const k of members) waiting[k] = 0;
+    order.push(...members);
+    follow();
   }
   return { order, cycles };
 }
@@ -80,10 +90,12 @@ function components(uses: readonly (readonly number[])[], within: ReadonlySet<nu
   return found;
 }
 
-/** A shortest path from the first member (in sheet order) back to itself, or null where there is none. */
-function shortestCycle(uses: readonly (readonly number[])[], members: ReadonlySet<number>): readonly number[] | null {
-  let start = Infinity;
-  for (const k of members) start = Math.min(start, k);
+/** A shortest path from `start` back to itself among the members of its component, or null where there is none. */
+function shortestCycle(
+  uses: readonly (readonly number[])[],
+  members: ReadonlySet<number>,
+  start: number,
+): readonly number[] | null {
   const cameFrom = new Map<number, number>();
   const queue = [start];
   for (let i = 0; i < queue.length; i++) {
@@ -93,7 +105,7 @@ function shortestCycle(uses: readonly (readonly number[])[], members: ReadonlySe
         const path = [start];
         for (let k = node; k !== start; k = cameFrom.get(k)!) path.push(k);
         path.push(start);
-        return path.reverse();
+        return path.toReversed();
       }
       if (!members.has(next) || cameFrom.has(next)) continue;
       cameFrom.set(next, node);

@@ -146,7 +146,7 @@ function rows(c: Constants): WorkingStep[] {
     const spread = field.quantity.spread?.(c.read);
     const limits =
       spread && field.quantity.chosen
-        ? [Math.abs(spread.low ?? 0), Math.abs(spread.high ?? Infinity)].sort((a, b) => a - b)
+        ? [Math.abs(spread.low ?? 0), Math.abs(spread.high ?? Infinity)].toSorted((a, b) => a - b)
         : null;
     const sentence = limits ? withinLimits(field, Math.abs(value), limits) : difference(field, value, written);
     return [{ name: field.name, ...step, value, type: field.kind, as: null, sentence }];
