@@ -1,6 +1,6 @@
 // The sheet as a grid of rows.
 
-import { createMemo, createSignal, For, onMount, Show } from 'solid-js';
+import { createEffect, createMemo, createSignal, For, on, onMount, Show } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
 import './grid.css';
 import { gridCommands } from './commands.ts';
@@ -22,7 +22,18 @@ export function SheetGrid(props: { readonly desk: Desk }) {
   let table: HTMLDivElement | undefined;
 
   const [seen, setSeen] = createSignal<() => Seen>(() => ({ top: 0, height: 0 }));
-  const items = createMemo(() => windowItems(grid.keys(), seen()(), grid.stop()).map(itemText));
+  let heldFocus: Element | null = null;
+  const items = createMemo(() => {
+    heldFocus = table?.contains(document.activeElement) ? document.activeElement : null;
+    return windowItems(grid.keys(), seen()(), grid.stop()).map(itemText);
+  });
+  // A row that is moved among others loses the focus, though it stays.
+  createEffect(
+    on(items, () => {
+      if (heldFocus instanceof HTMLElement && heldFocus.isConnected && document.activeElement === document.body)
+        heldFocus.focus({ preventScroll: true });
+    }),
+  );
 
   onMount(() => {
     if (table) {
