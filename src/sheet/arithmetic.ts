@@ -83,7 +83,7 @@ export function compileBinary(expr: BinaryExpr, scope: Scope): Typed {
     }
     case '/': {
       const a = linear(left.type, expr.left.span, 'cannot be divided', scope);
-      const b = linear(right.type, expr.right.span, 'cannot be divided by', scope);
+      const b = linear(right.type, expr.right.span, 'divides nothing', scope);
       return {
         type: plainScale(divideDimensions(a.dimension, b.dimension)),
         handle: builder.div(left.handle, right.handle),

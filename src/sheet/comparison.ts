@@ -1,6 +1,7 @@
 // Conditions: comparisons, `within`, and/or/not. A condition is 1 or 0 in the program.
 
 import type { BinaryExpr, Expr, WithinExpr } from '../language/index.ts';
+import type { Handle } from '../network/index.ts';
 import { advice } from './arithmetic.ts';
 import type { Scope, Typed } from './scope.ts';
 import { operandText } from './scope.ts';
@@ -22,20 +23,12 @@ export function compileComparison(expr: BinaryExpr, scope: Scope): Typed {
       expr.operatorSpan,
     );
   }
-  const { builder } = scope;
-  const type = 'condition';
-  switch (expr.operator) {
-    case '<':
-      return { type, handle: builder.op('less', left.handle, right.handle) };
-    case '<=':
-      return { type, handle: builder.op('lessOrEqual', left.handle, right.handle) };
-    case '>':
-      return { type, handle: builder.op('less', right.handle, left.handle) };
-    case '>=':
-      return { type, handle: builder.op('lessOrEqual', right.handle, left.handle) };
-    default:
-      return { type, handle: builder.op('equal', left.handle, right.handle) };
+  if (left.type === 'region') {
+    return { type: 'condition', handle: scope.builder.op('equal', left.handle, right.handle) };
   }
+  const [a, b] = expr.operator.startsWith('<') ? [left.handle, right.handle] : [right.handle, left.handle];
+  const holds = scope.builder.op(expr.operator.endsWith('=') ? 'lessOrEqual' : 'less', a, b);
+  return { type: 'condition', handle: ofNumbers(holds, [a, b], scope) };
 }
 
 /** Compiles `a within lo .. hi`: both ends belong to the range, in either order. */
@@ -55,14 +48,12 @@ export function compileWithin(expr: WithinExpr, scope: Scope): Typed {
   const { builder } = scope;
   const low = builder.min(first.handle, last.handle);
   const high = builder.max(first.handle, last.handle);
-  return {
-    type: 'condition',
-    handle: builder.op(
-      'and',
-      builder.op('lessOrEqual', low, value.handle),
-      builder.op('lessOrEqual', value.handle, high),
-    ),
-  };
+  const inside = builder.op(
+    'and',
+    builder.op('lessOrEqual', low, value.handle),
+    builder.op('lessOrEqual', value.handle, high),
+  );
+  return { type: 'condition', handle: ofNumbers(inside, [value.handle, low, high], scope) };
 }
 
 /** Compiles `a and b`, `a or b`. */
@@ -82,6 +73,13 @@ export function compileLogic(expr: BinaryExpr, scope: Scope): Typed {
     type: 'condition',
     handle: scope.builder.op(expr.operator === 'and' ? 'and' : 'or', operands[0]!, operands[1]!),
   };
+}
+
+/** A comparison that is no number itself where one of its sides is none: it neither holds nor fails. */
+function ofNumbers(holds: Handle, sides: readonly Handle[], { builder }: Scope): Handle {
+  const [first, ...others] = sides.map((side) => builder.op('equal', side, side));
+  const known = others.reduce((all, one) => builder.op('and', all, one), first!);
+  return builder.mul(holds, builder.div(known, known));
 }
 
 function comparable(a: Expr, left: Typed, b: Expr, right: Typed, scope: Scope): void {

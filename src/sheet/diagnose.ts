@@ -9,14 +9,16 @@ import { isQuantity } from './value-type.ts';
 /** The message for an expression that came out as no number. */
 export function diagnose(expr: Expr, context: CellContext, line: Line): Message {
   const culprit = innermost(expr, context, line);
-  const given = operands(culprit)
-    .filter((operand) => operand.type !== 'number')
-    .map((operand) => {
-      const { type, value } = context.now(operand, line);
-      const shown = isQuantity(type) ? formatValue(value, type).text : String(value);
-      return `${source(operand, line)} is ${shown}`;
-    });
-  const because = given.length > 0 ? `: ${given.join(' and ')}` : '';
+  const given = new Set(
+    operands(culprit)
+      .filter((operand) => operand.type !== 'number')
+      .map((operand) => {
+        const { type, value } = context.now(operand, line);
+        const shown = isQuantity(type) ? formatValue(value, type).text : String(value);
+        return `${source(operand, line)} is ${shown}`;
+      }),
+  );
+  const because = given.size > 0 ? `: ${[...given].join(' and ')}` : '';
   return {
     code: 'no-value',
     text: `${source(culprit, line)} has no value${because}. ${reason(culprit)}`,

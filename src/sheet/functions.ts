@@ -28,13 +28,10 @@ export const FUNCTIONS: ReadonlyMap<string, SheetFunction> = new Map<string, She
     'sqrt',
     entry([1, 1], 'sqrt(x)', 'Square root.', (e, s) => squareRoot(compileQuantity(e.args[0]!, s), e.args[0]!.span, s)),
   ],
-  ['abs', entry([1, 1], 'abs(x)', 'Magnitude.', (e, s) => sameKindAs(e.args[0]!, s, 'abs'))],
+  ['abs', entry([1, 1], 'abs(x)', 'Magnitude.', (e, s) => sameKindAs(e, s, 'abs'))],
   [
     'sign',
-    entry([1, 1], 'sign(x)', '-1, 0 or 1.', (e, s) => ({
-      type: PLAIN,
-      handle: s.builder.op('sign', compileQuantity(e.args[0]!, s).handle),
-    })),
+    entry([1, 1], 'sign(x)', '-1, 0 or 1.', (e, s) => ({ type: PLAIN, handle: sameKindAs(e, s, 'sign').handle })),
   ],
   ['min', entry([1, 32], 'min(a, b, ..)', 'The least of its arguments.', (e, s) => fold(e, s, 'min'))],
   ['max', entry([1, 32], 'max(a, b, ..)', 'The largest of its arguments.', (e, s) => fold(e, s, 'max'))],
@@ -93,7 +90,7 @@ export function compileCall(expr: CallExpr, scope: Scope): Typed {
   }
   const [least, most] = found.arity;
   if (expr.args.length < least || expr.args.length > most) {
-    const wanted = least === most ? `${least} argument${least === 1 ? '' : 's'}` : `${least} or more arguments`;
+    const wanted = least === most ? `${least} argument${least === 1 ? '' : 's'}` : `${least} to ${most} arguments`;
     stop('argument-count', `${name} takes ${wanted} and has ${expr.args.length}. Write ${found.form}.`, expr.span);
   }
   return found.compile(expr, scope);
@@ -116,13 +113,26 @@ function plain(name: OperationName, form: string, sentence: string): [string, Sh
   return [[name, entry([1, 1], form, sentence, compile)]];
 }
 
-function sameKindAs(arg: Expr, scope: Scope, op: OperationName): Typed {
+/** Compiles an argument that counts from a zero of its own: a point of the Celsius scale stops. */
+function compileAmount(arg: Expr, name: string, scope: Scope): ReturnType<typeof compileQuantity> {
   const x = compileQuantity(arg, scope);
+  if (x.type.scale === 'celsius') {
+    stop(
+      'function-of-temperature',
+      `${operandText(scope, arg.span, 'This')} is a point of the temperature scale: ${name} takes an amount. Subtract another point first; the difference is in K.`,
+      arg.span,
+    );
+  }
+  return x;
+}
+
+function sameKindAs(expr: CallExpr, scope: Scope, op: OperationName): Typed {
+  const x = compileAmount(expr.args[0]!, op, scope);
   return { type: x.type, handle: scope.builder.op(op, x.handle) };
 }
 
 function fold(expr: CallExpr, scope: Scope, op: OperationName): Typed {
-  const args = expr.args.map((arg) => compileQuantity(arg, scope));
+  const args = expr.args.map((arg) => (op === 'hypot' ? compileAmount(arg, op, scope) : compileQuantity(arg, scope)));
   const first = args[0]!;
   let { handle } = first;
   for (let i = 1; i < args.length; i++) {
@@ -156,7 +166,7 @@ function parallel(expr: CallExpr, scope: Scope): Typed {
 }
 
 function roundDigits(expr: CallExpr, scope: Scope): Typed {
-  const x = compileQuantity(expr.args[0]!, scope);
+  const x = compileAmount(expr.args[0]!, 'round', scope);
   const digits = constantNumber(expr.args[1]!);
   if (digits === null || !Number.isInteger(digits) || digits < 1 || digits > 15) {
     stop(

@@ -13,9 +13,10 @@ export function preferredKernel(series: SeriesName, direction: PreferredDirectio
   return `${series} ${direction}`;
 }
 
-/** Inputs: condition (1 or 0), a, b. Output: a or b. */
+/** Inputs: condition (1 or 0), a, b. Output: a or b; NaN where the condition is. */
 const select: Kernel = (s, a, p) => {
-  s[a[p + 3]!] = s[a[p]!] === 1 ? s[a[p + 1]!]! : s[a[p + 2]!]!;
+  const condition = s[a[p]!]!;
+  s[a[p + 3]!] = condition === 1 ? s[a[p + 1]!]! : condition === 0 ? s[a[p + 2]!]! : NaN;
 };
 
 /** Inputs: x, digits. Output: x rounded to so many significant digits, as the shortest decimal reads. */

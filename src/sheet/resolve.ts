@@ -98,7 +98,8 @@ function resolve(path: PathExpr, builder: Builder, lookup: Lookup): Typed {
     stop('unknown-value', `${first!.name} offers no value ${name}.${hint}`, span);
   }
   if (offer.slot < 0) {
-    const text = offer.missing?.text ?? `${first!.name}.${name} is not computed yet.`;
+    const reason = offer.missing?.text ?? 'It is not computed yet.';
+    const text = `${first!.name}.${name} has no value here. ${reason}`;
     lookup.later({ code: offer.missing?.code ?? 'not-computed-yet', text, span: path.span });
     return { type: offer.type, handle: builder.constant(NaN) };
   }

@@ -52,6 +52,11 @@ function amount(kind: NaiveKind): readonly number[] {
   return kind.dimension;
 }
 
+/** What has no zero of its own has no magnitude, sign or digits. */
+function zeroed(kind: NaiveKind): void {
+  if (kind.scale === 'celsius') throw new Broken('a point of the temperature scale');
+}
+
 function root(operand: NaiveValue, kind: NaiveKind): NaiveValue {
   return lift(linear(...amount(kind).map((n) => n / 2)), Math.sqrt, [operand]);
 }
@@ -103,8 +108,13 @@ function sumKind(operator: '+' | '-', a: NaiveKind, b: NaiveKind): NaiveKind {
 function parallel(operands: readonly NaiveValue[]): NaiveValue {
   const kind = quantity(operands[0]);
   if (operands.some((operand) => !sameKinds(quantity(operand), kind))) throw new Broken('unlike elements in parallel');
-  if ([KINDS.ohm, KINDS.H].some((known) => sameKinds(known, kind)))
-    return lift(kind, (...x) => 1 / x.reduce((sum, r) => sum + 1 / r, 0), operands, LIBRARY);
+  if ([KINDS.ohm, KINDS.H].some((known) => sameKinds(known, kind))) {
+    const lifted = lift(kind, (...x) => 1 / x.reduce((sum, r) => sum + 1 / r, 0), operands, LIBRARY);
+    // Of an element and its negative, infinity has no sign.
+    const cancels =
+      operands.some(({ value }) => value !== null && value < 0) && Math.abs(lifted.value ?? 0) === Infinity;
+    return cancels ? { ...lifted, unsure: true } : lifted;
+  }
   if ([KINDS.S, KINDS.F].some((known) => sameKinds(known, kind)))
     return lift(kind, (...x) => x.reduce((sum, g) => sum + g, 0), operands);
   throw new Broken('no elements');
@@ -209,10 +219,14 @@ function call({ name: { name }, args }: CallExpr, resolve: Resolve): NaiveValue 
     }
     case 'abs': {
       const { x, kind } = single();
+      zeroed(kind);
       return lift(kind, Math.abs, [x]);
     }
-    case 'sign':
-      return liftStep(KINDS.plain, Math.sign, [single().x]);
+    case 'sign': {
+      const { x, kind } = single();
+      zeroed(kind);
+      return liftStep(KINDS.plain, Math.sign, [x]);
+    }
     case 'nominal': {
       const { x, kind } = single();
       return { ...x, type: kind };
@@ -226,6 +240,7 @@ function call({ name: { name }, args }: CallExpr, resolve: Resolve): NaiveValue 
     case 'hypot': {
       wanted(2);
       const values = all();
+      zeroed(quantity(values[0]));
       return lift(alike(values), Math.hypot, values, LIBRARY);
     }
     case 'dB': {
@@ -240,6 +255,7 @@ function call({ name: { name }, args }: CallExpr, resolve: Resolve): NaiveValue 
     case 'round': {
       wanted(2);
       const x = evaluate(args[0], resolve);
+      zeroed(quantity(x));
       const digits = ratio(args[1]);
       if (digits === null || !Number.isInteger(digits) || digits < 1 || digits > 15) throw new Broken('digits');
       return liftStep(quantity(x), (y) => (Number.isFinite(y) ? Number(y.toPrecision(digits)) : y), [x]);

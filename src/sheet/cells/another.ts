@@ -3,6 +3,7 @@
 import type { AnotherEntry } from '../../language/index.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft } from '../draft.ts';
+import { Waiting, kindName } from '../resolve.ts';
 import { stop } from '../stop.ts';
 
 /** Checks an `another` cell. */
@@ -10,10 +11,11 @@ export function compileAnotherCell(context: CellContext): Draft {
   const { tree } = context;
   const { of, span } = tree.entry as AnotherEntry;
   const first = context.look(of.name);
+  if (first && !first.settled) throw new Waiting(of.name);
   if (!first || (first.kind !== 'quantity' && first.kind !== 'part' && first.kind !== 'another')) {
     stop(
       'another-of',
-      `another wants a component or a part of this sheet; ${of.name} is ${first ? `a ${first.kind}` : 'not there'}.`,
+      `another wants a component or a part of this sheet; ${of.name} is ${first ? kindName(first.kind) : 'not there'}.`,
       of.span,
     );
   }

@@ -32,16 +32,13 @@ export function compileCheckCell(context: CellContext): Draft {
     );
   }
   const reserve = reserveOf(condition, scope);
-  const sides = compared(condition).map((expr) => ({ expr, ...scope.compile(expr) }));
   return {
     ...EMPTY_DRAFT,
     type: 'condition',
     value: holds.handle,
-    // A side without a value would make the comparison fail in silence; it has no verdict at all.
-    verify: (read) => {
-      const side = sides.find(({ handle }) => Number.isNaN(read(handle)));
-      return side ? { line: tree.line, message: diagnose(side.expr, context, tree.line) } : null;
-    },
+    // A comparison with what is no number neither holds nor fails: there is no verdict at all.
+    verify: (read) =>
+      Number.isNaN(read(holds.handle)) ? { line: tree.line, message: diagnose(condition, context, tree.line) } : null,
     check: (read) => ({
       holds: read(holds.handle) === 1,
       reserve: reserve ? read(reserve.handle) : null,
@@ -51,24 +48,6 @@ export function compileCheckCell(context: CellContext): Draft {
       expressionStep(tree.name.name, condition, tree.line, 'condition', read(holds.handle), null, context),
     ],
   };
-}
-
-/** The sides of every comparison in a condition. */
-function compared(expr: Expr): Expr[] {
-  switch (expr.type) {
-    case 'group':
-      return compared(expr.inner);
-    case 'unary':
-      return compared(expr.operand);
-    case 'within':
-      return [expr.value, expr.low, expr.high];
-    case 'binary':
-      return expr.operator === 'and' || expr.operator === 'or'
-        ? [...compared(expr.left), ...compared(expr.right)]
-        : [expr.left, expr.right];
-    default:
-      return [];
-  }
 }
 
 /** By how much a condition holds: the distance to its limit, the least of an `and`, the largest of an `or`; null for regions and mixed kinds. */

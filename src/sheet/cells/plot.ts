@@ -6,6 +6,7 @@ import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft } from '../draft.ts';
 import { compileQuantity } from '../operand.ts';
 import type { CellKind } from '../model.ts';
+import { Waiting, kindName } from '../resolve.ts';
 import { operandText } from '../scope.ts';
 import { stop } from '../stop.ts';
 import { sameType, typeName } from '../value-type.ts';
@@ -28,10 +29,9 @@ export function compilePlotCell(context: CellContext): Draft {
   if (figure !== 'against' && figure !== 'spread') {
     const subject = context.look(entry.of!.name);
     const wanted = SUBJECTS[figure];
+    if (subject?.kind === 'broken') throw new Waiting(entry.of!.name);
     if (!subject || !wanted.includes(subject.kind)) {
-      const found = subject
-        ? `is ${subject.kind === 'quantity' ? 'a quantity' : `a ${subject.kind}`}`
-        : 'is not in this sheet';
+      const found = subject ? `is ${kindName(subject.kind)}` : 'is not in this sheet';
       stop('plot-subject', `A ${figure} plot is drawn of a ${wanted[0]}; ${entry.of!.name} ${found}.`, entry.of!.span);
     }
     if (figure === 'response' || figure === 'noise') {

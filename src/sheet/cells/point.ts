@@ -4,7 +4,7 @@ import { CURRENT, VOLTAGE, sameKind } from '../../quantity/index.ts';
 import type { ValueKind } from '../../quantity/index.ts';
 import { nearestNames } from '../../language/index.ts';
 import type { FieldTree, PointEntry } from '../../language/index.ts';
-import { OFFERED_VALUES, POINT_STATUS_SENTENCES, lowerPoint } from '../../network/index.ts';
+import { OFFERED_VALUES, POINT_STATUS, POINT_STATUS_SENTENCES, lowerPoint } from '../../network/index.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
@@ -58,7 +58,9 @@ export function compilePointCell(context: CellContext): Draft {
     verify: (read) => {
       const status = read(lowering.status);
       if (status === 0) return null;
-      const text = `${tree.name.name} was not solved. ${POINT_STATUS_SENTENCES[status] ?? ''} No value is shown that rests on it.`;
+      const reason =
+        id && status === CANNOT_CARRY ? noGateVoltage(part.channel) : (POINT_STATUS_SENTENCES[status] ?? '');
+      const text = `${tree.name.name} was not solved. ${reason} No value is shown that rests on it.`;
       return { line: tree.line, message: { code: 'not-solved', text, span: entry.span } };
     },
     workings: (read) => pointWorkings({ part, lowering, ambient: read(ambient), read }),
@@ -73,6 +75,14 @@ export function compilePointCell(context: CellContext): Draft {
         isInput: field.isInput,
       })),
   };
+}
+
+/** Code of `POINT_STATUS` for a current that no terminal voltages give. */
+const CANNOT_CARRY = POINT_STATUS.indexOf('cannot carry it');
+
+function noGateVoltage(channel: 1 | -1): string {
+  const [kind, sign] = channel === 1 ? ['an n-channel', 'positive'] : ['a p-channel', 'negative'];
+  return `No gate voltage gives this I_D at this V_DS. V_DS of ${kind} FET is ${sign} where I_D is positive, and exceeds the drop across r_s and r_d.`;
 }
 
 function readFields(

@@ -1,7 +1,7 @@
 // A quantity cell, and the fields of parts and points, which are written alike: one value with or
 // without spread.
 
-import { PLAIN, TEMPERATURE_DIFFERENCE, TEMPERATURE_POINT, sameDimension, sameKind } from '../../quantity/index.ts';
+import { TEMPERATURE_DIFFERENCE, TEMPERATURE_POINT, sameDimension, sameKind } from '../../quantity/index.ts';
 import type { ValueKind } from '../../quantity/index.ts';
 import type { Expr, Line, Literal, QuantityEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
@@ -30,12 +30,12 @@ export function compileQuantityEntry(entry: QuantityEntry, line: Line, context: 
   const scope = context.scope(line);
   if (entry.value === null) {
     const { kind, value } = standIn(entry, line);
-    checkUnit(entry, kind, line);
+    checkUnit(entry, kind);
     const handle = context.builder.constant(value);
     return { type: kind, handle, spread: declared(entry, handle, kind, line), isInput: true, chosen: true };
   }
   const value = scope.compile(entry.value);
-  if (isQuantity(value.type)) checkUnit(entry, value.type, line);
+  if (isQuantity(value.type)) checkUnit(entry, value.type);
   else if (entry.spread)
     stop('spread-of-word', `A spread belongs to a number; this is ${typeName(value.type)}.`, entry.spread.span);
   const spread = entry.spread && isQuantity(value.type) ? declared(entry, value.handle, value.type, line) : null;
@@ -61,7 +61,11 @@ export function compileQuantityCell(context: CellContext): Draft {
       if (tree.name.name === 'T_A' && !(value > 0)) {
         return {
           line: tree.line,
-          message: { code: 'ambient-range', text: 'T_A lies at or below absolute zero.', span: entry.span },
+          message: {
+            code: 'ambient-range',
+            text: 'T_A lies at or below absolute zero. Write a temperature above −273.15 degC, such as 25 degC.',
+            span: entry.span,
+          },
         };
       }
       if (!Number.isNaN(value)) return null;
@@ -184,15 +188,14 @@ function numberOf(expr: Expr): number {
   return expr.operator === '-' ? -numberOf(expr.operand) : numberOf(expr.operand);
 }
 
-function checkUnit(entry: QuantityEntry, kind: ValueKind, line: Line): void {
+function checkUnit(entry: QuantityEntry, kind: ValueKind): void {
   if (!entry.as) return;
   const { unit, span } = entry.as;
   const pointInKelvin = kind.scale === 'celsius' && sameKind(unit.kind, TEMPERATURE_DIFFERENCE);
-  const percent = sameKind(kind, PLAIN) && sameKind(unit.kind, PLAIN);
-  if (sameKind(unit.kind, kind) || pointInKelvin || percent) return;
+  if (sameKind(unit.kind, kind) || pointInKelvin) return;
   stop(
     'unit-dimension',
-    `The value is ${typeName(kind)}, and ${line.text.slice(span.start, span.end)} is a unit of ${typeName(unit.kind)}. Choose a unit of its own kind.`,
+    `The value is ${typeName(kind)}, and ${unit.text} measures ${typeName(unit.kind)}. Choose a unit of its own kind.`,
     span,
   );
 }
