@@ -87,8 +87,8 @@ function Banner(props: {
   readonly children: JSX.Element;
 }) {
   return (
-    <div class="banner" classList={{ urgent: props.urgent === true }} role={props.urgent ? 'alert' : undefined}>
-      <p>{props.children}</p>
+    <section class="banner" aria-label="Notice" classList={{ urgent: props.urgent === true }}>
+      <p role={props.urgent ? 'alert' : undefined}>{props.children}</p>
       <For each={props.choices}>
         {(choice) => (
           <button type="button" onClick={() => choice.run()}>
@@ -96,6 +96,6 @@ function Banner(props: {
           </button>
         )}
       </For>
-    </div>
+    </section>
   );
 }

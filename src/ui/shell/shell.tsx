@@ -114,22 +114,22 @@ export function Shell(props: { readonly session: Session }) {
       <div data-pane="commands" class="head-pane">
         <Head desk={desk} />
       </div>
-      <div data-pane="verdict">
+      <section data-pane="verdict" aria-label="Verdict on the sheet">
         <VerdictLine desk={desk} />
-      </div>
+      </section>
       <Banners session={session} openShelf={() => setDialog('shelf')} saveFile={save} />
       <Show when={finding()}>
         <FindBar desk={desk} onClose={() => setFinding(false)} />
       </Show>
-      <div class="panes" style={{ '--sheet-share': `${divider.share()}%` }}>
-        <main data-pane="sheet" class="sheet-pane">
+      <main class="panes" style={{ '--sheet-share': `${divider.share()}%` }}>
+        <div data-pane="sheet" class="sheet-pane">
           <Show when={tab() === 'text'}>
             <TextPane desk={desk} />
           </Show>
           <div class="sheet-view">
             <SheetGrid desk={desk} />
           </div>
-        </main>
+        </div>
         <div
           class="divider"
           role="separator"
@@ -150,7 +150,7 @@ export function Shell(props: { readonly session: Session }) {
             <WorkingsPane desk={desk} />
           </div>
         </div>
-      </div>
+      </main>
       <StatusLine desk={desk} kept={keepWords(session.keepState(), session.origin(), now())} />
       <nav class="tabs" aria-label="Panes">
         <For each={TABS}>
