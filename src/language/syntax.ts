@@ -68,7 +68,7 @@ export interface BinaryExpr {
   readonly span: Span;
 }
 /** A pair of parentheses, kept because the author wrote them. */
-export interface GroupExpr {
+interface GroupExpr {
   readonly type: 'group';
   readonly inner: Expr;
   readonly span: Span;
@@ -82,7 +82,7 @@ export interface WithinExpr {
   readonly span: Span;
 }
 /** `A1.A_v with V_C = -8 V`. */
-export interface WithExpr {
+interface WithExpr {
   readonly type: 'with';
   readonly value: Expr;
   readonly input: PathExpr;

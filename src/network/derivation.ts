@@ -25,7 +25,7 @@ export interface DerivationStep {
 }
 
 /** Relative difference up to which a closed form stands for the program's number. */
-export const AGREEMENT = 1e-9;
+const AGREEMENT = 1e-9;
 
 /** Collects steps; handles are formulas. */
 export interface Derivation {
@@ -88,6 +88,6 @@ export function createDerivation(): Derivation {
 }
 
 /** Whether two results are the same to `AGREEMENT`. */
-export function agrees(x: number, y: number): boolean {
+function agrees(x: number, y: number): boolean {
   return x === y || Math.abs(x - y) <= AGREEMENT * Math.max(Math.abs(x), Math.abs(y));
 }

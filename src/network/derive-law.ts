@@ -96,14 +96,14 @@ export function deriveDevice(d: Derivation, fet: SolvedFet): LawNames {
 }
 
 /** V_ov and V_DS inside the leads, in the device's own sense, as formulas of the solved voltages. */
-export interface InnerVoltages {
+interface InnerVoltages {
   readonly overdrive: Handle;
   readonly drop: Handle;
   readonly reversed: boolean;
 }
 
 /** Writes V_ov, and V_DS inside the leads where those have resistance. */
-export function deriveInner(d: Derivation, fet: SolvedFet, names: LawNames): InnerVoltages {
+function deriveInner(d: Derivation, fet: SolvedFet, names: LawNames): InnerVoltages {
   const { e } = d;
   const own = (x: Handle, y: Handle): Handle => (fet.channel > 0 ? e.sub(x, y) : e.sub(y, x));
   const reversed = fet.offered('V_DS') * fet.channel < 0;
@@ -151,7 +151,7 @@ export function deriveInner(d: Derivation, fet: SolvedFet, names: LawNames): Inn
 }
 
 /** The law of the region at those voltages: the current as a formula. */
-export function lawFormula(d: Derivation, fet: SolvedFet, names: LawNames, inner: InnerVoltages): Handle {
+function lawFormula(d: Derivation, fet: SolvedFet, names: LawNames, inner: InnerVoltages): Handle {
   const { e } = d;
   const region = fet.offered('region');
   const lambda = names.field('lambda');

@@ -3,7 +3,7 @@
 import type { Handle } from './emitter.ts';
 
 /** What one device field means, and what its absence means. */
-export interface DeviceFieldInfo {
+interface DeviceFieldInfo {
   readonly unit: string;
   readonly sentence: string;
   /** Where the part says nothing; null: the effect is left out and no operation is emitted for it. */
@@ -34,7 +34,7 @@ export const DEVICE_FIELDS = {
 export type DeviceField = keyof typeof DEVICE_FIELDS;
 
 /** The fields whose absence is told by null; all others always have a handle. */
-export type OptionalDeviceField = 'gamma' | 'r_s' | 'r_d' | 'I_GSS' | 'R_thJA' | 'C_GS' | 'C_GD';
+type OptionalDeviceField = 'gamma' | 'r_s' | 'r_d' | 'I_GSS' | 'R_thJA' | 'C_GS' | 'C_GD';
 
 /** The device fields of one specimen as the running program knows them. */
 export type DeviceHandles = { readonly [F in Exclude<DeviceField, OptionalDeviceField>]: Handle } & {

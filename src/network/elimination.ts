@@ -13,7 +13,7 @@ import { ONE, over, plus, term, times } from './term.ts';
 import type { Term } from './term.ts';
 
 /** A resistor between two nodes of the network. */
-export interface Resistor {
+interface Resistor {
   readonly a: number;
   readonly b: number;
   readonly ohms: Handle;

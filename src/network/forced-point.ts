@@ -15,7 +15,7 @@ import { deriveAt, slopes } from './small-signal-at.ts';
 import { balanceHeat, thermalRoots } from './thermal-balance.ts';
 
 /** Drain to source voltage in V up to which a forced current is tried; no discrete FET of this trade stands more. */
-export const FORCED_CEILING = 1000;
+const FORCED_CEILING = 1000;
 
 const INPUTS = [
   'channel',

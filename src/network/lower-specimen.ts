@@ -7,7 +7,7 @@ import { lowerCapacitances } from './lower-capacitances.ts';
 import { shareEmitter } from './sharing-emitter.ts';
 
 /** What a point holds: voltages in the true frame (V), I_D in the device's own sense (A). */
-export interface SpecimenHeld {
+interface SpecimenHeld {
   readonly channel: 1 | -1;
   readonly family: 'JFET' | 'MOSFET';
   readonly device: DeviceHandles;

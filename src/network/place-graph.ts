@@ -9,7 +9,7 @@ import type { NetLeg, PlaceRef, StageNet } from './stage-net.ts';
 export const MIDBAND_SHORT = 1e-9;
 
 /** What holds a class at a voltage: a rail, the test source or another drive. */
-export interface Holder {
+interface Holder {
   readonly type: 'rail' | 'signal' | 'inverted signal' | 'common';
   /** Voltage at rest; null is 0 V. */
   readonly volts: Handle | null;
@@ -19,7 +19,7 @@ export interface Holder {
 }
 
 /** A resistor between two classes. */
-export interface Branch {
+interface Branch {
   readonly a: number;
   readonly b: number;
   readonly ohms: Handle;
@@ -27,7 +27,7 @@ export interface Branch {
 }
 
 /** An ideal current from one class to another. */
-export interface Drive {
+interface Drive {
   readonly from: number;
   readonly to: number;
   readonly amps: Handle;
@@ -46,7 +46,7 @@ export interface PlaceGraph {
   readonly drives: readonly Drive[];
 }
 
-export interface GraphOptions {
+interface GraphOptions {
   readonly at: 'rest' | 'midband';
   /** Leaves out what the line of `load` hangs between it and a rail; what ties it to the stage stays. */
   readonly withoutLoad: boolean;

@@ -31,14 +31,14 @@ export interface Component {
 }
 
 /** Node voltages by class: `atRest` in V, `perChannel` and `perLeakage` in ohm. */
-export interface RestVoltages {
+interface RestVoltages {
   readonly atRest: readonly Term[];
   readonly perChannel: readonly Term[];
   readonly perLeakage: readonly Term[];
 }
 
 /** The resistances of the bias line, the load line and the source against the bulk. */
-export interface LineResistances {
+interface LineResistances {
   readonly R_m: Term;
   readonly R_L: Term;
   readonly R_b: Term;

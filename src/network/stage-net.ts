@@ -62,7 +62,7 @@ export interface StageFault {
   /** Index of the leg it concerns, or null. */
   readonly leg: number | null;
 }
-export type StageFaultCode =
+type StageFaultCode =
   | 'terminal-without-leg'
   | 'no-such-place'
   | 'no-such-terminal'

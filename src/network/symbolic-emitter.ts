@@ -16,7 +16,7 @@ export interface Operand {
 }
 
 /** One formula with what stands in for its names. */
-export interface Formula {
+interface Formula {
   readonly text: string;
   readonly operands: readonly Operand[];
   readonly value: number;

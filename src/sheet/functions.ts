@@ -13,7 +13,7 @@ import { operandText } from './scope.ts';
 import { stop } from './stop.ts';
 import { isQuantity, sameType, typeName } from './value-type.ts';
 
-export interface SheetFunction {
+interface SheetFunction {
   /** Least and largest number of arguments. */
   readonly arity: readonly [number, number];
   /** As it is written, for messages and completion: `round(x, digits)`. */

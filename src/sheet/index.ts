@@ -3,19 +3,12 @@
 
 export { evaluateExpression } from './evaluate-expression.ts';
 export { FUNCTIONS } from './functions.ts';
-export type { SheetFunction } from './functions.ts';
-export { KERNELS } from './kernels.ts';
 export type {
-  Assumption,
-  Caution,
   CellKind,
   CellReading,
-  CheckReading,
   DeclaredSpread,
   Fault,
-  LegReading,
   StageReading,
-  Sweep,
   FieldReading,
   OfferedReading,
   Reading,
@@ -25,4 +18,3 @@ export type {
 } from './model.ts';
 export { PART_FIELDS } from './part-fields.ts';
 export { createSheet } from './sheet.ts';
-export type { CompiledSheet } from './sheet.ts';

@@ -65,7 +65,7 @@ export interface CheckReading {
   readonly reserveType: ValueKind | null;
 }
 
-export interface Caution {
+interface Caution {
   readonly cell: string;
   /** From 0. */
   readonly line: number;
@@ -73,7 +73,7 @@ export interface Caution {
 }
 
 /** One default the sheet took because nothing was given. */
-export interface Assumption {
+interface Assumption {
   readonly cell: string;
   readonly text: string;
 }
@@ -129,7 +129,7 @@ export interface CellReading {
 }
 
 /** One leg of a stage with its number. */
-export interface LegReading {
+interface LegReading {
   /** The place on whose line it stands. */
   readonly from: string;
   readonly kind: 'resistor' | 'capacitor' | 'inductor' | 'source' | 'tie';

@@ -26,7 +26,7 @@ import { createScope } from './resolve.ts';
 import { sweepPlot } from './sweep.ts';
 
 /** The compiled form of a whole sheet, for those who evaluate it many times over. */
-export interface CompiledSheet {
+interface CompiledSheet {
   readonly program: Program;
   /** Slots as they stand. */
   readonly slots: Float64Array;
