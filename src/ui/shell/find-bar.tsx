@@ -41,7 +41,12 @@ export function FindBar(props: { readonly desk: Desk; readonly onClose: () => vo
     >
       <label>
         Find{' '}
-        <input type="search" ref={field} value={query()} onInput={(event) => setQuery(event.currentTarget.value)} />
+        <input
+          type="search"
+          ref={(element) => (field = element)}
+          value={query()}
+          onInput={(event) => setQuery(event.currentTarget.value)}
+        />
       </label>
       <span class="soft" role="status">
         {query() === '' ? '' : `${found().length} found`}

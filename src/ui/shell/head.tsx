@@ -32,7 +32,7 @@ export function Head(props: { readonly desk: Desk }) {
         role="toolbar"
         aria-label="Commands"
         id="commands"
-        ref={toolbar}
+        ref={(element) => (toolbar = element)}
         onKeyDown={(event) => moveInToolbar(event, toolbar, setCurrent)}
       >
         <For each={groups()}>

@@ -9,7 +9,7 @@ export function Modal(props: { readonly title: string; readonly onClose: () => v
   const id = `dialog-${props.title.toLowerCase().replace(/\W+/g, '-')}`;
   onMount(() => dialog.showModal());
   return (
-    <dialog class="modal" ref={dialog} aria-labelledby={id} onClose={() => props.onClose()}>
+    <dialog class="modal" ref={(element) => (dialog = element)} aria-labelledby={id} onClose={() => props.onClose()}>
       <header>
         <h2 id={id}>{props.title}</h2>
         <button type="button" onClick={() => dialog.close()}>
