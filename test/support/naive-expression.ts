@@ -110,9 +110,9 @@ function parallel(operands: readonly NaiveValue[]): NaiveValue {
   if (operands.some((operand) => !sameKinds(quantity(operand), kind))) throw new Broken('unlike elements in parallel');
   if ([KINDS.ohm, KINDS.H].some((known) => sameKinds(known, kind))) {
     const lifted = lift(kind, (...x) => 1 / x.reduce((sum, r) => sum + 1 / r, 0), operands, LIBRARY);
-    // Of an element and its negative, infinity has no sign.
-    const cancels =
-      operands.some(({ value }) => value !== null && value < 0) && Math.abs(lifted.value ?? 0) === Infinity;
+    // Of an element and its negative side by side, infinity has no sign.
+    let sum = 0;
+    const cancels = operands.some(({ value }, i) => (sum += 1 / (value ?? NaN)) === 0 && i > 0);
     return cancels ? { ...lifted, unsure: true } : lifted;
   }
   if ([KINDS.S, KINDS.F].some((known) => sameKinds(known, kind)))

@@ -5,6 +5,7 @@ import type { ValueKind } from '../../quantity/index.ts';
 import { nearestNames } from '../../language/index.ts';
 import type { FieldTree, PointEntry } from '../../language/index.ts';
 import { OFFERED_VALUES, POINT_STATUS, POINT_STATUS_SENTENCES, lowerPoint } from '../../network/index.ts';
+import { absentValue } from '../absent-value.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
@@ -52,7 +53,7 @@ export function compilePointCell(context: CellContext): Draft {
         type: OFFERED_KIND[row.unit],
         handle,
         sentence: row.sentence,
-        missing: handle === null ? { code: 'not-computed-yet', text, span: entry.span } : null,
+        missing: handle === null ? absentValue(text, entry.span) : null,
       };
     }),
     verify: (read) => {

@@ -5,6 +5,7 @@ import type { ValueKind } from '../../quantity/index.ts';
 import type { Expr, FieldTree, StageEntry } from '../../language/index.ts';
 import { OFFERED_VALUES, POINT_STATUS_SENTENCES, lowerStage } from '../../network/index.ts';
 import type { NetElement, NetFet, NetLeg, OfferedValue, StageLowering, StageNet } from '../../network/index.ts';
+import { absentValue } from '../absent-value.ts';
 import { stageCautions } from '../cautions.ts';
 import type { PlacedLeg } from '../stage-in-hand.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
@@ -234,7 +235,7 @@ function offersOf(
       type: OFFERED_KIND[row.unit],
       handle,
       sentence: row.sentence,
-      missing: missing === null ? null : { code: 'not-computed-yet', text: missing, span: entry.span },
+      missing: missing === null ? null : absentValue(missing, entry.span),
     });
   };
   for (const row of OFFERED_VALUES) {
