@@ -36,5 +36,7 @@ export { sheetPlot } from './sheet-plot.ts';
 export { schematicOf } from './sheet-schematic.ts';
 export type { Token } from './style.ts';
 export { ROLE_STYLES, TOKENS } from './style.ts';
+export type { SourceLeg } from './source-leg.ts';
+export { sourceLeg } from './source-leg.ts';
 export { escapeXml, svgText } from './svg.ts';
 export { transferPlane } from './transfer-plane.ts';

@@ -138,3 +138,59 @@ async function expectFocus(page: Page, ...keys: string[]): Promise<void> {
     page.evaluate(() => document.activeElement?.closest('[data-key]')?.getAttribute('data-key') ?? '');
   await expect.poll(async () => keys.includes(await focused())).toBe(true);
 }
+
+test('Q dragged along its curve turns the source resistor to a preferred value, as one step', async ({
+  page,
+  address,
+}) => {
+  const pane = await openFigures(page, address);
+  const q = pane.getByRole('slider', { name: 'Q of A1' });
+  await expect(q.getAttribute('aria-valuetext')).resolves.toBe('R_S2 1.2 kΩ, I_D 696 µA');
+  const entry = page.locator('[data-key="cell:R_S2"] [data-column="entry"]');
+  await q.scrollIntoViewIfNeeded();
+  const box = (await q.boundingBox())!;
+  await page.mouse.move(box.x + 12, box.y + 12);
+  await page.mouse.down();
+  for (const pixels of [4, 10, 18]) await page.mouse.move(box.x + 12 + pixels, box.y + 12);
+  await page.mouse.up();
+  await expect.poll(() => q.getAttribute('aria-valuetext')).not.toMatch(/^R_S2 1\.2 kΩ/);
+  const value = /^R_S2 (\S+) (k?)Ω/.exec((await q.getAttribute('aria-valuetext'))!)!;
+  const ohms = Number(value[1]) * (value[2] === 'k' ? 1000 : 1);
+  expect(ohms).toBeLessThan(1200);
+  expect([560, 620, 680, 750, 820, 910, 1000, 1100]).toContain(ohms);
+  await page.keyboard.press('Control+z');
+  await expect.poll(() => entry.textContent()).toBe('1.2 kohm ± 1 %');
+});
+
+test('Q is stepped by arrow keys, and a drag is given up by Escape', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  const q = pane.getByRole('slider', { name: 'Q of A1' });
+  const entry = page.locator('[data-key="cell:R_S2"] [data-column="entry"]');
+  await q.focus();
+  await page.keyboard.press('ArrowRight');
+  await page.keyboard.press('ArrowRight');
+  await expect.poll(() => entry.textContent()).toBe('1 kohm ± 1 %');
+  await page.keyboard.press('ArrowDown');
+  await expect.poll(() => entry.textContent()).toBe('1.1 kohm ± 1 %');
+  // The steps of one stay are taken back together.
+  await page.keyboard.press('Control+z');
+  await expect.poll(() => entry.textContent()).toBe('1.2 kohm ± 1 %');
+  const box = (await q.boundingBox())!;
+  await page.mouse.move(box.x + 12, box.y + 12);
+  await page.mouse.down();
+  await page.mouse.move(box.x + 30, box.y + 12);
+  await expect.poll(() => q.getAttribute('aria-valuetext')).not.toMatch(/^R_S2 1\.2 kΩ/);
+  await page.keyboard.press('Escape');
+  await expect.poll(() => q.getAttribute('aria-valuetext')).toBe('R_S2 1.2 kΩ, I_D 696 µA');
+  await page.mouse.up();
+});
+
+test('a Q that cannot be dragged says why', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  await row(page, 'A3').click();
+  const q = pane.getByRole('slider', { name: 'Q of A3' });
+  await expect(q.getAttribute('aria-disabled')).resolves.toBe('true');
+  await q.focus();
+  await page.keyboard.press('ArrowUp');
+  await page.getByText('Q of A3 cannot be dragged: its source does not lead through resistors').waitFor();
+});

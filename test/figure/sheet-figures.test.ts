@@ -3,7 +3,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import type { Chart, Curve } from '../../src/figure/index.ts';
-import { drawSchematic, planesOf, schematicOf, sheetPlot } from '../../src/figure/index.ts';
+import { drawSchematic, planesOf, schematicOf, sheetPlot, sourceLeg } from '../../src/figure/index.ts';
 import { requirementsOf } from '../../src/figure/requirements.ts';
 import { createSheet } from '../../src/sheet/index.ts';
 
@@ -184,5 +184,61 @@ describe('a plot cell', () => {
     ).toEqual({
       message: 'F1 waits for A1.',
     });
+  });
+});
+
+describe('the resistor that Q turns', () => {
+  const legOf = (text: string): ReturnType<typeof sourceLeg> => {
+    const sheet = createSheet(text);
+    return sourceLeg(sheet.stage('A1')!, sheet);
+  };
+
+  it('is what it is where Q stands, and puts Q where it is wanted', () => {
+    const leg = legOf(FOLLOWER);
+    if ('reason' in leg) throw new Error(leg.reason);
+    expect(leg.cell).toBe('R_S');
+    const sheet = createSheet(FOLLOWER);
+    expect(leg.resistanceAt(sheet.value('A1.V_GS') as number)).toBeCloseTo(1200, 6);
+    // Without lambda the curve does not depend on the drain voltage, so Q lands exactly.
+    const wanted = -0.9;
+    const turned = createSheet(FOLLOWER.replace('1.2 kohm', `${leg.resistanceAt(wanted)} ohm`));
+    expect(turned.value('A1.V_GS')).toBeCloseTo(wanted, 9);
+  });
+
+  it('is the same on a mirrored stage', () => {
+    const mirrored = FOLLOWER.replace('15 V', '-15 V').replace('n-JFET', 'p-JFET').replace('V_TO: -2 V', 'V_P: 2 V');
+    const leg = legOf(mirrored.replace('beta: 1 mA/V^2', 'I_DSS: 4 mA'));
+    if ('reason' in leg) throw new Error(leg.reason);
+    const straight = legOf(FOLLOWER);
+    if ('reason' in straight) throw new Error(straight.reason);
+    expect(leg.resistanceAt(0.9)).toBeCloseTo(straight.resistanceAt(-0.9)!, 6);
+  });
+
+  it('is the largest input of a chain to a rail, whichever end its line names', () => {
+    const chain = (lines: string): ReturnType<typeof sourceLeg> =>
+      legOf(`R_E = 5 kohm\n${FOLLOWER.replace('source: R_S to 0 V', lines)}`);
+    expect(chain('source: R_S to foot\n  foot: R_E to 0 V, 1 uF to 0 V')).toMatchObject({ cell: 'R_E' });
+    expect(chain('foot: R_S to source, R_E to 0 V')).toMatchObject({ cell: 'R_E' });
+  });
+
+  it('asks for no resistance where the device is off or the line would have to lean back', () => {
+    const leg = legOf(FOLLOWER);
+    if ('reason' in leg) throw new Error(leg.reason);
+    expect(leg.resistanceAt(-3)).toBeNull();
+    expect(leg.resistanceAt(0.5)).toBeNull();
+  });
+
+  it.each([
+    ['source: to 0 V', /does not lead through resistors alone/],
+    ['source: R_S to 0 V, 2 kohm to 0 V', /does not lead through resistors alone/],
+    ['source: 1 kohm to 0 V', /no resistor with a name stands in its source leg/],
+  ])('is none with %s, and it says why', (line, reason) => {
+    const leg = legOf(FOLLOWER.replace('source: R_S to 0 V', line));
+    expect('reason' in leg && leg.reason).toMatch(reason);
+  });
+
+  it('is none where the resistance is computed', () => {
+    const leg = legOf(FOLLOWER.replace('R_S = 1.2 kohm', 'R_0 = 2.4 kohm\nR_S = R_0 / 2'));
+    expect('reason' in leg && leg.reason).toBe('Q of A1 cannot be dragged: R_S is computed, not entered.');
   });
 });

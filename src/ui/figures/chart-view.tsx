@@ -11,7 +11,9 @@ import type { ChartCanvas } from './chart-canvas.ts';
 import { DrawingView } from './drawing-view.tsx';
 import { chartSize } from './figure-size.ts';
 import { FigureTable } from './figure-table.tsx';
+import { HandleView } from './handle-view.tsx';
 import { createPalette, createPrinting } from './page-look.ts';
+import type { ChartHandle } from './turn-q.ts';
 import 'uplot/dist/uPlot.min.css';
 
 type UPlotMaker = typeof uPlot;
@@ -26,11 +28,16 @@ function loadPlotter(): void {
 }
 
 /** A chart as wide as its place. */
-export function ChartView(props: { readonly chart: Chart }) {
+export function ChartView(props: { readonly chart: Chart; readonly handle?: ChartHandle | null }) {
   const palette = createPalette();
   const printing = createPrinting();
   const [width, setWidth] = createSignal(0);
   const [cursor, setCursor] = createSignal<number | null>(null);
+  const [handleText, setHandleText] = createSignal<string | null>(null);
+  const spoken = (): string | null => {
+    const at = cursor();
+    return handleText() ?? (at === null ? null : readOut(props.chart, at));
+  };
   const size = createMemo(() => chartSize(width()));
   const onCanvas = (): boolean => plotter() !== null && !printing();
   let place!: HTMLDivElement;
@@ -45,20 +52,33 @@ export function ChartView(props: { readonly chart: Chart }) {
 
   return (
     <div class="chart">
-      <div class="chart-place" ref={(element) => (place = element)} role="img" aria-label={props.chart.sentence}>
+      <div class="chart-stage">
+        <div class="chart-place" ref={(element) => (place = element)} role="img" aria-label={props.chart.sentence}>
+          <Show when={size()}>
+            {(room) => (
+              <Show when={onCanvas()} fallback={<DrawingView drawing={drawChart(props.chart, room())} />}>
+                <Canvas
+                  chart={props.chart}
+                  size={room()}
+                  palette={palette()}
+                  plotter={plotter()!}
+                  onCursor={setCursor}
+                />
+              </Show>
+            )}
+          </Show>
+        </div>
         <Show when={size()}>
           {(room) => (
-            <Show when={onCanvas()} fallback={<DrawingView drawing={drawChart(props.chart, room())} />}>
-              <Canvas chart={props.chart} size={room()} palette={palette()} plotter={plotter()!} onCursor={setCursor} />
+            <Show when={props.handle}>
+              {(handle) => <HandleView handle={handle()} chart={props.chart} size={room()} onText={setHandleText} />}
             </Show>
           )}
         </Show>
       </div>
       <div class="chart-foot">
         <p class="read-out" aria-hidden="true">
-          <Show when={cursor() !== null}>
-            <Prose text={readOut(props.chart, cursor()!)} />
-          </Show>
+          <Show when={spoken()}>{(text) => <Prose text={text()} />}</Show>
         </p>
         <FigureTable table={() => chartTable(props.chart)} caption={props.chart.title} />
       </div>

@@ -142,7 +142,9 @@ function GroupView(props: ItemProps<GroupItem>) {
         onFocus={() => symbols.setStop(groupKey(props.item))}
       >
         <rect class="symbol-target" {...boxAttributes(props.item.box)} />
-        <Items items={props.item.items} failing={props.item.fails} />
+        <g aria-hidden="true">
+          <Items items={props.item.items} failing={props.item.fails} />
+        </g>
       </g>
     </Show>
   );

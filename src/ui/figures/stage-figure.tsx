@@ -8,6 +8,7 @@ import { ChartView } from './chart-view.tsx';
 import { DrawingView } from './drawing-view.tsx';
 import { NO_VALUES, stageValues } from './stage-values.ts';
 import type { StageValue } from './stage-values.ts';
+import { createQHandle } from './turn-q.ts';
 
 /** Everything drawn of one stage; where it is not solved, its schematic without numbers and why. */
 export function StageFigure(props: { readonly desk: Desk; readonly stage: string }) {
@@ -27,6 +28,7 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
     const stage = reading();
     return stage ? planesOf(stage, document.sheet) : null;
   });
+  const handle = createQHandle(props.desk, reading);
   const values = createMemo(() => {
     const stage = cell();
     return stage ? stageValues(stage) : NO_VALUES;
@@ -75,7 +77,7 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
           <div class="planes">
             <section aria-label={charts().transfer.title}>
               <h3>Transfer</h3>
-              <ChartView chart={charts().transfer} />
+              <ChartView chart={charts().transfer} handle={handle()} />
             </section>
             <section aria-label={charts().output.title}>
               <h3>Output</h3>
