@@ -2,23 +2,41 @@
 // all that the sheet uses elsewhere. The others are folded under one row.
 
 import { pathsOf } from '../../language/index.ts';
-import type { Entry, Expr, FieldBody, SheetTree } from '../../language/index.ts';
+import type { Entry, Expr, FieldBody, LineTree, SheetTree } from '../../language/index.ts';
 import type { CellReading, OfferedReading } from '../../sheet/index.ts';
 
 const BIAS: ReadonlySet<string> = new Set(['I_D', 'V_GS', 'V_DS', 'margin', 'region']);
 const LAW: ReadonlySet<string> = new Set(['beta', 'K', 'V_P', 'V_TO']);
 
-/** Every path that the sheet's formulas read, such as `A1.I_D`. */
-export function usedPaths(tree: SheetTree): ReadonlySet<string> {
-  const found = new Set<string>();
-  const add = (expr: Expr): void => {
-    for (const path of pathsOf(expr)) found.add(path.names.map((part) => part.name).join('.'));
-  };
+/** The paths that a line reads; a line that stays keeps its tree. */
+const PATHS = new WeakMap<LineTree, readonly string[]>();
+
+/** The values that the sheet's formulas read of each block: of `A1.I_D` the name `I_D` under `A1`. */
+export function usedValues(tree: SheetTree): ReadonlyMap<string, ReadonlySet<string>> {
+  const found = new Map<string, Set<string>>();
   for (const cell of tree.cells) {
-    for (const expr of entryExprs(cell.entry)) add(expr);
-    for (const field of cell.fields) for (const expr of bodyExprs(field.body)) add(expr);
+    for (const { line } of [cell, ...cell.fields]) {
+      for (const path of pathsOfLine(line.tree)) {
+        const dot = path.indexOf('.');
+        const names = found.get(path.slice(0, dot)) ?? new Set();
+        names.add(path.slice(dot + 1));
+        found.set(path.slice(0, dot), names);
+      }
+    }
   }
   return found;
+}
+
+function pathsOfLine(tree: LineTree): readonly string[] {
+  const known = PATHS.get(tree);
+  if (known) return known;
+  const exprs = tree.type === 'cell' ? entryExprs(tree.entry) : tree.type === 'field' ? bodyExprs(tree.body) : [];
+  const paths = exprs
+    .flatMap((expr) => pathsOf(expr))
+    .filter((path) => path.names.length > 1)
+    .map((path) => path.names.map((part) => part.name).join('.'));
+  PATHS.set(tree, paths);
+  return paths;
 }
 
 /** Splits the offered values of a cell into those with a row and those that are folded. */
@@ -33,7 +51,7 @@ export function splitValues(
       : cell.values;
   const own = cell.kind === 'part' || cell.kind === 'another' ? LAW : BIAS;
   const isPinned = ({ name }: OfferedReading): boolean =>
-    own.has(name.slice(name.lastIndexOf('.') + 1)) || used.has(`${cell.name}.${name}`);
+    own.has(name.slice(name.lastIndexOf('.') + 1)) || used.has(name);
   return { pinned: offered.filter(isPinned), folded: offered.filter((value) => !isPinned(value)) };
 }
 

@@ -3,25 +3,30 @@
 
 import { entrySpan } from '../../language/index.ts';
 import type { Line, SheetTree } from '../../language/index.ts';
-import type { CellReading, Sheet } from '../../sheet/index.ts';
-import { blockRows } from './block-rows.ts';
+import type { Sheet } from '../../sheet/index.ts';
 import type { Folding, PlacedRow } from './block-rows.ts';
-import { cellRow, proseEntry } from './cell-row.ts';
+import { proseEntry } from './cell-row.ts';
+import { rowsOfCell } from './rows-of-cell.ts';
+import type { Made } from './rows-of-cell.ts';
 import { rowFault } from './faults.ts';
 import { labelText, wordName } from './names.ts';
-import { usedPaths } from './pinned.ts';
+import { usedValues } from './pinned.ts';
 import { emptyRow, MARK_TEXT } from './row.ts';
 import type { Mark, Row, RowSource } from './row.ts';
 import { sameData } from './same.ts';
 
 export interface SheetRows {
   readonly rows: readonly Row[];
+  /** The rows of cells by their keys, for the next time. */
+  readonly made: ReadonlyMap<string, Made>;
   row(key: string): Row | null;
   /** The line of the text that a row stands for; for a place for a new line, the line before which it goes; null for results. */
   lineOf(key: string): number | null;
   /** The row of a line, or null (blank, or folded away). */
   ofLine(line: number): Row | null;
 }
+
+const NONE: ReadonlySet<string> = new Set();
 
 /** Marks that a folded row passes on, worst first. */
 const WORST: readonly Mark[] = ['broken', 'fails', 'fails-at-an-end'];
@@ -40,12 +45,13 @@ const EMPTY_SHEET = 'V_DD = 15 V ± 5 %';
 export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows | null = null): SheetRows {
   const { tree } = sheet;
   const cellAt = new Map(sheet.cells().map((cell) => [cell.tree.line.index, cell]));
-  const used = usedPaths(tree);
+  const used = usedValues(tree);
   const inBlock = new Set<number>();
   for (const cell of tree.cells) for (const { line } of [...cell.fields, ...cell.rows]) inBlock.add(line.index);
   const titleFields = new Map((tree.title?.fields ?? []).map((field) => [field.line.index, field]));
   const loose = new Map(tree.loose.map(({ line, message }) => [line.index, message]));
   const keys = keyMaker();
+  const allMade = new Map<string, Made>();
 
   const placed: PlacedRow[] = [];
   for (const [k, section] of sectionsOf(tree).entries()) {
@@ -55,7 +61,9 @@ export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows |
       const cell = cellAt.get(line.index);
       if (cell) {
         const key = keys(`cell:${cell.name}`);
-        inner.push(...blockOfCell(key, cell, sheet, used, isFolded));
+        const made = rowsOfCell(key, cell, sheet, used.get(cell.name) ?? NONE, isFolded, previous?.made.get(key));
+        allMade.set(key, made);
+        inner.push(...made.rows);
       } else {
         const row = plainRow(line, { titleFields, loose, keys, tree, isFolded });
         if (row) inner.push({ row, line: line.index });
@@ -72,25 +80,7 @@ export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows |
     placed.push({ row, line: section.heading.line.index });
     if (!folded) placed.push(...inner, ...(ghost ? [ghost] : []));
   }
-  return collect(placed, previous);
-}
-
-function blockOfCell(
-  key: string,
-  cell: CellReading,
-  sheet: Sheet,
-  used: ReadonlySet<string>,
-  isFolded: Folding,
-): PlacedRow[] {
-  const row = cellRow(key, cell, sheet);
-  const line = cell.tree.line.index;
-  const below = blockRows(cell, used, isFolded);
-  if (below.length === 0) return [{ row, line }];
-  const foldKey = `block:${key}`;
-  const faulty = below.some((inner) => inner.row.fault !== null);
-  const folded = !faulty && isFolded(foldKey, false);
-  const head: Row = { ...row, fold: { key: foldKey, open: !folded } };
-  return [{ row: head, line }, ...(folded ? [] : below)];
+  return collect(placed, previous, allMade);
 }
 
 // ---------------------------------------------------------------- sections
@@ -231,7 +221,7 @@ function keyMaker(): (wanted: string) => string {
   };
 }
 
-function collect(placed: readonly PlacedRow[], previous: SheetRows | null): SheetRows {
+function collect(placed: readonly PlacedRow[], previous: SheetRows | null, made: ReadonlyMap<string, Made>): SheetRows {
   const byKey = new Map<string, Row>();
   const lines = new Map<string, number | null>();
   const byLine = new Map<number, Row>();
@@ -245,6 +235,7 @@ function collect(placed: readonly PlacedRow[], previous: SheetRows | null): Shee
   });
   return {
     rows,
+    made,
     row: (key) => byKey.get(key) ?? null,
     lineOf: (key) => lines.get(key) ?? null,
     ofLine: (line) => byLine.get(line) ?? null,
