@@ -88,7 +88,7 @@ export function createDesk(document: SheetDocument): Desk {
     stage,
     following,
     setFollowing,
-    strayed: () => following() && selection()?.cell != null && chosen() === null,
+    strayed: () => following() && typeof selection()?.cell === 'string' && chosen() === null,
     status,
     say: (text, action = null) => setStatus({ text, action }),
     commands,
