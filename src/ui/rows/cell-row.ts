@@ -5,7 +5,7 @@ import type { CellTree, Entry, Line, Note, Source } from '../../language/index.t
 import { checkText } from '../../record/index.ts';
 import type { CellKind, CellReading, Sheet } from '../../sheet/index.ts';
 import type { Column } from '../desk/index.ts';
-import { comparedFigure } from './check-numbers.ts';
+import { checkNumbers } from './check-numbers.ts';
 import { isBroken, rowFault } from './faults.ts';
 import { cellName } from './names.ts';
 import { inputNumbers, NO_NUMBERS, typedUnit, valueFigure } from './numbers.ts';
@@ -87,8 +87,7 @@ function markOf(cell: CellReading): Mark {
 function numbersOf(cell: CellReading, sheet: Sheet): Numbers {
   const { tree } = cell;
   if (cell.kind === 'check' && tree.entry.type === 'check' && cell.check !== null) {
-    const compared = comparedFigure(tree.entry.condition, tree.line, sheet);
-    return { ...NO_NUMBERS, nominal: compared };
+    return checkNumbers(tree.entry.condition, tree.line, sheet);
   }
   if (cell.reading === null) return NO_NUMBERS;
   if (!cell.isInput && cell.spread === null) return { ...NO_NUMBERS, nominal: valueFigure(cell.reading) };

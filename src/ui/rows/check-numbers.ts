@@ -1,34 +1,63 @@
-// What a check compares, as the number beside it.
+// What a check compares: the value beside it, and where it stands against its limits.
 
+import { spreadBar } from '../../figure/index.ts';
 import { plainText } from '../../quantity/index.ts';
 import { pathsOf } from '../../language/index.ts';
 import type { Expr, Line } from '../../language/index.ts';
 import { evaluateExpression } from '../../sheet/index.ts';
-import type { CellReading, Reading, Sheet } from '../../sheet/index.ts';
-import { valueFigure } from './numbers.ts';
-import type { Figure } from './row.ts';
+import type { Reading, Sheet } from '../../sheet/index.ts';
+import { NO_NUMBERS, valueFigure } from './numbers.ts';
+import type { Numbers } from './numbers.ts';
 
-/** The value that a single comparison holds against its limit; null where several are joined or it has none. */
-export function comparedFigure(condition: Expr, line: Line, sheet: Sheet): Figure | null {
-  const expr = comparedSide(condition);
-  if (expr === null) return null;
-  const reading = expr.type === 'path' ? readingOf(pathText(expr), sheet) : evaluated(expr, line, sheet);
-  return reading && valueFigure(reading);
+interface Compared {
+  readonly value: Expr;
+  /** null on a side without limit. */
+  readonly low: Expr | null;
+  readonly high: Expr | null;
 }
 
-function comparedSide(expr: Expr): Expr | null {
-  if (expr.type === 'group') return comparedSide(expr.inner);
-  if (expr.type === 'within') return expr.value;
-  if (expr.type !== 'binary' || expr.operator === 'and' || expr.operator === 'or') return null;
+/** The numbers of a single comparison; none where several are joined. */
+export function checkNumbers(condition: Expr, line: Line, sheet: Sheet): Numbers {
+  const compared = comparedOf(condition);
+  if (compared === null) return NO_NUMBERS;
+  const read = (expr: Expr | null): Reading | null => expr && readingOf(expr, line, sheet);
+  const reading = read(compared.value);
+  if (reading === null) return NO_NUMBERS;
+  const [low, high] = [numberOf(read(compared.low)), numberOf(read(compared.high))];
+  const value = numberOf(reading);
+  const bar =
+    value === null || (low === null && high === null)
+      ? null
+      : spreadBar({
+          low: value,
+          nominal: value,
+          high: value,
+          own: true,
+          limits: { low, high },
+          devices: { low: null, high: null },
+          refining: false,
+        });
+  return { ...NO_NUMBERS, nominal: valueFigure(reading), bar };
+}
+
+function comparedOf(expr: Expr): Compared | null {
+  if (expr.type === 'group') return comparedOf(expr.inner);
+  if (expr.type === 'within') return { value: expr.value, low: expr.low, high: expr.high };
+  if (expr.type !== 'binary' || !['<', '>', '<=', '>=', '='].includes(expr.operator)) return null;
   // The side that is a plain number is the limit.
-  return pathsOf(expr.left).length === 0 && pathsOf(expr.right).length > 0 ? expr.right : expr.left;
+  const flipped = pathsOf(expr.left).length === 0 && pathsOf(expr.right).length > 0;
+  const [value, limit] = flipped ? [expr.right, expr.left] : [expr.left, expr.right];
+  if (expr.operator === '=') return { value, low: null, high: null };
+  const least = expr.operator.startsWith('>') !== flipped;
+  return { value, low: least ? limit : null, high: least ? null : limit };
 }
 
-/** The expression with the present values put in place of its names. */
-function evaluated(expr: Expr, line: Line, sheet: Sheet): Reading | null {
+/** What an expression is now: of a path as the sheet has it, else worked out with the present values put in. */
+function readingOf(expr: Expr, line: Line, sheet: Sheet): Reading | null {
+  if (expr.type === 'path') return readingAt(pathText(expr), sheet);
   let text = line.text.slice(expr.span.start, expr.span.end);
   for (const path of pathsOf(expr).toSorted((a, b) => b.span.start - a.span.start)) {
-    const reading = readingOf(pathText(path), sheet);
+    const reading = readingAt(pathText(path), sheet);
     const number = reading && literalText(reading);
     if (!number) return null;
     text = text.slice(0, path.span.start - expr.span.start) + number + text.slice(path.span.end - expr.span.start);
@@ -43,13 +72,18 @@ function literalText({ value, type }: Reading): string | null {
   return text.startsWith('-') && type.scale !== 'celsius' ? `(${text})` : text;
 }
 
+function numberOf(reading: Reading | null): number | null {
+  const value = reading?.value;
+  return typeof value === 'number' && Number.isFinite(value) ? value : null;
+}
+
 function pathText(expr: Expr & { readonly type: 'path' }): string {
   return expr.names.map((name) => name.name).join('.');
 }
 
-function readingOf(path: string, sheet: Sheet): Reading | null {
+function readingAt(path: string, sheet: Sheet): Reading | null {
   const [name, ...rest] = path.split('.');
-  const cell: CellReading | null = sheet.cell(name!);
+  const cell = sheet.cell(name!);
   if (!cell) return null;
   return rest.length === 0 ? cell.reading : (cell.values.find((value) => value.name === rest.join('.')) ?? null);
 }

@@ -147,7 +147,7 @@ function tokenOf(before: string): string {
 
 /** What fits the token: of the expected kind first, then whole prefixes, then those that fit when written loosely. */
 function ranked({ token, items, expected }: Context): Suggestion[] {
-  const loose = plain(token);
+  const loose = token.includes('_') ? lower(token) : bare(token);
   return items
     .map((item, order) => ({ item, order, rank: rankOf(item, token, loose, expected) }))
     .filter(({ rank }) => rank !== null)
@@ -157,6 +157,7 @@ function ranked({ token, items, expected }: Context): Suggestion[] {
 
 function rankOf(item: Suggestion, token: string, loose: string, expected: ValueKind | null): number | null {
   const { text } = item;
+  const plain = token.includes('_') ? lower : bare;
   const fit = text.startsWith(token)
     ? 0
     : plain(text).startsWith(loose)
@@ -171,6 +172,10 @@ function rankOf(item: Suggestion, token: string, loose: string, expected: ValueK
   return (wanted ? 0 : 10) + fit + inner;
 }
 
-function plain(text: string): string {
-  return text.toLowerCase().replaceAll('_', '');
+function lower(text: string): string {
+  return text.toLowerCase();
+}
+
+function bare(text: string): string {
+  return lower(text).replaceAll('_', '');
 }
