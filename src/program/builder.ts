@@ -1,5 +1,8 @@
 // Builds one segment. Values are handles: the slot of another segment as it is, or a local number that
 // becomes a slot when the segment's block has been allocated.
+//
+// Nothing is computed twice: an operation on operands that it had before answers with the handle it gave then, to
+// the last bit the same number. Operands of a sum, a product and the like may change places.
 
 import type { Emitter, Handle } from '../network/index.ts';
 import { OP, STRIDE } from './operations.ts';
@@ -9,45 +12,64 @@ import type { KernelTable, Segment } from './segment.ts';
 /** Local handles count from here; slots of other segments lie below. */
 const LOCAL = 0x40000000;
 
+/** Operations whose result is the same number when the operands change places. */
+const SYMMETRIC: ReadonlySet<OperationName> = new Set(['add', 'mul', 'min', 'max', 'parallel', 'equal', 'and', 'or']);
+
+/** Handles of either kind below this are told apart in the key of an operation. */
+const KEYED = 2 ** 24;
+
 export interface Builder extends Emitter {
+  /** Calls any kernel of the table the builder was made with. */
+  call(kernel: string, inputs: readonly Handle[], outputs: number): Handle[];
   /** One operation of `OP`; `b` is left out for those of one operand. */
   op(name: OperationName, a: Handle, b?: Handle): Handle;
+  /** The same value in a slot of this segment: what a cell offers must change with its own segment. */
+  own(handle: Handle): Handle;
   /** How many slots the segment needs. */
   size(): number;
-  /** The finished segment with its slots at `base`, and the slot of any handle in it. */
-  finish(base: number): { segment: Segment; slot: (handle: Handle) => number };
+  /**
+   * The finished segment with its slots at `base`, and the slot of any handle in it. The handle `first`, where it
+   * is local, gets the slot `base` itself, so that a cell's value stays in place when its formula changes. Others may
+   * read `first` and what is `offered`, or every result where `offered` is left out.
+   */
+  finish(
+    base: number,
+    first?: Handle | null,
+    offered?: readonly Handle[] | null,
+  ): { segment: Segment; slot: (handle: Handle) => number };
 }
 
 /** A builder whose calls are looked up in `kernels`; a name that is not there throws. */
 export function createBuilder(kernels: KernelTable): Builder {
   const ops: number[] = [];
   const args: number[] = [];
-  const constants = new Map<number, number>(); // value -> local index; -0 and NaN by their own keys below
-  let negativeZero = -1;
-  const values: [number, number][] = [];
+  const known = new Map<number, Handle>();
+  const constants = new Map<number, Handle>(); // one NaN for all; -0 is not 0 and stands apart
+  let negativeZero: Handle | null = null;
+  const values: [handle: Handle, value: number][] = [];
   let count = 0;
 
   const local = (): Handle => LOCAL + count++;
 
+  function newConstant(x: number): Handle {
+    const handle = local();
+    values.push([handle, x]);
+    return handle;
+  }
+
   function constant(x: number): Handle {
-    if (Object.is(x, -0)) {
-      if (negativeZero < 0) {
-        negativeZero = count;
-        values.push([count++, x]);
-      }
-      return LOCAL + negativeZero;
-    }
-    let index = constants.get(x);
-    if (index === undefined) {
-      index = count++;
-      constants.set(x, index);
-      values.push([index, x]);
-    }
-    return LOCAL + index;
+    if (Object.is(x, -0)) return (negativeZero ??= newConstant(x));
+    let handle = constants.get(x);
+    if (handle === undefined) constants.set(x, (handle = newConstant(x)));
+    return handle;
   }
 
   function op(name: OperationName, a: Handle, b: Handle = a): Handle {
+    const key = SYMMETRIC.has(name) && b < a ? keyOf(OP[name], b, a) : keyOf(OP[name], a, b);
+    const present = key === null ? undefined : known.get(key);
+    if (present !== undefined) return present;
     const target = local();
+    if (key !== null) known.set(key, target);
     ops.push(OP[name], target, a, b);
     return target;
   }
@@ -59,6 +81,23 @@ export function createBuilder(kernels: KernelTable): Builder {
     ops.push(OP.call, index, args.length, inputs.length + outputs);
     args.push(...inputs, ...results);
     return results;
+  }
+
+  /** The place of each local handle in the block: `first`, what is offered, the other results, the constants. */
+  function places(first: Handle | null, offered: readonly Handle[] | null): { place: Int32Array; visible: number } {
+    const place = new Int32Array(count).fill(-1);
+    let next = 0;
+    const put = (handle: Handle | null): void => {
+      if (handle !== null && handle >= LOCAL && place[handle - LOCAL] < 0) place[handle - LOCAL] = next++;
+    };
+    const isConstant = new Set(values.map(([handle]) => handle));
+    put(first);
+    offered?.forEach(put);
+    let visible = next;
+    for (let i = 0; i < count; i++) if (!isConstant.has(LOCAL + i)) put(LOCAL + i);
+    if (offered === null) visible = next;
+    values.forEach(([handle]) => put(handle));
+    return { place, visible };
   }
 
   return {
@@ -74,26 +113,36 @@ export function createBuilder(kernels: KernelTable): Builder {
     max: (a, b) => op('max', a, b),
     abs: (a) => op('abs', a),
     sqrt: (a) => op('sqrt', a),
+    own: (handle) => (handle >= LOCAL ? handle : op('copy', handle)),
     size: () => count,
-    finish(base) {
-      const slot = (handle: Handle): number => (handle >= LOCAL ? handle - LOCAL + base : handle);
-      const code = new Int32Array(ops.length);
-      for (let i = 0; i < ops.length; i += STRIDE) {
-        const isCall = ops[i] === OP.call;
-        code[i] = ops[i]!;
-        code[i + 1] = isCall ? ops[i + 1]! : slot(ops[i + 1]!);
-        code[i + 2] = isCall ? ops[i + 2]! : slot(ops[i + 2]!);
-        code[i + 3] = isCall ? ops[i + 3]! : slot(ops[i + 3]!);
+    finish(base, first = null, offered = null) {
+      const { place, visible } = places(first, offered);
+      const slot = (handle: Handle): number => (handle < LOCAL ? handle : base + place[handle - LOCAL]);
+      const code = Int32Array.from(ops);
+      for (let i = 0; i < code.length; i += STRIDE) {
+        if (code[i] === OP.call) continue;
+        for (let word = 1; word < STRIDE; word++) code[i + word] = slot(code[i + word]);
       }
       const segment: Segment = {
         base,
         size: count,
+        visible,
         ops: code,
         args: Int32Array.from(args, slot),
-        constantSlots: Int32Array.from(values, ([index]) => base + index),
+        constantSlots: Int32Array.from(values, ([handle]) => slot(handle)),
         constantValues: Float64Array.from(values, ([, value]) => value),
       };
       return { segment, slot };
     },
   };
+}
+
+/** A number of its own for each operation on keyed handles: 5 bits of code, 24 for each handle. */
+function keyOf(code: number, a: Handle, b: Handle): number | null {
+  const [x, y] = [handleKey(a), handleKey(b)];
+  return x < KEYED && y < KEYED ? (code * KEYED + x) * KEYED + y : null;
+}
+
+function handleKey(handle: Handle): number {
+  return handle < LOCAL ? 2 * handle : 2 * (handle - LOCAL) + 1;
 }

@@ -1,12 +1,14 @@
 // One cell, compiled: straight-line operations on a shared array of slots.
 //
-// A segment owns a block of slots, [base, base + size). It reads slots of other segments and writes
-// only its own. Constants are written once, when the segment is installed; the operations never
-// overwrite them. Segments are plain data and can be posted to a worker.
+// A segment owns a block of slots, [base, base + size): first what other segments may read, last its constants. It
+// reads slots of other segments and writes only its own. Constants are written once, when the segment is installed;
+// the operations never overwrite them. Segments are plain data and can be posted to a worker.
 
 export interface Segment {
   readonly base: number;
   readonly size: number;
+  /** Other segments read the slots [base, base + visible) and no others. */
+  readonly visible: number;
   readonly ops: Int32Array;
   readonly args: Int32Array;
   readonly constantSlots: Int32Array;

@@ -101,7 +101,9 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     ...offer,
     handle: failed || offer.handle === null ? null : builder.own(offer.handle),
   }));
-  const { segment, slot } = failed ? emptySegment() : builder.finish(surroundings.allocate(builder.size()), value);
+  const { segment, slot } = failed
+    ? emptySegment()
+    : builder.finish(surroundings.allocate(builder.size()), value, readByOthers(offers, draft.extra));
   const cellInterface: Interface = {
     kind: tree.entry.type,
     type: draft.type,
@@ -139,9 +141,23 @@ function brokenPart(tree: CellTree): Placed | null {
   return null;
 }
 
+/** Every handle that users of the cell may read beside its value. */
+function readByOthers(offers: readonly { readonly handle: Handle | null }[], extra: Draft['extra']): Handle[] {
+  const device = extra ? [...Object.values(extra.device), ...Object.values(extra.limits)] : [];
+  return [...offers.map(({ handle }) => handle), ...device].filter((handle) => handle !== null);
+}
+
 function emptySegment(): { segment: Segment; slot: (handle: Handle) => number } {
   const none = new Int32Array(0);
-  const segment = { base: 0, size: 0, ops: none, args: none, constantSlots: none, constantValues: new Float64Array(0) };
+  const segment = {
+    base: 0,
+    size: 0,
+    visible: 0,
+    ops: none,
+    args: none,
+    constantSlots: none,
+    constantValues: new Float64Array(0),
+  };
   return { segment, slot: (handle) => handle };
 }
 
