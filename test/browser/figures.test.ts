@@ -194,3 +194,19 @@ test('a Q that cannot be dragged says why', async ({ page, address }) => {
   await page.keyboard.press('ArrowUp');
   await page.getByText('Q of A3 cannot be dragged: its source does not lead through resistors').waitFor();
 });
+
+test('a followed plane is kept as a plot cell, once', async ({ page, address }) => {
+  const pane = await openFigures(page, address);
+  await row(page, 'A2').click();
+  const plane = pane.getByRole('region', { name: 'Transfer plane of A2' });
+  const keep = plane.getByRole('button', { name: 'keep in the sheet' });
+  await keep.click();
+  await expect
+    .poll(() => page.locator('[data-key="cell:F4"] [data-column="entry"]').textContent())
+    .toBe('plot transfer of A2');
+  await pane.locator('summary', { hasText: 'F4 transfer of A2' }).waitFor();
+  await expect(keep.count()).resolves.toBe(0);
+  await page.keyboard.press('Control+z');
+  await keep.waitFor();
+  await expect.poll(() => page.locator('[data-key="cell:F4"]').count()).toBe(0);
+});

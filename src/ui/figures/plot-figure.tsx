@@ -53,7 +53,7 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
       <Show when={open()}>
         <button
           type="button"
-          class="to-cell"
+          class="quiet-button to-cell"
           aria-label={`${props.name} in the sheet`}
           onClick={() => props.desk.jump(props.name)}
         >

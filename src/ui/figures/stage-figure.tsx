@@ -6,6 +6,8 @@ import type { Desk } from '../desk/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
 import { DrawingView } from './drawing-view.tsx';
+import { isKept, keepPlane } from './pinning.ts';
+import type { PlaneName } from './pinning.ts';
 import { NO_VALUES, stageValues } from './stage-values.ts';
 import type { StageValue } from './stage-values.ts';
 import { createQHandle } from './turn-q.ts';
@@ -76,11 +78,11 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
         {(charts) => (
           <div class="planes">
             <section aria-label={charts().transfer.title}>
-              <h3>Transfer</h3>
+              <PlaneHead desk={props.desk} title="Transfer" plane="transfer" stage={props.stage} />
               <ChartView chart={charts().transfer} handle={handle()} />
             </section>
             <section aria-label={charts().output.title}>
-              <h3>Output</h3>
+              <PlaneHead desk={props.desk} title="Output" plane="output" stage={props.stage} />
               <ChartView chart={charts().output} />
             </section>
           </div>
@@ -115,5 +117,28 @@ function RestTable(props: { readonly stage: string; readonly rows: readonly Stag
         </For>
       </tbody>
     </table>
+  );
+}
+
+function PlaneHead(props: {
+  readonly desk: Desk;
+  readonly title: string;
+  readonly plane: PlaneName;
+  readonly stage: string;
+}) {
+  return (
+    <div class="plane-head">
+      <h3>{props.title}</h3>
+      <Show when={!isKept(props.desk.document.cells(), props.plane, props.stage)}>
+        <button
+          type="button"
+          class="quiet-button"
+          title="Writes a plot cell, which the link and the record hold, too"
+          onClick={() => keepPlane(props.desk, props.plane, props.stage)}
+        >
+          keep in the sheet
+        </button>
+      </Show>
+    </div>
   );
 }
