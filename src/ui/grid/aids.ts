@@ -9,7 +9,7 @@ import type { Editor } from './editor.ts';
 /** Signs of the sheet that phone keyboards hide. */
 export const SIGNS = ['±', '%', '..', 'k', 'M', 'm', 'µ', 'Ω', '^', '_'] as const;
 
-export interface Step {
+interface Step {
   readonly title: string;
   readonly label: string;
   /** The whole text with the number stepped. */

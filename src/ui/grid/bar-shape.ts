@@ -11,7 +11,7 @@ const POINT = 5;
 /** A bar narrower than this would not be seen. */
 const LEAST = 1.5;
 
-export interface BarShape {
+interface BarShape {
   readonly outline: string;
   readonly open: string;
   readonly tick: number;

@@ -21,7 +21,7 @@ export function cellAt(target: EventTarget | null): { key: string; column: Colum
 }
 
 /** The element of a cell. */
-export function elementOf(table: HTMLElement, key: string, column: Column): HTMLElement | null {
+function elementOf(table: HTMLElement, key: string, column: Column): HTMLElement | null {
   return table.querySelector<HTMLElement>(`[data-key="${CSS.escape(key)}"] [data-column="${column}"]`);
 }
 

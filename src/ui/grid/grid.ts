@@ -17,14 +17,14 @@ import type { Folds } from './folds.ts';
 export const DRAFT = 'draft';
 
 /** A place for a new line, shown behind (or before) the row of `beside`. */
-export interface Draft {
+interface Draft {
   readonly beside: string;
   readonly side: 'above' | 'below';
   /** The line of the text before which it goes. */
   readonly line: number;
 }
 
-export interface Dragged {
+interface Dragged {
   readonly key: string;
   readonly from: number;
   readonly to: number;
@@ -336,7 +336,10 @@ export function createGrid(desk: Desk): Grid {
       focus(key, column, extend);
     },
     focused(key, column) {
-      if (desk.selection()?.row !== key) setAnchor(null);
+      const selection = desk.selection();
+      // The focus that a move brought along: what the move wished for stays.
+      if (selection?.row === key && selection.column === column) return;
+      if (selection?.row !== key) setAnchor(null);
       wished = column;
       select(key, column);
     },

@@ -15,7 +15,7 @@ export interface Seen {
 }
 
 /** A row by its key, or the height of those left out. */
-export type Item = { readonly key: string } | { readonly gap: number };
+type Item = { readonly key: string } | { readonly gap: number };
 
 /** The items in order; `kept` is the row that must not go. */
 export function windowItems(keys: readonly string[], seen: Seen, kept: string | null): Item[] {

@@ -19,7 +19,7 @@ export function stepNumber(grid: Grid, way: 'up' | 'down'): void {
 }
 
 /** One drag of a tick. */
-export interface Drag {
+interface Drag {
   move(pixels: number): void;
   /** Ends the drag; `keep` says whether its value stays. */
   end(keep: boolean): void;

@@ -19,7 +19,7 @@ export function expectedKind(before: string, place: EditPlace, sheet: Sheet): Va
 }
 
 /** The kind of a name, a path or a number. */
-export function kindOf(operand: string, sheet: Sheet): ValueKind | null {
+function kindOf(operand: string, sheet: Sheet): ValueKind | null {
   if (/^\d/.test(operand)) {
     const expr = parseExpression(operand);
     return 'code' in expr ? null : (literalOf(expr)?.kind ?? null);

@@ -5,12 +5,12 @@ import { stageLines } from './stage-shapes.ts';
 import type { StageShape } from './stage-shapes.ts';
 import { firstStage, freeName, partOf } from './sheet-stock.ts';
 
-export type Insertion =
+type Insertion =
   | { readonly type: 'quantity' | 'point' | 'check' | 'figure' }
   | { readonly type: 'part'; readonly kind: PartKind }
   | { readonly type: 'stage'; readonly shape: StageShape };
 
-export type PartKind = 'n-JFET' | 'p-JFET' | 'n-MOSFET' | 'p-MOSFET';
+type PartKind = 'n-JFET' | 'p-JFET' | 'n-MOSFET' | 'p-MOSFET';
 
 export interface InsertionChoice {
   readonly insertion: Insertion;

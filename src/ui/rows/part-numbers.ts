@@ -5,7 +5,7 @@ import { literalOf, parseSheet } from '../../language/index.ts';
 import type { Line, Literal, QuantityEntry, SheetTree, Splice } from '../../language/index.ts';
 import { setEntry } from '../../language/index.ts';
 
-export type NumberColumn = 'low' | 'nominal' | 'high';
+type NumberColumn = 'low' | 'nominal' | 'high';
 
 /** The pieces of a field's text, each as the author spelled it. */
 interface Pieces {

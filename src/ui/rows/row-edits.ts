@@ -62,7 +62,7 @@ export function editLabel({ row, column, isNew }: EditPlace, text: string): stri
 }
 
 /** A line as it will stand: one that reads as a field of the block above is set in. */
-export function newLine(tree: SheetTree, before: number, text: string): string {
+function newLine(tree: SheetTree, before: number, text: string): string {
   const isField = /^[A-Za-zͰ-Ͽ_][\w.Ͱ-Ͽ]*\s*:/.test(text);
   return isField && inBlock(tree, before) ? FIELD_INDENT + text : text;
 }

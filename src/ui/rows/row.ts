@@ -7,7 +7,7 @@
 import type { SpreadBar } from '../../figure/index.ts';
 import type { Column } from '../desk/index.ts';
 
-export type RowType =
+type RowType =
   | 'title'
   | 'title-field'
   | 'section'
@@ -73,7 +73,7 @@ export interface RowFault {
   readonly column: number | null;
 }
 
-export interface RowFold {
+interface RowFold {
   readonly key: string;
   readonly open: boolean;
 }

@@ -26,7 +26,7 @@ export function nameSuggestions(sheet: Sheet, except: string | null): Suggestion
 }
 
 /** The values of a block, under their whole path. */
-export function valueSuggestions(cell: CellReading): Suggestion[] {
+function valueSuggestions(cell: CellReading): Suggestion[] {
   return cell.values.map((value) => ({
     text: `${cell.name}.${value.name}`,
     label: `${cell.name}.${value.name}`,

@@ -11,7 +11,7 @@ export function tailText(source: Source | null, note: Note | null): string {
 }
 
 /** Source and note as written in that text; null for one that is not there. */
-export function readTailText(text: string): { source: string | null; note: string | null } {
+function readTailText(text: string): { source: string | null; note: string | null } {
   const bracketed = /^\s*\[([^\]]*)\]\s*/.exec(text);
   const rest = bracketed ? text.slice(bracketed[0].length) : text;
   const at = rest.indexOf(';');

@@ -25,7 +25,7 @@ const STEPPED_DIGIT = 3;
 const NOISE = 1e-6;
 
 /** A number in a line that can be turned. */
-export interface Turned {
+interface Turned {
   readonly line: Line;
   readonly literal: Literal;
 }
