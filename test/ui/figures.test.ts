@@ -5,7 +5,7 @@ import { describe, expect, it } from 'vitest';
 import type { Drawing, Item } from '../../src/figure/index.ts';
 import { drawChart, drawSchematic, planesOf, schematicOf, svgText } from '../../src/figure/index.ts';
 import { createSheet } from '../../src/sheet/index.ts';
-import { plotTitle } from '../../src/ui/figures/plot-title.ts';
+import { isFollowed, plotTitle } from '../../src/ui/figures/plot-title.ts';
 import { stageValues } from '../../src/ui/figures/stage-values.ts';
 import { lineAttributes, placedRuns, textAttributes } from '../../src/ui/figures/svg-attributes.ts';
 import { groupKey, linkedGroups, stepTo } from '../../src/ui/figures/symbol-focus.ts';
@@ -95,6 +95,14 @@ describe('the values beside a schematic', () => {
     const broken = createSheet('Q1 = n-JFET\n  beta: 1 mA/V^2\n  V_TO: -2 V\nA1 = stage of Q1\n  gate: X to 0 V\n');
     expect(stageValues(broken.cell('A1')!)).toEqual({ atRest: [], inMotion: [] });
   });
+});
+
+it('a plot is followed where it is a plane of the stage in hand', () => {
+  const followed = (stage: string): boolean[] => ['F1', 'F2', 'F3'].map((name) => isFollowed(sheet.cell(name), stage));
+  expect([followed('A1'), followed('A2')]).toEqual([
+    [true, true, false],
+    [false, false, false],
+  ]);
 });
 
 describe('the title of a plot', () => {

@@ -7,7 +7,7 @@ import { createRested } from '../pace/index.ts';
 import type { Pace } from '../pace/index.ts';
 import { Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
-import { plotTitle } from './plot-title.ts';
+import { isFollowed, plotTitle } from './plot-title.ts';
 
 /** A sweep computes the sheet many times over: it follows typing and turning a few times a second. */
 const PACE: Pace = { rest: 80, most: 400 };
@@ -15,7 +15,12 @@ const PACE: Pace = { rest: 80, most: 400 };
 /** One plot cell; while it is folded nothing of it is computed. */
 export function PlotFigure(props: { readonly desk: Desk; readonly name: string }) {
   const { document } = props.desk;
-  const [open, setOpen] = createSignal(true);
+  const [chosen, setChosen] = createSignal<boolean | null>(null);
+  // What stands above already is folded until it is asked for.
+  const open = createMemo(() => chosen() ?? !isFollowed(document.cell(props.name), props.desk.stage()));
+  const onToggle = (isOpen: boolean): void => {
+    if (isOpen !== open()) setChosen(isOpen);
+  };
   const version = createRested(document.version, PACE);
   const plot = createMemo(() => {
     version();
@@ -31,7 +36,7 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
   };
 
   return (
-    <details class="plot-figure" open onToggle={(event) => setOpen(event.currentTarget.open)}>
+    <details class="plot-figure" open={open()} onToggle={(event) => onToggle(event.currentTarget.open)}>
       <summary>
         <strong>{props.name}</strong>{' '}
         <span class="plot-title">

@@ -1,4 +1,4 @@
-// What a plot cell shows, in a few words.
+// What a plot cell shows, in a few words, and whether it shows anything new.
 
 import type { CellReading } from '../../sheet/index.ts';
 
@@ -13,4 +13,10 @@ export function plotTitle(cell: CellReading | null): string {
     return entry.against ? `${values} against ${text(entry.against.span)}` : `spread of ${values}`;
   }
   return `${entry.figure} of ${entry.of?.name ?? ''}`;
+}
+
+/** Whether a plot cell is a plane of the stage that the figures speak of. */
+export function isFollowed(cell: CellReading | null, stage: string | null): boolean {
+  const entry = cell?.tree.entry;
+  return entry?.type === 'plot' && ['transfer', 'output'].includes(entry.figure) && entry.of?.name === stage;
 }
