@@ -3,7 +3,7 @@
 import type { CellReading, Sheet } from '../sheet/index.ts';
 
 /** A limit in SI on what is written as `text` (without blanks), and the side of it that is not allowed. */
-export interface Requirement {
+interface Requirement {
   readonly text: string;
   readonly value: number;
   readonly forbids: 'below' | 'above';

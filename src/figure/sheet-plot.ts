@@ -12,7 +12,7 @@ import { comparableText, requirementsOf } from './requirements.ts';
 const PLOT_POINTS = 161;
 
 /** The charts of a plot cell, or the sentence that says why there are none. */
-export type SheetPlot = { readonly charts: readonly Chart[] } | { readonly message: string };
+type SheetPlot = { readonly charts: readonly Chart[] } | { readonly message: string };
 
 /** What a plot cell shows. */
 export function sheetPlot(sheet: Sheet, name: string): SheetPlot {

@@ -2,6 +2,7 @@
 
 import { betaAt, channelCurrent, threshold as thresholdWithBulk, thresholdAt } from '../fet/index.ts';
 import type { DeviceHandles, StageNet } from '../network/index.ts';
+import { solveBracketed } from '../numeric/index.ts';
 import { CAPACITANCE, CURRENT, INDUCTANCE, RESISTANCE } from '../quantity/index.ts';
 import type { Read } from './draft.ts';
 import type { StageReading } from './model.ts';
@@ -21,6 +22,11 @@ export function readStage(stage: StageInHand & { readonly net: StageNet; readonl
   const [vgs, vds, id] = [value('V_GS'), value('V_DS'), value('I_D')];
   const { beta, threshold } = lawAt(part.device, value('T_J'), part.channel * value('V_SB'), read);
   const lambda = read(part.device.lambda);
+  const channel = withLeads(
+    (gate, drain) => channelCurrent(beta, lambda, gate - threshold, drain),
+    part.device.r_s === null ? 0 : read(part.device.r_s),
+    part.device.r_d === null ? 0 : read(part.device.r_d),
+  );
   return {
     name: tree.name.name,
     channel: part.channel,
@@ -63,8 +69,21 @@ export function readStage(stage: StageInHand & { readonly net: StageNet; readonl
           }
         : null,
     threshold: solved ? part.channel * threshold : null,
-    law: (gate, drain) => channelCurrent(beta, lambda, part.channel * gate - threshold, part.channel * drain),
+    law: (gate, drain) => channel(part.channel * gate, part.channel * drain),
     output: net.output ? [net.output.plus, ...(net.output.minus ? [net.output.minus] : [])] : [],
+  };
+}
+
+type ChannelLaw = (vgs: number, vds: number) => number;
+
+/** The law of a channel between its terminals, behind resistances (ohm) in the source and the drain lead; n-channel frame. */
+function withLeads(law: ChannelLaw, source: number, drain: number): ChannelLaw {
+  if (source === 0 && drain === 0) return law;
+  return (vgs, vds) => {
+    // The leads only take current away: it lies between nothing and what would flow without them.
+    const most = law(vgs, vds);
+    const left = (current: number): number => law(vgs - source * current, vds - (source + drain) * current) - current;
+    return most === 0 ? 0 : solveBracketed(left, Math.min(0, most), Math.max(0, most)).value;
   };
 }
 

@@ -20,6 +20,11 @@ A1 = stage of Q1
   source: R_S to 0 V
 `;
 
+const MIRRORED = FOLLOWER.replace('15 V', '-15 V')
+  .replace('n-JFET', 'p-JFET')
+  .replace('beta: 1 mA/V^2', 'I_DSS: 4 mA')
+  .replace('V_TO: -2 V', 'V_P: 2 V');
+
 function heightsAt({ x, y }: Curve, at: number): number[] {
   const found: number[] = [];
   for (let i = 1; i < x.length; i++) {
@@ -72,6 +77,17 @@ describe('the planes of a stage of a sheet', () => {
       expect(Math.abs(begins - (V_GG + shift))).toBeLessThan(1e-9);
     }
   });
+
+  it.each(['  r_s: 50 ohm\n', '  r_s: 20 ohm\n  r_d: 40 ohm\n', '  r_d: 1 kohm\n'])(
+    'have Q on the curve of a device with resistance in its leads: %s',
+    (leads) => {
+      for (const text of [FOLLOWER, MIRRORED]) {
+        const leaded = createSheet(text.replace('A1 = stage', `${leads}A1 = stage`));
+        const { q, law } = leaded.stage('A1')!;
+        expect(law(q!.vgs, q!.vds) / q!.id).toBeCloseTo(1, 12);
+      }
+    },
+  );
 
   it('name the resistor that alone makes a slope', () => {
     const follower = createSheet(FOLLOWER);
@@ -206,8 +222,7 @@ describe('the resistor that Q turns', () => {
   });
 
   it('is the same on a mirrored stage', () => {
-    const mirrored = FOLLOWER.replace('15 V', '-15 V').replace('n-JFET', 'p-JFET').replace('V_TO: -2 V', 'V_P: 2 V');
-    const leg = legOf(mirrored.replace('beta: 1 mA/V^2', 'I_DSS: 4 mA'));
+    const leg = legOf(MIRRORED);
     if ('reason' in leg) throw new Error(leg.reason);
     const straight = legOf(FOLLOWER);
     if ('reason' in straight) throw new Error(straight.reason);

@@ -12,7 +12,7 @@ import type { Palette } from './canvas-painter.ts';
 
 type UPlot = typeof uPlot;
 
-export interface ChartPicture {
+interface ChartPicture {
   readonly chart: Chart;
   readonly size: Size;
   readonly palette: Palette;

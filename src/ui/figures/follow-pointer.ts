@@ -1,6 +1,6 @@
 // A pointer that drags something sideways, once a frame, until it is let go; Escape puts it back.
 
-export interface Follower {
+interface Follower {
   /** Pixels from where the drag began. */
   move(pixels: number): void;
   end(keep: boolean): void;

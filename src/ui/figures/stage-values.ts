@@ -3,7 +3,7 @@
 import { shownReading } from '../../record/index.ts';
 import type { CellReading } from '../../sheet/index.ts';
 
-export interface StageValues {
+interface StageValues {
   /** Voltages and the operating point. */
   readonly atRest: readonly StageValue[];
   /** Gain, resistances, swing, power. */

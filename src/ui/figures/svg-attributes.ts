@@ -3,10 +3,10 @@
 import { ROLE_STYLES } from '../../figure/index.ts';
 import type { ArcsItem, Box, CircleItem, LineItem, RectItem, Role, Run, TextItem, Token } from '../../figure/index.ts';
 
-export type Attributes = Readonly<Record<string, string | number | undefined>>;
+type Attributes = Readonly<Record<string, string | number | undefined>>;
 
 /** A run of a text with its own size and its distance from the base line of the run before. */
-export interface PlacedRun {
+interface PlacedRun {
   readonly text: string;
   readonly attributes: Attributes;
 }

@@ -7,7 +7,7 @@ import { pathRuns } from './name-runs.ts';
 import './typeset.css';
 
 /** Runs of text in their styles. */
-export function Runs(props: { readonly runs: readonly Run[] }) {
+function Runs(props: { readonly runs: readonly Run[] }) {
   return (
     <For each={props.runs}>
       {(run) => (

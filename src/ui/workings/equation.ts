@@ -8,7 +8,7 @@ export interface Side {
   readonly text: string;
 }
 
-export interface Equation {
+interface Equation {
   /** null for a comparison without a name. */
   readonly left: Side | null;
   /** Formula, numbers in place, result; none of them twice. */

@@ -3,7 +3,7 @@
 import { lineColumn } from '../../language/index.ts';
 import type { CellReading, Sheet } from '../../sheet/index.ts';
 
-export interface FaultWords {
+interface FaultWords {
   /** `line 12, column 8`. */
   readonly place: string;
   readonly text: string;

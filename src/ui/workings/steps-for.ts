@@ -2,7 +2,7 @@
 
 import type { Sheet, WorkingStep } from '../../sheet/index.ts';
 
-export interface Steps {
+interface Steps {
   /** Those to be read first. */
   readonly first: readonly WorkingStep[];
   /** All of them, where `first` is a part; empty otherwise. */
