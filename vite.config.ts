@@ -48,6 +48,8 @@ export default defineConfig({
           include: ['test/**/*.test.ts', 'test/**/*.test.tsx'],
           exclude: ['test/browser/**'],
           setupFiles: ['test/support/quiet-console.ts'],
+          // A stuck test ends; a slow machine is no fault.
+          testTimeout: 120_000,
         },
       },
       {
@@ -56,7 +58,7 @@ export default defineConfig({
           name: 'browser',
           include: ['test/browser/**/*.test.ts'],
           globalSetup: ['test/support/browser-setup.ts'],
-          testTimeout: 30_000,
+          testTimeout: 90_000,
         },
       },
     ],
