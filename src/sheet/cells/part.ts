@@ -1,6 +1,7 @@
 // A part: its data-sheet rows checked, turned into the constants of the square law by the first complete
 // route, and shown in every convention of the trade.
 
+import { wantedSign } from '../../fet/index.ts';
 import { sameKind } from '../../quantity/index.ts';
 import { nearestNames } from '../../language/index.ts';
 import type { FieldTree, Line, PartEntry } from '../../language/index.ts';
@@ -15,7 +16,7 @@ import { partLaw } from '../part-law.ts';
 import { partWorkings } from '../part-workings.ts';
 import { stop } from '../stop.ts';
 import { typeName } from '../value-type.ts';
-import { compileQuantityEntry, standInText } from './quantity.ts';
+import { compileQuantityEntry, fromZeroText, heldAtZero, standInText } from './quantity.ts';
 import { labelOf } from './stage-places.ts';
 import { signFault } from '../part-signs.ts';
 
@@ -49,6 +50,9 @@ export function compilePartCell(context: CellContext): Draft {
     cautions: (read) => law.cautions(read),
     assumptions: [
       ...fields.filter((field) => field.quantity.chosen).map((field) => chosenText(tree.name.name, field)),
+      ...fields
+        .filter((field) => field.quantity.fromZero)
+        .map((field) => fromZeroText(`${tree.name.name}.${field.name}`)),
       ...law.assumptions,
       ...assumptions,
     ].map((text) => text),
@@ -79,7 +83,9 @@ function readFields(entry: PartEntry, context: CellContext): GivenFields {
     if (present.length > 0 && !known.repeats) {
       stop('field-twice', `${name} stands twice in this part. Keep one of the two lines.`, field.labelSpan, line);
     }
-    const quantity = compileQuantityEntry(body, line, context);
+    const written = compileQuantityEntry(body, line, context);
+    const isAmount = wantedSign(name, entry.family, entry.channel === 'n' ? 1 : -1) === 'not negative';
+    const quantity = isAmount ? heldAtZero(written, body) : written;
     if (typeof quantity.type === 'string' || !sameKind(quantity.type, known.kind)) {
       stop(
         'field-dimension',
@@ -160,11 +166,12 @@ function offerOf(field: GivenField, all: readonly GivenField[], index: number): 
 }
 
 function fieldReading(field: GivenField, read: Read): FieldDraft {
+  const { body } = field.tree;
   return {
     name: field.name,
     type: field.kind,
     value: read(field.handle),
-    as: null,
+    as: body.type === 'quantity' ? (body.as?.unit ?? null) : null,
     line: field.tree.line,
     spread: field.quantity.spread?.(read) ?? null,
     isInput: field.quantity.isInput,

@@ -70,7 +70,7 @@ export function compilePointCell(context: CellContext): Draft {
         name,
         type: field.type,
         value: read(field.handle),
-        as: null,
+        as: field.tree.body.type === 'quantity' ? (field.tree.body.as?.unit ?? null) : null,
         line: field.tree.line,
         spread: field.spread?.(read) ?? null,
         isInput: field.isInput,

@@ -1,7 +1,13 @@
 // A quantity cell, and the fields of parts and points, which are written alike: one value with or
 // without spread.
 
-import { TEMPERATURE_DIFFERENCE, TEMPERATURE_POINT, sameDimension, sameKind } from '../../quantity/index.ts';
+import {
+  CAPACITANCE,
+  TEMPERATURE_DIFFERENCE,
+  TEMPERATURE_POINT,
+  sameDimension,
+  sameKind,
+} from '../../quantity/index.ts';
 import type { ValueKind } from '../../quantity/index.ts';
 import type { Expr, Line, Literal, QuantityEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
@@ -23,6 +29,8 @@ export interface CompiledQuantity {
   readonly isInput: boolean;
   /** The sheet chose the nominal between the limits: a sentence for the list of assumptions. */
   readonly chosen: boolean;
+  /** Its low end was left open and is 0 by nature. */
+  readonly fromZero: boolean;
 }
 
 /** Compiles value and spread of an entry; stops where limits do not fit the value. */
@@ -32,21 +40,48 @@ export function compileQuantityEntry(entry: QuantityEntry, line: Line, context: 
     const { kind, value } = standIn(entry, line);
     checkUnit(entry, kind);
     const handle = context.builder.constant(value);
-    return { type: kind, handle, spread: declared(entry, handle, kind, line), isInput: true, chosen: true };
+    return {
+      type: kind,
+      handle,
+      spread: declared(entry, handle, kind, line),
+      isInput: true,
+      chosen: true,
+      fromZero: false,
+    };
   }
   const value = scope.compile(entry.value);
   if (isQuantity(value.type)) checkUnit(entry, value.type);
   else if (entry.spread)
     stop('spread-of-word', `A spread belongs to a number; this is ${typeName(value.type)}.`, entry.spread.span);
   const spread = entry.spread && isQuantity(value.type) ? declared(entry, value.handle, value.type, line) : null;
-  return { type: value.type, handle: value.handle, spread, isInput: isNumber(entry.value), chosen: false };
+  return {
+    type: value.type,
+    handle: value.handle,
+    spread,
+    isInput: isNumber(entry.value),
+    chosen: false,
+    fromZero: false,
+  };
+}
+
+/** The same quantity with its open low end at 0, for what is never below it; nothing else is changed. */
+export function heldAtZero(quantity: CompiledQuantity, entry: QuantityEntry): CompiledQuantity {
+  const { spread } = quantity;
+  const bounds = entry.spread?.bounds;
+  if (!spread || !bounds?.last || bounds.first || bounds.last.value < 0) return quantity;
+  return { ...quantity, fromZero: true, spread: (read) => ({ ...spread(read), low: 0 }) };
+}
+
+/** What is said of an open low end that is 0 by nature. */
+export function fromZeroText(name: string): string {
+  return `${name}: no lower limit is given; 0 is taken, below which it cannot lie.`;
 }
 
 /** Compiles a quantity cell. */
 export function compileQuantityCell(context: CellContext): Draft {
   const { tree } = context;
   const entry = tree.entry as QuantityEntry;
-  const compiled = compileQuantityEntry(entry, tree.line, context);
+  const compiled = withNature(compileQuantityEntry(entry, tree.line, context), tree.name.name, entry);
   const as = entry.as?.unit ?? null;
   if (tree.name.name === 'T_A') checkAmbient(compiled.type, entry, tree.line);
   return {
@@ -55,7 +90,10 @@ export function compileQuantityCell(context: CellContext): Draft {
     value: compiled.handle,
     isInput: compiled.isInput,
     spread: compiled.spread,
-    assumptions: compiled.chosen ? [`${tree.name.name}: no nominal is given; ${standInText(entry)} stands in.`] : [],
+    assumptions: [
+      ...(compiled.chosen ? [`${tree.name.name}: no nominal is given; ${standInText(entry)} stands in.`] : []),
+      ...(compiled.fromZero ? [fromZeroText(tree.name.name)] : []),
+    ],
     verify: (read) => {
       const value = read(compiled.handle);
       if (tree.name.name === 'T_A' && !(value > 0)) {
@@ -76,6 +114,13 @@ export function compileQuantityCell(context: CellContext): Draft {
         ? []
         : [expressionStep(tree.name.name, entry.value, tree.line, compiled.type, read(compiled.handle), as, context)],
   };
+}
+
+/** What a cell's name or kind says of its spread: T_A changes in use, a capacitance is never negative. */
+function withNature(quantity: CompiledQuantity, name: string, entry: QuantityEntry): CompiledQuantity {
+  const { type, spread } = quantity;
+  if (name === 'T_A' && spread) return { ...quantity, spread: (read) => ({ ...spread(read), service: true }) };
+  return isQuantity(type) && sameKind(type, CAPACITANCE) ? heldAtZero(quantity, entry) : quantity;
 }
 
 /** What stands in for a nominal that is not given. */
@@ -169,7 +214,10 @@ function declared(entry: QuantityEntry, nominal: Handle, kind: ValueKind, line: 
   };
 }
 
-/** Limits in order of value. With one end open, `5 mA ..` leaves the high end open and `.. 1 nA` the low one; for negative values magnitude counts, as data sheets print them. */
+/**
+ * Limits in order of value. With one end open, `5 mA ..` leaves the high end open and `.. 1 nA` the low one. For negative
+ * values magnitude counts, as data sheets print them, unless the nominal then lies outside.
+ */
 function openEnds(
   first: Literal | null,
   last: Literal | null,
@@ -177,9 +225,10 @@ function openEnds(
 ): { low: number | null; high: number | null } {
   if (first && last) return { low: Math.min(first.value, last.value), high: Math.max(first.value, last.value) };
   const only = (first ?? last)!.value;
-  const isLeast = first !== null; // least by magnitude where negative
-  if (nominal < 0) return isLeast ? { low: null, high: only } : { low: only, high: null };
-  return isLeast ? { low: only, high: null } : { low: null, high: only };
+  const isLeast = first !== null;
+  // Of a negative value -4 V .. means at least 4 V in magnitude; with -2 V before it, no lower than -4 V.
+  const byMagnitude = nominal < 0 && (isLeast ? nominal <= only : nominal >= only);
+  return isLeast !== byMagnitude ? { low: only, high: null } : { low: null, high: only };
 }
 
 function numberOf(expr: Expr): number {
