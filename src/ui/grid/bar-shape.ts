@@ -12,6 +12,8 @@ const POINT = 5;
 const LEAST = 1.5;
 
 interface BarShape {
+  /** The line that the scale is. */
+  readonly scale: string;
   readonly outline: string;
   readonly open: string;
   readonly tick: number;
@@ -27,6 +29,7 @@ export function barShape(bar: SpreadBar, shift = 0): BarShape {
   const half = Math.max((x(bar.to) - x(bar.from)) / 2, LEAST / 2);
   const [left, right] = [middle - half, middle + half];
   return {
+    scale: `M0 ${MIDDLE}H${BAR_WIDTH}`,
     outline: outline(bar, left, right),
     open: openEnds(bar, left, right),
     tick: x(bar.nominal),

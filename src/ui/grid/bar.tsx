@@ -21,7 +21,7 @@ export function Bar(props: {
       height={BAR_HEIGHT}
       aria-hidden="true"
     >
-      <path class="bar-scale" d={`M0 ${BAR_HEIGHT / 2}H${BAR_WIDTH}`} />
+      <path class="bar-scale" d={shape().scale} />
       <path class="bar-fill" d={shape().outline} />
       <path class="bar-open" d={shape().open} />
       <For each={shape().failing}>

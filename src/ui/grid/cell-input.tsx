@@ -33,6 +33,7 @@ export function CellInput(props: { readonly grid: Grid; readonly label: string }
       autocomplete="off"
       autocapitalize="off"
       spellcheck={false}
+      enterkeyhint="done"
       role="combobox"
       aria-label={props.label}
       aria-autocomplete="list"

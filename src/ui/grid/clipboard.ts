@@ -9,6 +9,8 @@ import { removeRows } from './row-commands.ts';
 
 /** Puts the rows of the range on the clipboard; `cut` takes them from the sheet. */
 export function copyRows(grid: Grid, event: ClipboardEvent, cut: boolean): void {
+  // Text that was marked with the pointer is copied as it is.
+  if (!cut && getSelection()?.isCollapsed === false) return;
   const text = rowsText(grid);
   if (!event.clipboardData || text === '') return;
   event.clipboardData.setData('text/plain', text);

@@ -3,26 +3,18 @@
 
 import { batch, createEffect, createMemo, createSelector, createSignal, on, untrack } from 'solid-js';
 import type { Column, Desk } from '../desk/index.ts';
-import { emptyRow, sheetRows } from '../rows/index.ts';
+import { sheetRows } from '../rows/index.ts';
 import type { Row, SheetRows } from '../rows/index.ts';
 import { columnBeside, nearestColumn, typedColumn } from './columns.ts';
 import { createCompleting } from './completing.ts';
 import type { Completing } from './completing.ts';
+import { DRAFT, DRAFT_ROW, shownKeys } from './draft.ts';
+import type { Draft } from './draft.ts';
 import { createEditor } from './editor.ts';
 import type { Editor } from './editor.ts';
 import { createFolds } from './folds.ts';
 import type { Folds } from './folds.ts';
-
-/** The key of the row of a line that is not in the text yet. */
-export const DRAFT = 'draft';
-
-/** A place for a new line, shown behind (or before) the row of `beside`. */
-interface Draft {
-  readonly beside: string;
-  readonly side: 'above' | 'below';
-  /** The line of the text before which it goes. */
-  readonly line: number;
-}
+import { reveal } from './reveal.ts';
 
 interface Dragged {
   readonly key: string;
@@ -39,6 +31,8 @@ export interface Grid {
   keys(): readonly string[];
   row(key: string): Row | null;
   indexOf(key: string): number;
+  /** Rows with the head. */
+  count(): number;
   isSelected(key: string): boolean;
   /** Whether this is the one cell that Tab reaches. */
   isStop(key: string, column: Column): boolean;
@@ -132,7 +126,7 @@ export function createGrid(desk: Desk): Grid {
     return document.tree().text === document.text() ? null : place.line;
   }
 
-  const row = (key: string): Row | null => (key === DRAFT ? (draft() ? draftRow() : null) : model().row(key));
+  const row = (key: string): Row | null => (key === DRAFT ? (draft() ? DRAFT_ROW : null) : model().row(key));
 
   function lineOf(key: string): number | null {
     return key === DRAFT ? (draft()?.line ?? null) : model().lineOf(key);
@@ -235,28 +229,13 @@ export function createGrid(desk: Desk): Grid {
       () => {
         const selection = untrack(() => desk.selection());
         if (!selection) return;
-        unfoldTo(selection.row);
+        reveal(selection.row, document.tree(), model(), folds);
         const found = row(selection.row);
         if (found) listener(found.key, nearestColumn(found, selection.column), true);
       },
       { defer: true },
     ),
   );
-
-  /** Opens what hides a row. */
-  function unfoldTo(key: string): void {
-    if (model().row(key)) return;
-    const cell = /^(?:cell|value|field):([^.#]*)/.exec(key)?.[1];
-    if (cell === undefined) return;
-    const tree = document.tree().cells.find((each) => each.name.name === cell);
-    if (!tree) return;
-    const heading = document
-      .tree()
-      .lines.findLast((line) => line.tree.type === 'heading' && line.index < tree.line.index);
-    const title = heading?.tree.type === 'heading' ? heading.tree.text : '';
-    folds.set([`section:${title}`, `block:cell:${cell}`, ...(key.startsWith('value') ? [`more:${cell}`] : [])], false);
-    if (key.startsWith('field')) folds.set([`wiring:${cell}`], false);
-  }
 
   function take(index?: number): boolean {
     if (index !== undefined) completing.mark(index);
@@ -307,6 +286,7 @@ export function createGrid(desk: Desk): Grid {
     keys,
     row,
     indexOf,
+    count: () => keys().length + 1,
     isSelected,
     isStop(key, column) {
       if (!isStopRow(key)) return false;
@@ -406,26 +386,4 @@ export function createGrid(desk: Desk): Grid {
       listener = heard;
     },
   };
-}
-
-const draftRow = (): Row => DRAFT_ROW;
-
-const DRAFT_ROW: Row = {
-  ...emptyRow(DRAFT, 'ghost'),
-  markText: 'new line',
-  name: { text: '', isName: false, said: 'new line' },
-  editable: ['name', 'entry'],
-};
-
-/** The rows shown: those of the text, the one being written, without the row of a new line's preview. */
-function shownKeys(model: SheetRows, draft: Draft | null, pending: number | null): string[] {
-  const shown: string[] = [];
-  for (const { key } of model.rows) {
-    if (pending !== null && model.lineOf(key) === pending && model.row(key)!.type !== 'ghost') continue;
-    const beside = draft !== null && draft.beside === key;
-    if (beside && draft.side === 'above') shown.push(DRAFT);
-    shown.push(key);
-    if (beside && draft.side === 'below') shown.push(DRAFT);
-  }
-  return shown;
 }

@@ -3,7 +3,7 @@
 import { blockOf, insertLines } from '../../language/index.ts';
 import { insertionLines } from '../rows/index.ts';
 import type { InsertionChoice } from '../rows/index.ts';
-import { DRAFT } from './grid.ts';
+import { DRAFT } from './draft.ts';
 import type { Grid } from './grid.ts';
 
 /** Writes the lines of a choice and goes to what is to be filled in first. */

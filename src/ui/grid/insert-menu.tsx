@@ -52,12 +52,12 @@ export function InsertMenu(props: { readonly grid: Grid; readonly onClose: () =>
       }}
     >
       <For each={INSERTIONS}>
-        {(choice, index) => (
+        {(choice) => (
           <button
             type="button"
             role="menuitem"
             class="insert-item"
-            classList={{ 'insert-first': INSERTIONS[index() - 1]?.group !== choice.group }}
+            classList={{ 'insert-first': choice.first }}
             tabIndex={-1}
             onClick={() => {
               props.onClose();

@@ -3,7 +3,7 @@
 import { blockOf, deleteLines, moveLines } from '../../language/index.ts';
 import type { SheetTree, Splice } from '../../language/index.ts';
 import type { Row } from '../rows/index.ts';
-import { DRAFT } from './grid.ts';
+import { DRAFT } from './draft.ts';
 import type { Grid } from './grid.ts';
 
 interface Lines {

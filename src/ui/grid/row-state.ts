@@ -22,6 +22,8 @@ export interface RowState {
   fault(): RowFault | null;
   /** How far the tick is dragged off its place, as a share of the scale. */
   shift(): number;
+  /** Its number among the rows of the grid, the head being the first. */
+  index(): number;
   /** Id of the element that says it. */
   readonly messageId: string;
 }
@@ -56,6 +58,7 @@ export function createRowState(grid: Grid, key: string): RowState {
       const dragged = grid.dragged();
       return dragged?.key === key && row().bar?.scale === 'shared' ? shiftOf(dragged.to, dragged.from) : 0;
     },
+    index: () => grid.indexOf(key) + 2,
     messageId: `about-${key.replace(/[^\w-]/g, '_')}`,
   };
 }

@@ -36,7 +36,7 @@ export function RowView(props: RowProps) {
           'row-head': row().fold !== null && row().type === 'cell',
         }}
         data-key={rowKey}
-        aria-rowindex={grid.indexOf(rowKey) + 2}
+        aria-rowindex={state.index()}
         aria-selected={isSelected() || grid.isInRange(rowKey)}
       >
         <Show when={has('mark')} fallback={<Gutter state={state} />}>

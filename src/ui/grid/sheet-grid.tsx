@@ -3,6 +3,9 @@
 import { createEffect, createMemo, createSignal, For, on, onMount, Show } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
 import './grid.css';
+import './marks.css';
+import './lists.css';
+import './narrow.css';
 import { gridCommands } from './commands.ts';
 import { createGrid } from './grid.ts';
 import { copyRows, pasteInto } from './clipboard.ts';
@@ -53,7 +56,7 @@ export function SheetGrid(props: { readonly desk: Desk }) {
         role="grid"
         aria-label="Sheet"
         aria-colcount={8}
-        aria-rowcount={grid.keys().length + 1}
+        aria-rowcount={grid.count()}
         aria-multiselectable="true"
         onKeyDown={(event) => {
           if (!navigate(grid, event)) return;
@@ -74,6 +77,10 @@ export function SheetGrid(props: { readonly desk: Desk }) {
           const place = rowAt(event.target);
           const row = place && grid.row(place.key);
           if (place && row?.fold && foldsByClick(row, place.column)) grid.toggle(place.key);
+          else if (place?.column && event instanceof PointerEvent && event.pointerType === 'touch') {
+            // A finger has neither a key nor a double click to begin with.
+            if (row?.type === 'ghost' || row?.editable.includes(place.column)) grid.edit();
+          }
         }}
       >
         <div role="row" class="row row-columns" aria-rowindex={1}>

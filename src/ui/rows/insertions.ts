@@ -14,13 +14,14 @@ type PartKind = 'n-JFET' | 'p-JFET' | 'n-MOSFET' | 'p-MOSFET';
 
 export interface InsertionChoice {
   readonly insertion: Insertion;
+  /** The first of its group in the menu. */
+  readonly first: boolean;
   readonly group: 'quantity' | 'part' | 'stage' | 'point' | 'check' | 'figure';
   readonly title: string;
   readonly words: string;
 }
 
-/** Everything that can be inserted, in the order of the menu. */
-export const INSERTIONS: readonly InsertionChoice[] = [
+const CHOICES = [
   choice('quantity', { type: 'quantity' }, 'quantity', 'a number with its spread, or a formula'),
   choice('part', { type: 'part', kind: 'n-JFET' }, 'n-JFET', 'rows of its data sheet: I_DSS and V_GSoff'),
   choice('part', { type: 'part', kind: 'p-JFET' }, 'p-JFET', 'the same, V_GSoff positive'),
@@ -41,6 +42,12 @@ export const INSERTIONS: readonly InsertionChoice[] = [
   choice('figure', { type: 'figure' }, 'figure', 'curves of a stage with its operating point'),
 ];
 
+/** Everything that can be inserted, in the order of the menu. */
+export const INSERTIONS: readonly InsertionChoice[] = CHOICES.map((each, k) => ({
+  ...each,
+  first: CHOICES[k - 1]?.group !== each.group,
+}));
+
 /** The lines of an insertion. */
 export function insertionLines(insertion: Insertion, sheet: Sheet): string[] {
   switch (insertion.type) {
@@ -59,7 +66,12 @@ export function insertionLines(insertion: Insertion, sheet: Sheet): string[] {
   }
 }
 
-function choice(group: InsertionChoice['group'], insertion: Insertion, title: string, words: string): InsertionChoice {
+function choice(
+  group: InsertionChoice['group'],
+  insertion: Insertion,
+  title: string,
+  words: string,
+): Omit<InsertionChoice, 'first'> {
   return { group, insertion, title, words };
 }
 
