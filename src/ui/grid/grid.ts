@@ -14,6 +14,7 @@ import { createEditor } from './editor.ts';
 import type { Editor } from './editor.ts';
 import { createFolds } from './folds.ts';
 import type { Folds } from './folds.ts';
+import { heldCells } from './held.ts';
 import { reveal } from './reveal.ts';
 
 interface Dragged {
@@ -39,6 +40,8 @@ export interface Grid {
   /** The row that the one cell is in that Tab reaches. */
   stop(): string | null;
   isInRange(key: string): boolean;
+  /** Whether a cell keeps its last values because what is typed cannot be read. */
+  isHeld(cell: string | null): boolean;
   /** Keys of the rows of the range; the selected row alone where there is none. */
   range(): readonly string[];
   selectAll(): void;
@@ -110,6 +113,7 @@ export function createGrid(desk: Desk): Grid {
   });
   const isSelected = createSelector(selectedKey);
   const isStopRow = createSelector(stopKey);
+  const held = createMemo(() => heldCells(document, editor.editing()));
   const rangeSet = createMemo<ReadonlySet<string>>(() => {
     const from = anchor();
     const to = selectedKey();
@@ -295,6 +299,7 @@ export function createGrid(desk: Desk): Grid {
       return found !== null && nearestColumn(found, selection?.row === key ? selection.column : 'name') === column;
     },
     stop: stopKey,
+    isHeld: (cell) => cell !== null && held().has(cell),
     isInRange: (key) => rangeSet().has(key),
     range() {
       const inside = rangeSet();

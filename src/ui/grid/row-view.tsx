@@ -33,6 +33,7 @@ export function RowView(props: RowProps) {
           'row-selected': isSelected(),
           'row-range': grid.isInRange(rowKey),
           'row-editing': state.editing() !== null,
+          'row-held': grid.isHeld(row().cell),
           'row-head': row().fold !== null && row().type === 'cell',
         }}
         data-key={rowKey}

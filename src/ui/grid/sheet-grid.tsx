@@ -52,7 +52,6 @@ export function SheetGrid(props: { readonly desk: Desk }) {
       <div
         ref={(element) => (table = element)}
         class="grid"
-        classList={{ 'grid-held': props.desk.document.held() }}
         role="grid"
         aria-label="Sheet"
         aria-colcount={8}
