@@ -45,6 +45,8 @@ export interface CompiledCell {
   readonly proposedFrom: readonly string[] | null;
   /** Names whose mere presence was asked for. */
   readonly presence: Map<string, boolean>;
+  /** What was compiled rests on values as they stood, not on kinds alone. */
+  readonly restsOnValues: boolean;
   readonly shape: string | null;
 }
 
@@ -54,6 +56,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
   const seen = new Map<string, Interface | null>();
   const presence = new Map<string, boolean>();
   let proposedFrom: readonly string[] | null = null;
+  let restsOnValues = false;
   let later: Placed | null = null;
   const names = (): readonly string[] => (proposedFrom = surroundings.names());
   const look = (name: string): Interface | null => {
@@ -73,7 +76,10 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
       presence.set(name, surroundings.has(name));
       return presence.get(name)!;
     },
-    now: surroundings.now,
+    now(expr, line) {
+      restsOnValues = true;
+      return surroundings.now(expr, line);
+    },
     scope: (line) => createScope(builder, line, { look, names, later: (message) => note(message, line) }),
     later: (what, span, line) => note({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span }, line),
     ambient() {
@@ -129,6 +135,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     seen,
     proposedFrom,
     presence,
+    restsOnValues,
     shape: draft.shape?.() ?? null,
   };
 }

@@ -17,4 +17,5 @@ export type {
   WorkingStep,
 } from './model.ts';
 export { PART_FIELDS } from './part-fields.ts';
+export { KERNELS } from './kernels.ts';
 export { createSheet } from './sheet.ts';

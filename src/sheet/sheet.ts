@@ -101,6 +101,11 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     return proposedFrom !== null && proposedFrom !== allNames;
   }
 
+  /** Whether values that have changed ask for other code, or mend what was wrong with them. */
+  function isReshaped({ draft, shape, fault, restsOnValues }: CompiledCell): boolean {
+    return fault ? restsOnValues : draft.shape !== null && draft.shape() !== shape;
+  }
+
   /** Compiles and runs what the change reaches; gives the keys of the nodes whose readings changed. */
   function evaluate(cycles: ReadonlyMap<number, readonly number[]>): Set<string> {
     pass++;
@@ -120,9 +125,8 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
         node.fault = wasFault?.message.text === outside.message.text ? wasFault : outside;
         node.waitsFor = null;
       } else {
-        const shape = node.compiled?.draft.shape;
         const reached = node.uses.some((u) => nodes[u]!.changedAt === pass);
-        if (!node.compiled || needsCompiling(node, cellTree) || (reached && shape && shape() !== node.compiled.shape)) {
+        if (!node.compiled || needsCompiling(node, cellTree) || (reached && isReshaped(node.compiled))) {
           compile(node, cellTree);
           fresh = true;
         }

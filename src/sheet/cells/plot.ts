@@ -57,13 +57,13 @@ export function compilePlotCell(context: CellContext): Draft {
       entry.over!.span,
     );
   }
-  if (
-    entry.over!.log &&
-    !(context.now(entry.over!.low, tree.line).value * context.now(entry.over!.high, tree.line).value > 0)
-  ) {
-    stop('plot-log-range', 'A logarithmic range does not reach 0: both ends lie above it.', entry.over!.span);
+  const over = entry.over!;
+  if (!over.log) return EMPTY_DRAFT;
+  const reachesZero = (): boolean => [over.low, over.high].some((end) => context.now(end, tree.line).value <= 0);
+  if (reachesZero()) {
+    stop('plot-log-range', 'A logarithmic range does not reach 0: both ends lie above it.', over.span);
   }
-  return EMPTY_DRAFT;
+  return { ...EMPTY_DRAFT, shape: () => String(reachesZero()) };
 }
 
 function range(entry: PlotEntry, context: CellContext) {
