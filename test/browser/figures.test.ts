@@ -44,7 +44,7 @@ test('a symbol leads to its cell by click and by keys', async ({ page, address }
   const pane = await openFigures(page, address);
   const symbols = pane.getByRole('group', { name: 'Schematic of A1' }).getByRole('button');
   await expect(symbols.count()).resolves.toBe(5);
-  await pane.getByRole('button', { name: /^R_D, resistor of 6\.8 kΩ/ }).click();
+  await pane.getByRole('button', { name: /RD 6\.8 kΩ: R_D, resistor of 6\.8 kΩ/ }).click();
   await expectFocus(page, 'cell:R_D');
   // One stop for Tab; arrows walk through the others.
   const stops = await symbols.evaluateAll((all) => all.filter((each) => each.getAttribute('tabindex') === '0').length);
@@ -93,7 +93,7 @@ test('an edit moves the curves; dark and light are drawn anew', async ({ page, a
   await page.keyboard.type('2.2 kohm');
   await page.keyboard.press('Enter');
   await expect.poll(() => pixels(canvas)).not.toBe(before);
-  await pane.getByRole('button', { name: /^R_S2, resistor of 2\.2 kΩ/ }).waitFor();
+  await pane.getByRole('button', { name: /R_S2, resistor of 2\.2 kΩ/ }).waitFor();
 });
 
 test('plots of the sheet stand below in its order and fold', async ({ page, address }) => {

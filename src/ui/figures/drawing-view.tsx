@@ -24,7 +24,7 @@ import {
   rectAttributes,
   textAttributes,
 } from './svg-attributes.ts';
-import { groupKey, linkedGroups, stepTo } from './symbol-focus.ts';
+import { groupKey, linkedGroups, stepTo, symbolLabel } from './symbol-focus.ts';
 
 interface Symbols {
   /** null where symbols lead nowhere. */
@@ -104,9 +104,12 @@ function ArcsView(props: ItemProps<ArcsItem>) {
 
 function TextView(props: ItemProps<TextItem>) {
   return (
-    <text {...textAttributes(props.item, props.failing)}>
-      <Index each={placedRuns(props.item)}>{(run) => <tspan {...run().attributes}>{run().text}</tspan>}</Index>
-    </text>
+    <>
+      <text {...textAttributes(props.item, props.failing)}>
+        <Index each={placedRuns(props.item)}>{(run) => <tspan {...run().attributes}>{run().text}</tspan>}</Index>
+      </text>
+      {/* Keeps the words of a symbol apart for those who read them as text. */}{' '}
+    </>
   );
 }
 
@@ -136,15 +139,13 @@ function GroupView(props: ItemProps<GroupItem>) {
         role="button"
         tabindex={symbols.stop() === groupKey(props.item) ? 0 : -1}
         data-symbol={groupKey(props.item)}
-        aria-label={props.item.sentence}
+        aria-label={symbolLabel(props.item)}
         onClick={follow}
         onKeyDown={onKeyDown}
         onFocus={() => symbols.setStop(groupKey(props.item))}
       >
         <rect class="symbol-target" {...boxAttributes(props.item.box)} />
-        <g aria-hidden="true">
-          <Items items={props.item.items} failing={props.item.fails} />
-        </g>
+        <Items items={props.item.items} failing={props.item.fails} />
       </g>
     </Show>
   );

@@ -1,4 +1,4 @@
-// Which symbol of a schematic the keyboard stands on.
+// Which symbol of a schematic the keyboard stands on, and what it is called.
 
 import type { Drawing, GroupItem } from '../../figure/index.ts';
 
@@ -10,6 +10,13 @@ export function linkedGroups({ items }: Drawing): readonly GroupItem[] {
 /** What tells a symbol from the others of its drawing. */
 export function groupKey({ of, leg, cell }: GroupItem): string {
   return leg === null ? `${of}-${cell}` : `${of}-${leg}`;
+}
+
+/** What stands beside the symbol, as those see it who speak to the page, then what it is. */
+export function symbolLabel({ items, sentence }: GroupItem): string {
+  const texts = items.flatMap((item) => (item.kind === 'text' ? [item.runs.map(({ text }) => text).join('')] : []));
+  const seen = texts.join(' ');
+  return seen === '' || sentence.includes(seen) ? sentence : `${seen}: ${sentence}`;
 }
 
 /** The symbol that an arrow key, Home or End leads to; null for other keys and at the ends. */
