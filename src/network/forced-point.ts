@@ -5,7 +5,7 @@
 // source or inside that of the drain, else 0. f(c + alpha y - V_T, y) rises with y, so a bracket that is doubled until
 // f passes the current holds the one root. A reversed current swaps drain and source: alpha becomes 1 - alpha.
 
-import { betaAt, channelCurrent, threshold, thresholdAt, thresholdSlope } from '../fet/index.ts';
+import { betaAt, channelCurrent, leakageAt, threshold, thresholdAt, thresholdSlope } from '../fet/index.ts';
 import { solveBracketed } from '../numeric/index.ts';
 import { GENERAL_OUTPUTS } from './general-point.ts';
 import type { Kernel } from './kernel.ts';
@@ -22,8 +22,7 @@ const INPUTS = [
   'beta',
   'V_TO',
   'lambda',
-  'I_D',
-  'I_G',
+  'I_D0',
   'V_GS0',
   'alpha',
   'V_DS0',
@@ -34,6 +33,12 @@ const INPUTS = [
   'r_d',
   'gamma',
   'phi',
+  'I_GSS',
+  'doubling',
+  'k_i',
+  'q_gs',
+  'q_ds',
+  'q_sb',
   'beta_exponent',
   'tempco',
   'T_nom',
@@ -45,17 +50,34 @@ const INPUTS = [
 export const FORCED_OUTPUTS = [...GENERAL_OUTPUTS, 'P'] as const;
 
 const given = new Float64Array(INPUTS.length);
-const [CHANNEL, BETA, VTO, LAMBDA, CURRENT, LEAKAGE, VGS, ALPHA, VDS, DELTA, VSB, SIGMA] = [
-  0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10, 11,
-];
-const [RS, RD, GAMMA, PHI, EXPONENT, TEMPCO, TNOM, TA, RTH] = [12, 13, 14, 15, 16, 17, 18, 19, 20];
-
-/** The point in hand: constants at its temperature, and y, the conducting-sense V_DS inside the leads. */
-const at = { beta: 0, vto: 0, y: 0, open: 0, alpha: 0, vsb: 0, sigma: 0, target: 0 };
+const [CHANNEL, BETA, VTO, LAMBDA, CURRENT, VGS, ALPHA, VDS, DELTA, VSB, SIGMA] = [0, 1, 2, 3, 4, 5, 6, 7, 8, 9, 10];
+const [RS, RD, GAMMA, PHI, IGSS, DOUBLING, KI, QGS, QDS, QSB] = [11, 12, 13, 14, 15, 16, 17, 18, 19, 20];
+const [EXPONENT, TEMPCO, TNOM, TA, RTH] = [21, 22, 23, 24, 25];
 
 /**
- * The operating point where I_D (A, device sense) is forced. True-frame voltages stand at P = 0 (V_GS0, V_DS0, V_SB0 in V)
- * and move with the island's voltage by alpha, delta, sigma (each -1, 0 or 1). The last result is P in V.
+ * The point in hand: constants, leakage and forced current at its temperature, the terminal voltages at P = 0, and y, the
+ * conducting-sense V_DS inside the leads.
+ */
+const at = {
+  beta: 0,
+  vto: 0,
+  leakage: 0,
+  current: 0,
+  vgs: 0,
+  vds: 0,
+  vsb: 0,
+  y: 0,
+  open: 0,
+  alpha: 0,
+  back: 0,
+  sigma: 0,
+  target: 0,
+};
+
+/**
+ * The operating point where I_D = I_D0 + k_i I_G (A, device sense) is forced. True-frame voltages stand at P = 0
+ * (V_GS0, V_DS0, V_SB0 in V, and q_gs, q_ds, q_sb in ohm per ampere of I_G, the leakage at T_J) and move with the island's
+ * voltage by alpha, delta, sigma (each -1, 0 or 1). The last result is P in V.
  */
 export const forcedPoint: Kernel = {
   inputs: INPUTS,
@@ -74,8 +96,7 @@ export const forcedPoint: Kernel = {
       return;
     }
     const channel = given[CHANNEL];
-    const I = given[CURRENT];
-    if (I === 0) {
+    if (given[CURRENT] === 0 && (given[KI] === 0 || given[IGSS] === 0)) {
       refuse(s, a, o, LEFT_OPEN, count);
       return;
     }
@@ -90,8 +111,9 @@ export const forcedPoint: Kernel = {
       return;
     }
     const lambda = given[LAMBDA];
+    const I = at.current;
     const reversed = I < 0;
-    const back = at.vsb + at.sigma * at.y;
+    const back = at.back + at.sigma * at.y;
     const vov = at.open + at.alpha * at.y - threshold(at.vto, given[GAMMA], given[PHI], back);
     deriveAt(
       at.beta,
@@ -104,10 +126,10 @@ export const forcedPoint: Kernel = {
       given[RD],
     );
     const vds = outerVds();
-    const potential = (vds - given[VDS]) * given[DELTA];
+    const potential = (vds - at.vds) * given[DELTA];
     s[a[o]] = SOLVED;
     s[a[o + 1]] = I;
-    s[a[o + 2]] = channel * (given[VGS] + given[ALPHA] * potential) + 0;
+    s[a[o + 2]] = channel * (at.vgs + given[ALPHA] * potential) + 0;
     s[a[o + 3]] = channel * vds + 0;
     s[a[o + 4]] = vov;
     s[a[o + 5]] = vov;
@@ -115,9 +137,9 @@ export const forcedPoint: Kernel = {
     s[a[o + 7]] = at.y < vov ? 1 : 2;
     s[a[o + 8]] = slopes[0];
     s[a[o + 9]] = slopes[1];
-    s[a[o + 10]] = channel * (given[VSB] + given[SIGMA] * potential) + 0;
+    s[a[o + 10]] = channel * (at.vsb + given[SIGMA] * potential) + 0;
     s[a[o + 11]] = slopes[2];
-    s[a[o + 12]] = given[LEAKAGE];
+    s[a[o + 12]] = at.leakage;
     s[a[o + 13]] = T;
     s[a[o + 14]] = at.beta;
     s[a[o + 15]] = at.vto;
@@ -127,26 +149,32 @@ export const forcedPoint: Kernel = {
 };
 
 function powerAt(T: number): number {
-  return solveAt(T) ? outerVds() * given[CURRENT] : NaN;
+  return solveAt(T) ? outerVds() * at.current : NaN;
 }
 
 function outerVds(): number {
-  return (given[CURRENT] < 0 ? -at.y : at.y) + (given[RS] + given[RD]) * given[CURRENT];
+  return (at.current < 0 ? -at.y : at.y) + (given[RS] + given[RD]) * at.current;
 }
 
 /** Finds `at.y` at junction temperature T; false, with y NaN, where no voltage up to the ceiling carries the current. */
 function solveAt(T: number): boolean {
-  const I = given[CURRENT];
+  const leakage = given[IGSS] === 0 ? 0 : leakageAt(given[IGSS], given[DOUBLING], T, given[TNOM]);
+  const I = given[CURRENT] + given[KI] * leakage;
+  at.leakage = leakage;
+  at.current = I;
+  at.vgs = given[VGS] + given[QGS] * leakage;
+  at.vds = given[VDS] + given[QDS] * leakage;
+  at.vsb = given[VSB] + given[QSB] * leakage;
   const delta = given[DELTA];
   // Voltages inside the leads at V_DS = 0 inside them, and how they move as it rises.
-  const b = given[VDS] - (given[RS] + given[RD]) * I;
+  const b = at.vds - (given[RS] + given[RD]) * I;
   const alpha = given[ALPHA] * delta;
   const sigma = given[SIGMA] * delta;
   const reversed = I < 0;
   at.beta = T === given[TNOM] ? given[BETA] : betaAt(given[BETA], given[EXPONENT], T, given[TNOM]);
   at.vto = thresholdAt(given[VTO], given[TEMPCO], T, given[TNOM]);
-  at.open = given[VGS] - given[RS] * I - alpha * b;
-  at.vsb = given[VSB] + given[RS] * I - sigma * b;
+  at.open = at.vgs - given[RS] * I - alpha * b;
+  at.back = at.vsb + given[RS] * I - sigma * b;
   at.alpha = reversed ? 1 - alpha : alpha;
   at.sigma = reversed ? -1 - sigma : sigma;
   at.target = Math.abs(I);
@@ -164,6 +192,6 @@ function solveAt(T: number): boolean {
 
 /** What the channel carries beyond the forced current at an inner V_DS of y. */
 function shortfall(y: number): number {
-  const vov = at.open + at.alpha * y - threshold(at.vto, given[GAMMA], given[PHI], at.vsb + at.sigma * y);
+  const vov = at.open + at.alpha * y - threshold(at.vto, given[GAMMA], given[PHI], at.back + at.sigma * y);
   return channelCurrent(at.beta, given[LAMBDA], vov, y) - at.target;
 }

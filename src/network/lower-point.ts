@@ -49,7 +49,7 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
   const trueSense = (x: Term): Term => (fet.channel === 1 ? x : negate(x));
 
   const ambientLeakage =
-    device.I_GSS === null || path === 'general'
+    device.I_GSS === null || path !== 'line'
       ? null
       : term(e.call('gate-leakage', [device.I_GSS, device.doubling, device.T_nom, ambient], 1)[0]);
   const between = (x: number, y: number, volts: readonly Term[]): Term => minus(e, volts[x], volts[y]);
@@ -62,9 +62,15 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
   let out: Map<string, Handle>;
   let lines: BiasLines | null = null;
   if (forcing) {
-    const current = forcedCurrent(e, graph, at, forcing, trueSense(ambientLeakage));
+    const current = forcedCurrent(e, graph, at, forcing, null);
     const held = (x: number, y: number): Term => plus(e, idle(x, y), times(e, current, between(x, y, rest.perChannel)));
     const island = componentsOf(graph).find(({ classes }) => classes.has(datum))!.classes;
+    // Leakage that has no other way out of the island takes its share of the forced current.
+    const takes = leaks && (forcing === 'drain') !== island.has(at.gate);
+    const leaked = (x: number, y: number): Handle => {
+      const own = between(x, y, rest.perLeakage);
+      return emit(e, takes ? minus(e, own, between(x, y, rest.perChannel)) : own);
+    };
     const moves = (x: number, y: number): Handle => e.constant((island.has(x) ? 1 : 0) - (island.has(y) ? 1 : 0));
     const results = e.call(
       'forced-point',
@@ -74,7 +80,6 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
         device.V_TO,
         device.lambda,
         emit(e, trueSense(current)),
-        emit(e, ambientLeakage),
         emit(e, held(at.gate, at.source)),
         moves(at.gate, at.source),
         emit(e, held(at.drain, at.source)),
@@ -84,6 +89,12 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
         ...leads,
         device.gamma ?? zero,
         device.phi,
+        device.I_GSS ?? zero,
+        device.doubling,
+        e.constant(takes ? -1 : 0),
+        leaked(at.gate, at.source),
+        leaked(at.drain, at.source),
+        leaked(at.source, at.bulk),
         ...thermal,
       ],
       FORCED_OUTPUTS.length,

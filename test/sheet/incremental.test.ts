@@ -107,26 +107,14 @@ describe('the compiled sheet', () => {
 
 describe('ten thousand cells, each on the one before', () => {
   const DEPTH = 10_000;
-  const chain = (first: string, middle = 'x_5000 = x_4999 + 1 mV'): string =>
-    [
-      `x_0 = ${first}`,
-      ...Array.from({ length: DEPTH }, (_, k) => (k + 1 === 5000 ? middle : `x_${k + 1} = x_${k} + 1 mV`)),
-      '',
-    ].join('\n');
+  const chain = (first: string): string =>
+    [`x_0 = ${first}`, ...Array.from({ length: DEPTH }, (_, k) => `x_${k + 1} = x_${k} + 1 mV`), ''].join('\n');
 
-  it('are made, edited at either end, broken and mended without running out of stack', () => {
+  it('are made, edited, closed to a circle and opened again without running out of stack', () => {
     const sheet = createSheet(chain('1 V'));
     const last = (): number | string | boolean | null => sheet.value(`x_${DEPTH}`);
     expect(last()).toBeCloseTo(1 + DEPTH * 1e-3, 9);
     expect(sheet.update(chain('2 V')).size).toBe(DEPTH + 1);
-    expect(last()).toBeCloseTo(2 + DEPTH * 1e-3, 9);
-    expect(sheet.update(chain('2 V', 'x_5000 = x_4999 + 1 mA')).size).toBe(DEPTH - 5000 + 1);
-    expect([sheet.error('x_4999'), sheet.error('x_5000')?.code, sheet.error('x_10000')?.code]).toEqual([
-      null,
-      'sum-dimension',
-      'waits-for',
-    ]);
-    expect(sheet.update(chain('2 V')).size).toBe(DEPTH - 5000 + 1);
     expect(last()).toBeCloseTo(2 + DEPTH * 1e-3, 9);
     // The whole of it as one circle.
     sheet.update(chain(`x_${DEPTH} - 1 V`));

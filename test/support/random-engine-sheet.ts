@@ -196,7 +196,7 @@ export function randomEngineSheet(draw: Draw, quantities = 14): RandomEngineShee
           [`V_GSth: ${volts(opens)} at I_D = 100 uA`, `K: ${scale(1, 50, 'mA/V^2')}`],
           [`I_DSS: ${scale(1, 20, 'mA')}`, `V_P: ${volts(-pinch)}`],
         ]);
-    let extras = [
+    const extras = [
       `lambda: ${pick(['0.01 /V', '0.02/V', '0 /V', '0.05 /V'])}`,
       `g_os: ${scale(2, 40, 'uS')} at I_D = 2 mA, V_DS = ${volts(10)}`,
       `I_GSS: ${scale(0.1, 5, 'nA')}`,
@@ -210,8 +210,6 @@ export function randomEngineSheet(draw: Draw, quantities = 14): RandomEngineShee
       'C_GD: 2 pF',
       ...(isJfet ? [] : ['gamma: 0.5 V^0.5', 'phi: 0.7 V']),
     ].filter((line) => chance(0.25) && !(line.startsWith('g_os') && chance(0.5)));
-    if (isJfet && extras.some((line) => line.startsWith('R_thJA')))
-      extras = extras.filter((line) => !line.startsWith('I_GSS'));
     const seen = new Set<string>();
     const body = [...law, ...extras].filter((line) => {
       const field = line.split(':')[0];
