@@ -7,10 +7,11 @@ import { parseSheet, pathsOf } from '../../src/language/index.ts';
 import type { CellTree, Expr, FieldTree, PathExpr, QuantityEntry, StageEntry } from '../../src/language/index.ts';
 import { evaluate } from './naive-expression.ts';
 import type { Resolve } from './naive-expression.ts';
+import type { NaiveLeg } from './naive-network.ts';
 import { naivePart } from './naive-part.ts';
 import type { NaivePart } from './naive-part.ts';
 import { pointResults, stageResults } from './naive-stage.ts';
-import type { NaiveLeg, NaiveResults } from './naive-stage.ts';
+import type { NaiveResults } from './naive-stage.ts';
 import { Broken, KINDS, Waits, isKind, sameKinds, sure } from './naive-value.ts';
 import type { NaiveKind, NaiveType, NaiveValue } from './naive-value.ts';
 

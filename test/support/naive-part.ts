@@ -80,7 +80,9 @@ export function naivePart(
     const at = new Map(body.conditions.map((condition) => [condition.name.name, condition.literal.value]));
     given.set(name, { value: value.value, at });
     offers.set(name, value);
-    if (value.value !== null && !hasSign(rule, channel, value.value)) wrongSign = true;
+    const ends = [body.spread?.bounds?.first, body.spread?.bounds?.last].flatMap((end) => (end ? [end.value] : []));
+    const numbers = value.value === null ? [] : [value.value, ...ends];
+    if (numbers.some((number) => !hasSign(rule, channel, number))) wrongSign = true;
   }
   const route = firstRoute(family, given);
   if (!route) throw new Broken('no complete route');
