@@ -14,6 +14,9 @@ const FURTHER_UNITS: Readonly<Record<string, string>> = {
   VGS_at_200uA: 'V',
 };
 
+/** Leakage, capacitances and an output conductance: where no least value is printed it is 0. */
+const NEVER_NEGATIVE = /^(IGSS|C|gos)/;
+
 /** What does not agree, in sentences: a fault, an end that was not kept, a nominal that is not the geometric mean. */
 export function comparePart(
   { data }: PublishedPart,
@@ -60,7 +63,8 @@ function ends(
   const [small, large, middle] = [signed(min), signed(max), signed(typ)];
   const sign = (small ?? large ?? middle)! < 0 ? -1 : 1;
   const nominal = middle ?? (small !== null && large !== null ? sign * Math.sqrt(small * large) : (small ?? large)!);
-  return sign < 0 ? { low: large, nominal, high: small } : { low: small, nominal, high: large };
+  const least = small === null && NEVER_NEGATIVE.test(row) ? 0 : small;
+  return sign < 0 ? { low: large, nominal, high: small } : { low: least, nominal, high: large };
 }
 
 function same(found: number | null, wanted: number | null): boolean {
