@@ -20,7 +20,7 @@ export function createProgram({ inputs, left, right, scale }: CellGraph): { prog
             builder.mul(slotOf[left[cell]], builder.constant(scale[cell])),
             builder.mul(slotOf[right[cell]], builder.constant(0.25)),
           );
-    const { segment, slot } = builder.finish(base, value);
+    const { segment, slot } = builder.finish(base, value, []);
     segments.push(segment);
     feeds.push([]);
     slotOf[index] = slot(value);
