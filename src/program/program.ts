@@ -30,6 +30,8 @@ export interface Program {
   readonly dependents: Int32Array;
   /** One bit per segment: it calls no kernel and reads the segment before it. */
   readonly follows: Int32Array;
+  /** One bit per segment: others read more than one value of it. */
+  readonly several: Int32Array;
 }
 
 /** Joins segments, given in topological order; `feeds[k]` lists the later segments that read segment k. */
@@ -60,8 +62,9 @@ export function assemble(segments: readonly Segment[], feeds: readonly (readonly
     dependentStart,
     dependents: new Int32Array(dependentStart[n]),
     follows: new Int32Array((n + 31) >> 5),
+    several: new Int32Array((n + 31) >> 5),
   };
-  const { ops, follows } = program;
+  const { ops, follows, several } = program;
   for (let k = 0; k < n; k++) {
     const segment = segments[k];
     ops.set(segment.ops, opStart[k]);
@@ -71,6 +74,7 @@ export function assemble(segments: readonly Segment[], feeds: readonly (readonly
       ops[i + 2] += argStart[k];
       callsKernel = true;
     }
+    if (segment.visible > 1) several[k >> 5] |= 1 << (k & 31);
     if (k > 0 && !callsKernel && feeds[k - 1].includes(k)) follows[k >> 5] |= 1 << (k & 31);
     program.args.set(segment.args, argStart[k]);
     program.constantSlots.set(segment.constantSlots, constantStart[k]);
@@ -131,7 +135,7 @@ export function markDependents({ dependentStart, dependents }: Program, { dirty 
 
 /** Runs every marked segment and what it reaches; leaves the marks clear. */
 export function propagate(program: Program, work: Propagation, slots: Float64Array, kernels: KernelTable): void {
-  const { ops, args, opStart, slotStart, visibleEnd, dependentStart, dependents, follows } = program;
+  const { ops, args, opStart, slotStart, visibleEnd, dependentStart, dependents, follows, several } = program;
   const { dirty, before, changed } = work;
   let count = 0;
   for (let word = 0; word < dirty.length; word++) {
@@ -145,12 +149,13 @@ export function propagate(program: Program, work: Propagation, slots: Float64Arr
       const end = (word << 5) + 32 - Math.clz32(run);
       dirty[word] &= ~run;
 
+      // Most segments offer one value. A run of such goes without a look at the others.
+      const single = (several[word] & run) === 0;
+      for (let k = first; k < end; k++) before[k - first] = slots[slotStart[k]];
       let at = FURTHER;
-      for (let k = first; k < end; k++) {
-        let i = slotStart[k];
-        before[k - first] = slots[i];
+      for (let k = first; k < end && !single; k++) {
         const visible = visibleEnd[k];
-        while (++i < visible) before[at++] = slots[i];
+        for (let i = slotStart[k] + 1; i < visible; i++) before[at++] = slots[i];
       }
       runOperations(ops, opStart[first], opStart[end], args, 0, slots, kernels);
       at = FURTHER;
@@ -161,10 +166,12 @@ export function propagate(program: Program, work: Propagation, slots: Float64Arr
           const i = slotStart[k];
           const now = slots[i];
           const then = before[k - first];
-          const further = visibleEnd[k] - i - 1;
-          const same =
-            ((now === then && now !== 0) || Object.is(now, then)) && sameValues(slots, i + 1, before, at, further);
-          at += further;
+          let same = (now === then && now !== 0) || Object.is(now, then);
+          if (!single) {
+            const further = visibleEnd[k] - i - 1;
+            same = same && sameValues(slots, i + 1, before, at, further);
+            at += further;
+          }
           if (same) break;
           changed[count++] = k;
         }

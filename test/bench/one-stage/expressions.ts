@@ -1,11 +1,29 @@
-// The one-stage bench as expressions of a general mathematics library, compiled once and evaluated on plain numbers;
-// the operating point is solved by the same function as in the hand-written loop.
+// The one-stage bench as a user of a general mathematics library writes it: one assignment per cell, compiled once and
+// evaluated on plain numbers in a scope. The operating point is solved by the same function as in the hand-written loop,
+// imported into the library; each of its three results is a cell, as in the other variants.
 
-import { compile } from 'mathjs';
+import { all, create } from 'mathjs';
 import type { EvalFunction } from 'mathjs';
 import { point, solvePoint } from './hand.ts';
 import { CELLS, FIXED, INPUT_NAMES, POINT_INPUTS, POINT_OUTPUTS, STEPS, SUMMED } from './inputs.ts';
 import type { InputName } from './inputs.ts';
+
+const library = create(all);
+library.import({
+  operatingPoint(beta: number, lambda: number, A: number, r: number, b: number, R: number): number[] {
+    solvePoint(beta, lambda, A, r, b, R);
+    return [point[0], point[1], point[2]];
+  },
+});
+
+const FORMULAS: readonly string[] = STEPS.flatMap((step) =>
+  step === 'operating point'
+    ? [
+        `solution = operatingPoint(${POINT_INPUTS.join(', ')})`,
+        ...POINT_OUTPUTS.map((name, k) => `${name} = solution[${k + 1}]`),
+      ]
+    : [`${step[0]} = ${step[1]}`],
+);
 
 type Columns = Readonly<Record<InputName, Float64Array>>;
 
@@ -28,22 +46,12 @@ export function mapScope(): Scope {
 
 /** As `createHandLoop`, evaluated step by step from the formulas. */
 export function createExpressions(columns: Columns, { given, get, set }: Scope) {
-  const steps = STEPS.map((step): { name: string; formula: EvalFunction } | null =>
-    step === 'operating point' ? null : { name: step[0], formula: compile(step[1]) },
-  );
+  const formulas = FORMULAS.map((formula): EvalFunction => library.compile(formula));
   const summed = SUMMED.map((k) => CELLS[k]);
   const row = new Float64Array(CELLS.length);
   const evaluate = (i: number): void => {
     for (const name of INPUT_NAMES) set(name, columns[name][i]);
-    for (const step of steps) {
-      if (step !== null) {
-        set(step.name, step.formula.evaluate(given) as number);
-        continue;
-      }
-      const [beta, lambda, A, r, b, R] = POINT_INPUTS.map(get);
-      solvePoint(beta, lambda, A, r, b, R);
-      POINT_OUTPUTS.forEach((name, k) => set(name, point[k]));
-    }
+    for (const formula of formulas) formula.evaluate(given);
   };
   const run = (): number => {
     let sum = 0;
