@@ -1,5 +1,5 @@
 // Holds the line solve against a million random extremes and every combination of special values, all judged in
-// 32 digits. Takes about a minute; the code at its end is 1 when one answer was wrong. Another seed may be given.
+// 32 digits. The code at its end is 1 when one answer was wrong. Another seed may be given.
 
 import { judgeRandomLines, judgeSpecialLines } from '../support/line-oracle.ts';
 

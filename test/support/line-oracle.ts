@@ -135,16 +135,34 @@ function saturatedExcess(c: LineCase, x: Twofold): Twofold {
   return subTwofold(mulTwofold(twofold(c.beta), mulTwofold(mulTwofold(x, x), stretch)), mulTwofold(r, drop));
 }
 
-/** The root of F in 32 digits, by bisection around a value known to 1e-12. */
+/**
+ * The root of F in 32 digits, enclosed from 1e-12 to each side of I down to 2^-90 of it: secant and halving in turn,
+ * and after each a look at the point that far on towards the root.
+ */
 function root(c: LineCase, I: number): Twofold {
-  let low: Twofold = twofold(I * (1 - 1e-12));
-  let width = 2e-12 * I;
-  for (let n = 0; n < 50; n++) {
-    width /= 2;
-    const middle = addTwofold(low, twofold(width));
-    if (excess(c, middle)[0] <= 0) low = middle;
+  const close = 2 ** -90 * I;
+  let low = twofold(I * (1 - 1e-12));
+  let high = twofold(I * (1 + 1e-12));
+  let below = excess(c, low)[0];
+  let above = excess(c, high)[0];
+  let secant = false;
+  for (let n = 0; n < 200 && below < 0 && above > 0; n++) {
+    const width = subTwofold(high, low)[0];
+    if (width <= 2 * close) break;
+    secant = !secant;
+    const middle = addTwofold(low, twofold(secant ? width * (-below / (above - below)) : width / 2));
+    const f = excess(c, middle)[0];
+    const beyond = addTwofold(middle, twofold(f < 0 ? close : -close));
+    const g = excess(c, beyond)[0];
+    if (f < 0) {
+      [low, below] = [middle, f];
+      if (g >= 0) [high, above] = [beyond, g];
+    } else {
+      [high, above] = [middle, f];
+      if (g <= 0) [low, below] = [beyond, g];
+    }
   }
-  return low;
+  return above === 0 ? high : low;
 }
 
 function logarithmic(u: number, low: number, high: number): number {
