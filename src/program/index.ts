@@ -6,5 +6,5 @@ export { runOperations } from './evaluate.ts';
 export { PROGRAM_KERNELS } from './kernels.ts';
 export type { OperationName } from './operations.ts';
 export { assemble, createPropagation, createSlots, markDependents, propagate, runAll } from './program.ts';
-export type { Program, Propagation } from './program.ts';
+export type { Program } from './program.ts';
 export type { Kernel, KernelTable, Segment } from './segment.ts';

@@ -97,7 +97,7 @@ export function runAll(program: Program, slots: Float64Array, kernels: KernelTab
 }
 
 /** What `propagate` needs besides the slots, allocated once. */
-export interface Propagation {
+interface Propagation {
   /** One bit per segment. */
   readonly dirty: Int32Array;
   /** The segments whose values changed in the last call, in order: changed[0 .. count). */
