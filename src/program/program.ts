@@ -153,9 +153,10 @@ export function propagate(program: Program, work: Propagation, slots: Float64Arr
       const single = (several[word] & run) === 0;
       for (let k = first; k < end; k++) before[k - first] = slots[slotStart[k]];
       let at = FURTHER;
-      for (let k = first; k < end && !single; k++) {
-        const visible = visibleEnd[k];
-        for (let i = slotStart[k] + 1; i < visible; i++) before[at++] = slots[i];
+      if (!single) {
+        for (let k = first; k < end; k++) {
+          for (let i = slotStart[k] + 1; i < visibleEnd[k]; i++) before[at++] = slots[i];
+        }
       }
       runOperations(ops, opStart[first], opStart[end], args, 0, slots, kernels);
       at = FURTHER;
