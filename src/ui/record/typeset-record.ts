@@ -39,17 +39,22 @@ export function recordElement(tree: RecordTree): HTMLElement {
   return template.content.firstElementChild as HTMLElement;
 }
 
-/** Typesets the formulas of a record at once, and makes those smaller that their line has no room for; false where KaTeX has not come. */
-export function typesetFormulas(record: HTMLElement): boolean {
-  if (loaded === null) return false;
+/** Typesets the formulas of a record at once and finds room for those that are too long; nothing where KaTeX has not come. */
+export function typesetFormulas(record: HTMLElement): void {
+  if (loaded === null) return;
   for (const place of record.querySelectorAll<HTMLElement>('[data-tex]')) {
     // Fractions at full size: numbers in place are to be read.
     const tex = `\\displaystyle ${place.dataset.tex}`;
     loaded.render(tex, place, { throwOnError: false, output: 'html', strict: false });
   }
-  const lines = [...record.querySelectorAll<HTMLElement>('.record-equation, td')];
-  // All are measured before any is changed, so that there is one layout.
+  // First the whole width below the sentence, then smaller.
+  markLong(record, 'record-wide');
+  markLong(record, 'record-long');
+}
+
+/** Marks the lines that reach beyond their room. All are measured before any is changed, so that there is one layout. */
+function markLong(record: HTMLElement, mark: string): void {
+  const lines = [...record.querySelectorAll<HTMLElement>('.record-equation, .record-table-checks td')];
   const long = lines.filter((line) => line.scrollWidth > line.clientWidth + 1);
-  for (const line of long) line.classList.add('record-long');
-  return true;
+  for (const line of long) line.classList.add(mark);
 }
