@@ -12,7 +12,7 @@ export { shownCell, shownOwn, shownReading } from './shown.ts';
 export { texOfExpression } from './tex.ts';
 export { texOfName, texOfPath } from './tex-name.ts';
 export { texOfUnit } from './tex-number.ts';
-export { TITLE_LABELS, paperOf, titleField } from './title-fields.ts';
+export { TITLE_LABELS } from './title-fields.ts';
 export type { TitleField } from './title-fields.ts';
 export { verdictOf } from './verdict.ts';
 export type { Verdict } from './verdict.ts';

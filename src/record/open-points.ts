@@ -42,7 +42,7 @@ export function openPoints(sheet: Sheet): readonly OpenPoint[] {
 }
 
 /** Every line that is an input: the cell itself, or a field of a part or point. */
-export interface InputLine {
+interface InputLine {
   /** `R_D = 6.8 kohm ± 1 %`, `Q1 lambda: 0.004 /V`. */
   readonly text: string;
   readonly line: Line;
@@ -51,7 +51,7 @@ export interface InputLine {
 }
 
 /** The inputs of a cell, in sheet order. */
-export function inputLines(cell: CellReading, sheet: Sheet): readonly InputLine[] {
+function inputLines(cell: CellReading, sheet: Sheet): readonly InputLine[] {
   const { tree } = cell;
   const { lines } = sheet.tree;
   const line = (text: string, at: Line): InputLine => ({ text, line: at, source: originOf(at, lines).source });
@@ -91,11 +91,11 @@ export function labelOf({ label }: Pick<FieldTree, 'label'>): string {
   return label.map(({ name }) => name).join('.');
 }
 
-export function isAssumed({ source }: InputLine): boolean {
+function isAssumed({ source }: InputLine): boolean {
   return source === 'assumed';
 }
 
-export function isUnsourced({ source }: InputLine): boolean {
+function isUnsourced({ source }: InputLine): boolean {
   return source === null;
 }
 

@@ -18,7 +18,7 @@ export type Inline =
 export type Inlines = readonly Inline[];
 
 /** How a column is aligned: `number` cells hold a number and its unit. */
-export type ColumnKind = 'text' | 'number' | 'right';
+type ColumnKind = 'text' | 'number' | 'right';
 
 export interface Cell {
   readonly content: Inlines;
@@ -90,7 +90,7 @@ export interface Section {
   readonly blocks: readonly Block[];
 }
 
-export interface TitleEntry {
+interface TitleEntry {
   /** The field of the title, as the sheet calls it. */
   readonly field: string;
   readonly label: string;

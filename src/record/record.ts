@@ -17,7 +17,7 @@ import type { Verdict } from './verdict.ts';
 import { verdictOf } from './verdict.ts';
 import { workingsBlocks } from './workings-section.ts';
 
-export interface RecordOptions {
+interface RecordOptions {
   /** SHA-256 of the sheet text in UTF-8, in hexadecimal. */
   readonly digest: string;
   /** When it is printed, as it is to be read. */

@@ -3,7 +3,7 @@
 import type { Line, Note, Source } from '../language/index.ts';
 
 /** What a line says of its number's origin. */
-export interface Origin {
+interface Origin {
   /** The document, or `assumed`, `measured`; null where none is given. */
   readonly source: string | null;
   readonly note: string | null;

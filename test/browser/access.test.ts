@@ -12,7 +12,9 @@ const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/
 async function findings(page: Page): Promise<string[]> {
   await page.evaluate(axeSource);
   return page.evaluate(async () => {
-    const { axe } = globalThis as unknown as { axe: { run(): Promise<{ violations: { id: string; nodes: { target: unknown[] }[] }[] }> } };
+    const { axe } = globalThis as unknown as {
+      axe: { run(): Promise<{ violations: { id: string; nodes: { target: unknown[] }[] }[] }> };
+    };
     const { violations } = await axe.run();
     return violations.flatMap(({ id, nodes }) => nodes.map(({ target }) => `${id}: ${target.join(' ')}`));
   });
@@ -42,7 +44,10 @@ for (const colorScheme of ['light', 'dark'] as const) {
   }
 }
 
-test('axe finds nothing in the dialogs, in an edited cell, beside a broken line, in the text', async ({ page, address }) => {
+test('axe finds nothing in the dialogs, in an edited cell, beside a broken line, in the text', async ({
+  page,
+  address,
+}) => {
   await page.goto(address);
   await page.getByRole('grid', { name: 'Sheet' }).waitFor();
   const toolbar = page.getByRole('toolbar', { name: 'Commands' });

@@ -10,7 +10,7 @@ export const COLUMNS = ['mark', 'name', 'entry', 'low', 'nominal', 'high', 'spre
 export type Column = (typeof COLUMNS)[number];
 
 /** The one selected row and the focused cell in it. */
-export interface Selection {
+interface Selection {
   /** Key of the row, as the row model gives it. */
   readonly row: string;
   readonly column: Column;
@@ -21,7 +21,7 @@ export interface Selection {
 }
 
 /** A sentence in the status line, with one thing that can be done about it. */
-export interface Status {
+interface Status {
   readonly text: string;
   readonly action: { readonly title: string; readonly run: () => void } | null;
 }

@@ -3,4 +3,4 @@
 export { commandForKey, keyOf } from './command.ts';
 export type { Command } from './command.ts';
 export { COLUMNS, createDesk } from './desk.ts';
-export type { Column, Desk, Selection, Status } from './desk.ts';
+export type { Column, Desk } from './desk.ts';

@@ -2,7 +2,7 @@
 
 import crevasse from '../../../public/examples/crevasse-listener.txt?raw';
 
-export interface Example {
+interface Example {
   readonly title: string;
   readonly text: string;
 }

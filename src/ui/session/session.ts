@@ -47,7 +47,7 @@ export interface Session {
 }
 
 /** What the session needs of the browser window. */
-export type SessionWindow = Window;
+type SessionWindow = Window;
 
 /** Where the tab remembers its open sheet. */
 const OPEN_KEY = 'squarelaw-open';

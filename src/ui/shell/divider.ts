@@ -6,7 +6,7 @@ export const NARROWEST = 48;
 export const WIDEST = 70;
 const STEP = 2;
 
-export interface Divider {
+interface Divider {
   /** Width of the sheet, per cent. */
   share(): number;
   onKeyDown(event: KeyboardEvent): void;

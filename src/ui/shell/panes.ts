@@ -1,8 +1,8 @@
 // The panes of the page in the order of the keyboard, and the way from one to the next.
 
 /** Ids of the panes, in order. */
-export const PANES = ['commands', 'verdict', 'sheet', 'figures', 'workings'] as const;
-export type Pane = (typeof PANES)[number];
+const PANES = ['commands', 'verdict', 'sheet', 'figures', 'workings'] as const;
+type Pane = (typeof PANES)[number];
 
 /** Focuses the first thing in a pane that takes the keyboard; says whether there was one. */
 export function focusPane(page: Document, pane: Pane): boolean {

@@ -4,7 +4,7 @@ import { inputTally } from '../../record/index.ts';
 import type { Sheet } from '../../sheet/index.ts';
 import { inputWords } from './keep-words.ts';
 
-export interface SheetFacts {
+interface SheetFacts {
   readonly title: string;
   /** `rev B · draft · 13 inputs: 2 assumed`. */
   readonly words: string;

@@ -4,7 +4,7 @@ import type { Command } from '../desk/index.ts';
 
 export type DialogName = 'shelf' | 'share' | 'help' | 'record';
 
-export interface ShellActions {
+interface ShellActions {
   readonly show: (dialog: DialogName) => void;
   readonly find: () => void;
   readonly toggleText: () => void;

@@ -2,11 +2,11 @@
 
 import { createSignal } from 'solid-js';
 
-export type Theme = 'system' | 'light' | 'dark';
+type Theme = 'system' | 'light' | 'dark';
 const KEY = 'squarelaw-theme';
 const NEXT: Readonly<Record<Theme, Theme>> = { system: 'light', light: 'dark', dark: 'system' };
 
-export interface ThemeChoice {
+interface ThemeChoice {
   theme(): Theme;
   /** system, light, dark, system .. */
   turn(): void;
