@@ -68,7 +68,7 @@ function readFields(entry: PartEntry, context: CellContext): GivenFields {
     const { body, line } = field;
     const name = labelOf(field);
     if (body.type !== 'quantity') throw new Error('A field of a part is a quantity.');
-    const known = PART_FIELDS[name];
+    const known = Object.hasOwn(PART_FIELDS, name) ? PART_FIELDS[name] : undefined;
     if (!known) {
       const near = nearestNames(name, Object.keys(PART_FIELDS));
       stop(
@@ -113,7 +113,7 @@ function conditionsOf(field: FieldTree, line: Line): Map<string, number> {
   const found = new Map<string, number>();
   if (body.type !== 'quantity') return found;
   for (const { name, literal } of body.conditions) {
-    const kind = CONDITION_KINDS[name.name];
+    const kind = Object.hasOwn(CONDITION_KINDS, name.name) ? CONDITION_KINDS[name.name] : undefined;
     if (!kind) {
       const near = nearestNames(name.name, Object.keys(CONDITION_KINDS));
       stop(

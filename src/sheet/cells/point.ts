@@ -95,7 +95,7 @@ function readFields(
     const { body, line } = field;
     const name = labelOf(field);
     if (body.type !== 'quantity') throw new Error('A field of a point is a quantity.');
-    const kind = FIELDS[name];
+    const kind = Object.hasOwn(FIELDS, name) ? FIELDS[name] : undefined;
     if (!kind) {
       const near = nearestNames(name, Object.keys(FIELDS));
       stop(
