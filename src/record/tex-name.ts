@@ -28,9 +28,9 @@ const GREEK_AS_LATIN: Readonly<Record<string, string>> = {
 };
 
 /** Quantities whose usual symbol is another than their name read by the rule. */
-const SYMBOLS: Readonly<Record<string, string>> = {
-  swing_up: '\\hat{v}_{\\mathrm{up}}',
-  swing_down: '\\hat{v}_{\\mathrm{down}}',
+const SYMBOLS: Readonly<Record<string, { readonly base: string; readonly subscript: string }>> = {
+  swing_up: { base: '\\hat{v}', subscript: 'up' },
+  swing_down: { base: '\\hat{v}', subscript: 'down' },
 };
 
 /** Subscripts that the trade writes with parentheses. */
@@ -53,7 +53,7 @@ export function texOfPath(names: readonly string[], subject: string | null): str
 
 function symbolOf(name: string, owners: readonly string[]): string {
   const known = SYMBOLS[name];
-  if (known !== undefined) return owners.length === 0 ? known : `{${known}}_{${owners.map(word).join(',')}}`;
+  if (known !== undefined) return `${known.base}_{${[known.subscript, ...owners].map(word).join(',\\,')}}`;
   const [head, ...rest] = name.split('_').filter((part) => part !== '');
   const isQuantity = name.includes('_');
   const subscripts = [...rest.map((part) => word(SUBSCRIPTS[part] ?? part)), ...owners.map(word)];

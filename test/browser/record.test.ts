@@ -28,7 +28,7 @@ async function openSheet(page: Page, address: string, text: string): Promise<voi
 async function openRecord(page: Page): Promise<Locator> {
   await page.getByRole('button', { name: 'Record', exact: true }).click();
   const view = page.getByRole('dialog', { name: 'Record' });
-  await view.locator('.record .katex').first().waitFor();
+  await view.locator('.record h1').waitFor();
   return view;
 }
 
@@ -70,8 +70,7 @@ test('the whole record prints, and nothing else of the page', async ({ page, add
   const sections =
     'Result, Checks, To be confirmed, The sheet, Workings, Figures, Cautions and limits, Sign-off, The sheet text';
   sections.split(', ').forEach((title, at) => {
-    // A ligature is one character of the face.
-    expect(text.replace(/\ufb00/g, 'ff')).toContain(packed(`${at + 1} ${title}`));
+    expect(text).toContain(packed(`${at + 1} ${title}`));
   });
   expect(text).toContain(packed('All 9 checks hold at the nominal values.'));
   expect(text).toContain(packed('Local codes and licensed practice decide'));
@@ -98,15 +97,13 @@ test('print is the same from the screen view, and takes nothing away from the pa
 test('a sheet that asks for Letter is printed on Letter', async ({ page, address }) => {
   await openSheet(page, address, '# Letter sheet\n  paper: Letter\nx = 1 V  [bench]\n');
   const pages = await print(page);
-  expect(pages.map(({ width, height }) => [Math.round(width), Math.round(height)])).toEqual([[612, 792]]);
+  expect(pages.length).toBeGreaterThan(0);
+  for (const { width, height } of pages) expect([Math.round(width), Math.round(height)]).toEqual([612, 792]);
 });
 
-test('formulas are typeset and fit, and no text is smaller than 7 pt', async ({ page, address }) => {
-  await openPage(page, address);
-  const record = await mountPrinted(page);
-  await expect(record.locator('[data-tex] .katex').count()).resolves.toBe(await record.locator('[data-tex]').count());
-  await expect(record.locator('.katex-error').count()).resolves.toBe(0);
-  const found = await record.evaluate((root, least) => {
+/** Texts of the record that are smaller than print may be, and those that reach beyond its right edge. */
+function misfits(record: Locator): Promise<{ small: string[]; wide: string[] }> {
+  return record.evaluate((root, least) => {
     const small: string[] = [];
     const wide: string[] = [];
     const right = root.getBoundingClientRect().right + 1;
@@ -119,17 +116,48 @@ test('formulas are typeset and fit, and no text is smaller than 7 pt', async ({ 
       // Drawings are scaled to their place.
       const svg = element.closest<SVGSVGElement>('svg.sq-figure');
       const scale = svg ? svg.getBoundingClientRect().width / svg.viewBox.baseVal.width : 1;
-      const zoom = svg ? 1 : 1;
-      const size = Number.parseFloat(getComputedStyle(element).fontSize) * (svg ? scale : zoom);
-      // Exponents of a fraction's own subscripts are the one thing that KaTeX sets smaller.
-      if (size < least && !element.closest('.mtight')) small.push(`${text} ${size}`);
+      const size = Number.parseFloat(getComputedStyle(element).fontSize) * scale;
+      // Subscripts of subscripts are the one thing that KaTeX sets smaller.
+      if (size < least && !element.closest('.mtight .mtight, .mfrac .mfrac')) small.push(`${text} ${size}`);
       const range = document.createRange();
       range.selectNodeContents(node);
       if (range.getBoundingClientRect().right > right) wide.push(text);
     }
     return { small, wide };
   }, LEAST_SIZE);
-  expect(found).toEqual({ small: [], wide: [] });
+}
+
+test('formulas are typeset and fit, and no text is smaller than 7 pt', async ({ page, address }) => {
+  await openPage(page, address);
+  const record = await mountPrinted(page);
+  await expect(record.locator('[data-tex] .katex').count()).resolves.toBe(await record.locator('[data-tex]').count());
+  await expect(record.locator('.katex-error').count()).resolves.toBe(0);
+  await expect(misfits(record)).resolves.toEqual({ small: [], wide: [] });
+});
+
+test('a formula too long for its column gets the whole width, one too long for that breaks as text', async ({
+  page,
+  address,
+}) => {
+  const sum = (terms: number): string => Array.from({ length: terms }, () => 'R_0').join(' + ');
+  const formulas = [3, 10, 16].map((terms) => `share_${terms} = R_0 / (${sum(terms)})`).join('\n');
+  await openSheet(
+    page,
+    address,
+    `# Long\nR_0 = 1.5 kohm  [bench]\n${formulas}\nlimit = check R_0 / (${sum(12)}) >= 0.01\n`,
+  );
+  const record = await mountPrinted(page);
+  const steps = record.locator('.record-step');
+  const kinds = await steps.evaluateAll((all) =>
+    all.map((step) => [step.querySelector('.record-wide') !== null, step.querySelectorAll('code').length]),
+  );
+  expect(kinds).toEqual([
+    [false, 0],
+    [true, 0],
+    [true, 1],
+  ]);
+  await expect(record.locator('.record-table-checks code').count()).resolves.toBe(2);
+  await expect(misfits(record)).resolves.toEqual({ small: [], wide: [] });
 });
 
 test('print is light in the dark', async ({ page, address }) => {
@@ -161,7 +189,7 @@ test('what a sheet says is text in the record, whatever it says', async ({ page,
   await openSheet(page, address, `# ${hostile}\n  project: ${hostile}\n> ${hostile}\nx = 1 V  [bench]  ; ${hostile}\n`);
   const [first] = await print(page);
   expect(first!.text.split(packed(hostile)).length).toBeGreaterThan(4);
-  const view = await openRecord(page).catch(() => page.getByRole('dialog', { name: 'Record' }));
+  const view = await openRecord(page);
   await expect(view.locator('.record img, .record script, .record a').count()).resolves.toBe(0);
   await expect(view.locator('.record h1').textContent()).resolves.toBe(hostile);
 });

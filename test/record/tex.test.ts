@@ -46,7 +46,7 @@ describe('names', () => {
     expect(texOfPath(['A1', 'Qa', 'I_D'], 'A1')).toBe('I_{\\mathrm{D},\\,\\mathrm{Qa}}');
     expect(texOfPath(['A1', 'Qa', 'I_D'], null)).toBe('I_{\\mathrm{D},\\,\\mathrm{A1.Qa}}');
     expect(texOfPath(['A1', 'margin'], null)).toBe('\\mathrm{margin}_{\\mathrm{A1}}');
-    expect(texOfPath(['A1', 'swing_up'], null)).toBe('{\\hat{v}_{\\mathrm{up}}}_{\\mathrm{A1}}');
+    expect(texOfPath(['A1', 'swing_up'], null)).toBe('\\hat{v}_{\\mathrm{up},\\,\\mathrm{A1}}');
   });
 });
 

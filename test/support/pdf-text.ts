@@ -71,7 +71,9 @@ function readPage(head: string, objects: Objects): PdfPage {
     if (name !== undefined) font = fonts.get(name)!;
     else for (const [glyph] of glyphs!.matchAll(/.{4}/g)) text += font.get(Number.parseInt(glyph, 16)) ?? '?';
   }
-  return { text: text.replace(/\s+/g, ''), width: Number(width), height: Number(height) };
+  // Two letters in one glyph are two letters.
+  text = text.replace(/\s+/g, '').replace(/[\ufb00-\ufb04]/g, (ligature) => ligature.normalize('NFKC'));
+  return { text, width: Number(width), height: Number(height) };
 }
 
 /** Which characters the glyphs of a font stand for. */

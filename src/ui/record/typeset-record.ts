@@ -47,14 +47,23 @@ export function typesetFormulas(record: HTMLElement): void {
     const tex = `\\displaystyle ${place.dataset.tex}`;
     loaded.render(tex, place, { throwOnError: false, output: 'html', strict: false });
   }
-  // First the whole width below the sentence, then smaller.
-  markLong(record, 'record-wide');
-  markLong(record, 'record-long');
+  // First the whole width below the sentence; what is too long for that stands as text, which breaks anywhere.
+  const lines = [...record.querySelectorAll<HTMLElement>('.record-equation, .record-table-checks td')];
+  const long = lines.filter(isTooLong);
+  for (const line of long) line.classList.add('record-wide');
+  for (const line of long.filter(isTooLong)) {
+    for (const place of line.querySelectorAll<HTMLElement>('[data-tex]')) {
+      if (place.offsetWidth > line.clientWidth) asText(place);
+    }
+  }
 }
 
-/** Marks the lines that reach beyond their room. All are measured before any is changed, so that there is one layout. */
-function markLong(record: HTMLElement, mark: string): void {
-  const lines = [...record.querySelectorAll<HTMLElement>('.record-equation, .record-table-checks td')];
-  const long = lines.filter((line) => line.scrollWidth > line.clientWidth + 1);
-  for (const line of long) line.classList.add(mark);
+function isTooLong(line: HTMLElement): boolean {
+  return line.scrollWidth > line.clientWidth + 1;
+}
+
+function asText(place: HTMLElement): void {
+  const text = document.createElement('code');
+  text.textContent = place.ariaLabel;
+  place.replaceChildren(text);
 }
