@@ -11,7 +11,7 @@ import { originCell } from './origin-cell.ts';
 import { inputCells, offeredCell } from './value-cells.ts';
 
 const COLUMNS = [
-  { title: '', kind: 'text' },
+  { title: 'row', kind: 'text' },
   { title: 'min', kind: 'number' },
   { title: 'nominal', kind: 'number' },
   { title: 'max', kind: 'number' },
