@@ -1,8 +1,8 @@
 // Keeps the sheet that is open: every edit reaches the shelf within a second.
 //
 // Edits are numbered. The first one is written soon, further ones while typing at most every `writeEvery`. A write that
-// fails is tried again at the next edit and every `retryEvery`; meanwhile the last kept version stands. A page that is
-// about to go sends what is left without waiting for the write before it: the shelf takes them in order.
+// fails is tried again at the next edit and every `retryEvery`; meanwhile the last kept version stands. A flush sends
+// what is left without waiting for the write before it: the shelf takes them in order.
 
 import { createOpenSheet } from './open-sheet.ts';
 import { elsewhereText, silentFault, unkeptFault } from './sentences.ts';
@@ -49,6 +49,8 @@ export interface Keeper {
   keep(content: SheetContent): void;
   /** Writes at once what is not kept yet, and waits for it. */
   flush(): Promise<KeepState>;
+  /** Puts by what is not kept yet, within the call, and flushes: for a page that may vanish. */
+  leave(): void;
   /** Looks whether another tab has written, for a page that slept. */
   look(): Promise<KeepState>;
   /**
@@ -58,7 +60,7 @@ export interface Keeper {
   takeTheirs(): Promise<SheetContent | null>;
   /** Puts what stands here in place of what the other tab did: answers it, with their text in its undo history. */
   keepMine(): Promise<SheetContent | null>;
-  /** Flushes, then stops listening and trying. */
+  /** Flushes, then stops listening and trying; what could not be kept is put by. */
   close(): Promise<void>;
 }
 
@@ -76,6 +78,8 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
   let settled: Promise<unknown> = Promise.resolve();
   let timer: { readonly due: number; readonly cancel: () => void } | null = null;
   let closed = false;
+  /** The sheet of which the text was put by. */
+  let leftOf: string | null = null;
   let shown = stateNow();
 
   const stopListening = tabs.listen(({ id, writer }) => {
@@ -155,6 +159,7 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
       writes--;
     }
     if (!failure) kept = Math.max(kept, number);
+    if (kept === made) takeBack();
     show();
     if (kept === made) return;
     if (failure) plan(KEEPER_TIMES.retryEvery);
@@ -167,6 +172,29 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
     return show();
   }
 
+  function leave(): void {
+    putBy();
+    void flush();
+  }
+
+  function putBy(): void {
+    if (kept === made) return;
+    const { id } = target();
+    if (leftOf !== id) takeBack();
+    shelf.leave(target(), mine, editedAt);
+    leftOf = id;
+  }
+
+  /** The sheet into which the next write goes, as far as known. */
+  function target(): SheetRecord {
+    return (sheet.conflict() && sheet.aside()) || sheet.base();
+  }
+
+  function takeBack(): void {
+    if (leftOf !== null) shelf.takeBack(leftOf);
+    leftOf = null;
+  }
+
   async function look(): Promise<KeepState> {
     await sheet.look(() => kept === made);
     return show();
@@ -174,8 +202,9 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
 
   function change(content: SheetContent): void {
     mine = content;
+    // A clock that is set back must not make a later edit look like an earlier one.
+    editedAt = made === 0 ? now() : Math.max(now(), editedAt);
     made++;
-    editedAt = now();
   }
 
   return {
@@ -186,6 +215,7 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
       show();
     },
     flush,
+    leave,
     look,
     async takeTheirs() {
       await flush();
@@ -199,6 +229,7 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
         // Theirs as it stands on the shelf, or the text that was let go: nothing here is to be kept.
         mine = content ?? mine;
         kept = made;
+        takeBack();
       }
       show();
       return content;
@@ -217,7 +248,13 @@ export function createKeeper(opened: SheetRecord, surroundings: KeeperSurroundin
     async close() {
       closed = true;
       stopListening();
+      putBy();
       await flush();
+      if (kept < made) {
+        shelf.abandon(target(), mine, editedAt);
+        takeBack();
+      }
+      timer?.cancel();
     },
   };
 }

@@ -9,8 +9,9 @@ import { splicesBetween } from './history.ts';
 import type { History, HistoryStep } from './history.ts';
 import type { Elsewhere } from './sentences.ts';
 import type { SheetContent, SheetRecord } from './sheet-record.ts';
-import { isSameVersion } from './shelf.ts';
-import type { NotSaved, Saved, Shelf } from './shelf.ts';
+import { isSameVersion } from './sheet-store.ts';
+import type { NotSaved, Saved } from './sheet-store.ts';
+import type { Shelf } from './shelf.ts';
 import type { StoreFailure } from './store.ts';
 
 /** What another tab has done; `theirs` where it can be read. */

@@ -1,4 +1,4 @@
-// The page's own timer, and its coming and going: what is not kept is sent before the page may vanish, and a page that
+// The page's own timer, and its coming and going: what is not kept is put by before the page may vanish, and a page that
 // comes back looks what others did meanwhile.
 
 import type { Keeper, Schedule } from './keeper.ts';
@@ -9,10 +9,10 @@ export const pageSchedule: Schedule = (run, milliseconds) => {
   return () => clearTimeout(timer);
 };
 
-/** Flushes `keeper` whenever `page` may vanish, and looks again when it is back; the answer stops it. */
-export function followPage(keeper: Pick<Keeper, 'flush' | 'look'>, page: Window): () => void {
-  const leave = () => void keeper.flush();
-  const turn = () => void (page.document.visibilityState === 'hidden' ? keeper.flush() : keeper.look());
+/** Lets `keeper` put by what is not kept whenever `page` may vanish, and look again when it is back; the answer stops it. */
+export function followPage(keeper: Pick<Keeper, 'leave' | 'look'>, page: Window): () => void {
+  const leave = () => keeper.leave();
+  const turn = () => void (page.document.visibilityState === 'hidden' ? keeper.leave() : keeper.look());
   // Not every browser tells a page that is closed that it is hidden, and a phone may tell it nothing else.
   page.addEventListener('pagehide', leave);
   page.addEventListener('pageshow', turn);

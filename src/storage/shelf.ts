@@ -1,22 +1,24 @@
 // The shelf: the sheets kept in this browser.
 //
-// Each call is one transaction. A save compares before it sets: it goes through only where the sheet is still as
-// this page knows it, or where this page itself wrote last (so a page that is being closed need not wait for one
-// save before it sends the next). What another tab or a newer version wrote is never overwritten.
+// Whoever lists or loads sheets first brings to the shelf what pages have left that went before an edit was kept.
 
-import { promisifyRequest } from 'idb-keyval';
 import type { UseStore } from 'idb-keyval';
 import { EMPTY_HISTORY } from './history.ts';
+import { dropWords, findWords, leaveWords, openSmallStorage } from './last-words.ts';
+import type { LastWords, SmallStorage } from './last-words.ts';
 import { DAMAGED_SHEET, MISSING_SHEET, NEWER_SHEET, shelfFault } from './sentences.ts';
 import type { StorageFault } from './sentences.ts';
-import { FORMAT, formatOf, headOf, readHead, readRecord } from './sheet-record.ts';
+import { FORMAT, formatOf, readRecord } from './sheet-record.ts';
 import type { SheetContent, SheetHead, SheetRecord } from './sheet-record.ts';
-import { failureOf, transact } from './store.ts';
-import type { StoreFailure } from './store.ts';
+import { readHeads, readSheet, removeSheet, writeSheet } from './sheet-store.ts';
+import type { Saved } from './sheet-store.ts';
+import { failureOf } from './store.ts';
 import type { Tabs } from './tabs.ts';
 
 interface ShelfSurroundings {
   readonly store: UseStore;
+  /** Where a page that goes leaves its text; that of the browser unless given. */
+  readonly smallStorage?: SmallStorage | null;
   /** Told of what is kept and removed here. */
   readonly tabs: Tabs;
   /** Milliseconds of the epoch. */
@@ -24,16 +26,6 @@ interface ShelfSurroundings {
   /** A name that no other sheet and no other page has. */
   readonly newId: () => string;
 }
-/** A write that did not come about. */
-export type NotSaved =
-  /** Another tab wrote since: `theirs` is what stands now. */
-  | { readonly status: 'changed'; readonly theirs: SheetRecord }
-  | { readonly status: 'deleted' }
-  /** What stands was written by a newer version, or is damaged, and stays; `changed` where it says when it was. */
-  | { readonly status: 'unreadable'; readonly changed: number | null }
-  | { readonly status: 'failed'; readonly failure: StoreFailure };
-/** `record` is what stands on the shelf now, and what the next save goes out from. */
-export type Saved = { readonly status: 'kept'; readonly record: SheetRecord } | NotSaved;
 type Loaded = { readonly record: SheetRecord } | { readonly fault: StorageFault };
 type Listed = { readonly sheets: readonly SheetHead[] } | { readonly fault: StorageFault };
 type Removed = { readonly removed: true } | { readonly fault: StorageFault };
@@ -48,6 +40,12 @@ export interface Shelf {
   load(id: string): Promise<Loaded>;
   /** Puts `content` in place of `base`, which this page loaded, kept or drafted. `changed` is when it was edited. */
   save(base: SheetRecord, content: SheetContent, changed: number): Promise<Saved>;
+  /** Puts it by within the call, for a page that may not live to see a save through. */
+  leave(base: SheetRecord, content: SheetContent, changed: number): void;
+  /** Takes back what this page has left of a sheet. */
+  takeBack(id: string): void;
+  /** Puts it by for a sheet that this page closes without having kept it: whoever looks next brings it to the shelf. */
+  abandon(base: SheetRecord, content: SheetContent, changed: number): void;
   /** Takes a sheet off the shelf; one of a newer version stays. */
   remove(id: string): Promise<Removed>;
   /** Puts a second sheet with the same text on the shelf, without the history. */
@@ -55,8 +53,15 @@ export interface Shelf {
 }
 
 /** The shelf in `store`. */
-export function createShelf({ store, tabs, now, newId }: ShelfSurroundings): Shelf {
+export function createShelf(surroundings: ShelfSurroundings): Shelf {
+  const { store, tabs, now, newId, smallStorage = openSmallStorage() } = surroundings;
   const writer = newId();
+
+  async function save(base: SheetRecord, content: SheetContent, changed: number, by = writer): Promise<Saved> {
+    const result = await writeSheet(store, { base, content, changed, writer: by });
+    if (result.status === 'kept') tabs.tell({ type: 'kept', id: base.id, changed, writer: by });
+    return result;
+  }
 
   const draft: Shelf['draft'] = ({ text = '', history = EMPTY_HISTORY, folded = [] }, { asideOf } = {}) => {
     const at = now();
@@ -65,16 +70,34 @@ export function createShelf({ store, tabs, now, newId }: ShelfSurroundings): She
     return { ...origin, ...content, created: at, changed: at };
   };
 
-  const save: Shelf['save'] = async (base, content, changed) => {
-    const result = await saved(store, base, content, changed, writer);
-    if (result.status === 'kept') tabs.tell({ type: 'kept', id: base.id, changed, writer });
-    return result;
-  };
+  function leave(base: SheetRecord, { text, history, folded }: SheetContent, changed: number, by: string): void {
+    leaveWords(smallStorage, { record: { ...base, text, history, folded, changed }, writer: by });
+  }
+
+  /** Brings to the shelf what other pages left. What cannot be brought there now stays where it is. */
+  async function gather(): Promise<void> {
+    for (const words of findWords(smallStorage)) {
+      if (words.writer !== writer && (await isGathered(words))) dropWords(smallStorage, words.record.id, words.writer);
+    }
+  }
+
+  async function isGathered({ record, writer: leaver }: LastWords): Promise<boolean> {
+    const standing = readRecord(await readSheet(store, record.id));
+    // The save that was under way when the page went may have come through after all.
+    if (standing?.writer === leaver && (standing.changed > record.changed || standing.text === record.text))
+      return true;
+    const result = await save(record, record, record.changed, leaver);
+    if (result.status === 'kept' || result.status === 'failed') return result.status === 'kept';
+    if (result.status === 'changed' && result.theirs.text === record.text) return true;
+    // Two pages that gather at once name it alike, and so set it aside once.
+    const aside = { ...record, id: `${record.id}-${leaver}`, revision: 0, asideOf: record.id };
+    return (await save(aside, aside, record.changed, leaver)).status !== 'failed';
+  }
 
   const load: Shelf['load'] = async (id) => {
     try {
-      const kept = await transact(store, 'readonly', (objects) => promisifyRequest(objects.get(sheetKey(id))));
-      return loadedFrom(kept);
+      await gather();
+      return loadedFrom(await readSheet(store, id));
     } catch (thrown) {
       return { fault: shelfFault(failureOf(thrown), 'The sheet') };
     }
@@ -83,24 +106,27 @@ export function createShelf({ store, tabs, now, newId }: ShelfSurroundings): She
   return {
     writer,
     draft,
-    save,
     load,
+    save: (base, content, changed) => save(base, content, changed),
+    leave: (base, content, changed) => leave(base, content, changed, writer),
+    // Under a name of its own, for this page passes over what it has left itself.
+    abandon: (base, content, changed) => leave(base, content, changed, newId()),
+    takeBack: (id) => dropWords(smallStorage, id, writer),
     async list() {
       try {
-        const kept = await transact(store, 'readonly', (objects) => promisifyRequest(objects.getAll(allHeads())));
-        const heads = kept.map(readHead).filter((head) => head !== null);
-        return { sheets: heads.toSorted((a, b) => b.changed - a.changed || (a.id < b.id ? -1 : 1)) };
+        await gather();
+        return { sheets: await readHeads(store) };
       } catch (thrown) {
         return { fault: shelfFault(failureOf(thrown), 'The list') };
       }
     },
     async remove(id) {
       try {
-        const removed = await transact(store, 'readwrite', (objects) => removeFrom(objects, id));
-        if (!removed) return { fault: NEWER_SHEET };
+        if (!(await removeSheet(store, id))) return { fault: NEWER_SHEET };
       } catch (thrown) {
         return { fault: shelfFault(failureOf(thrown), 'Room') };
       }
+      dropWords(smallStorage, id, writer);
       tabs.tell({ type: 'removed', id, changed: now(), writer });
       return { removed: true };
     },
@@ -123,67 +149,9 @@ export function randomId(): string {
   return Array.from(bytes, (byte) => byte.toString(16).padStart(2, '0')).join('');
 }
 
-/** A sheet that was deleted and made anew may count to the same revision again: the writer tells. */
-export function isSameVersion(a: SheetRecord, b: SheetRecord): boolean {
-  return a.revision === b.revision && a.writer === b.writer;
-}
-
-const sheetKey = (id: string) => ['sheet', id];
-const headKey = (id: string) => ['head', id];
-/** An array sorts behind every string. */
-const allHeads = () => IDBKeyRange.bound(['head'], ['head', []]);
-
 function loadedFrom(kept: unknown): Loaded {
   if (kept === undefined) return { fault: MISSING_SHEET };
   if (formatOf(kept) > FORMAT) return { fault: NEWER_SHEET };
   const record = readRecord(kept);
   return record ? { record } : { fault: DAMAGED_SHEET };
-}
-
-async function saved(
-  store: UseStore,
-  base: SheetRecord,
-  { text, history, folded }: SheetContent,
-  changed: number,
-  writer: string,
-): Promise<Saved> {
-  try {
-    return await transact(store, 'readwrite', async (objects): Promise<Saved> => {
-      const done = finished(objects);
-      const kept: unknown = await promisifyRequest(objects.get(sheetKey(base.id)));
-      const standing = readRecord(kept);
-      if (kept !== undefined && !standing) return { status: 'unreadable', changed: readHead(kept)?.changed || null };
-      if (!standing && base.revision > 0) return { status: 'deleted' };
-      if (standing && standing.writer !== writer && !isSameVersion(standing, base)) {
-        return { status: 'changed', theirs: standing };
-      }
-      const { format, id, created, asideOf } = base;
-      const revision = Math.max(base.revision, standing?.revision ?? 0) + 1;
-      const record = { format, id, text, history, folded, revision, writer, created, changed, asideOf };
-      objects.put(record, sheetKey(id));
-      objects.put(headOf(record), headKey(id));
-      await done;
-      return { status: 'kept', record };
-    });
-  } catch (thrown) {
-    return { status: 'failed', failure: failureOf(thrown) };
-  }
-}
-
-/** Settles when all of the transaction is on the disk, or nothing is. */
-function finished(objects: IDBObjectStore): Promise<void> {
-  const done = promisifyRequest<void>(objects.transaction);
-  // Where a request before it fails, nobody waits for this one.
-  done.catch(() => undefined);
-  return done;
-}
-
-async function removeFrom(objects: IDBObjectStore, id: string): Promise<boolean> {
-  const done = finished(objects);
-  const kept: unknown = await promisifyRequest(objects.get(sheetKey(id)));
-  if (kept !== undefined && formatOf(kept) > FORMAT) return false;
-  objects.delete(sheetKey(id));
-  objects.delete(headKey(id));
-  await done;
-  return true;
 }

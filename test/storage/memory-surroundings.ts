@@ -6,6 +6,7 @@ import 'fake-indexeddb/auto';
 import type { UseStore } from 'idb-keyval';
 import { createShelf, openStore } from '../../src/storage/index.ts';
 import type { Schedule, Shelf, TabNews, Tabs } from '../../src/storage/index.ts';
+import type { SmallStorage } from '../../src/storage/last-words.ts';
 
 /** Any time zone reads this as 14:00. */
 export const TWO_O_CLOCK = new Date(2031, 4, 6, 14, 0, 0).getTime();
@@ -132,8 +133,34 @@ export function createTabSet(): () => Tabs {
 export const DEAF_TABS: Tabs = { tell: () => undefined, listen: () => () => undefined, close: () => undefined };
 
 let ids = 0;
+interface TestSurroundings {
+  now: () => number;
+  store?: UseStore;
+  tabs?: Tabs;
+  smallStorage?: SmallStorage;
+}
 /** A shelf of the present disk, as one page of the browser has it. */
-export function createTestShelf(surroundings: { now: () => number; store?: UseStore; tabs?: Tabs }): Shelf {
-  const { now, store = openStore(), tabs = DEAF_TABS } = surroundings;
-  return createShelf({ store, tabs, now, newId: () => `id-${++ids}` });
+export function createTestShelf(surroundings: TestSurroundings): Shelf {
+  const { now, store = openStore(), tabs = DEAF_TABS, smallStorage = null } = surroundings;
+  return createShelf({ store, tabs, now, smallStorage, newId: () => `id-${++ids}` });
+}
+
+/** A small storage with room for so many characters. */
+export function createSmallStorage(room = Infinity): SmallStorage & { entries: Map<string, string> } {
+  const entries = new Map<string, string>();
+  return {
+    entries,
+    get length() {
+      return entries.size;
+    },
+    key: (index) => [...entries.keys()][index] ?? null,
+    getItem: (key) => entries.get(key) ?? null,
+    removeItem: (key) => void entries.delete(key),
+    setItem(key, value) {
+      const others = [...entries].filter(([other]) => other !== key);
+      const used = others.reduce((sum, [name, text]) => sum + name.length + text.length, 0);
+      if (used + key.length + value.length > room) throw new DOMException('', 'QuotaExceededError');
+      entries.set(key, value);
+    },
+  };
 }

@@ -15,21 +15,21 @@ function standIn() {
   const calls: string[] = [];
   const state: KeepState = { state: 'keeping' };
   const call = (name: string) => () => Promise.resolve((calls.push(name), state));
-  const stop = followPage({ flush: call('flush'), look: call('look') }, page as unknown as Window);
+  const stop = followPage({ leave: () => void calls.push('leave'), look: call('look') }, page as unknown as Window);
   return { document, page, calls, stop };
 }
 
-test('a page that may vanish flushes, and one that is back looks', () => {
+test('a page that may vanish puts by what is not kept, and one that is back looks', () => {
   const { document, page, calls, stop } = standIn();
   document.visibilityState = 'hidden';
   document.dispatchEvent(new Event('visibilitychange'));
-  expect(calls).toEqual(['flush']);
+  expect(calls).toEqual(['leave']);
   document.visibilityState = 'visible';
   document.dispatchEvent(new Event('visibilitychange'));
-  expect(calls).toEqual(['flush', 'look']);
+  expect(calls).toEqual(['leave', 'look']);
   page.dispatchEvent(new Event('pagehide'));
   page.dispatchEvent(new Event('pageshow'));
-  expect(calls).toEqual(['flush', 'look', 'flush', 'look']);
+  expect(calls).toEqual(['leave', 'look', 'leave', 'look']);
   stop();
   page.dispatchEvent(new Event('pagehide'));
   page.dispatchEvent(new Event('pageshow'));
