@@ -8,7 +8,7 @@ import { GENERAL_OUTPUTS } from './general-point.ts';
 import type { Kernel } from './kernel.ts';
 import { refuse } from './line-point.ts';
 import { CANNOT_CARRY, NOT_A_NUMBER, SOLVED } from './point-status.ts';
-import { deriveAt, slopes } from './small-signal-at.ts';
+import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 
 /** I_D in A (device sense, with the sign of V_DS), V_DS and V_SB in V (true frame); T_J follows from V_DS I_D alone. */
 export const currentPoint: Kernel = {
@@ -73,7 +73,7 @@ export const currentPoint: Kernel = {
     s[a[o + 2]] = channel * (vov + vt + (reversed ? inner : 0) + rs * I) + 0;
     s[a[o + 3]] = channel * vds + 0;
     s[a[o + 4]] = vov;
-    s[a[o + 5]] = vov;
+    s[a[o + 5]] = onsetAt(2, vov, I, rs + rd);
     s[a[o + 6]] = y - vov;
     s[a[o + 7]] = y < vov ? 1 : 2;
     s[a[o + 8]] = slopes[0];

@@ -100,6 +100,9 @@ interface InnerVoltages {
   readonly overdrive: Handle;
   readonly drop: Handle;
   readonly reversed: boolean;
+  /** I_D, and the resistance of both leads; null without any. */
+  readonly current: Handle;
+  readonly leads: Handle | null;
 }
 
 /** Writes V_ov, and V_DS inside the leads where those have resistance. */
@@ -113,12 +116,12 @@ function deriveInner(d: Derivation, fet: SolvedFet, names: LawNames): InnerVolta
   let drop = fet.channel > 0 ? vds : e.neg(vds);
   const lead = (x: Handle | null): Handle | null => (x === null || e.value(x) === 0 ? null : x);
   const [ls, ld] = [lead(rs), lead(rd)];
-  if (ls !== null || ld !== null) {
-    const sum = ls !== null && ld !== null ? e.add(ls, ld) : (ls ?? ld)!;
+  const leads = ls !== null && ld !== null ? e.add(ls, ld) : (ls ?? ld);
+  if (leads !== null) {
     drop = d.state(
       'V_DSi',
       'V',
-      e.sub(drop, e.mul(sum, current)),
+      e.sub(drop, e.mul(leads, current)),
       'Between the ends of the channel, inside the leads.',
     );
   } else if (fet.channel < 0) drop = d.state('V_SD', 'V', drop, '');
@@ -147,7 +150,7 @@ function deriveInner(d: Derivation, fet: SolvedFet, names: LawNames): InnerVolta
   // V_ov near 0 is a difference of two near voltages: the program's own number is the better one.
   const shown = tiny ? e.leaf('V_ov', value, 'V') : d.conclude('V_ov', 'V', overdrive, value, sentence);
   if (tiny) d.confirm('V_ov', 'V', overdrive, value, sentence);
-  return { overdrive: shown, drop, reversed };
+  return { overdrive: shown, drop, reversed, current, leads };
 }
 
 /** The law of the region at those voltages: the current as a formula. */
@@ -168,7 +171,19 @@ function lawFormula(d: Derivation, fet: SolvedFet, names: LawNames, inner: Inner
 export function deriveRegion(d: Derivation, fet: SolvedFet, inner: InnerVoltages): void {
   const { e } = d;
   const region = fet.offered('region');
-  const onset = d.state('V_DSsat', 'V', inner.overdrive, 'Saturation begins where V_DS reaches V_ov.');
+  if (inner.leads === null) d.state('V_DSsat', 'V', inner.overdrive, 'Saturation begins where V_DS reaches V_ov.');
+  else {
+    const current = inner.reversed ? e.neg(inner.current) : inner.current;
+    const onset = e.add(inner.overdrive, e.mul(inner.leads, current));
+    d.conclude(
+      'V_DSsat',
+      'V',
+      onset,
+      fet.offered('V_DSsat'),
+      'Saturation begins where the channel sees V_ov; the leads add their drop.',
+    );
+  }
+  const onset = inner.leads === null ? e.leaf('V_DSsat', fet.offered('V_DSsat'), 'V') : inner.overdrive;
   const sentence =
     region === 2
       ? 'Not below zero: the channel is in current saturation, as assumed.'

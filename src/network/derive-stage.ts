@@ -222,7 +222,7 @@ function derivePointOnLines(
       channel > 0
         ? e.leaf('V_DS', offered('V_DS'), 'V')
         : d.state('V_SD', 'V', e.neg(e.leaf('V_DS', offered('V_DS'), 'V')), '');
-    const inner = { overdrive, drop, reversed: false };
+    const inner = { overdrive, drop, reversed: false, current, leads: null };
     deriveRegion(d, fet, inner);
     deriveSlopes(d, fet, names, inner);
     d.conclude('P_D', 'W', e.mul(drop, current), offered('P_D'), 'The heat in the FET.');
@@ -282,7 +282,7 @@ function deriveForced(d: Derivation, fet: SolvedFet, names: LawNames): void {
     channel > 0
       ? e.leaf('V_DS', offered('V_DS'), 'V')
       : d.state('V_SD', 'V', e.neg(e.leaf('V_DS', offered('V_DS'), 'V')), '');
-  const inner = { overdrive, drop, reversed: false };
+  const inner = { overdrive, drop, reversed: false, current, leads: null };
   deriveRegion(d, fet, inner);
   deriveSlopes(d, fet, names, inner);
   d.conclude('P_D', 'W', e.mul(drop, current), offered('P_D'), 'The heat in the FET.');

@@ -11,7 +11,7 @@ import { GENERAL_OUTPUTS } from './general-point.ts';
 import type { Kernel } from './kernel.ts';
 import { refuse } from './line-point.ts';
 import { CANNOT_CARRY, LEFT_OPEN, NOT_A_NUMBER, RUNAWAY, SOLVED } from './point-status.ts';
-import { deriveAt, slopes } from './small-signal-at.ts';
+import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 import { balanceHeat, thermalRoots } from './thermal-balance.ts';
 
 /** Drain to source voltage in V up to which a forced current is tried; no discrete FET of this trade stands more. */
@@ -132,7 +132,7 @@ export const forcedPoint: Kernel = {
     s[a[o + 2]] = channel * (at.vgs + given[ALPHA] * potential) + 0;
     s[a[o + 3]] = channel * vds + 0;
     s[a[o + 4]] = vov;
-    s[a[o + 5]] = vov;
+    s[a[o + 5]] = onsetAt(2, vov, I, given[RS] + given[RD]);
     s[a[o + 6]] = at.y - vov;
     s[a[o + 7]] = at.y < vov ? 1 : 2;
     s[a[o + 8]] = slopes[0];

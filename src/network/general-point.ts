@@ -10,7 +10,7 @@ import type { Kernel } from './kernel.ts';
 import { POINT_OUTPUTS, refuse } from './line-point.ts';
 import { CURRENT, DRAIN_SOURCE, MARGIN, OVERDRIVE, REGION, line } from './line-solve.ts';
 import { NOT_A_NUMBER, RUNAWAY, SOLVED } from './point-status.ts';
-import { deriveAt, slopes } from './small-signal-at.ts';
+import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 import { balanceHeat, thermalRoots } from './thermal-balance.ts';
 
 /** Results of the kernels for body effect and heat; V_SB in the true frame, V_TO at T_J in the n-channel frame. */
@@ -111,7 +111,7 @@ export const generalPoint: Kernel = {
     s[a[o + 2]] = channel * (given[VGG] - given[RM] * I + given[QGS] * at.leakage) + 0;
     s[a[o + 3]] = channel * at.vds + 0;
     s[a[o + 4]] = vov;
-    s[a[o + 5]] = region === 0 ? 0 : vov;
+    s[a[o + 5]] = onsetAt(region, vov, I, given[RS] + given[RD]);
     s[a[o + 6]] = line[MARGIN];
     s[a[o + 7]] = region;
     s[a[o + 8]] = slopes[0];

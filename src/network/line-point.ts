@@ -5,7 +5,7 @@
 import type { Kernel } from './kernel.ts';
 import { CURRENT, DRAIN_SOURCE, MARGIN, OVERDRIVE, REGION, line, solveLine } from './line-solve.ts';
 import { NOT_A_NUMBER, SOLVED } from './point-status.ts';
-import { deriveAt, slopes } from './small-signal-at.ts';
+import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 
 /** Results that every operating-point kernel gives, in this order. */
 export const POINT_OUTPUTS = [
@@ -60,7 +60,7 @@ export const linePoint: Kernel = {
     s[a[o + 2]] = channel * (vgg - Rm * I) + 0;
     s[a[o + 3]] = channel * ((reversed ? -vds : vds) + (rs + rd) * I) + 0;
     s[a[o + 4]] = vov;
-    s[a[o + 5]] = region === 0 ? 0 : vov;
+    s[a[o + 5]] = onsetAt(region, vov, I, rs + rd);
     s[a[o + 6]] = line[MARGIN];
     s[a[o + 7]] = region;
     s[a[o + 8]] = slopes[0];

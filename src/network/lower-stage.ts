@@ -9,7 +9,7 @@ import type { Emitter, Handle } from './emitter.ts';
 import { lowerCapacitances } from './lower-capacitances.ts';
 import { MIDBAND_SHORT, buildGraph, terminalName } from './place-graph.ts';
 import type { PlaceGraph } from './place-graph.ts';
-import { gainOf, inputResistance, midbandNetworks, outputResistance } from './midband.ts';
+import { gainOf, inputResistance, isOnlyWayIn, midbandNetworks, outputResistance } from './midband.ts';
 import type { MidbandNetwork, Slopes } from './midband.ts';
 import { OFFERED_VALUES } from './offered-values.ts';
 import { solvePoint } from './lower-point.ts';
@@ -145,10 +145,19 @@ function lowerSmallSignals(
     refuse(['R_in', ...(net.output ? ['A_v', 'swing_up', 'swing_down'] : [])], why);
     return { ports: null, swingLimits: null };
   }
-  values.set('R_in', inputResistance(e, loaded, slopes, net.driven));
+  if (net.driven !== null && !isOnlyWayIn(loaded, net.driven)) {
+    refuse(
+      ['R_in'],
+      'R_in counts behind the resistor that driven: through names, and that is not the only way from signal into the stage. Name the one resistor that leads to signal.',
+    );
+  } else values.set('R_in', inputResistance(e, loaded, slopes, net.driven));
   const ports = portsOf(e, loaded);
   if (!net.output) return { ports, swingLimits: null };
   values.set('A_v', gainOf(e, loaded, slopes));
+  if ([loaded.perSignal.gs, loaded.perSignal.ds, loaded.perSignal.sb].every((volts) => volts === null)) {
+    refuse(['swing_up', 'swing_down'], 'The signal does not reach the FET, so it drives the output nowhere.');
+    return { ports, swingLimits: null };
+  }
   if (ports.currentFixed && point.bodyMoves) {
     refuse(
       ['swing_up', 'swing_down'],

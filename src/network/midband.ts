@@ -44,6 +44,8 @@ export interface MidbandNetwork {
   readonly perCurrent: PortVoltages;
   /** The channel current that 1 A pushed into the output forces, where an island leaves no other way; else null. */
   readonly island: { readonly forced: Term } | null;
+  /** The island holds the drain. */
+  readonly atDrain: boolean;
   /** Voltages of all classes per volt of the test source, per ampere of i, and the classes that move with P. */
   readonly classes: {
     readonly perSignal: readonly Term[];
@@ -141,6 +143,7 @@ function networkOf(e: Emitter, net: StageNet, graph: PlaceGraph): MidbandNetwork
       perPush: push,
       perCurrent,
       island: null,
+      atDrain: false,
       classes: { perSignal, perCurrent: perAmpere, withP },
       graph,
       at,
@@ -160,6 +163,7 @@ function networkOf(e: Emitter, net: StageNet, graph: PlaceGraph): MidbandNetwork
     perPush: corrected,
     perCurrent,
     island: { forced },
+    atDrain: datum === at.drain,
     classes: { perSignal, perCurrent: perAmpere, withP },
     graph,
     at,
@@ -169,7 +173,7 @@ function networkOf(e: Emitter, net: StageNet, graph: PlaceGraph): MidbandNetwork
 /** What flows and moves where the network is excited by `v`: the channel current (or P, with an island) and the output. */
 function respond(
   e: Emitter,
-  { perCurrent, island }: MidbandNetwork,
+  { perCurrent, island, atDrain }: MidbandNetwork,
   slopes: Slopes,
   v: PortVoltages,
   forced: Term,
@@ -185,8 +189,10 @@ function respond(
     const w = over(e, asked, plus(e, ONE, load));
     return { w, out: minus(e, v.out, times(e, perCurrent.out, w)) };
   }
-  // g_m (c - r P) .. = forced, so P = (asked - forced) / load.
-  const w = quotient(e, minus(e, asked, forced), load);
+  // g_m (c - r P) .. = forced, so P = (asked - forced) / load. An island at the drain is loaded by -g_ds (and -g_m where
+  // the gate moves with it), one at the source by g_m + g_ds: taken positive, so that the sign of an infinite P is right.
+  const driven = minus(e, asked, forced);
+  const w = atDrain ? quotient(e, negate(driven), negate(load)) : quotient(e, driven, load);
   return { w, out: minus(e, v.out, times(e, perCurrent.out, w)) };
 }
 
@@ -200,10 +206,23 @@ export function outputResistance(e: Emitter, network: MidbandNetwork, slopes: Sl
   return emit(e, respond(e, network, slopes, network.perPush, network.island?.forced ?? null).out);
 }
 
-/** R_in in ohm: what the test source sees, less the resistor `driven` that belongs to it; infinite where no current flows. */
+/** Whether the resistance `driven` is all that leads from the test source into the stage. */
+export function isOnlyWayIn({ graph, at }: MidbandNetwork, driven: Handle): boolean {
+  const source = sourceClass(graph);
+  const legs = graph.branches.filter(({ a, b }) => a === source || b === source);
+  return (
+    legs.length === 1 && legs[0].ohms === driven && [at.gate, at.drain, at.source, at.bulk].every((c) => c !== source)
+  );
+}
+
+function sourceClass(graph: PlaceGraph): number {
+  return graph.holders.findIndex((holders) => holders.some(({ type }) => type === 'signal'));
+}
+
+/** R_in in ohm: what the test source sees, or behind its own resistor `driven`, the only way in; infinite where no current flows. */
 export function inputResistance(e: Emitter, network: MidbandNetwork, slopes: Slopes, driven: Handle | null): Handle {
   const { graph, at, classes } = network;
-  const source = graph.holders.findIndex((holders) => holders.some(({ type }) => type === 'signal'));
+  const source = sourceClass(graph);
   const legs = graph.branches.filter(({ a, b }) => a === source || b === source);
   const { w } = respond(e, network, slopes, network.perSignal, null);
   const voltageAt = (c: number): Term => {
@@ -220,15 +239,11 @@ export function inputResistance(e: Emitter, network: MidbandNetwork, slopes: Slo
   if (at.drain === source) conductance = plus(e, conductance, channel);
   if (at.source === source) conductance = minus(e, conductance, channel);
   if (!conductance) return e.constant(Infinity);
-  const throughDriven = legs.find(({ ohms }) => ohms === driven);
-  if (throughDriven && legs.length === 1 && at.drain !== source && at.source !== source) {
-    return emit(e, quotient(e, voltageAt(far(throughDriven)), conductance));
-  }
   const [only] = legs;
+  if (driven !== null) return emit(e, quotient(e, voltageAt(far(only)), conductance));
   const direct =
     legs.length === 1 && graph.holders[far(only)].length > 0 && at.drain !== source && at.source !== source;
-  const seen = direct ? term(only.ohms) : quotient(e, ONE, conductance);
-  return emit(e, driven === null ? seen : minus(e, seen, term(driven)));
+  return emit(e, direct ? term(only.ohms) : quotient(e, ONE, conductance));
 }
 
 /** x / y, infinite where y is 0 at run time. */

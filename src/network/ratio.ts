@@ -3,7 +3,7 @@
 
 import type { Kernel } from './kernel.ts';
 
-/** x / y; with y = 0 it is infinite with the sign of x, and 0 where x is 0 too. */
+/** x / y for y not below 0; with y = 0 it is infinite with the sign of x, and 0 where x is 0 too. */
 export const ratio: Kernel = {
   inputs: ['x', 'y'],
   outputs: ['quotient'],

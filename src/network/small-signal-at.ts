@@ -9,6 +9,14 @@
 
 import { outputConductance, transconductance } from '../fet/index.ts';
 
+/**
+ * V_DS at the terminals from which the channel is saturated, in the device's own sense: V_ov and what the leads drop,
+ * so that V_DS less this is the margin. In cutoff no V_DS saturates it: infinite.
+ */
+export function onsetAt(region: number, vov: number, current: number, leads: number): number {
+  return region === 0 ? Infinity : vov + leads * Math.abs(current);
+}
+
 /** Where `deriveAt` leaves g_m, g_ds, g_mb in siemens. */
 export const slopes = new Float64Array(3);
 

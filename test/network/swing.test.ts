@@ -97,6 +97,13 @@ describe('the swing', () => {
     expect(limits(stage)).toEqual(['ohmic', 'none']);
   });
 
+  it('is not offered where the signal does not reach the FET', () => {
+    const [, ...others] = SELF_BIASED.lines;
+    const stage = lowerText({ ...SELF_BIASED, lines: ['gate: 1e6 to 0 V', 'tap: 1e3 to signal', ...others] });
+    expect(stage.lowering.values.has('swing_up')).toBe(false);
+    expect(stage.lowering.absent.get('swing_down')).toMatch(/does not reach the FET/);
+  });
+
   it('is zero where the stage at rest is not in saturation', () => {
     const stage = lowerText({ ...SELF_BIASED, lines: SELF_BIASED.lines.map((line) => line.replace('5e3', '5e4')) });
     expect(stage.value('region')).toBe(1);
@@ -123,6 +130,11 @@ describe('the swing', () => {
         if (!plain || (setup.family === 'JFET' && value('V_GS') > 0.4) || value('margin') < 0.01) continue;
         compared++;
         const { up, down } = plainSwing(setup, stage);
+        if (!stage.lowering.values.has('swing_up')) {
+          // The signal goes past the FET: nothing in the search limits it, and the stage offers no swing.
+          if (up !== Infinity || down !== Infinity) faults.push(`no swing: ${JSON.stringify(setup)}`);
+          continue;
+        }
         for (const [name, expected] of [
           ['swing_up', up],
           ['swing_down', down],

@@ -118,7 +118,7 @@ function deviceResults(
   put('V_DS', vds, floor);
   put('V_SB', vsb, floor);
   put('V_ov', state.vov, floor);
-  put('V_DSsat', Math.max(0, state.vov), floor);
+  put('V_DSsat', state.vov > 0 ? state.vov + (device.rs + device.rd) * Math.abs(current) : Infinity, floor);
   put('margin', state.margin, 2 * floor);
   putRegion(put, state, floor);
   put('g_m', slopes.gm, 2 * shake);
