@@ -1,9 +1,10 @@
-// Cautions of a stage: what its numbers do not say. Each is looked at after every run.
+// Cautions of a stage or point: what its numbers do not say. Each is looked at after every run.
 // Thresholds without a source are common practice and named as such beside them.
 
 import type { CellTree } from '../language/index.ts';
 import { pathsOf } from '../language/index.ts';
 import { VOLTAGE, formatValue } from '../quantity/index.ts';
+import type { Read } from './draft.ts';
 import type { PartInterface } from './interface.ts';
 import type { StageInHand } from './stage-in-hand.ts';
 
@@ -22,28 +23,57 @@ type Found = { readonly text: string; readonly line: CellTree['line'] };
 
 /** Every caution that is due as the stage stands. */
 export function stageCautions(stage: StageInHand): Found[] {
-  const { tree } = stage;
+  const { tree, fets, lowering, read } = stage;
   const own = (text: string): Found => ({ text, line: tree.line });
-  return [...deviceCautions(stage).map(own), ...voltageCautions(stage).map(own), ...legCautions(stage)];
+  const [{ part, partName }] = fets as [StageInHand['fets'][number]];
+  const value = (offered: string): number => (lowering.values.has(offered) ? read(lowering.values.get(offered)!) : NaN);
+  const idle = lowering.lines ? read(lowering.lines.V_L) : null;
+  return [
+    ...deviceCautions({ part, partName, value, idle, read }).map(own),
+    ...voltageCautions(stage).map(own),
+    ...legCautions(stage),
+  ];
 }
 
-function deviceCautions({ fets, lowering, read }: StageInHand): string[] {
+/** A FET with its numbers, as its cautions take it. */
+interface FetInHand {
+  readonly part: PartInterface;
+  readonly partName: string;
+  /** An offered value by name; NaN where there is none. */
+  readonly value: (offered: string) => number;
+  /** V_DS when no current flows, where the wiring sets one. */
+  readonly idle: number | null;
+  readonly read: Read;
+}
+
+/** What the numbers of one FET, in a stage or at a point, do not say. */
+export function deviceCautions({ part, partName, value, idle, read }: FetInHand): string[] {
   const found: string[] = [];
-  const { part, partName } = fets[0]!;
-  const value = (offered: string): number => (lowering.values.has(offered) ? read(lowering.values.get(offered)!) : NaN);
   const vgs = part.channel * value('V_GS');
   const vds = part.channel * value('V_DS');
+  const vsb = part.channel * value('V_SB');
   const vdg = vds - vgs;
   const vov = value('V_ov');
   const volts = (x: number): string => formatValue(x, VOLTAGE).text;
+  if (vov <= 0) found.push(`${partName} is cut off: no drain current flows, V_ov is ${volts(vov)}.`);
+  if (vds < 0 && vov > 0) {
+    found.push(
+      `${partName} conducts backwards: V_DS is ${volts(part.channel * vds)}, so drain and source have changed places.`,
+    );
+  }
   if (part.family === 'JFET' && Math.max(vgs, -vdg) > GATE_FORWARD) {
     found.push(
       `The gate of ${partName} is forward by ${volts(Math.max(vgs, -vdg))}: it conducts, and the sheet does not count that current.`,
     );
   }
-  if (part.family === 'MOSFET' && vds < -BODY_DIODE) {
+  if (part.family === 'MOSFET' && vsb > -BODY_DIODE && vds < -BODY_DIODE) {
     found.push(
       `The body diode of ${partName} conducts at V_DS = ${volts(part.channel * vds)}; the sheet does not count that current.`,
+    );
+  }
+  if (part.family === 'MOSFET' && vsb < -BODY_DIODE) {
+    found.push(
+      `The bulk of ${partName} is forward: V_SB is ${volts(part.channel * vsb)}. Its junctions conduct, and the sheet does not count that current. Tie the bulk to the source or beyond it.`,
     );
   }
   if (vov > 0 && vov < WEAK) {
@@ -64,8 +94,8 @@ function deviceCautions({ fets, lowering, read }: StageInHand): string[] {
   over('V_DG', vdg, 'V_DGmax');
   over('I_D', value('I_D'), 'I_Dmax');
   if (value('T_J') > limit('T_Jmax')) found.push(`The junction of ${partName} is hotter than its limit T_Jmax.`);
-  if (lowering.lines && Math.abs(read(lowering.lines.V_L)) > limit('V_DSmax')) {
-    found.push(`With ${partName} off, V_DS is ${volts(read(lowering.lines.V_L))}, beyond its limit V_DSmax.`);
+  if (idle !== null && Math.abs(idle) > limit('V_DSmax')) {
+    found.push(`With ${partName} off, V_DS is ${volts(idle)}, beyond its limit V_DSmax.`);
   }
   return found;
 }

@@ -160,22 +160,23 @@ test('a clock that was set back loses no edit', async () => {
   expect(await sheets()).toEqual({ sheet: 'last' });
 });
 
-test('what was left is set aside where another tab has changed or deleted the sheet since', async () => {
-  for (const deed of ['change', 'delete'] as const) {
-    freshDisk();
-    const id = await startSheet('one');
-    const [page, other] = [await openPage(id), await openPage(id)];
-    page.type('mine');
-    vanish(page);
-    // The other tab is one that does not look at the shelf just now.
-    const blind = createTestShelf(clock);
-    if (deed === 'delete') await blind.remove(id);
-    else expect((await blind.save(other.record, typed(other.record, 'theirs'), clock.now())).status).toBe('kept');
-    const expected = deed === 'delete' ? { aside: 'mine' } : { sheet: 'theirs', aside: 'mine' };
-    expect(await sheets()).toEqual(expected);
-    expect(await sheets()).toEqual(expected);
-    expect(smallStorage.entries.size).toBe(0);
-  }
+test.each([
+  [
+    'changed',
+    { aside: 'mine', sheet: 'theirs' },
+    (shelf: Shelf, other: Page) => shelf.save(other.record, typed(other.record, 'theirs'), clock.now()),
+  ],
+  ['deleted', { aside: 'mine' }, (shelf: Shelf, other: Page) => shelf.remove(other.record.id)],
+] as const)('what was left is set aside where another tab has %s the sheet since', async (_, expected, deed) => {
+  const id = await startSheet('one');
+  const [page, other] = [await openPage(id), await openPage(id)];
+  page.type('mine');
+  vanish(page);
+  // The other tab is one that does not look at the shelf just now.
+  await deed(createTestShelf(clock), other);
+  expect(await sheets()).toEqual(expected);
+  expect(await sheets()).toEqual(expected);
+  expect(smallStorage.entries.size).toBe(0);
 });
 
 test('what two pages gather at once is there once', async () => {

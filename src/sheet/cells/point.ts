@@ -6,6 +6,7 @@ import { nearestNames } from '../../language/index.ts';
 import type { FieldTree, PointEntry } from '../../language/index.ts';
 import { OFFERED_VALUES, POINT_STATUS, POINT_STATUS_SENTENCES, lowerPoint } from '../../network/index.ts';
 import { absentValue } from '../absent-value.ts';
+import { deviceCautions } from '../cautions.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
@@ -63,6 +64,16 @@ export function compilePointCell(context: CellContext): Draft {
         id && status === CANNOT_CARRY ? noGateVoltage(part.channel) : (POINT_STATUS_SENTENCES[status] ?? '');
       const text = `${tree.name.name} was not solved. ${reason} No value is shown that rests on it.`;
       return { line: tree.line, message: { code: 'not-solved', text, span: entry.span } };
+    },
+    cautions: (read) => {
+      const value = (offered: string): number => {
+        const handle = lowering.values.get(offered);
+        return handle === undefined ? NaN : read(handle);
+      };
+      return deviceCautions({ part, partName: entry.of.name, value, idle: null, read }).map((text) => ({
+        text,
+        line: tree.line,
+      }));
     },
     workings: (read) => pointWorkings({ part, lowering, ambient: read(ambient), read }),
     fields: (read) =>
