@@ -19,6 +19,8 @@ const SYMMETRIC: ReadonlySet<OperationName> = new Set(['add', 'mul', 'min', 'max
 const KEYED = 2 ** 24;
 
 export interface Builder extends Emitter {
+  /** A number with a slot of its own, though another of the same value may stand beside it: what is turned or drawn alone. */
+  input(x: number): Handle;
   /** Calls any kernel of the table the builder was made with. */
   call(kernel: string, inputs: readonly Handle[], outputs: number): Handle[];
   /** One operation of `OP`; `b` is left out for those of one operand. */
@@ -102,6 +104,7 @@ export function createBuilder(kernels: KernelTable): Builder {
 
   return {
     constant,
+    input: newConstant,
     op,
     call,
     add: (a, b) => op('add', a, b),

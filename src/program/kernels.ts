@@ -1,6 +1,6 @@
 // The kernels of FETs and stages, by name.
 
-import { LAMBDA_ROUTES, ROUTES } from '../fet/index.ts';
+import { LAMBDA_ROUTES, ROUTES, ROW_VALUES } from '../fet/index.ts';
 import { KERNELS } from '../network/index.ts';
 import type { KernelTable } from './segment.ts';
 
@@ -8,4 +8,5 @@ import type { KernelTable } from './segment.ts';
 export const PROGRAM_KERNELS: KernelTable = [
   ...Object.entries(KERNELS).map(([name, { run }]) => ({ name, run })),
   ...[...ROUTES, ...LAMBDA_ROUTES].map(({ id, run }) => ({ name: id, run })),
+  ...Object.entries(ROW_VALUES).map(([row, { run }]) => ({ name: `reading of ${row}`, run })),
 ];

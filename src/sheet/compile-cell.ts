@@ -21,6 +21,7 @@ interface Surroundings {
   look(name: string): Interface | null;
   /** The same array as long as the names are the same. */
   names(): readonly string[];
+  treeOf(name: string): CellTree | null;
   has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
@@ -43,6 +44,8 @@ export interface CompiledCell {
   readonly seen: Map<string, Interface | null>;
   /** The names of all cells, where something was proposed from them. */
   readonly proposedFrom: readonly string[] | null;
+  /** Every cell whose text was taken over. */
+  readonly copied: ReadonlyMap<string, CellTree | null>;
   /** Names whose mere presence was asked for. */
   readonly presence: Map<string, boolean>;
   /** What was compiled rests on values as they stood, not on kinds alone. */
@@ -55,6 +58,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
   const builder = createBuilder(KERNELS);
   const seen = new Map<string, Interface | null>();
   const presence = new Map<string, boolean>();
+  const copied = new Map<string, CellTree | null>();
   let proposedFrom: readonly string[] | null = null;
   let restsOnValues = false;
   let later: Placed | null = null;
@@ -75,6 +79,10 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     has(name) {
       presence.set(name, surroundings.has(name));
       return presence.get(name)!;
+    },
+    treeOf(name) {
+      copied.set(name, surroundings.treeOf(name));
+      return copied.get(name)!;
     },
     now(expr, line) {
       restsOnValues = true;
@@ -135,6 +143,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     seen,
     proposedFrom,
     presence,
+    copied,
     restsOnValues,
     shape: draft.shape?.() ?? null,
   };

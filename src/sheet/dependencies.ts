@@ -4,8 +4,13 @@ import { pathsOf } from '../language/index.ts';
 import type { CellTree, Expr, FieldTree } from '../language/index.ts';
 
 /** The names that occur in a cell where another cell may stand, in order of appearance; T_A for stages and points. */
-export function namesUsed(cell: CellTree): string[] {
+export function namesUsed(cell: CellTree, treeOf: (name: string) => CellTree | null): string[] {
   const names = new Set<string>();
+  collect(cell, names, treeOf);
+  return [...names];
+}
+
+function collect(cell: CellTree, names: Set<string>, treeOf: (name: string) => CellTree | null): void {
   const fromExpr = (expr: Expr | null): void => {
     if (expr) for (const path of pathsOf(expr)) names.add(path.names[0]!.name);
   };
@@ -17,9 +22,13 @@ export function namesUsed(cell: CellTree): string[] {
     case 'part':
       if (entry.fittedTo) names.add(entry.fittedTo.name);
       break;
-    case 'another':
+    case 'another': {
+      // What its first piece reads it reads, too.
+      const first = names.has(entry.of.name) ? null : treeOf(entry.of.name);
       names.add(entry.of.name);
+      if (first) collect(first, names, treeOf);
       break;
+    }
     case 'point':
       names.add(entry.of.name).add('T_A');
       break;
@@ -41,7 +50,6 @@ export function namesUsed(cell: CellTree): string[] {
       break;
   }
   for (const field of cell.fields) fieldNames(field, fromExpr);
-  return [...names];
 }
 
 function fieldNames(field: FieldTree, fromExpr: (expr: Expr | null) => void): void {

@@ -8,6 +8,8 @@ import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueTyp
 import type { Scope } from './scope.ts';
 import type { Expr } from '../language/index.ts';
 import type { Interface } from './interface.ts';
+import { NO_SPREAD } from './spread-draft.ts';
+import type { SpreadDraft } from './spread-draft.ts';
 
 /** Reads a handle after the cell has run. */
 export type Read = (handle: Handle) => number;
@@ -45,6 +47,10 @@ export interface Draft {
   readonly check: ((read: Read) => CheckReading) | null;
   readonly fields: (read: Read) => readonly FieldDraft[];
   readonly spread: ((read: Read) => DeclaredSpread | null) | null;
+  /** What is drawn in each build, and from what. */
+  readonly drawn: SpreadDraft;
+  /** By how much a check holds; null where that has no meaning. */
+  readonly reserve: Handle | null;
   readonly isInput: boolean;
   /** A stage for figures. */
   readonly stage: ((read: Read, solved: boolean) => StageReading) | null;
@@ -61,6 +67,8 @@ export interface CellContext {
   scope(line: Line): Scope;
   /** The cell of this name as others see it; null where there is none. Notes the dependence. */
   look(name: string): Interface | null;
+  /** The text of a cell, taken apart; the cell is compiled again when it changes. */
+  treeOf(name: string): CellTree | null;
   /** The value of an expression as the sheet stands now (its cells are evaluated already). */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
   /** Ambient temperature in kelvin: the cell T_A, else 25 degC. */
@@ -85,6 +93,8 @@ export const EMPTY_DRAFT: Draft = {
   check: null,
   fields: () => [],
   spread: null,
+  drawn: NO_SPREAD,
+  reserve: null,
   isInput: false,
   stage: null,
   shape: null,

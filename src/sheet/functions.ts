@@ -49,7 +49,10 @@ export const FUNCTIONS: ReadonlyMap<string, SheetFunction> = new Map<string, She
   ['if', entry([3, 3], 'if(condition, a, b)', 'a where the condition holds, else b.', choose)],
   [
     'nominal',
-    entry([1, 1], 'nominal(x)', 'x with every input at its nominal value.', (e, s) => compileQuantity(e.args[0]!, s)),
+    entry([1, 1], 'nominal(x)', 'x with every input at its nominal value.', (e, s) => {
+      const x = compileQuantity(e.args[0]!, s);
+      return { type: x.type, handle: s.builder.call('nominal', [x.handle], 1)[0]! };
+    }),
   ],
   [
     'low',

@@ -13,6 +13,10 @@ export type {
   OfferedReading,
   Reading,
   Sheet,
+  SpreadModel,
+  Cut,
+  Drawn,
+  Tie,
   ValueType,
   WorkingStep,
 } from './model.ts';

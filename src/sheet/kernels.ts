@@ -37,13 +37,36 @@ function preferred(series: SeriesName, direction: PreferredDirection): Kernel {
   };
 }
 
+/** Input: x. Output: the same, settled once at the nominal values. */
+const nominal: Kernel = (s, a, p) => {
+  s[a[p + 1]!] = s[a[p]!]!;
+};
+
 /** Every kernel of a sheet's program; a program refers to them by position. */
 export const KERNELS: KernelTable = [
   ...PROGRAM_KERNELS,
   { name: 'select', run: select },
   { name: 'round', run: round },
   { name: 'zero-bias capacitance', run: zeroBias },
-  ...(Object.keys(SERIES) as SeriesName[]).flatMap((series) =>
-    DIRECTIONS.map((direction) => ({ name: preferredKernel(series, direction), run: preferred(series, direction) })),
-  ),
+  ...choices(),
 ];
+
+/** Kernels whose result is a choice: settled once, at the nominal values, and the same in every build. */
+function choices(): { name: string; run: Kernel }[] {
+  const series = (Object.keys(SERIES) as SeriesName[]).flatMap((name) =>
+    DIRECTIONS.map((direction) => ({ name: preferredKernel(name, direction), run: preferred(name, direction) })),
+  );
+  return [{ name: 'nominal', run: nominal }, ...series];
+}
+
+const CHOICES: ReadonlySet<string> = new Set(choices().map(({ name }) => name));
+
+/** Whether the kernel at this place of the table makes a choice; it has one output, its last slot. */
+export function isChoice(kernel: number): boolean {
+  return CHOICES.has(KERNELS[kernel]!.name);
+}
+
+const keep: Kernel = () => {};
+
+/** The kernels of a build: what was chosen at the nominal values stays. */
+export const BUILD_KERNELS: KernelTable = KERNELS.map((kernel, i) => (isChoice(i) ? { ...kernel, run: keep } : kernel));

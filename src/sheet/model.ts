@@ -2,6 +2,7 @@
 // the terminal, the record and the page.
 
 import type { CellTree, SheetTree, Span, Splice } from '../language/index.ts';
+import type { Program } from '../program/index.ts';
 import type { Unit, ValueKind } from '../quantity/index.ts';
 
 export type CellKind =
@@ -192,6 +193,77 @@ export interface Sweep {
   }[];
 }
 
+/** One draw of a build: a component, a row of a part, a field of a point, or a value in service. */
+export interface Drawn {
+  /** `R_S`, `Q1.I_DSS`: what its draws are keyed by. */
+  readonly name: string;
+  readonly cell: string;
+  /** From 0. */
+  readonly line: number;
+  /** The slot that takes the draw: the value itself, or the factor or addend behind a formula. */
+  readonly slot: number;
+  /** Limits of what is drawn, SI; null where an end is open. */
+  readonly spread: DeclaredSpread;
+  /** The slot of the value whose spread it is, and its kind. */
+  readonly valueSlot: number;
+  readonly type: ValueKind;
+}
+
+/** A row of limits that the law of its part does not need: only specimens that read within them belong to the part. */
+export interface Cut {
+  readonly name: string;
+  readonly cell: string;
+  /** From 0. */
+  readonly line: number;
+  /** The slot of what the row reads on the specimen. */
+  readonly slot: number;
+  readonly low: number;
+  readonly high: number;
+}
+
+/** Two draws of a part that go together; `tracking` in -1..1. */
+export interface Tie {
+  readonly cell: string;
+  /** Indices into the draws. */
+  readonly threshold: number;
+  readonly gain: number;
+  /** Whether the quantile that is tied counts down as the drawn value grows. */
+  readonly thresholdFalls: boolean;
+  readonly gainFalls: boolean;
+  readonly tracking: number;
+}
+
+/** A value or condition of the sheet by its path. */
+export interface Wanted {
+  /** `R_S`, `A1.I_D`. */
+  readonly path: string;
+  readonly cell: string;
+  readonly slot: number;
+  readonly type: ValueType;
+}
+
+/** A check as the draws see it. */
+export interface WantedCheck {
+  readonly name: string;
+  /** The slot of its condition: 1 holds, 0 fails, NaN undecided. */
+  readonly slot: number;
+  /** The slot of its reserve; null where there is none. */
+  readonly reserve: number | null;
+}
+
+/** Everything an analysis of spread needs: plain data, which can be posted to a worker. */
+export interface SpreadModel {
+  readonly program: Program;
+  /** Every value as the sheet stands. */
+  readonly slots: Float64Array;
+  readonly drawn: readonly Drawn[];
+  readonly cuts: readonly Cut[];
+  readonly ties: readonly Tie[];
+  /** Every number, region and condition of the sheet that has a value. */
+  readonly values: readonly Wanted[];
+  readonly checks: readonly WantedCheck[];
+}
+
 export interface Sheet {
   readonly tree: SheetTree;
   /** In sheet order; the second of two cells of one name is there, too, with a fault. */
@@ -211,6 +283,8 @@ export interface Sheet {
   stage(name: string): StageReading | null;
   /** The curves of a plot cell over its range, at so many points; null where there is none. */
   sweep(plot: string, points: number): Sweep | null;
+  /** What spreads, and everything that it moves. */
+  spreadModel(): SpreadModel;
   /** Takes a new text; recompiles and recomputes just what that reaches; gives the names whose readings changed. */
   update(text: string): ReadonlySet<string>;
   /** The same for splices of the present text. */

@@ -99,7 +99,7 @@ export function fieldsOf(route: Route, given: GivenFields): GivenField[] {
 }
 
 /** The names of the fields a route takes, each once. */
-function fieldNames(route: Route): string[] {
+export function fieldNames(route: Route): string[] {
   return [...new Set(route.needs.map((need) => parseInput(need).field))];
 }
 

@@ -65,7 +65,7 @@ function waitsFor(name: string, tree: CellTree): Fault {
 }
 
 /** Where a line of the compiled tree stands now. */
-function lineNow(node: Node, line: Line): Line {
+export function lineNow(node: Node, line: Line): Line {
   const { compiledTree, tree } = node;
   if (line === compiledTree.line) return tree.line;
   const field = compiledTree.fields.findIndex((candidate) => candidate.line === line);

@@ -23,6 +23,7 @@ import type { CellReading, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { faultAt, readCell } from './readings.ts';
 import { createScope } from './resolve.ts';
+import { spreadModel } from './spread-model.ts';
 import { sweepPlot } from './sweep.ts';
 
 /** The compiled form of a whole sheet, for those who evaluate it many times over. */
@@ -56,6 +57,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
   let allNames: readonly string[] = [];
   const names = (): readonly string[] => allNames;
   const has = (name: string): boolean => byName.has(name);
+  const treeOf = (name: string): CellTree | null => byName.get(name)?.tree ?? null;
   const look = (name: string): Interface | null => byName.get(name)?.compiled.interface ?? null;
 
   function now(expr: Expr, line: Line): { type: ValueType; value: number } {
@@ -75,6 +77,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
       look,
       names,
       has,
+      treeOf,
       now,
       allocate(size) {
         if (size > node.capacity) {
@@ -95,9 +98,10 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
 
   function needsCompiling(node: Node, cellTree: CellTree): boolean {
     if (node.standsIn || !sameCell(node.compiledTree, cellTree)) return true;
-    const { seen, proposedFrom, presence } = node.compiled;
+    const { seen, proposedFrom, presence, copied } = node.compiled;
     for (const [name, then] of seen) if (look(name) !== then) return true;
     for (const [name, then] of presence) if (has(name) !== then) return true;
+    for (const [name, then] of copied) if (!isSameText(treeOf(name), then)) return true;
     return proposedFrom !== null && proposedFrom !== allNames;
   }
 
@@ -198,7 +202,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     const before = nodes.map(({ uses, usedBy }) => ({ uses, usedBy }));
     for (const node of nodes) node.usedBy = [];
     nodes.forEach((node, k) => {
-      node.uses = namesUsed(node.tree)
+      node.uses = namesUsed(node.tree, treeOf)
         .map((name) => byName.get(name))
         .filter((used) => used !== undefined)
         .map((used) => indexOf.get(used)!);
@@ -259,6 +263,10 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     },
     update,
     edit: (splices) => update(applySplices(tree.text, splices)),
+    spreadModel() {
+      const { program, slots: values } = sheet.compiled();
+      return spreadModel(nodes, program, values);
+    },
     compiled() {
       const live = order.filter((k) => !nodes[k]!.fault && !nodes[k]!.waitsFor);
       const position = new Map(live.map((k, i) => [k, i]));
@@ -292,6 +300,10 @@ function createNode(key: string, tree: CellTree): Node {
 
 function install(segment: { constantSlots: Int32Array; constantValues: Float64Array }, slots: Float64Array): void {
   for (let i = 0; i < segment.constantSlots.length; i++) slots[segment.constantSlots[i]!] = segment.constantValues[i]!;
+}
+
+function isSameText(a: CellTree | null, b: CellTree | null): boolean {
+  return a === b || (a !== null && b !== null && sameCell(a, b));
 }
 
 /** Whether two cells are the same text, wherever they stand. */
@@ -352,5 +364,5 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
   const nothing = (): never => {
     throw new Error('A broken cell asks for nothing.');
   };
-  return compileCell(broken, { look: nothing, names: nothing, has: nothing, now: nothing, allocate: nothing });
+  return compileCell(broken, { look: nothing, names: nothing, treeOf: nothing, has: nothing, now: nothing, allocate: nothing });
 }

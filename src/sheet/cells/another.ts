@@ -1,35 +1,34 @@
-// A further piece of the same kind: of one type with the first; its own draws are not computed yet.
+// A further piece of the same kind: what its first piece is, with draws of its own.
 
-import type { AnotherEntry } from '../../language/index.ts';
-import { EMPTY_DRAFT } from '../draft.ts';
+import type { AnotherEntry, CellTree } from '../../language/index.ts';
 import type { CellContext, Draft } from '../draft.ts';
 import { Waiting, kindName } from '../resolve.ts';
 import { stop } from '../stop.ts';
+import { compilePartCell } from './part.ts';
+import { compileQuantityCell } from './quantity.ts';
 
-/** Checks an `another` cell. */
+/** Compiles an `another` cell: the entry of its first piece once more, under its own name. */
 export function compileAnotherCell(context: CellContext): Draft {
   const { tree } = context;
-  const { of, span } = tree.entry as AnotherEntry;
+  const { of } = tree.entry as AnotherEntry;
   const first = context.look(of.name);
   if (first && !first.settled) throw new Waiting(of.name);
-  if (!first || (first.kind !== 'quantity' && first.kind !== 'part' && first.kind !== 'another')) {
+  const original = first && firstPiece(of.name, context);
+  if (!original) {
     stop(
       'another-of',
       `another wants a component or a part of this sheet; ${of.name} is ${first ? kindName(first.kind) : 'not there'}.`,
       of.span,
     );
   }
-  context.later('A further piece of the same kind', span, tree.line);
-  return {
-    ...EMPTY_DRAFT,
-    type: first.type,
-    offers: [...first.offers].map(([name, offer]) => ({
-      name,
-      type: offer.type,
-      handle: null,
-      sentence: '',
-      missing: offer.missing,
-    })),
-    extra: first.extra,
-  };
+  const again: CellContext = { ...context, tree: { ...original, name: tree.name } };
+  const draft = original.entry.type === 'part' ? compilePartCell(again) : compileQuantityCell(again);
+  return { ...draft, isInput: false };
+}
+
+/** The quantity or part at the end of a chain of `another`; null where there is another kind of cell. */
+function firstPiece(name: string, context: CellContext): CellTree | null {
+  const found = context.treeOf(name);
+  if (found?.entry.type === 'another') return firstPiece(found.entry.of.name, context);
+  return found?.entry.type === 'quantity' || found?.entry.type === 'part' ? found : null;
 }

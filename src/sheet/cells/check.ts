@@ -36,6 +36,7 @@ export function compileCheckCell(context: CellContext): Draft {
     ...EMPTY_DRAFT,
     type: 'condition',
     value: holds.handle,
+    reserve: reserve?.handle ?? null,
     // A comparison with what is no number neither holds nor fails: there is no verdict at all.
     verify: (read) =>
       Number.isNaN(read(holds.handle)) ? { line: tree.line, message: diagnose(condition, context, tree.line) } : null,

@@ -13,6 +13,7 @@ import { CONDITION_KINDS, PART_FIELDS } from '../part-fields.ts';
 import type { GivenField, GivenFields } from '../part-given.ts';
 import { partDevice } from '../part-device.ts';
 import { partLaw } from '../part-law.ts';
+import { fieldName, partSpread } from '../part-spread.ts';
 import { partWorkings } from '../part-workings.ts';
 import { stop } from '../stop.ts';
 import { typeName } from '../value-type.ts';
@@ -43,7 +44,7 @@ export function compilePartCell(context: CellContext): Draft {
   return {
     ...EMPTY_DRAFT,
     offers: [
-      ...fields.map((field, i): OfferDraft => offerOf(field, fields, i)),
+      ...fields.map((field) => offerOf(field, fieldName(field, given))),
       ...law.forms.filter((form) => !given.has(form.name)),
     ],
     verify: (read) => verifyPart(entry, channel, fields, law.verify, read),
@@ -58,6 +59,7 @@ export function compilePartCell(context: CellContext): Draft {
     ].map((text) => text),
     workings: (read) => partWorkings(tree.name.name, entry, given, law, read),
     fields: (read) => fields.map((field) => fieldReading(field, read)),
+    drawn: partSpread(entry.family, channel, law, given, builder),
     extra: { type: 'part', channel, family: entry.family, device, limits, statedTemperatureLaws },
   };
 }
@@ -152,11 +154,10 @@ function verifyPart(
   return law(read);
 }
 
-function offerOf(field: GivenField, all: readonly GivenField[], index: number): OfferDraft {
-  const nth = all.slice(0, index).filter((earlier) => earlier.name === field.name).length;
+function offerOf(field: GivenField, name: string): OfferDraft {
   const { body } = field.tree;
   return {
-    name: nth === 0 ? field.name : `${field.name}_${nth + 1}`,
+    name,
     type: field.kind,
     handle: field.handle,
     sentence: PART_FIELDS[field.name]!.sentence,

@@ -10,6 +10,7 @@ import { deviceCautions } from '../cautions.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
+import { NO_SPREAD, drawsOf } from '../spread-draft.ts';
 import { pointWorkings } from '../stage-workings.ts';
 import { stop } from '../stop.ts';
 import { typeName } from '../value-type.ts';
@@ -76,6 +77,7 @@ export function compilePointCell(context: CellContext): Draft {
       }));
     },
     workings: (read) => pointWorkings({ part, lowering, ambient: read(ambient), read }),
+    drawn: { ...NO_SPREAD, draws: [...given].flatMap(([name, field]) => drawsOf(name, field, field.tree.line)) },
     fields: (read) =>
       [...given].map(([name, field]) => ({
         name,

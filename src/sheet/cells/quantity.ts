@@ -16,6 +16,8 @@ import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, Read } from '../draft.ts';
 import type { DeclaredSpread, ValueType } from '../model.ts';
 import { operandText } from '../scope.ts';
+import { NO_SPREAD, drawsOf } from '../spread-draft.ts';
+import type { QuantityDraw } from '../spread-draft.ts';
 import { stop } from '../stop.ts';
 import { isQuantity, typeName } from '../value-type.ts';
 import { expressionStep } from '../workings.ts';
@@ -23,6 +25,8 @@ import { expressionStep } from '../workings.ts';
 export interface CompiledQuantity {
   readonly type: ValueType;
   readonly handle: Handle;
+  /** null where nothing is drawn. */
+  readonly draw: QuantityDraw | null;
   /** null where no spread is declared. */
   readonly spread: ((read: Read) => DeclaredSpread) | null;
   /** The entry is one number. */
@@ -39,29 +43,58 @@ export function compileQuantityEntry(entry: QuantityEntry, line: Line, context: 
   if (entry.value === null) {
     const { kind, value } = standIn(entry, line);
     checkUnit(entry, kind);
-    const handle = context.builder.constant(value);
+    const handle = context.builder.input(value);
     return {
       type: kind,
       handle,
+      draw: { handle, form: 'value' },
       spread: declared(entry, handle, kind, line),
       isInput: true,
       chosen: true,
       fromZero: false,
     };
   }
-  const value = scope.compile(entry.value);
+  const isInput = isNumber(entry.value);
+  const { type, handle: formula } = scope.compile(entry.value);
+  const value = { type, handle: isInput && isQuantity(type) ? context.builder.input(numberOf(entry.value)) : formula };
   if (isQuantity(value.type)) checkUnit(entry, value.type);
   else if (entry.spread)
     stop('spread-of-word', `A spread belongs to a number; this is ${typeName(value.type)}.`, entry.spread.span);
   const spread = entry.spread && isQuantity(value.type) ? declared(entry, value.handle, value.type, line) : null;
+  const draw = spread && drawOf(entry, value.handle, isInput, context);
   return {
     type: value.type,
-    handle: value.handle,
+    handle: draw ? drawnHandle(value.handle, draw, context) : value.handle,
+    draw,
     spread,
-    isInput: isNumber(entry.value),
+    isInput,
     chosen: false,
     fromZero: false,
   };
+}
+
+/** Where the draws of an entry with a value enter. */
+function drawOf(entry: QuantityEntry, value: Handle, isInput: boolean, { builder }: CellContext): QuantityDraw {
+  if (isInput) return { handle: value, form: 'value' };
+  return isRelative(entry.spread!.tolerance)
+    ? { handle: builder.input(1), form: 'factor' }
+    : { handle: builder.input(0), form: 'addend' };
+}
+
+/** The value of an entry with its draw in it; at the nominal to the last bit the formula's own. */
+function drawnHandle(value: Handle, draw: QuantityDraw, { builder }: CellContext): Handle {
+  switch (draw.form) {
+    case 'value':
+      return value;
+    case 'factor':
+      return builder.mul(value, draw.handle);
+    case 'addend':
+      return builder.add(value, draw.handle);
+  }
+}
+
+function isRelative(tolerance: Literal | null): boolean {
+  return tolerance?.unit?.symbol === '%' || tolerance?.unit?.symbol === 'ppm';
 }
 
 /** The same quantity with its open low end at 0, for what is never below it; nothing else is changed. */
@@ -90,6 +123,7 @@ export function compileQuantityCell(context: CellContext): Draft {
     value: compiled.handle,
     isInput: compiled.isInput,
     spread: compiled.spread,
+    drawn: { ...NO_SPREAD, draws: drawsOf('', compiled, tree.line) },
     assumptions: [
       ...(compiled.chosen ? [`${tree.name.name}: no nominal is given; ${standInText(entry)} stands in.`] : []),
       ...(compiled.fromZero ? [fromZeroText(tree.name.name)] : []),
@@ -169,7 +203,7 @@ function declared(entry: QuantityEntry, nominal: Handle, kind: ValueKind, line: 
   } as const;
   if (spread.tolerance) {
     const { tolerance } = spread;
-    const relative = tolerance.unit?.symbol === '%' || tolerance.unit?.symbol === 'ppm';
+    const relative = isRelative(tolerance);
     const wanted = kind.scale === 'celsius' ? TEMPERATURE_DIFFERENCE : kind;
     if (relative ? kind.scale !== 'linear' : !sameKind(tolerance.kind, wanted)) {
       stop(

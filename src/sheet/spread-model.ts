@@ -1,0 +1,68 @@
+// The sheet as an analysis of spread sees it: what is drawn, which specimens there are, and every value that moves.
+
+import type { Program } from '../program/index.ts';
+import type { Cut, Drawn, SpreadModel, Tie, Wanted, WantedCheck } from './model.ts';
+import type { Node } from './node.ts';
+import { lineNow } from './readings.ts';
+
+/** Collects the spread of the cells that have values; `nodes` in the order of the sheet. */
+export function spreadModel(nodes: readonly Node[], program: Program, slots: Float64Array): SpreadModel {
+  const drawn: Drawn[] = [];
+  const cuts: Cut[] = [];
+  const ties: Tie[] = [];
+  const values: Wanted[] = [];
+  const checks: WantedCheck[] = [];
+  for (const node of nodes) {
+    if (node.fault || node.waitsFor) continue;
+    const { draft, slot } = node.compiled;
+    const read = (handle: number): number => slots[slot(handle)]!;
+    const cell = node.tree.name.name;
+    const path = (field: string): string => (field === '' ? cell : `${cell}.${field}`);
+    const first = drawn.length;
+    for (const { field, handle, line, spread, value, type } of draft.drawn.draws) {
+      drawn.push({
+        name: path(field),
+        cell,
+        line: lineNow(node, line).index,
+        slot: slot(handle),
+        spread: spread(read),
+        valueSlot: slot(value),
+        type,
+      });
+    }
+    for (const { field, handle, line, limits } of draft.drawn.cuts) {
+      const { low, high } = limits(read);
+      cuts.push({
+        name: path(field),
+        cell,
+        line: lineNow(node, line).index,
+        slot: slot(handle),
+        low: low ?? -Infinity,
+        high: high ?? Infinity,
+      });
+    }
+    const { tie } = draft.drawn;
+    if (tie) {
+      const place = (field: string): number => drawn.findIndex(({ name }, i) => i >= first && name === path(field));
+      const [threshold, gain] = [place(tie.threshold), place(tie.gain)];
+      if (threshold >= 0 && gain >= 0) {
+        const { thresholdFalls, gainFalls } = tie;
+        ties.push({ cell, threshold, gain, thresholdFalls, gainFalls, tracking: read(tie.tracking) });
+      }
+    }
+    if (draft.type !== null && draft.value !== null) {
+      values.push({ path: cell, cell, slot: node.compiled.interface.slot, type: draft.type });
+    }
+    if (draft.check) {
+      checks.push({
+        name: cell,
+        slot: node.compiled.interface.slot,
+        reserve: draft.reserve === null ? null : slot(draft.reserve),
+      });
+    }
+    for (const [name, offer] of node.compiled.interface.offers) {
+      if (offer.slot >= 0) values.push({ path: path(name), cell, slot: offer.slot, type: offer.type });
+    }
+  }
+  return { program, slots, drawn, cuts, ties, values, checks };
+}
