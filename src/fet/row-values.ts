@@ -74,9 +74,7 @@ function currentAt(d: Device, gate: number): number {
 /** Transconductance at a gate voltage. */
 function slopeAt(d: Device, gate: number): number {
   const drive = gate - d.vto;
-  return d.drain === d.drain
-    ? transconductance(d.beta, d.lambda, drive, d.drain)
-    : 2 * d.beta * Math.max(0, drive);
+  return d.drain === d.drain ? transconductance(d.beta, d.lambda, drive, d.drain) : 2 * d.beta * Math.max(0, drive);
 }
 
 const gateOrZero = (d: Device): number => (d.gate === d.gate ? d.gate : 0);

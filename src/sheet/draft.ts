@@ -3,13 +3,11 @@
 import type { CellTree, Line, Message, Span } from '../language/index.ts';
 import type { Builder } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
-import type { Unit } from '../quantity/index.ts';
+import type { Unit, ValueKind } from '../quantity/index.ts';
 import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueType, WorkingStep } from './model.ts';
 import type { Scope } from './scope.ts';
 import type { Expr } from '../language/index.ts';
 import type { Interface } from './interface.ts';
-import { NO_SPREAD } from './spread-draft.ts';
-import type { SpreadDraft } from './spread-draft.ts';
 
 /** Reads a handle after the cell has run. */
 export type Read = (handle: Handle) => number;
@@ -34,6 +32,44 @@ export interface OfferDraft {
 
 /** A field with the line it stands in. */
 export type FieldDraft = Omit<FieldReading, 'line'> & { readonly line: Line };
+
+/** One draw; `field` is '' for a quantity cell, else the name of a part's or point's field. */
+interface DrawDraft {
+  readonly field: string;
+  readonly handle: Handle;
+  readonly line: Line;
+  /** What is drawn from: limits of the value, or of the factor or addend that stands behind a formula. */
+  readonly spread: (read: Read) => DeclaredSpread;
+  /** The value whose spread it is. */
+  readonly value: Handle;
+  readonly type: ValueKind;
+}
+
+/** A row that is not needed to compute and has limits: specimens that read otherwise do not belong to the part. */
+interface CutDraft {
+  readonly field: string;
+  readonly line: Line;
+  /** What the row reads on the specimen. */
+  readonly handle: Handle;
+  readonly limits: (read: Read) => DeclaredSpread;
+}
+
+/** Two fields of a part whose draws go together (`tracking`). */
+interface TieDraft {
+  /** The row that places the threshold, and whether its quantile counts down as its value grows. */
+  readonly threshold: string;
+  readonly thresholdFalls: boolean;
+  /** The row that says how much there is. */
+  readonly gain: string;
+  readonly gainFalls: boolean;
+  readonly tracking: Handle;
+}
+
+export interface SpreadDraft {
+  readonly draws: readonly DrawDraft[];
+  readonly cuts: readonly CutDraft[];
+  readonly tie: TieDraft | null;
+}
 
 export interface Draft {
   readonly type: ValueType | null;
@@ -80,6 +116,9 @@ export interface CellContext {
   /** Something is understood but not computed by now: the cell gets no value. */
   later(what: string, span: Span, line: Line): void;
 }
+
+/** Nothing spreads. */
+export const NO_SPREAD: SpreadDraft = { draws: [], cuts: [], tie: null };
 
 /** A draft of a cell that has no code of its own; kinds override what they have. */
 export const EMPTY_DRAFT: Draft = {

@@ -4,7 +4,7 @@ import type { FieldTree } from '../language/index.ts';
 import type { Route } from '../fet/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { ValueKind } from '../quantity/index.ts';
-import type { CompiledQuantity } from './cells/quantity.ts';
+import type { CompiledQuantity } from './compiled-quantity.ts';
 
 /** One field of a part as it was given. */
 export interface GivenField {

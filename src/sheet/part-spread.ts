@@ -7,8 +7,8 @@ import type { Builder } from '../program/index.ts';
 import type { GivenField, GivenFields } from './part-given.ts';
 import { fieldNames } from './part-law.ts';
 import type { PartLaw } from './part-law.ts';
-import { drawsOf } from './spread-draft.ts';
-import type { SpreadDraft } from './spread-draft.ts';
+import { drawsOf } from './compiled-quantity.ts';
+import type { SpreadDraft } from './draft.ts';
 
 /** Rows that place the threshold of a law. */
 const THRESHOLD_ROWS: readonly string[] = ['V_P', 'V_GSoff', 'V_TO', 'V_GSth'];
@@ -69,8 +69,7 @@ function readingOf(
   builder: Builder,
 ): Handle {
   const defaults = DEFAULTS[family];
-  const only = (name: string, otherwise: number): Handle =>
-    given.get(name)?.[0]?.handle ?? builder.constant(otherwise);
+  const only = (name: string, otherwise: number): Handle => given.get(name)?.[0]?.handle ?? builder.constant(otherwise);
   const stated = (name: string): Handle => builder.constant(field.conditions.get(name) ?? NaN);
   const inputs = [
     builder.constant(channel),

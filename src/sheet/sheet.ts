@@ -364,5 +364,12 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
   const nothing = (): never => {
     throw new Error('A broken cell asks for nothing.');
   };
-  return compileCell(broken, { look: nothing, names: nothing, treeOf: nothing, has: nothing, now: nothing, allocate: nothing });
+  return compileCell(broken, {
+    look: nothing,
+    names: nothing,
+    treeOf: nothing,
+    has: nothing,
+    now: nothing,
+    allocate: nothing,
+  });
 }

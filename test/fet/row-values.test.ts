@@ -31,7 +31,11 @@ const device = fc.record({
 const fixed = { n: 1.1, T_nom: 298.15, W: 20e-6, L: 2e-6 };
 
 /** Each row with conditions under which the route's formula is unique, as functions of the drive. */
-const CASES: readonly { readonly row: string; readonly route: string; readonly at: Readonly<Record<string, number>> }[] = [
+const CASES: readonly {
+  readonly row: string;
+  readonly route: string;
+  readonly at: Readonly<Record<string, number>>;
+}[] = [
   { row: 'I_DSS', route: 'V_P', at: {} },
   { row: 'I_DSS', route: 'V_P', at: { V_DS: 15 } },
   { row: 'I_DSS', route: 'V_P', at: { V_DS: 0.2 } },

@@ -7,16 +7,17 @@ import type { FieldTree, PointEntry } from '../../language/index.ts';
 import { OFFERED_VALUES, POINT_STATUS, POINT_STATUS_SENTENCES, lowerPoint } from '../../network/index.ts';
 import { absentValue } from '../absent-value.ts';
 import { deviceCautions } from '../cautions.ts';
-import { EMPTY_DRAFT } from '../draft.ts';
+import { drawsOf } from '../compiled-quantity.ts';
+import type { CompiledQuantity } from '../compiled-quantity.ts';
+import { EMPTY_DRAFT, NO_SPREAD } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
-import { NO_SPREAD, drawsOf } from '../spread-draft.ts';
+
 import { pointWorkings } from '../stage-workings.ts';
 import { stop } from '../stop.ts';
 import { typeName } from '../value-type.ts';
 import { partOf } from './part-of.ts';
 import { compileQuantityEntry } from './quantity.ts';
-import type { CompiledQuantity } from './quantity.ts';
 import { labelOf } from './stage-places.ts';
 
 const FIELDS: Readonly<Record<string, ValueKind>> = { V_GS: VOLTAGE, I_D: CURRENT, V_DS: VOLTAGE, V_SB: VOLTAGE };

@@ -12,30 +12,16 @@ import type { ValueKind } from '../../quantity/index.ts';
 import type { Expr, Line, Literal, QuantityEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
 import { diagnose } from '../diagnose.ts';
-import { EMPTY_DRAFT } from '../draft.ts';
+import { drawsOf } from '../compiled-quantity.ts';
+import type { CompiledQuantity, QuantityDraw } from '../compiled-quantity.ts';
+import { EMPTY_DRAFT, NO_SPREAD } from '../draft.ts';
 import type { CellContext, Draft, Read } from '../draft.ts';
 import type { DeclaredSpread, ValueType } from '../model.ts';
 import { operandText } from '../scope.ts';
-import { NO_SPREAD, drawsOf } from '../spread-draft.ts';
-import type { QuantityDraw } from '../spread-draft.ts';
+
 import { stop } from '../stop.ts';
 import { isQuantity, typeName } from '../value-type.ts';
 import { expressionStep } from '../workings.ts';
-
-export interface CompiledQuantity {
-  readonly type: ValueType;
-  readonly handle: Handle;
-  /** null where nothing is drawn. */
-  readonly draw: QuantityDraw | null;
-  /** null where no spread is declared. */
-  readonly spread: ((read: Read) => DeclaredSpread) | null;
-  /** The entry is one number. */
-  readonly isInput: boolean;
-  /** The sheet chose the nominal between the limits: a sentence for the list of assumptions. */
-  readonly chosen: boolean;
-  /** Its low end was left open and is 0 by nature. */
-  readonly fromZero: boolean;
-}
 
 /** Compiles value and spread of an entry; stops where limits do not fit the value. */
 export function compileQuantityEntry(entry: QuantityEntry, line: Line, context: CellContext): CompiledQuantity {
