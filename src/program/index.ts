@@ -7,4 +7,5 @@ export { PROGRAM_KERNELS } from './kernels.ts';
 export type { OperationName } from './operations.ts';
 export { assemble, createPropagation, createSlots, markDependents, propagate, runAll } from './program.ts';
 export type { Program } from './program.ts';
+export { reachOf, reaches, resultsOf } from './reach.ts';
 export type { Kernel, KernelTable, Segment } from './segment.ts';

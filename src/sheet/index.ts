@@ -14,12 +14,11 @@ export type {
   Reading,
   Sheet,
   SpreadModel,
-  Cut,
   Drawn,
   Tie,
   ValueType,
   WorkingStep,
 } from './model.ts';
 export { PART_FIELDS } from './part-fields.ts';
-export { KERNELS } from './kernels.ts';
+export { KERNELS, isChoice } from './kernels.ts';
 export { createSheet } from './sheet.ts';

@@ -264,7 +264,8 @@ export interface SpreadModel {
   readonly checks: readonly WantedCheck[];
 }
 
-export interface Sheet {
+/** What is read of a sheet. */
+export interface SheetView {
   readonly tree: SheetTree;
   /** In sheet order; the second of two cells of one name is there, too, with a fault. */
   cells(): readonly CellReading[];
@@ -283,6 +284,11 @@ export interface Sheet {
   stage(name: string): StageReading | null;
   /** The curves of a plot cell over its range, at so many points; null where there is none. */
   sweep(plot: string, points: number): Sweep | null;
+}
+
+export interface Sheet extends SheetView {
+  /** The sheet as a build would have it whose draws, by slot, have these values. */
+  standing(at: ReadonlyMap<number, number>): SheetView;
   /** What spreads, and everything that it moves. */
   spreadModel(): SpreadModel;
   /** Takes a new text; recompiles and recomputes just what that reaches; gives the names whose readings changed. */

@@ -19,12 +19,12 @@ import { topologicalOrder } from './graph.ts';
 import { sameInterface } from './interface.ts';
 import type { Interface } from './interface.ts';
 import { KERNELS } from './kernels.ts';
-import type { CellReading, Sheet, ValueType } from './model.ts';
+import type { Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
-import { faultAt, readCell } from './readings.ts';
 import { createScope } from './resolve.ts';
 import { spreadModel } from './spread-model.ts';
-import { sweepPlot } from './sweep.ts';
+import { createView, stateAt, waiting } from './view.ts';
+import type { SheetState } from './view.ts';
 
 /** The compiled form of a whole sheet, for those who evaluate it many times over. */
 interface CompiledSheet {
@@ -217,52 +217,21 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     return relinked;
   }
 
-  function reading(node: Node): CellReading {
-    node.reading ??= readCell(node, nodes, (slot) => slots[slot]!);
-    return node.reading;
-  }
-
   update(text);
 
+  const state = (): SheetState => ({ tree, nodes, byName, order, slots, now });
+  const view = createView(state);
   const sheet: Sheet & { compiled(): CompiledSheet } = {
+    ...view,
     get tree() {
       return tree;
     },
-    cells: () => nodes.map(reading),
-    cell(name) {
-      const node = byName.get(name);
-      return node ? reading(node) : null;
-    },
-    loose: () => tree.loose.map(({ line, message }) => faultAt(message, line)),
-    cautions: () => nodes.flatMap((node) => reading(node).cautions),
-    assumptions: () => nodes.flatMap((node) => reading(node).assumptions),
-    error: (name) => sheet.cell(name)?.fault ?? null,
-    value(path) {
-      const [name, ...rest] = path.split('.');
-      const cell = sheet.cell(name!);
-      if (!cell || cell.fault || cell.waitsFor) return null;
-      if (rest.length === 0) return cell.reading?.value ?? null;
-      return cell.values.find((value) => value.name === rest.join('.'))?.value ?? null;
-    },
-    workings(name) {
-      const node = byName.get(name);
-      if (!node || node.fault || node.waitsFor) return [];
-      const { draft, slot } = node.compiled;
-      return draft.workings((handle) => slots[slot(handle)]!);
-    },
-    stage(name) {
-      const node = byName.get(name);
-      if (!node || node.waitsFor || !node.compiled.draft.stage) return null;
-      const { draft, slot } = node.compiled;
-      return draft.stage!((handle) => slots[slot(handle)]!, node.fault === null);
-    },
-    sweep(plot, points) {
-      const node = byName.get(plot);
-      if (!node || node.fault || node.waitsFor) return null;
-      return sweepPlot(node, points, { nodes, byName, order, slots, now });
-    },
     update,
     edit: (splices) => update(applySplices(tree.text, splices)),
+    standing(at) {
+      const standing = stateAt(state(), at);
+      return createView(() => standing);
+    },
     spreadModel() {
       const { program, slots: values } = sheet.compiled();
       return spreadModel(nodes, program, values);
@@ -315,15 +284,6 @@ function sameCell(a: CellTree, b: CellTree): boolean {
     a.fields.every((field, i) => field.line.tree === b.fields[i]!.line.tree) &&
     a.rows.every((row, i) => row.line.tree === b.rows[i]!.line.tree)
   );
-}
-
-/** The first cell used that has no values just now. */
-function waiting(compiled: CompiledCell, byName: ReadonlyMap<string, Node>): string | null {
-  for (const name of compiled.seen.keys()) {
-    const node = byName.get(name);
-    if (node && (node.fault || node.waitsFor)) return name;
-  }
-  return null;
 }
 
 function duplicate(tree: CellTree, byName: ReadonlyMap<string, Node>): Placed {
