@@ -12,6 +12,7 @@ import type { Interface, Offer } from './interface.ts';
 import { KERNELS } from './kernels.ts';
 import type { ValueType } from './model.ts';
 import { Waiting, createScope } from './resolve.ts';
+import type { EndName } from './scope.ts';
 import { Stop } from './stop.ts';
 
 /** 25 degC, where the sheet has no cell T_A. */
@@ -25,8 +26,17 @@ interface Surroundings {
   has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
+  /** Whether ends of values can be computed. */
+  readonly hasEnds: boolean;
   /** A block of slots for the cell: its present one where that is wide enough. */
   allocate(size: number): number;
+}
+
+/** The least or largest of the value in a slot, wanted in another slot. */
+export interface WantedEnd {
+  readonly which: EndName;
+  readonly of: number;
+  readonly into: number;
 }
 
 export interface CompiledCell {
@@ -44,6 +54,8 @@ export interface CompiledCell {
   readonly seen: Map<string, Interface | null>;
   /** The names of all cells, where something was proposed from them. */
   readonly proposedFrom: readonly string[] | null;
+  /** Ends of values that are put into slots before the cell runs for good. */
+  readonly ends: readonly WantedEnd[];
   /** Every cell whose text was taken over. */
   readonly copied: ReadonlyMap<string, CellTree | null>;
   /** Names whose mere presence was asked for. */
@@ -59,6 +71,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
   const seen = new Map<string, Interface | null>();
   const presence = new Map<string, boolean>();
   const copied = new Map<string, CellTree | null>();
+  const ends: { which: EndName; of: Handle; into: Handle }[] = [];
   let proposedFrom: readonly string[] | null = null;
   let restsOnValues = false;
   let later: Placed | null = null;
@@ -67,6 +80,14 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     const found = surroundings.look(name);
     seen.set(name, found);
     return found;
+  };
+  const end = (which: EndName, of: Handle): Handle => {
+    const own = builder.own(of);
+    const present = ends.find((each) => each.which === which && each.of === own);
+    if (present) return present.into;
+    const into = builder.input(NaN);
+    ends.push({ which, of: own, into });
+    return into;
   };
   const note = (message: Message, line: Line): void => {
     later ??= { message, line };
@@ -88,7 +109,13 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
       restsOnValues = true;
       return surroundings.now(expr, line);
     },
-    scope: (line) => createScope(builder, line, { look, names, later: (message) => note(message, line) }),
+    scope: (line) =>
+      createScope(builder, line, {
+        look,
+        names,
+        later: (message) => note(message, line),
+        ...(surroundings.hasEnds ? { end } : {}),
+      }),
     later: (what, span, line) => note({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span }, line),
     ambient() {
       const cell = look('T_A');
@@ -144,6 +171,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     proposedFrom,
     presence,
     copied,
+    ends: failed ? [] : ends.map(({ which, of, into }) => ({ which, of: slot(of), into: slot(into) })),
     restsOnValues,
     shape: draft.shape?.() ?? null,
   };

@@ -8,7 +8,7 @@ import type { OperationName } from '../program/index.ts';
 import { advice, constantNumber, sideBySide, squareRoot } from './arithmetic.ts';
 import { compilePlain, compileQuantity } from './operand.ts';
 import { preferredKernel } from './kernels.ts';
-import type { Scope, Typed } from './scope.ts';
+import type { EndName, Scope, Typed } from './scope.ts';
 import { operandText } from './scope.ts';
 import { stop } from './stop.ts';
 import { isQuantity, sameType, typeName } from './value-type.ts';
@@ -54,14 +54,8 @@ export const FUNCTIONS: ReadonlyMap<string, SheetFunction> = new Map<string, She
       return { type: x.type, handle: s.builder.call('nominal', [x.handle], 1)[0]! };
     }),
   ],
-  [
-    'low',
-    entry([1, 1], 'low(x)', 'The least x over the declared set.', (e, s) => later(e, s, 'The low end of a value')),
-  ],
-  [
-    'high',
-    entry([1, 1], 'high(x)', 'The largest x over the declared set.', (e, s) => later(e, s, 'The high end of a value')),
-  ],
+  ['low', entry([1, 1], 'low(x)', 'The least x over the declared set.', (e, s) => end('low', e, s))],
+  ['high', entry([1, 1], 'high(x)', 'The largest x over the declared set.', (e, s) => end('high', e, s))],
   ...(Object.keys(SERIES) as SeriesName[]).flatMap(series),
   ...analysis('gain', 'gain(A, f)', 'Gain at a frequency.', [FREQUENCY], PLAIN),
   ...analysis('phase', 'phase(A, f)', 'Phase at a frequency, in radians.', [FREQUENCY], PLAIN),
@@ -204,9 +198,10 @@ function choose(expr: CallExpr, scope: Scope): Typed {
   return { type: a.type, handle: scope.builder.call('select', [condition.handle, a.handle, b.handle], 1)[0]! };
 }
 
-function later(expr: CallExpr, scope: Scope, what: string): Typed {
+function end(which: EndName, expr: CallExpr, scope: Scope): Typed {
   const x = compileQuantity(expr.args[0]!, scope);
-  scope.later(what, expr.span);
+  if (scope.end) return { type: x.type, handle: scope.end(which, x.handle) };
+  scope.later(`The ${which} end of a value`, expr.span);
   return { type: x.type, handle: scope.builder.constant(NaN) };
 }
 

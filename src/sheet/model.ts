@@ -264,6 +264,12 @@ export interface SpreadModel {
   readonly checks: readonly WantedCheck[];
 }
 
+/** What a sheet asks of the analyses that stand above it. */
+export interface Analyses {
+  /** The least and the largest of the values in these slots over the declared set; NaN where an end is not known. */
+  ends(model: SpreadModel, wanted: readonly number[]): readonly { readonly low: number; readonly high: number }[];
+}
+
 /** What is read of a sheet. */
 export interface SheetView {
   readonly tree: SheetTree;

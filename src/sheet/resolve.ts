@@ -22,6 +22,7 @@ interface Lookup {
   look(name: string): Interface | null;
   names(): readonly string[];
   later(message: Message): void;
+  readonly end?: Scope['end'];
 }
 
 /** Constants of the language: exact SI values since 2019 (Boltzmann constant, elementary charge). */
@@ -42,6 +43,7 @@ export function createScope(builder: Builder, line: Pick<Line, 'text'>, lookup: 
       return compileExpression(expr, this);
     },
     later,
+    end: lookup.end ?? null,
     resolve: (path) => resolve(path, builder, lookup),
     stageOf(path) {
       const { name, span } = path.names[0]!;

@@ -5,6 +5,8 @@ import type { Builder } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { ValueType } from './model.ts';
 
+export type EndName = 'low' | 'high';
+
 /** A value that the program will hold, and what it is. */
 export interface Typed {
   readonly type: ValueType;
@@ -21,6 +23,8 @@ export interface Scope {
   resolve(path: PathExpr): Typed;
   /** Notes that something here cannot be computed by now; the dimension is settled all the same. */
   later(what: string, span: Span): void;
+  /** The least or largest of a value over the declared set, as a number that is put in before the cell runs; null where nothing computes it. */
+  readonly end: ((which: EndName, of: Handle) => Handle) | null;
   /** Name of the stage that a function such as gain(A1, f) takes; stops when it is none. */
   stageOf(path: PathExpr): string;
 }

@@ -19,7 +19,7 @@ import { topologicalOrder } from './graph.ts';
 import { sameInterface } from './interface.ts';
 import type { Interface } from './interface.ts';
 import { KERNELS } from './kernels.ts';
-import type { Sheet, ValueType } from './model.ts';
+import type { Analyses, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { createScope } from './resolve.ts';
 import { spreadModel } from './spread-model.ts';
@@ -36,7 +36,7 @@ interface CompiledSheet {
 }
 
 /** Reads, checks and evaluates a sheet. Never throws for what the user wrote. */
-export function createSheet(text: string): Sheet & { compiled(): CompiledSheet } {
+export function createSheet(text: string, analyses: Analyses | null = null): Sheet & { compiled(): CompiledSheet } {
   let tree: SheetTree = parseSheet('');
   let nodes: Node[] = [];
   /** The nodes that `uses` and `usedBy` last counted. */
@@ -79,6 +79,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
       has,
       treeOf,
       now,
+      hasEnds: analyses !== null,
       allocate(size) {
         if (size > node.capacity) {
           node.base = top;
@@ -129,7 +130,8 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
         node.fault = wasFault?.message.text === outside.message.text ? wasFault : outside;
         node.waitsFor = null;
       } else {
-        const reached = node.uses.some((u) => nodes[u]!.changedAt === pass);
+        const hasEnds = (node.compiled as CompiledCell | undefined)?.ends.length;
+        const reached = (hasEnds ? coneOf(k) : node.uses).some((u) => nodes[u]!.changedAt === pass);
         if (!node.compiled || needsCompiling(node, cellTree) || (reached && isReshaped(node.compiled))) {
           compile(node, cellTree);
           fresh = true;
@@ -158,7 +160,51 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     const { segment } = node.compiled;
     const before = fresh ? null : slots.slice(segment.base, segment.base + segment.size);
     runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
+    if (node.compiled.ends.length > 0) {
+      putEnds(node);
+      runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
+    }
     return before === null || before.some((value, i) => !Object.is(value, slots[segment.base + i]!));
+  }
+
+  /** Every node that a node rests on. */
+  function coneOf(k: number): number[] {
+    const found = new Set<number>();
+    const open = [...nodes[k]!.uses];
+    for (let u = open.pop(); u !== undefined; u = open.pop()) {
+      if (found.has(u)) continue;
+      found.add(u);
+      open.push(...nodes[u]!.uses);
+    }
+    return [...found];
+  }
+
+  /** Computes the ends that a cell wants, over all that it rests on, and puts them into its slots. */
+  function putEnds(node: Node): void {
+    const { ends } = node.compiled;
+    const k = nodes.indexOf(node);
+    const cone = new Set([...coneOf(k), k]);
+    const parts = order.filter((u) => cone.has(u));
+    const program = programOf(parts);
+    const model = spreadModel(
+      parts.map((u) => nodes[u]!),
+      program,
+      slots,
+    );
+    const found = analyses!.ends(
+      model,
+      ends.map(({ of }) => of),
+    );
+    ends.forEach(({ which, into }, i) => (slots[into] = found[i]![which]));
+  }
+
+  /** The program of some nodes, given in topological order. */
+  function programOf(live: readonly number[]): Program {
+    const position = new Map(live.map((k, i) => [k, i]));
+    return assemble(
+      live.map((k) => nodes[k]!.compiled.segment),
+      live.map((k) => nodes[k]!.usedBy.map((d) => position.get(d)).filter((d) => d !== undefined)),
+    );
   }
 
   function update(newText: string): Set<string> {
@@ -238,11 +284,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     },
     compiled() {
       const live = order.filter((k) => !nodes[k]!.fault && !nodes[k]!.waitsFor);
-      const position = new Map(live.map((k, i) => [k, i]));
-      const program = assemble(
-        live.map((k) => nodes[k]!.compiled.segment),
-        live.map((k) => nodes[k]!.usedBy.map((d) => position.get(d)).filter((d) => d !== undefined)),
-      );
+      const program = programOf(live);
       return { program, slots: slots.slice(0, program.slotCount), cells: live.map((k) => nodes[k]!.key) };
     },
   };
@@ -330,6 +372,7 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
     treeOf: nothing,
     has: nothing,
     now: nothing,
+    hasEnds: false,
     allocate: nothing,
   });
 }
