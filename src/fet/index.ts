@@ -27,7 +27,6 @@ export { FORMS } from './forms.ts';
 export { LAMBDA_ROUTES } from './lambda-routes.ts';
 export { ROUTE_STATUS } from './route-status.ts';
 export { ROUTES } from './routes.ts';
-export { ROW_VALUES } from './row-values.ts';
 export type { Route } from './routes.ts';
 export { signReason, wantedSign } from './signs.ts';
 export { betaAt, leakageAt, thresholdAt, zeroDriftDrive } from './temperature.ts';

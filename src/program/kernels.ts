@@ -1,12 +1,11 @@
 // The kernels of FETs and stages, by name.
 
-import { LAMBDA_ROUTES, ROUTES, ROW_VALUES } from '../fet/index.ts';
+import { FORMS, LAMBDA_ROUTES, ROUTES } from '../fet/index.ts';
 import { KERNELS } from '../network/index.ts';
 import type { KernelTable } from './segment.ts';
 
 /** Every kernel below the sheet language: operating points, and the routes from data-sheet rows to a square law. */
 export const PROGRAM_KERNELS: KernelTable = [
   ...Object.entries(KERNELS).map(([name, { run }]) => ({ name, run })),
-  ...[...ROUTES, ...LAMBDA_ROUTES].map(({ id, run }) => ({ name: id, run })),
-  ...Object.entries(ROW_VALUES).map(([row, { run }]) => ({ name: `reading of ${row}`, run })),
+  ...[...ROUTES, ...LAMBDA_ROUTES, ...Object.values(FORMS)].map(({ id, run }) => ({ name: id, run })),
 ];

@@ -1,6 +1,6 @@
 // How the specimens of a part spread: which of its rows are drawn, which cut the declared set, and which go together.
 
-import { DEFAULTS, ROW_VALUES } from '../fet/index.ts';
+import { DEFAULTS, FORMS } from '../fet/index.ts';
 import type { Family } from '../fet/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { Builder } from '../program/index.ts';
@@ -10,6 +10,8 @@ import type { PartLaw } from './part-law.ts';
 import { drawsOf } from './compiled-quantity.ts';
 import type { SpreadDraft } from './draft.ts';
 
+/** Rows that the square law of a specimen settles. */
+const LAW_ROWS: ReadonlySet<string> = new Set([...Object.keys(FORMS), 'V_TO', 'beta', 'K']);
 /** Rows that place the threshold of a law. */
 const THRESHOLD_ROWS: readonly string[] = ['V_P', 'V_GSoff', 'V_TO', 'V_GSth'];
 /** Rows that say how much there is, with the sense in which they go with the square-law constant. */
@@ -55,11 +57,12 @@ export function fieldName(field: GivenField, given: GivenFields): string {
 }
 
 function isCut(field: GivenField, used: ReadonlySet<string>, given: GivenFields): boolean {
-  if (!field.quantity.spread || !Object.hasOwn(ROW_VALUES, field.name)) return false;
+  if (!field.quantity.spread || !LAW_ROWS.has(field.name)) return false;
   if (field.name === 'g_os') return given.has('lambda');
   return !used.has(field.name);
 }
 
+/** What a row reads on the specimen. */
 function readingOf(
   field: GivenField,
   family: Family,
@@ -68,23 +71,31 @@ function readingOf(
   given: GivenFields,
   builder: Builder,
 ): Handle {
+  const { beta, V_TO } = law.used;
+  if (!Object.hasOwn(FORMS, field.name)) {
+    if (field.name !== 'V_TO') return beta;
+    return family === 'JFET' || channel === 1 ? V_TO : builder.neg(V_TO);
+  }
   const defaults = DEFAULTS[family];
   const only = (name: string, otherwise: number): Handle => given.get(name)?.[0]?.handle ?? builder.constant(otherwise);
-  const stated = (name: string): Handle => builder.constant(field.conditions.get(name) ?? NaN);
-  const inputs = [
-    builder.constant(channel),
-    law.used.beta,
-    law.used.V_TO,
-    law.lambda,
-    builder.constant(defaults.n.value),
-    only('T_nom', defaults.T_nom.value),
-    only('r_s', 0),
-    only('r_d', 0),
-    only('W', 1),
-    only('L', 1),
-    ...['V_GS', 'V_DS', 'I_D'].map(stated),
-  ];
-  return builder.call(`reading of ${field.name}`, inputs, 1)[0]!;
+  const known: Readonly<Record<string, () => Handle>> = {
+    channel: () => builder.constant(channel),
+    beta: () => beta,
+    V_TO: () => V_TO,
+    lambda: () => law.lambda,
+    n: () => builder.constant(defaults.n.value),
+    T_nom: () => only('T_nom', defaults.T_nom.value),
+    r_s: () => only('r_s', 0),
+    r_d: () => only('r_d', 0),
+    W: () => only('W', 1),
+    L: () => only('L', 1),
+  };
+  const form = FORMS[field.name]!;
+  const inputs = form.inputs.map((input) => {
+    if (Object.hasOwn(known, input)) return known[input]!();
+    return builder.constant(field.conditions.get(input.slice(input.indexOf('@') + 1)) ?? NaN);
+  });
+  return builder.call(form.id, inputs, 1)[0]!;
 }
 
 /** For a JFET the quantile of |V_P| goes with that of the other row, for a MOSFET that of the threshold itself. */
