@@ -52,5 +52,15 @@ function drawnSpread({ form }: QuantityDraw, spread: DeclaredSpread): DeclaredSp
 export function drawsOf(field: string, quantity: CompiledQuantity, line: Line): Draft['drawn']['draws'] {
   const { draw, spread, handle, type } = quantity;
   if (!draw || !spread || !isQuantity(type)) return [];
-  return [{ field, handle: draw.handle, line, value: handle, type, spread: (read) => drawnSpread(draw, spread(read)) }];
+  return [
+    {
+      field,
+      handle: draw.handle,
+      line,
+      value: handle,
+      type,
+      form: draw.form,
+      spread: (read) => drawnSpread(draw, spread(read)),
+    },
+  ];
 }

@@ -43,6 +43,7 @@ interface DrawDraft {
   /** The value whose spread it is. */
   readonly value: Handle;
   readonly type: ValueKind;
+  readonly form: 'value' | 'factor' | 'addend';
 }
 
 /** A row that is not needed to compute and has limits: specimens that read otherwise do not belong to the part. */

@@ -204,6 +204,8 @@ export interface Drawn {
   readonly slot: number;
   /** Limits of what is drawn, SI; null where an end is open. */
   readonly spread: DeclaredSpread;
+  /** What is drawn: the value, or what a formula's value is multiplied with, or what is added to it. */
+  readonly form: 'value' | 'factor' | 'addend';
   /** The slot of the value whose spread it is, and its kind. */
   readonly valueSlot: number;
   readonly type: ValueKind;

@@ -19,7 +19,7 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
     const cell = node.tree.name.name;
     const path = (field: string): string => (field === '' ? cell : `${cell}.${field}`);
     const first = drawn.length;
-    for (const { field, handle, line, spread, value, type } of draft.drawn.draws) {
+    for (const { field, handle, line, spread, value, type, form } of draft.drawn.draws) {
       drawn.push({
         name: path(field),
         cell,
@@ -28,6 +28,7 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
         spread: spread(read),
         valueSlot: slot(value),
         type,
+        form,
       });
     }
     for (const { field, handle, line, limits } of draft.drawn.cuts) {
