@@ -15,8 +15,8 @@ import type { Position } from './position.ts';
 /** Lines in either direction along which the border of a plane is looked for, and steps on each. */
 const LINES = 33;
 const STEPS = 129;
-/** Halvings: the last is below the spacing of numbers between -1 and 1. */
-const HALVINGS = 52;
+/** Halvings after which a place on the border is off by less than 1e-10 of the range. */
+const HALVINGS = 34;
 
 /** Two draws of a part between which its further limits lie. */
 export interface Plane {

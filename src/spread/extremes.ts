@@ -175,6 +175,7 @@ export function searchExtremes(
       ends.forEach((e, n) => values[n]!.set(batch.column(e >> 1).subarray(0, count), from));
     });
     visit(reachable);
+    const effective = ends.map((_, n) => new Set(group.filter((_g, i) => values[n]![i] !== before[n])));
     const joined = ends.flatMap((e, n): Position[] => {
       const helpful = new Map<number, number>();
       for (let i = 0; i < reachable.length; i++) {
@@ -199,13 +200,18 @@ export function searchExtremes(
         ),
       );
     }
-    narrow(ends);
+    narrow(
+      ends,
+      ends.map((_, n) => new Set([...effective[n]!].map((g) => wantedDraws[g] ?? -1))),
+    );
   }
 
-  /** Settles draws that stand between their ends, and places on a border, each end of a value for itself. */
-  function narrow(ends: readonly number[]): void {
-    const jobs = ends.flatMap((e) => [
-      ...drawsOf[e >> 1]!.filter((k) => !inPlane.has(k) && isBetween(bestAt[e]!, k)).map((k) => drawJob(e, k)),
+  /** Settles draws that have an effect and stand between their ends, and places on a border, each end of a value for itself. */
+  function narrow(ends: readonly number[], effective: readonly ReadonlySet<number>[]): void {
+    const jobs = ends.flatMap((e, n) => [
+      ...[...effective[n]!]
+        .filter((k) => k >= 0 && !inPlane.has(k) && isBetween(bestAt[e]!, k))
+        .map((k) => drawJob(e, k)),
       ...planes.filter((plane) => isOnSlope(plane, e)).map((plane) => borderJob(e, plane)),
     ]);
     if (jobs.length === 0) return;
