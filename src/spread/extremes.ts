@@ -46,16 +46,15 @@ const ROUND_CAP = 24;
 const NARROW_PLACES = 8;
 const NARROWINGS = 14;
 
-interface SearchOptions {
-  /** The draws that are moved; all others stay at their nominal. */
-  readonly moving?: (k: number) => boolean;
-}
+/** How hard a search tries: `quick` is one round of moves around the nominal, for an answer within a frame. */
+export type SearchEffort = 'quick' | 'full';
 
 /** Searches for the extremes of the values in these slots. */
 export function searchExtremes(
   model: SpreadModel,
   wanted: readonly number[],
-  { moving = () => true }: SearchOptions = {},
+  effort: SearchEffort = 'full',
+  moving: (k: number) => boolean = () => true,
 ): ExtremeSearch {
   const { drawn, program } = model;
   const set = declaredSet(model);
@@ -122,7 +121,8 @@ export function searchExtremes(
   function climb(ends: readonly number[]): void {
     const seen = new Map<number, Position>();
     const then = best.map(() => NaN);
-    for (let round = 0; round < ROUND_CAP; round++) {
+    const rounds = effort === 'quick' ? 1 : ROUND_CAP;
+    for (let round = 0; round < rounds; round++) {
       const open = ends.filter((e) => bestAt[e] !== null && seen.get(e) !== bestAt[e] && hasMoved(then[e]!, best[e]!));
       if (open.length === 0) return;
       // Ends that stand at the same place share their moves.
@@ -200,6 +200,7 @@ export function searchExtremes(
         ),
       );
     }
+    if (effort === 'quick') return;
     narrow(
       ends,
       ends.map((_, n) => new Set([...effective[n]!].map((g) => wantedDraws[g] ?? -1))),

@@ -20,9 +20,10 @@ const off = (x: number, y: number): number => Math.abs(x - y) / Math.max(Math.ab
 
 describe('closed forms', () => {
   test('a divider stands at the corners of its resistors', () => {
-    const { of } = extremesOf('V_1 = 10 V ± 5 %\nR_1 = 20 kohm ± 1 %\nR_2 = 10 kohm ± 2 %\nV_x = V_1 * R_2 / (R_1 + R_2)', [
-      'V_x',
-    ]);
+    const { of } = extremesOf(
+      'V_1 = 10 V ± 5 %\nR_1 = 20 kohm ± 1 %\nR_2 = 10 kohm ± 2 %\nV_x = V_1 * R_2 / (R_1 + R_2)',
+      ['V_x'],
+    );
     expect(off(of('V_x').low.value, (9.5 * 9.8) / (20.2 + 9.8))).toBeLessThan(1e-14);
     expect(off(of('V_x').high.value, (10.5 * 10.2) / (19.8 + 10.2))).toBeLessThan(1e-14);
   });
