@@ -123,6 +123,8 @@ export const MESSAGE_CASES: readonly MessageCase[] = [
   ['no-law', 'Q1 = n-MOSFET\n  V_TO: 2 V\n  I_on: 5 mA at V_GS = 1 V', 'Q1', 3, 9, 'Q1 does not settle its square law. V_GS of the line does not lie beyond the threshold, where the square law carries a current.'],
   ['no-law', 'Q1 = n-JFET\n  I_DSS: 1 mA\n  V_P: -2 V\n  g_os: 1 mS at I_D = 1 mA, V_DS = 10 V', 'Q1', 4, 9, 'Q1 does not settle its square law. g_os V_DS is not below I_D, so no lambda fits; g_os or I_D is of another device.'],
   ['no-law', 'Q1 = n-JFET\n  V_P: -2 V\n  g_fs: 50 mS at I_D = 1 mA', 'Q1', 3, 9, 'Q1 does not settle its square law. g_fs exceeds I_D / (n V_T), which is the most that a FET can have at that current.'],
+  ['no-law', 'Q1 = n-MOSFET\n  R_DSon: 5 ohm at V_GS = 4.5 V\n  R_DSon: 3 ohm at V_GS = 7 V\n  R_DSon: 2.5 ohm at V_GS = 10 V\n  r_s: 2.4 ohm', 'Q1', 5, 8, 'Q1 does not settle its square law. The three R_DSon rows fit a series part R_0 of 1.84 Ω, less than r_s, 2.40 Ω, which is in it. Leave r_s out, or take a smaller one.'],
+  ['no-law', 'Q1 = n-JFET\n  I_DSS: 10 mA at V_DS = 5 V\n  V_P: -8 V\n  r_s: 300 ohm\n  r_d: 200 ohm', 'Q1', 2, 10, 'Q1 does not settle its square law. The leads leave nothing of it: V_DS exceeds the drop across r_s and r_d, and g_fs lies below 1 / r_s.'],
   ['point-incomplete', PART + 'P1 = point of Q1', 'P1', 4, 6, 'A point wants V_GS or I_D. Write a line V_GS: -1 V below it.'],
   ['point-incomplete', PART + 'P1 = point of Q1\n  V_GS: -1 V', 'P1', 4, 6, 'A point wants V_DS. Write a line V_DS: 10 V below it.'],
   ['point-overdone', PART + 'P1 = point of Q1\n  V_GS: -1 V\n  I_D: 1 mA\n  V_DS: 5 V', 'P1', 4, 6, 'V_GS and I_D both stand here; one follows from the other. Keep one of them.'],
