@@ -27,6 +27,7 @@ Exit status
   1  a check fails
   2  a cell is broken or has no value, whatever the checks say
   3  the file cannot be read, or the call is wrong
+ 70  the program failed or could not write its report; no word on the sheet
 `;
 
 /** Reads the arguments behind the program's name. Flags may stand before or behind FILE; behind `--` nothing is a flag. */

@@ -2,6 +2,7 @@
 
 import { readFileSync } from 'node:fs';
 import { resolve } from 'node:path';
+import { EXIT } from './exit-status.ts';
 import { run } from './run.ts';
 
 const DEFAULT_WIDTH = 100;
@@ -13,7 +14,9 @@ const here = process.env['INIT_CWD'] ?? process.cwd();
 
 // A reader that has seen enough (`| head`) closes the pipe; that is no fault of the sheet.
 process.stdout.on('error', (thrown: NodeJS.ErrnoException) => {
-  if (thrown.code !== 'EPIPE') throw thrown;
+  if (thrown.code === 'EPIPE') return;
+  process.stderr.write(`The report could not be written (${thrown.code ?? thrown.message}).\n`);
+  process.exitCode = EXIT.ownFault;
 });
 
 process.exitCode = run(process.argv.slice(2), {

@@ -20,8 +20,21 @@ export interface Surroundings {
   readonly width: number;
 }
 
-/** Computes the sheet that `args` name and prints its report; returns the exit status. */
-export function run(args: readonly string[], { read, print, complain, width }: Surroundings): number {
+/**
+ * Computes the sheet that `args` name and prints its report; returns the exit status. A fault of the program's own is
+ * told with where it arose and has a status of its own, lest it be read as a check that fails.
+ */
+export function run(args: readonly string[], surroundings: Surroundings): number {
+  try {
+    return compute(args, surroundings);
+  } catch (thrown) {
+    const where = thrown instanceof Error ? (thrown.stack ?? thrown.message) : String(thrown);
+    surroundings.complain(`The program failed; this says nothing of the sheet.\n${where}\n`);
+    return EXIT.ownFault;
+  }
+}
+
+function compute(args: readonly string[], { read, print, complain, width }: Surroundings): number {
   const call = parseArguments(args);
   if (call.kind === 'help') {
     print(HELP);

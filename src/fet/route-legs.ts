@@ -4,9 +4,13 @@
 //
 // A current at a stated V_DS is divided by 1 + lambda V_DS; V_DS is also the knee up to which the line
 // stands in saturation. Where no V_DS is stated the current is taken at the edge of saturation.
+//
+// Lines are measured at the terminals. With resistance in the leads the channel of a line at the current
+// I sees V_GS - I r_s and V_DS - I (r_s + r_d), and of g_fs at the terminals it has
+// g_m = g_fs (1 + g_ds (r_s + r_d)) / (1 - g_fs r_s).
 
 import { thermalVoltage } from './constants.ts';
-import { MISSING, NOT_POSITIVE, OK, SERIES_RESISTANCE, TOO_STEEP, WRONG_SIGN } from './route-status.ts';
+import { LEADS, MISSING, NOT_POSITIVE, OK, SERIES_RESISTANCE, TOO_STEEP, WRONG_SIGN } from './route-status.ts';
 
 /** Places in the record that the legs fill. */
 export const POINT = 0; // gate voltage of the threshold line
@@ -32,16 +36,45 @@ export interface Leg {
 
 const orZero = (x: number): number => (x !== x ? 0 : x);
 
-/** 1 + lambda V_DS of a line, 1 where none is stated; the sign of V_DS is checked by `kneeOf`. */
-function lengthening(s: Float64Array, a: Int32Array, p: number, vds: number): number {
-  return vds !== vds ? 1 : 1 + orZero(s[a[p + 1]]) * s[a[p]] * vds;
+/** Drop in V of a current across r_s, 0 where no current is stated. */
+export function sourceDrop(s: Float64Array, a: Int32Array, p: number, current: number): number {
+  return orZero(current) * orZero(s[a[p + 4]]);
 }
 
-/** V_DS in the n-channel frame, Infinity where none is stated, NaN where it has the wrong sign. */
-function kneeOf(s: Float64Array, a: Int32Array, p: number, vds: number): number {
-  if (vds !== vds) return Infinity;
-  const forward = s[a[p]] * vds;
-  return forward > 0 ? forward : NaN;
+/** V_DS in V of the channel itself in the n-channel frame; NaN where the line states none. */
+function channelVds(s: Float64Array, a: Int32Array, p: number, vds: number, current: number): number {
+  return s[a[p]] * vds - orZero(current) * (orZero(s[a[p + 4]]) + orZero(s[a[p + 5]]));
+}
+
+/** 1 + lambda V_DS of a line, 1 where none is stated; whether V_DS will do is checked by `vdsStatus`. */
+export function lengthening(s: Float64Array, a: Int32Array, p: number, vds: number, current: number): number {
+  return vds !== vds ? 1 : 1 + orZero(s[a[p + 1]]) * channelVds(s, a, p, vds, current);
+}
+
+/** V_DS of the channel, up to which the line stands in saturation; Infinity where none is stated. */
+export function kneeOf(s: Float64Array, a: Int32Array, p: number, vds: number, current: number): number {
+  return vds !== vds ? Infinity : channelVds(s, a, p, vds, current);
+}
+
+/** Whether a stated V_DS has the sign of the channel and leaves it something. */
+export function vdsStatus(s: Float64Array, a: Int32Array, p: number, vds: number, current: number): number {
+  if (vds !== vds) return OK;
+  if (!(s[a[p]] * vds > 0)) return WRONG_SIGN;
+  return channelVds(s, a, p, vds, current) > 0 ? OK : LEADS;
+}
+
+/** g_m in S of the channel at a current in saturation, from g_fs at the terminals; not positive where r_s leaves none. */
+export function channelTransconductance(
+  s: Float64Array,
+  a: Int32Array,
+  p: number,
+  gfs: number,
+  current: number,
+  vds: number,
+): number {
+  const rs = orZero(s[a[p + 4]]);
+  const gds = vds !== vds ? 0 : (orZero(s[a[p + 1]]) * current) / lengthening(s, a, p, vds, current);
+  return (gfs * (1 + gds * (rs + orZero(s[a[p + 5]])))) / (1 - gfs * rs);
 }
 
 // ------------------------------------------------------------ where the threshold is
@@ -68,12 +101,13 @@ function testedThreshold(field: string, depletion: boolean): Leg {
       const value = s[a[p]] * s[a[at]];
       const current = s[a[at + 1]];
       const vds = s[a[at + 2]];
-      record[POINT] = value;
-      record[TEST] = current / lengthening(s, a, p, vds);
+      record[POINT] = value - sourceDrop(s, a, p, current);
+      record[TEST] = current / lengthening(s, a, p, vds, current);
       if (value !== value) return MISSING;
       if (depletion && !(value < 0)) return WRONG_SIGN;
       if (current <= 0) return NOT_POSITIVE;
-      if (kneeOf(s, a, p, vds) !== kneeOf(s, a, p, vds)) return WRONG_SIGN;
+      const status = vdsStatus(s, a, p, vds, current);
+      if (status !== OK) return status;
       return current === current && (s[a[p + 2]] !== s[a[p + 2]] || s[a[p + 3]] !== s[a[p + 3]]) ? MISSING : OK;
     },
   };
@@ -105,15 +139,15 @@ function currentLine(field: string, hasGate: boolean): Leg {
       const current = s[a[at]];
       const vds = s[a[at + 1]];
       const gate = hasGate ? s[a[p]] * s[a[at + 2]] : 0;
-      const knee = kneeOf(s, a, p, vds);
-      const edge = current / lengthening(s, a, p, vds);
-      record[REFERENCE] = gate;
+      const knee = kneeOf(s, a, p, vds, current);
+      const edge = current / lengthening(s, a, p, vds, current);
+      record[REFERENCE] = gate - sourceDrop(s, a, p, current);
       record[CURRENT] = edge;
       record[KNEE] = knee;
       record[SLOPE] = edge / knee;
       if (current !== current || gate !== gate) return MISSING;
       if (!(current > 0)) return NOT_POSITIVE;
-      return knee !== knee ? WRONG_SIGN : OK;
+      return vdsStatus(s, a, p, vds, current);
     },
   };
 }
@@ -150,10 +184,10 @@ function resistanceLine(zeroGate: boolean): Leg {
       const current = orZero(s[a[at + 2]]);
       const channelOnly = resistance - orZero(s[a[p + 4]]) - orZero(s[a[p + 5]]);
       record[MUST_BE_OHMIC] = 1;
-      record[REFERENCE] = gate;
-      record[KNEE] = current * resistance;
-      record[SLOPE] = 1 / channelOnly;
-      record[CURRENT] = record[KNEE] / channelOnly;
+      record[REFERENCE] = gate - sourceDrop(s, a, p, current);
+      record[KNEE] = current * channelOnly;
+      record[SLOPE] = 1 / (channelOnly * (1 + orZero(s[a[p + 1]]) * record[KNEE]));
+      record[CURRENT] = record[KNEE] * record[SLOPE];
       if (resistance !== resistance || gate !== gate) return MISSING;
       if (!(resistance > 0) || current < 0) return NOT_POSITIVE;
       return channelOnly > 0 ? OK : SERIES_RESISTANCE;
@@ -173,7 +207,7 @@ export const K_P = constantLine('K_P', ['K_P', 'W', 'L'], (s, a, at) => {
   return 0.5 * s[a[at]] * (ratio !== ratio ? 1 : ratio);
 });
 
-/** beta = g_fs^2 / (4 I_D), in saturation. */
+/** beta = g_m^2 / (4 I_D), in saturation. */
 export const G_FS: Leg = {
   inputs: ['g_fs', 'g_fs@I_D', 'g_fs@V_DS'],
   needs: ['g_fs', 'g_fs@I_D'],
@@ -182,10 +216,13 @@ export const G_FS: Leg = {
     const gfs = s[a[at]];
     const current = s[a[at + 1]];
     const vds = s[a[at + 2]];
-    record[BETA] = (gfs * gfs) / (4 * current * lengthening(s, a, p, vds));
+    const gm = channelTransconductance(s, a, p, gfs, current, vds);
+    record[BETA] = (gm * gm) / (4 * current * lengthening(s, a, p, vds, current));
     if (gfs !== gfs || current !== current) return MISSING;
     if (!(gfs > 0 && current > 0)) return NOT_POSITIVE;
-    if (kneeOf(s, a, p, vds) !== kneeOf(s, a, p, vds)) return WRONG_SIGN;
-    return gfs * s[a[p + 2]] * thermalVoltage(s[a[p + 3]]) > current ? TOO_STEEP : OK;
+    const status = vdsStatus(s, a, p, vds, current);
+    if (status !== OK) return status;
+    if (!(gm > 0 && gm < Infinity)) return LEADS;
+    return gm * s[a[p + 2]] * thermalVoltage(s[a[p + 3]]) > current ? TOO_STEEP : OK;
   },
 };

@@ -14,6 +14,7 @@ export const NOT_SATURATED = 9;
 export const LINES_DISAGREE = 10;
 export const TOO_STEEP = 11;
 export const OUTPUT_CONDUCTANCE = 12;
+export const LEADS = 13;
 
 interface RouteStatus {
   readonly name: string;
@@ -51,5 +52,9 @@ export const ROUTE_STATUS: readonly RouteStatus[] = [
   {
     name: 'output conductance',
     sentence: 'g_os V_DS is not below I_D, so no lambda fits; g_os or I_D is of another device.',
+  },
+  {
+    name: 'leads',
+    sentence: 'The leads leave nothing of it: V_DS exceeds the drop across r_s and r_d, and g_fs lies below 1 / r_s.',
   },
 ];

@@ -11,24 +11,26 @@ const BOLD = 1.14;
 const ASCENT = 0.8;
 const DESCENT = 0.25;
 
-const GREEK: Readonly<Record<string, string>> = {
-  alpha: 'α',
-  beta: 'β',
-  gamma: 'γ',
-  delta: 'δ',
-  epsilon: 'ε',
-  zeta: 'ζ',
-  eta: 'η',
-  theta: 'θ',
-  lambda: 'λ',
-  mu: 'μ',
-  phi: 'φ',
-  psi: 'ψ',
-  rho: 'ρ',
-  sigma: 'σ',
-  tau: 'τ',
-  omega: 'ω',
-};
+const GREEK: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    alpha: 'α',
+    beta: 'β',
+    gamma: 'γ',
+    delta: 'δ',
+    epsilon: 'ε',
+    zeta: 'ζ',
+    eta: 'η',
+    theta: 'θ',
+    lambda: 'λ',
+    mu: 'μ',
+    phi: 'φ',
+    psi: 'ψ',
+    rho: 'ρ',
+    sigma: 'σ',
+    tau: 'τ',
+    omega: 'ω',
+  }),
+);
 
 /** Widths in em by character; what is not listed takes that of its class. */
 const WIDTHS: Readonly<Record<string, number>> = {
@@ -74,11 +76,11 @@ export function typeset(path: string): Run[] {
   const name = names[names.length - 1]!;
   const owner = names.slice(0, -1).join('.');
   const [head = '', ...rest] = name.split('_').filter((part) => part !== '');
-  const letter = GREEK[head];
+  const letter = GREEK.get(head);
   const isQuantity = name.includes('_') || letter !== undefined;
   const runs: Run[] = [{ text: letter ?? head, style: isQuantity ? 'italic' : 'upright' }];
   const subscript = [
-    ...(rest.length > 0 ? [rest.map((part) => GREEK[part] ?? part).join(',')] : []),
+    ...(rest.length > 0 ? [rest.map((part) => GREEK.get(part) ?? part).join(',')] : []),
     ...(owner === '' ? [] : [owner]),
   ];
   if (subscript.length > 0) runs.push({ text: subscript.join(', '), style: 'subscript' });

@@ -54,42 +54,46 @@ export function describeUnitFault({ fault, text, hint }: UnitFault): string {
 }
 
 /** Names, habits and other trades' symbols, in small letters; '' where there is no unit to offer. */
-const OTHER_NAMES: Readonly<Record<string, string>> = {
-  volt: 'V',
-  amp: 'A',
-  ampere: 'A',
-  farad: 'F',
-  henry: 'H',
-  henries: 'H',
-  siemens: 'S',
-  mho: 'S',
-  watt: 'W',
-  hertz: 'Hz',
-  second: 's',
-  sec: 's',
-  kelvin: 'K',
-  coulomb: 'C',
-  meter: 'm',
-  metre: 'm',
-  r: 'ohm',
-  rthz: 'Hz^0.5',
-  j: 'W*s',
-  joule: 'W*s',
-};
-const OTHER_WORDS: Readonly<Record<string, string>> = {
-  percent: '%',
-  pct: '%',
-  celsius: 'degC',
-  degree: 'deg',
-  degk: 'K',
-  '\u00b0k': 'K',
-  degf: '',
-  '\u00b0f': '',
-  radian: 'rad',
-  decibel: 'dB',
-  min: 's',
-  hour: 's',
-};
+const OTHER_NAMES: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    volt: 'V',
+    amp: 'A',
+    ampere: 'A',
+    farad: 'F',
+    henry: 'H',
+    henries: 'H',
+    siemens: 'S',
+    mho: 'S',
+    watt: 'W',
+    hertz: 'Hz',
+    second: 's',
+    sec: 's',
+    kelvin: 'K',
+    coulomb: 'C',
+    meter: 'm',
+    metre: 'm',
+    r: 'ohm',
+    rthz: 'Hz^0.5',
+    j: 'W*s',
+    joule: 'W*s',
+  }),
+);
+const OTHER_WORDS: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    percent: '%',
+    pct: '%',
+    celsius: 'degC',
+    degree: 'deg',
+    degk: 'K',
+    '\u00b0k': 'K',
+    degf: '',
+    '\u00b0f': '',
+    radian: 'rad',
+    decibel: 'dB',
+    min: 's',
+    hour: 's',
+  }),
+);
 const PREFIX_NAMES: Readonly<Record<string, string>> = {
   femto: 'f',
   pico: 'p',
@@ -102,15 +106,17 @@ const PREFIX_NAMES: Readonly<Record<string, string>> = {
   giga: 'G',
 };
 /** What a prefix alone is most often short for: as the letters of a component code. */
-const ALONE: Readonly<Record<string, string>> = {
-  f: 'fF',
-  p: 'pF',
-  n: 'nF',
-  u: 'uF',
-  k: 'kohm',
-  M: 'Mohm',
-  G: 'Gohm',
-};
+const ALONE: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    f: 'fF',
+    p: 'pF',
+    n: 'nF',
+    u: 'uF',
+    k: 'kohm',
+    M: 'Mohm',
+    G: 'Gohm',
+  }),
+);
 
 const SPELLINGS: readonly string[] = [
   ...UNIT_SYMBOLS.map((symbol) => symbol.ascii),
@@ -129,7 +135,7 @@ export function faultOfWord(word: string, start: number): UnitFault {
     hint,
   });
   const prefix = findPrefix(word);
-  if (prefix) return fault('prefix alone', ALONE[prefix.ascii] ?? null);
+  if (prefix) return fault('prefix alone', ALONE.get(prefix.ascii) ?? null);
   const behindPrefix: UnitSymbol | undefined = findPrefix(word.slice(0, 1)) && findSymbol(word.slice(1));
   if (behindPrefix) return fault('prefix not allowed', behindPrefix.ascii);
   const otherCase = inOtherCase(word);
@@ -154,7 +160,7 @@ function inOtherCase(word: string): string | null {
 /** `ohms`, `kOhms`, `millivolts`, `percent`; '' where the name has no unit here, null where it is no such name. */
 function byName(word: string): string | null {
   const small = word.toLowerCase();
-  const other = OTHER_WORDS[small] ?? OTHER_WORDS[small.replace(/s$/, '')];
+  const other = OTHER_WORDS.get(small) ?? OTHER_WORDS.get(small.replace(/s$/, ''));
   if (other !== undefined) return other;
   for (const singular of [small, small.replace(/s$/, '')]) {
     const named = symbolNamed(singular);
@@ -171,7 +177,7 @@ function byName(word: string): string | null {
 }
 
 function symbolNamed(small: string): string | undefined {
-  return small === 'ohm' ? 'ohm' : OTHER_NAMES[small];
+  return small === 'ohm' ? 'ohm' : OTHER_NAMES.get(small);
 }
 
 /** `Vrms`, `mVpp`, `Vdc` without what says how it was measured; `dBm` and its kin as dB; `V2` as a power. */

@@ -10,31 +10,37 @@ const GREEK = new Set(
 );
 
 /** Greek letters that look like a Latin one and have no name in TeX. */
-const GREEK_AS_LATIN: Readonly<Record<string, string>> = {
-  omicron: 'o',
-  Alpha: 'A',
-  Beta: 'B',
-  Epsilon: 'E',
-  Zeta: 'Z',
-  Eta: 'H',
-  Iota: 'I',
-  Kappa: 'K',
-  Mu: 'M',
-  Nu: 'N',
-  Omicron: 'O',
-  Rho: 'P',
-  Tau: 'T',
-  Chi: 'X',
-};
+const GREEK_AS_LATIN: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    omicron: 'o',
+    Alpha: 'A',
+    Beta: 'B',
+    Epsilon: 'E',
+    Zeta: 'Z',
+    Eta: 'H',
+    Iota: 'I',
+    Kappa: 'K',
+    Mu: 'M',
+    Nu: 'N',
+    Omicron: 'O',
+    Rho: 'P',
+    Tau: 'T',
+    Chi: 'X',
+  }),
+);
 
 /** Quantities whose usual symbol is another than their name read by the rule. */
-const SYMBOLS: Readonly<Record<string, { readonly base: string; readonly subscript: string }>> = {
-  swing_up: { base: '\\hat{v}', subscript: 'up' },
-  swing_down: { base: '\\hat{v}', subscript: 'down' },
-};
+const SYMBOLS: ReadonlyMap<string, { readonly base: string; readonly subscript: string }> = new Map(
+  Object.entries({
+    swing_up: { base: '\\hat{v}', subscript: 'up' },
+    swing_down: { base: '\\hat{v}', subscript: 'down' },
+  }),
+);
 
 /** Subscripts that the trade writes with parentheses. */
-const SUBSCRIPTS: Readonly<Record<string, string>> = { GSoff: 'GS(off)', GSth: 'GS(th)', DSon: 'DS(on)' };
+const SUBSCRIPTS: ReadonlyMap<string, string> = new Map(
+  Object.entries({ GSoff: 'GS(off)', GSth: 'GS(th)', DSon: 'DS(on)' }),
+);
 
 /** `I_D` as I_{\mathrm{D}}, `Q1` as \mathrm{Q1}, `beta` as \beta; `name` is canonical (ASCII letters, digits, `_`). */
 export function texOfName(name: string): string {
@@ -52,11 +58,11 @@ export function texOfPath(names: readonly string[], subject: string | null): str
 }
 
 function symbolOf(name: string, owners: readonly string[]): string {
-  const known = SYMBOLS[name];
+  const known = SYMBOLS.get(name);
   if (known !== undefined) return `${known.base}_{${[known.subscript, ...owners].map(word).join(',\\,')}}`;
   const [head, ...rest] = name.split('_').filter((part) => part !== '');
   const isQuantity = name.includes('_');
-  const subscripts = [...rest.map((part) => word(SUBSCRIPTS[part] ?? part)), ...owners.map(word)];
+  const subscripts = [...rest.map((part) => word(SUBSCRIPTS.get(part) ?? part)), ...owners.map(word)];
   const base = greek(head!) ?? (isQuantity ? italic(head!) : word(head!));
   return subscripts.length === 0 ? base : `${base}_{${subscripts.join(',\\,')}}`;
 }
@@ -71,6 +77,6 @@ function word(text: string): string {
 
 function greek(text: string): string | null {
   if (GREEK.has(text)) return `\\${text}`;
-  const latin = GREEK_AS_LATIN[text];
+  const latin = GREEK_AS_LATIN.get(text);
   return latin === undefined ? null : `\\mathrm{${latin}}`;
 }

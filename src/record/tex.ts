@@ -47,18 +47,20 @@ interface Piece {
 const RELATIONS: Readonly<Record<string, string>> = { '=': '=', '<': '<', '>': '>', '<=': '\\le', '>=': '\\ge' };
 
 /** Functions set with an operator of TeX's own. */
-const OPERATORS: Readonly<Record<string, string>> = {
-  min: '\\min',
-  max: '\\max',
-  exp: '\\exp',
-  ln: '\\ln',
-  log10: '\\log_{10}',
-  sin: '\\sin',
-  cos: '\\cos',
-  tan: '\\tan',
-  atan: '\\arctan',
-  sign: '\\operatorname{sgn}',
-};
+const OPERATORS: ReadonlyMap<string, string> = new Map(
+  Object.entries({
+    min: '\\min',
+    max: '\\max',
+    exp: '\\exp',
+    ln: '\\ln',
+    log10: '\\log_{10}',
+    sin: '\\sin',
+    cos: '\\cos',
+    tan: '\\tan',
+    atan: '\\arctan',
+    sign: '\\operatorname{sgn}',
+  }),
+);
 
 /** The expression in TeX, without delimiters; it holds no underscore that shows and no character from the text but names and digits. */
 export function texOfExpression(expr: Expr, options: TexOptions): string {
@@ -194,7 +196,7 @@ function call(expr: CallExpr, options: TexOptions): Piece {
     const lines = `${first} & \\mathrm{if}\\;${condition} \\\\ ${second} & \\mathrm{otherwise}`;
     return loose(`\\begin{cases} ${lines} \\end{cases}`, RANK.state);
   }
-  const symbol = OPERATORS[name] ?? functionName(name);
+  const symbol = OPERATORS.get(name) ?? functionName(name);
   return { ...atom(`${symbol}\\left(${texts.join(', ')}\\right)`), rank: RANK.power };
 }
 

@@ -5,6 +5,7 @@ import type { CellTree, Expr, Line, Message } from '../language/index.ts';
 import { createBuilder } from '../program/index.ts';
 import type { Segment } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
+import { DEFAULT_AMBIENT } from './ambient.ts';
 import { CELL_KINDS } from './cell-kinds.ts';
 import type { CellContext, Draft, Placed } from './draft.ts';
 import { EMPTY_DRAFT } from './draft.ts';
@@ -14,9 +15,6 @@ import type { ValueType } from './model.ts';
 import { Waiting, createScope } from './resolve.ts';
 import type { EndName } from './scope.ts';
 import { Stop } from './stop.ts';
-
-/** 25 degC, where the sheet has no cell T_A. */
-const DEFAULT_AMBIENT = 298.15;
 
 interface Surroundings {
   look(name: string): Interface | null;

@@ -26,6 +26,8 @@ const DEFAULTED: readonly { readonly field: DefaultField; readonly matters: (giv
   { field: 'M', matters: hasCapacitance },
 ];
 
+const ROUGH_C_GD = 'C_GD of a MOSFET is taken to follow the junction law, which is rough.';
+
 /** Collects the device of a part, in the n-channel frame. */
 export function partDevice(family: 'JFET' | 'MOSFET', law: PartLaw, given: GivenFields, builder: Builder): PartDevice {
   const defaults = DEFAULTS[family];
@@ -41,8 +43,8 @@ export function partDevice(family: 'JFET' | 'MOSFET', law: PartLaw, given: Given
       lambda: law.lambda,
       gamma: only('gamma'),
       phi: orDefault('phi'),
-      r_s: only('r_s'),
-      r_d: only('r_d'),
+      r_s: law.r_s,
+      r_d: law.r_d,
       I_GSS: only('I_GSS'),
       doubling: orDefault('doubling'),
       tempco: orDefault('tempco'),
@@ -55,9 +57,12 @@ export function partDevice(family: 'JFET' | 'MOSFET', law: PartLaw, given: Given
       M,
     },
     statedTemperatureLaws: given.has('tempco') && given.has('beta_exponent'),
-    assumptions: DEFAULTED.filter(({ field, matters }) => !given.has(field) && matters(given)).map(
-      ({ field }) => defaults[field].sentence,
-    ),
+    assumptions: [
+      ...DEFAULTED.filter(({ field, matters }) => !given.has(field) && matters(given)).map(
+        ({ field }) => defaults[field].sentence,
+      ),
+      ...(family === 'MOSFET' && C_GD !== null ? [ROUGH_C_GD] : []),
+    ],
   };
 }
 

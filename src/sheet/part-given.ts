@@ -27,4 +27,6 @@ export interface RouteResult {
   readonly beta: Handle;
   readonly V_TO: Handle;
   readonly status: Handle;
+  /** Series resistance that the rows fit, in ohm; null where the route has none. */
+  readonly R_0: Handle | null;
 }

@@ -9,6 +9,8 @@ import { PLAIN, formatValue } from '../quantity/index.ts';
 import type { GivenField, GivenFields, RouteResult } from './part-given.ts';
 import type { CellContext, OfferDraft, Placed, Read } from './draft.ts';
 import { lawForms } from './part-forms.ts';
+import { fittedLeadFault, leadDisagreement, leadsOf } from './part-leads.ts';
+import { rowReadings } from './row-readings.ts';
 import { stop } from './stop.ts';
 
 /** Beyond this the routes of a part do not speak of one square law (design: 25 %). */
@@ -20,6 +22,13 @@ export interface PartLaw {
   /** The other complete routes, for comparison. */
   readonly others: readonly RouteResult[];
   readonly lambda: Handle;
+  /** Resistances in the leads: as given, or what the rows fit; null where there is none. */
+  readonly r_s: Handle | null;
+  readonly r_d: Handle | null;
+  /** What was given, as the routes read it: g_fs of a JFET without a current is g_fs0. */
+  readonly rows: GivenFields;
+  /** How a row is read where it does not say so itself, by row; the same sentences stand among the assumptions. */
+  readonly readings: ReadonlyMap<GivenField, readonly string[]>;
   readonly forms: readonly OfferDraft[];
   readonly assumptions: readonly string[];
   readonly verify: (read: Read) => Placed | null;
@@ -27,8 +36,9 @@ export interface PartLaw {
 }
 
 /** Settles the law of a part from what it was given; stops when no route is complete. */
-export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, context: CellContext): PartLaw {
+export function partLaw(entry: PartEntry, channel: 1 | -1, written: GivenFields, context: CellContext): PartLaw {
   const { builder, tree } = context;
+  const given = asRoutesRead(entry.family, written);
   const assumptions: string[] = [];
   const defaults = DEFAULTS[entry.family];
   const slope = lambdaOf({ channel, given, lambda: NO_HANDLE, defaults, context });
@@ -40,11 +50,14 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, c
   if (complete.length === 0 && !entry.fittedTo) incomplete(entry, given, context);
   const results = complete.map((route): RouteResult => {
     const inputs = route.inputs.map((input) => inputHandle(input, { channel, given, lambda, defaults, context }));
-    const [beta, vto, status] = builder.call(route.id, inputs, route.outputs.length);
-    return { route, inputs, beta: beta!, V_TO: vto!, status: status! };
+    const [beta, vto, status, R_0 = null] = builder.call(route.id, inputs, route.outputs.length);
+    return { route, inputs, beta: beta!, V_TO: vto!, status: status!, R_0 };
   });
   const used = results[0] ?? unknownLaw(context);
-  const others = results.slice(1).filter(({ route }) => !hasLimitsAlone(route, used.route, given));
+  const others = results
+    .slice(1)
+    .filter(({ route }) => !hasLimitsAlone(route, used.route, given) && !complete.some((all) => isPartOf(route, all)));
+  const { r_s, r_d } = leadsOf(used, given, context);
   const thresholds = ['V_GSoff', 'V_GSth']
     .flatMap((name) => given.get(name) ?? [])
     .filter((field) => field.conditions.has('I_D'));
@@ -53,38 +66,70 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, given: GivenFields, c
       `${tree.name.name}: n = ${defaults.n.value} in the law near the threshold, which turns ${thresholds[0]!.name} at its test current into V_TO.`,
     );
   }
-  for (const field of fieldsOf(used.route, given)) {
-    if (['I_DSS', 'I_on', 'g_fs'].includes(field.name) && slope && !field.conditions.has('V_DS')) {
-      assumptions.push(
-        `${tree.name.name}.${field.name}: no V_DS is stated; it is taken at the edge of saturation, without lambda.`,
-      );
-    }
+  const readings = new Map<GivenField, string[]>();
+  const hasLeads = r_s !== null || r_d !== null;
+  const slopes = given.has('lambda') ? [] : (given.get('g_os') ?? []);
+  const compared = given.get('g_fs0') === given.get('g_fs') ? (given.get('g_fs') ?? []) : [];
+  for (const field of new Set([...fieldsOf(used.route, given), ...slopes, ...compared])) {
+    const sentences = rowReadings(field, { hasSlope: slope !== null, hasLeads });
+    readings.set(field, sentences);
+    assumptions.push(...sentences.map((sentence) => `${tree.name.name}.${field.name}: ${sentence}`));
+  }
+  if (used.R_0 !== null && r_d !== null && !given.has('r_d')) {
+    assumptions.push(
+      `${tree.name.name}: the series part R_0 that the three R_DSon rows fit is taken to lie in the drain lead: r_d = R_0 - r_s.`,
+    );
+  }
+  if (used.route.needs.includes('R_DSon2') && used.R_0 === null) {
+    const none = hasLeads ? '' : ', which is 0 since neither is given';
+    assumptions.push(`${tree.name.name}: the series part of both R_DSon rows is taken as R_0 = r_s + r_d${none}.`);
   }
   return {
     used,
     others,
     lambda,
-    forms: lawForms(entry.family, channel, used, lambda, given, builder),
-    assumptions,
+    r_s,
+    r_d,
+    rows: given,
+    readings,
+    forms: lawForms(entry.family, channel, used, { lambda, r_s, r_d }, written, builder),
+    assumptions: [...new Set(assumptions)],
     verify(read) {
       const bad = [
         { status: slope?.status ? read(slope.status) : 0, field: given.get('g_os')?.[0] },
         { status: read(used.status), field: fieldsOf(used.route, given)[0] },
       ].find(({ status }) => status !== 0);
-      if (!bad) return null;
+      if (!bad) return fittedLeadFault(used, given, context, read);
       const line = bad.field?.tree.line ?? tree.line;
       const span = bad.field?.tree.body.span ?? tree.entry.span;
       const text = `${tree.name.name} does not settle its square law. ${ROUTE_STATUS[bad.status]!.sentence}`;
       return { line, message: { code: 'no-law', text, span } };
     },
-    cautions: (read) =>
-      others.flatMap((other) =>
+    cautions: (read) => [
+      ...others.flatMap((other) =>
         disagreement(used, other, read).map((text) => ({
           text,
-          line: lineOf(other.route, given, context),
+          line: lineOf(other.route, used.route, given, context),
         })),
       ),
+      ...leadDisagreement(used, given, read, DISAGREEMENT).map((text) => ({
+        text,
+        line: lineOf(used.route, null, given, context),
+      })),
+    ],
   };
+}
+
+/** What was given with g_fs of a JFET that names no current as g_fs0, which is what a data sheet then means. */
+function asRoutesRead(family: PartEntry['family'], given: GivenFields): GivenFields {
+  const slope = given.get('g_fs');
+  if (family !== 'JFET' || !slope || slope[0]!.conditions.has('I_D') || given.has('g_fs0')) return given;
+  return new Map([...given, ['g_fs0', slope]]);
+}
+
+/** Whether a route takes some of the rows that another one takes whole. */
+function isPartOf(route: Route, all: Route): boolean {
+  return all.needs.length > route.needs.length && route.needs.every((need) => all.needs.includes(need));
 }
 
 /** Whether a route rests on a row of limits alone that the used one does not need: such a row cuts the declared set and names no number to compare. */
@@ -123,8 +168,12 @@ function disagreement(used: RouteResult, other: RouteResult, read: Read): string
   ];
 }
 
-function lineOf(route: Route, given: GivenFields, context: CellContext): Placed['line'] {
-  const fields = fieldsOf(route, given);
+/** The line of the last row of a route, of those that another one does not take. */
+function lineOf(route: Route, beside: Route | null, given: GivenFields, context: CellContext): Placed['line'] {
+  const all = fieldsOf(route, given);
+  const known = beside === null ? [] : fieldsOf(beside, given);
+  const own = all.filter((field) => !known.includes(field));
+  const fields = own.length > 0 ? own : all;
   return fields[fields.length - 1]?.tree.line ?? context.tree.line;
 }
 
@@ -233,5 +282,6 @@ function unknownLaw({ builder }: CellContext): RouteResult {
     beta: none,
     V_TO: none,
     status: builder.constant(0),
+    R_0: null,
   };
 }

@@ -4,7 +4,8 @@ import { nearestNames } from '../language/index.ts';
 import type { Line, Message, PathExpr, Span } from '../language/index.ts';
 import { REGIONS } from '../network/index.ts';
 import type { Builder } from '../program/index.ts';
-import { PLAIN, linearKind } from '../quantity/index.ts';
+import { PLAIN, TEMPERATURE_POINT, linearKind } from '../quantity/index.ts';
+import { DEFAULT_AMBIENT } from './ambient.ts';
 import type { Interface } from './interface.ts';
 import type { CellKind, ValueType } from './model.ts';
 import { compileExpression } from './expression.ts';
@@ -75,6 +76,8 @@ function resolve(path: PathExpr, builder: Builder, lookup: Lookup): Typed {
     if (constant) return { type: constant.type, handle: builder.constant(constant.value) };
     const region = (REGIONS as readonly string[]).indexOf(first!.name);
     if (region >= 0) return { type: 'region', handle: builder.constant(region) };
+    if (first!.name === 'T_A' && !lookup.look('T_A'))
+      return { type: TEMPERATURE_POINT, handle: builder.constant(DEFAULT_AMBIENT) };
   }
   const cell = find(path, lookup);
   if (rest.length === 0) {

@@ -86,3 +86,20 @@ describe('a file that cannot be read', () => {
     expect(ran).toEqual({ status: 3, out: '', complaints: 'a is not UTF-8 text. Save it as UTF-8 and try again.\n' });
   });
 });
+
+describe('a fault of the program itself', () => {
+  it('has a status of its own and says where it arose', async () => {
+    const { run } = await import('../../src/cli/run.ts');
+    let complaints = '';
+    const status = run(['a.txt'], {
+      read: () => new TextEncoder().encode('a = check 1 V < 2 V'),
+      print: () => {
+        throw new RangeError('no such column');
+      },
+      complain: (text) => (complaints += text),
+      width: 80,
+    });
+    expect(status).toBe(70);
+    expect(complaints).toMatch(/^The program failed; this says nothing of the sheet\.\nRangeError: no such column\n/);
+  });
+});

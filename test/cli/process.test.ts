@@ -1,5 +1,5 @@
 import { spawnSync } from 'node:child_process';
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { closeSync, existsSync, mkdtempSync, openSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterAll, describe, expect, it } from 'vitest';
@@ -35,4 +35,20 @@ describe('npm run -s sheet', () => {
   it('says in one line what it cannot read', () => {
     expect(npmSheet(['.'])).toMatchObject({ status: 3, stdout: '', stderr: '. is a directory, not a sheet file.\n' });
   }, 60_000);
+
+  it.runIf(existsSync('/dev/full'))(
+    'tells a report that could not be written from a check that fails',
+    () => {
+      writeFileSync(path.join(folder, 'mine.txt'), 'a = check 1 V > 2 V\n');
+      const full = openSync('/dev/full', 'w');
+      const { status, stderr } = spawnSync('npx', ['tsx', 'src/cli/main.ts', path.join(folder, 'mine.txt')], {
+        stdio: ['ignore', full, 'pipe'],
+        encoding: 'utf8',
+      });
+      closeSync(full);
+      expect(stderr).toBe('The report could not be written (ENOSPC).\n');
+      expect(status).toBe(70);
+    },
+    60_000,
+  );
 });

@@ -22,14 +22,11 @@ function route(id: string): Route {
 }
 
 function randomPart(u: () => number, family: Family, depletion: boolean): Omit<Part, 'channel'> {
-  return {
-    family,
-    beta: decade(u, 1e-4, 0.5),
-    vto: depletion ? -decade(u, 0.8, 8) : between(u, 0.5, 4),
-    lambda: u() < 0.3 ? 0 : decade(u, 1e-3, 0.1),
-    r_s: u() < 0.5 ? 0 : between(u, 0, 3),
-    r_d: u() < 0.5 ? 0 : between(u, 0, 3),
-  };
+  const beta = decade(u, 1e-4, 0.5);
+  const vto = depletion ? -decade(u, 0.8, 8) : between(u, 0.5, 4);
+  // Leads that take a share of every row's V_DS but not all of it.
+  const lead = (): number => (u() < 0.5 ? 0 : between(u, 0, 0.04) / (beta * Math.max(1, Math.abs(vto))));
+  return { family, beta, vto, lambda: u() < 0.3 ? 0 : decade(u, 1e-3, 0.1), r_s: lead(), r_d: lead() };
 }
 
 /** What a data sheet of this very part would print, one condition after another, through the forms. */
@@ -257,6 +254,13 @@ describe('what a route cannot use', () => {
       'series resistance',
     ],
     [
+      'an I_DSS whose V_DS the leads take whole',
+      I_DSS_V_P,
+      { I_DSS: 10e-3, 'I_DSS@V_DS': 5, V_P: -2, r_s: 300, r_d: 200 },
+      'leads',
+    ],
+    ['a g_fs above 1 / r_s', g_fs_V_P, { g_fs: 10e-3, 'g_fs@I_D': 5e-3, V_P: -2, r_s: 100 }, 'leads'],
+    [
       'an R_DSon at a current that saturates',
       R_V_TO,
       { R_DSon: 2, 'R_DSon@V_GS': 10, 'R_DSon@I_D': 5, V_TO: 2 },
@@ -306,7 +310,12 @@ describe('lambda from g_os', () => {
         const part = { ...randomPart(u, 'JFET', true), channel };
         const sheet = dataSheet(part, u);
         expect(Math.abs(call(LAMBDA_ROUTES[0], sheet)['lambda'] - part.lambda)).toBeLessThan(1e-15);
-        const atZero = call(FORMS['g_os'], { ...sheet, V_TO: part.vto, 'g_os@I_D': NaN })['value'];
+        const atZero = call(FORMS['g_os'], {
+          ...sheet,
+          V_TO: part.vto,
+          'g_os@I_D': NaN,
+          'g_os@V_DS': sheet['I_DSS@V_DS'],
+        })['value'];
         expect(Math.abs(call(LAMBDA_ROUTES[1], { ...sheet, g_os: atZero })['lambda'] - part.lambda)).toBeLessThan(
           1e-15,
         );

@@ -34,6 +34,8 @@ describe('names', () => {
     ['V_beta', 'V_{\\beta}'],
     ['Alpha', '\\mathrm{A}'],
     ['a_', 'a'],
+    ['constructor', '\\mathrm{constructor}'],
+    ['V_toString', 'V_{\\mathrm{toString}}'],
     ['swing_up', '\\hat{v}_{\\mathrm{up}}'],
   ])('%s is set as %s', (name, tex) => {
     expect(texOfName(name)).toBe(tex);

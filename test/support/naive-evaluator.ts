@@ -212,7 +212,8 @@ function workEntry(hand: Hand): Pick<Worked, 'type' | 'value' | 'offers' | 'part
       if (name.name === 'T_A' && !(isKind(value.type) && sameKinds({ ...value.type, scale: 'linear' }, KINDS.K)))
         throw new Broken('T_A is a temperature');
       const freezing = name.name === 'T_A' && value.value !== null && !(value.value > 0);
-      return { ...none, type: value.type, value: freezing ? { ...value, value: NaN } : value };
+      const type = name.name === 'T_A' ? KINDS.degC : value.type;
+      return { ...none, type, value: freezing ? { ...value, type, value: NaN } : { ...value, type } };
     }
     case 'check': {
       const value = evaluate(entry.condition, hand.resolve);

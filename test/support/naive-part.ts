@@ -112,7 +112,7 @@ export function naivePart(
       }
     : null;
   const unknown = empty ? null : NaN;
-  const forms = lawForms(family, channel, law?.beta ?? NaN, law?.vto ?? NaN, law?.lambda ?? NaN, given);
+  const forms = lawForms(family, channel, law ?? { beta: NaN, vto: NaN, lambda: NaN }, given);
   for (const [name, { type, value }] of Object.entries(forms)) {
     if (offers.has(name)) continue;
     const settled = hasNumbers ? value : unknown;
@@ -163,19 +163,33 @@ function settle(
   const value = (name: string): number => given.get(name)!.value!;
   const at = (name: string, condition: string): number | undefined => given.get(name)!.at.get(condition);
   const lambda = slopeOf(channel, given);
-  /** 1 + lambda V_DS of a line, 1 where it states none. */
-  const lift = (name: string): number => 1 + lambda * channel * (at(name, 'V_DS') ?? 0);
+  const rs = given.get('r_s')?.value ?? 0;
+  const leads = rs + (given.get('r_d')?.value ?? 0);
+  /** 1 + lambda V_DS of the channel of a line at its current, 1 where it states no V_DS. */
+  const lift = (name: string, current: number): number => {
+    const vds = at(name, 'V_DS');
+    return vds === undefined ? 1 : 1 + lambda * (channel * vds - current * leads);
+  };
+  /** beta of a current in saturation at a gate voltage, both at the terminals. */
+  const betaOfCurrent = (name: string, gate: number, vto: number): number => {
+    const drive = gate - value(name) * rs - vto;
+    return drive > 0 ? value(name) / lift(name, value(name)) / drive ** 2 : NaN;
+  };
   /** beta as the gain line gives it, V_TO known. */
   const betaAt = (vto: number): number => {
     switch (gain) {
       case 'I_DSS':
-        return value('I_DSS') / lift('I_DSS') / vto ** 2;
+        return betaOfCurrent('I_DSS', 0, vto);
       case 'I_on':
-        return value('I_on') / lift('I_on') / (channel * at('I_on', 'V_GS')! - vto) ** 2;
-      case 'g_fs':
-        return value('g_fs') ** 2 / (4 * at('g_fs', 'I_D')! * lift('g_fs'));
+        return betaOfCurrent('I_on', channel * at('I_on', 'V_GS')!, vto);
+      case 'g_fs': {
+        const current = at('g_fs', 'I_D')!;
+        const gds = at('g_fs', 'V_DS') === undefined ? 0 : (lambda * current) / lift('g_fs', current);
+        const gm = (value('g_fs') * (1 + gds * leads)) / (1 - value('g_fs') * rs);
+        return gm > 0 ? gm ** 2 / (4 * current * lift('g_fs', current)) : NaN;
+      }
       case 'g_fs0':
-        return value('g_fs0') ** 2 / (4 * (value('I_DSS') / lift('I_DSS')));
+        return betaOfCurrent('I_DSS', 0, vto);
       case 'K_P':
         return (value('K_P') / 2) * (given.has('W') && given.has('L') ? value('W') / value('L') : 1);
       default:
@@ -185,20 +199,45 @@ function settle(
   const n = family === 'JFET' ? 1.1 : 1.4;
   const tnom = given.get('T_nom')?.value ?? 298.15;
   let vto: number;
-  if (threshold === 'I_DSS') vto = -Math.sqrt(value('I_DSS') / lift('I_DSS') / betaAt(NaN));
-  else if (threshold === 'V_TO') vto = family === 'JFET' ? value('V_TO') : channel * value('V_TO');
+  if (gain === 'g_fs0') {
+    // g_fs0 at the edge of saturation, where its own current flows, falls as the channel pinches off later.
+    const excess = (x: number): number => {
+      const beta = betaAt(x);
+      return value('g_fs0') - seenAtTerminals(2 * beta * (-x - zeroGateCurrent(beta, x, rs) * rs), rs);
+    };
+    vto = -deepestRoot((x) => excess(-x), 100, 100 - value('I_DSS') * rs);
+  } else if (threshold === 'I_DSS') {
+    const current = value('I_DSS');
+    vto = -current * rs - Math.sqrt(current / lift('I_DSS', current) / betaAt(NaN));
+  } else if (threshold === 'V_TO') vto = family === 'JFET' ? value('V_TO') : channel * value('V_TO');
   else {
     const stated = channel * value(threshold);
     const current = at(threshold, 'I_D');
     if (current === undefined) vto = stated;
     else {
       // V_GS at the test current, as a function of V_TO: what is stated is met where it passes it first from far below.
-      const excess = (x: number): number => x + testDrive(current / lift(threshold), betaAt(x), n, tnom) - stated;
-      vto = deepestRoot(excess, gain === 'I_DSS' ? 0 : stated + 2, 10 + 3 * Math.abs(stated));
+      const excess = (x: number): number =>
+        x + current * rs + testDrive(current / lift(threshold, current), betaAt(x), n, tnom) - stated;
+      vto = deepestRoot(excess, gain === 'I_DSS' ? -value('I_DSS') * rs : stated + 2, 10 + 3 * Math.abs(stated));
     }
   }
-  if (gain === 'I_on' && !(channel * at('I_on', 'V_GS')! > vto)) return { beta: NaN, vto: NaN, lambda };
   return { beta: betaAt(vto), vto, lambda };
+}
+
+/** Drain current at V_GS = 0 at the edge of saturation, r_s in the source lead. */
+function zeroGateCurrent(beta: number, vto: number, rs: number): number {
+  let current = vto < 0 ? beta * vto * vto : 0;
+  if (rs === 0) return current;
+  for (let low = 0, high = current, k = 0; k < 200; k++) {
+    current = (low + high) / 2;
+    if (beta * Math.max(0, -vto - current * rs) ** 2 > current) low = current;
+    else high = current;
+  }
+  return current;
+}
+
+function seenAtTerminals(gm: number, rs: number): number {
+  return gm / (1 + gm * rs);
 }
 
 function slopeOf(channel: 1 | -1, given: ReadonlyMap<string, Given>): number {
@@ -215,20 +254,20 @@ function slopeOf(channel: 1 | -1, given: ReadonlyMap<string, Given>): number {
 function lawForms(
   family: 'JFET' | 'MOSFET',
   channel: 1 | -1,
-  beta: number,
-  vto: number,
-  lambda: number,
+  { beta, vto, lambda }: { beta: number; vto: number; lambda: number },
   given: ReadonlyMap<string, Given>,
 ): Record<string, { type: NaiveKind; value: number }> {
-  const atZero = beta * vto * vto;
+  const rs = given.get('r_s')?.value ?? 0;
+  const leads = rs + (given.get('r_d')?.value ?? 0);
+  const atZero = zeroGateCurrent(beta, vto, rs);
   if (family === 'JFET')
     return {
       beta: { type: KINDS['A/V^2'], value: beta },
       V_TO: { type: KINDS.V, value: vto },
       I_DSS: { type: KINDS.A, value: atZero },
       V_P: { type: KINDS.V, value: channel * vto },
-      g_fs0: { type: KINDS.S, value: (2 * atZero) / Math.abs(vto) },
-      R_DSon: { type: KINDS.ohm, value: 1 / (2 * beta * Math.abs(vto)) },
+      g_fs0: { type: KINDS.S, value: seenAtTerminals(2 * beta * (Math.abs(vto) - atZero * rs), rs) },
+      R_DSon: { type: KINDS.ohm, value: leads + 1 / (2 * beta * Math.abs(vto)) },
       lambda: { type: KINDS['/V'], value: lambda },
     };
   const ratio = (given.get('W')?.value ?? 1) / (given.get('L')?.value ?? 1);
@@ -236,7 +275,7 @@ function lawForms(
     K: { type: KINDS['A/V^2'], value: beta },
     K_P: { type: KINDS['A/V^2'], value: (2 * beta) / ratio },
     V_TO: { type: KINDS.V, value: channel * vto },
-    I_DSS: { type: KINDS.A, value: vto < 0 ? atZero : 0 },
+    I_DSS: { type: KINDS.A, value: atZero },
     lambda: { type: KINDS['/V'], value: lambda },
   };
 }

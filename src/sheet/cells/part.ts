@@ -2,7 +2,7 @@
 // route, and shown in every convention of the trade.
 
 import { wantedSign } from '../../fet/index.ts';
-import { sameKind } from '../../quantity/index.ts';
+import { formatValue, sameKind } from '../../quantity/index.ts';
 import { nearestNames } from '../../language/index.ts';
 import type { FieldTree, Line, PartEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
@@ -151,7 +151,26 @@ function verifyPart(
     const fault = signFault(entry, channel, field, read);
     if (fault) return fault;
   }
-  return law(read);
+  return reverseCapacitanceFault(fields, read) ?? law(read);
+}
+
+/** C_rss is C_GD, which C_iss holds beside C_GS and C_oss beside C_DS: it exceeds neither. */
+function reverseCapacitanceFault(fields: readonly GivenField[], read: Read): Placed | null {
+  const row = (name: string): GivenField | undefined => fields.find((field) => field.name === name);
+  const reverse = row('C_rss');
+  if (!reverse) return null;
+  for (const [name, other] of [
+    ['C_iss', 'C_GS'],
+    ['C_oss', 'C_DS'],
+  ] as const) {
+    const whole = row(name);
+    if (!whole || read(reverse.handle) <= read(whole.handle)) continue;
+    const shown = (field: GivenField): string => formatValue(read(field.handle), field.kind, { zeros: 'drop' }).text;
+    const text = `C_rss is ${shown(reverse)} and ${name} ${shown(whole)}, so ${other} = ${name} - C_rss would lie below 0. Take both rows at the same voltages, where C_rss is the smaller one.`;
+    const { line, body } = reverse.tree;
+    return { line, message: { code: 'capacitance-order', text, span: body.span } };
+  }
+  return null;
 }
 
 function offerOf(field: GivenField, name: string): OfferDraft {

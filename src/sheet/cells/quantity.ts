@@ -1,56 +1,55 @@
 // A quantity cell, and the fields of parts and points, which are written alike: one value with or
 // without spread.
 
-import {
-  CAPACITANCE,
-  TEMPERATURE_DIFFERENCE,
-  TEMPERATURE_POINT,
-  sameDimension,
-  sameKind,
-} from '../../quantity/index.ts';
+import { CAPACITANCE, TEMPERATURE_DIFFERENCE, sameKind } from '../../quantity/index.ts';
 import type { ValueKind } from '../../quantity/index.ts';
 import type { Expr, Line, Literal, QuantityEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
+import { ambientCautions, ambientFault, checkAmbientKind, kelvinAsPoint } from '../ambient.ts';
 import { diagnose } from '../diagnose.ts';
 import { drawsOf } from '../compiled-quantity.ts';
 import type { CompiledQuantity, QuantityDraw } from '../compiled-quantity.ts';
 import { EMPTY_DRAFT, NO_SPREAD } from '../draft.ts';
 import type { CellContext, Draft, Read } from '../draft.ts';
-import type { DeclaredSpread, ValueType } from '../model.ts';
-import { operandText } from '../scope.ts';
-
+import type { DeclaredSpread } from '../model.ts';
 import { stop } from '../stop.ts';
 import { isQuantity, typeName } from '../value-type.ts';
 import { expressionStep } from '../workings.ts';
 
-/** Compiles value and spread of an entry; stops where limits do not fit the value. */
-export function compileQuantityEntry(entry: QuantityEntry, line: Line, context: CellContext): CompiledQuantity {
+/** Compiles value and spread of an entry, with `kindOf` their kinds as this place reads them; stops where limits do not fit the value. */
+export function compileQuantityEntry(
+  entry: QuantityEntry,
+  line: Line,
+  context: CellContext,
+  kindOf: (kind: ValueKind) => ValueKind = (kind) => kind,
+): CompiledQuantity {
   const scope = context.scope(line);
   if (entry.value === null) {
-    const { kind, value } = standIn(entry, line);
+    const { kind, value } = standIn(entry, line, kindOf);
     checkUnit(entry, kind);
     const handle = context.builder.input(value);
     return {
       type: kind,
       handle,
       draw: { handle, form: 'value' },
-      spread: declared(entry, handle, kind, line),
+      spread: declared(entry, handle, kind, line, kindOf),
       isInput: true,
       chosen: true,
       fromZero: false,
     };
   }
+  const { type: written, handle: formula } = scope.compile(entry.value);
+  const type = isQuantity(written) ? kindOf(written) : written;
   const isInput = isNumber(entry.value);
-  const { type, handle: formula } = scope.compile(entry.value);
-  const value = { type, handle: isInput && isQuantity(type) ? context.builder.input(numberOf(entry.value)) : formula };
-  if (isQuantity(value.type)) checkUnit(entry, value.type);
+  const handle = isInput && isQuantity(type) ? context.builder.input(numberOf(entry.value)) : formula;
+  if (isQuantity(type)) checkUnit(entry, type);
   else if (entry.spread)
-    stop('spread-of-word', `A spread belongs to a number; this is ${typeName(value.type)}.`, entry.spread.span);
-  const spread = entry.spread && isQuantity(value.type) ? declared(entry, value.handle, value.type, line) : null;
-  const draw = spread && drawOf(entry, value.handle, isInput, context);
+    stop('spread-of-word', `A spread belongs to a number; this is ${typeName(type)}.`, entry.spread.span);
+  const spread = entry.spread && isQuantity(type) ? declared(entry, handle, type, line, kindOf) : null;
+  const draw = spread && drawOf(entry, handle, isInput, context);
   return {
-    type: value.type,
-    handle: draw ? drawnHandle(value.handle, draw, context) : value.handle,
+    type,
+    handle: draw ? drawnHandle(handle, draw, context) : handle,
     draw,
     spread,
     isInput,
@@ -100,9 +99,11 @@ export function fromZeroText(name: string): string {
 export function compileQuantityCell(context: CellContext): Draft {
   const { tree } = context;
   const entry = tree.entry as QuantityEntry;
-  const compiled = withNature(compileQuantityEntry(entry, tree.line, context), tree.name.name, entry);
+  const isAmbient = tree.name.name === 'T_A';
+  const written = compileQuantityEntry(entry, tree.line, context, isAmbient ? kelvinAsPoint : undefined);
+  const compiled = withNature(written, tree.name.name, entry);
   const as = entry.as?.unit ?? null;
-  if (tree.name.name === 'T_A') checkAmbient(compiled.type, entry, tree.line);
+  if (isAmbient) checkAmbientKind(compiled.type, entry, tree.line);
   return {
     ...EMPTY_DRAFT,
     type: compiled.type,
@@ -116,19 +117,16 @@ export function compileQuantityCell(context: CellContext): Draft {
     ],
     verify: (read) => {
       const value = read(compiled.handle);
-      if (tree.name.name === 'T_A' && !(value > 0)) {
-        return {
-          line: tree.line,
-          message: {
-            code: 'ambient-range',
-            text: 'T_A lies at or below absolute zero. Write a temperature above −273.15 degC, such as 25 degC.',
-            span: entry.span,
-          },
-        };
-      }
-      if (!Number.isNaN(value)) return null;
-      return { line: tree.line, message: diagnose(entry.value!, context, tree.line) };
+      if (Number.isNaN(value)) return { line: tree.line, message: diagnose(entry.value!, context, tree.line) };
+      return isAmbient ? ambientFault(value, compiled.spread?.(read) ?? null, entry, tree.line) : null;
     },
+    cautions: (read) =>
+      isAmbient
+        ? ambientCautions(read(compiled.handle), compiled.spread?.(read) ?? null).map((text) => ({
+            text,
+            line: tree.line,
+          }))
+        : [],
     workings: (read) =>
       entry.value === null || isNumber(entry.value)
         ? []
@@ -161,10 +159,14 @@ function isNumber(expr: Expr): boolean {
 }
 
 /** The nominal that stands in where limits alone are given: their geometric mean in magnitude, their middle where signs differ, the one where there is one. */
-function standIn(entry: QuantityEntry, line: Line): { kind: ValueKind; value: number } {
+function standIn(
+  entry: QuantityEntry,
+  line: Line,
+  kindOf: (kind: ValueKind) => ValueKind,
+): { kind: ValueKind; value: number } {
   const { first, last } = entry.spread!.bounds!;
   if (first && last) {
-    if (!sameKind(first.kind, last.kind)) {
+    if (!sameKind(kindOf(first.kind), kindOf(last.kind))) {
       stop(
         'limits-differ',
         `${text(line, first)} is ${typeName(first.kind)} and ${text(line, last)} is ${typeName(last.kind)}: both limits are of one kind.`,
@@ -173,14 +175,21 @@ function standIn(entry: QuantityEntry, line: Line): { kind: ValueKind; value: nu
     }
     const product = first.value * last.value;
     const middle = (first.value + last.value) / 2;
-    const useMiddle = product <= 0 || first.kind.scale !== 'linear';
-    return { kind: first.kind, value: useMiddle ? middle : Math.sign(first.value) * Math.sqrt(product) };
+    const kind = kindOf(first.kind);
+    const useMiddle = product <= 0 || kind.scale !== 'linear';
+    return { kind, value: useMiddle ? middle : Math.sign(first.value) * Math.sqrt(product) };
   }
   const only = (first ?? last)!;
-  return { kind: only.kind, value: only.value };
+  return { kind: kindOf(only.kind), value: only.value };
 }
 
-function declared(entry: QuantityEntry, nominal: Handle, kind: ValueKind, line: Line): (read: Read) => DeclaredSpread {
+function declared(
+  entry: QuantityEntry,
+  nominal: Handle,
+  kind: ValueKind,
+  line: Line,
+  kindOf: (kind: ValueKind) => ValueKind,
+): (read: Read) => DeclaredSpread {
   const spread = entry.spread!;
   const common = {
     law: spread.law ?? 'uniform',
@@ -208,7 +217,7 @@ function declared(entry: QuantityEntry, nominal: Handle, kind: ValueKind, line: 
   }
   const { first, last } = spread.bounds!;
   for (const limit of [first, last]) {
-    if (limit && !sameKind(limit.kind, kind)) {
+    if (limit && !sameKind(kindOf(limit.kind), kind)) {
       stop(
         'limit-dimension',
         `The value is ${typeName(kind)} and its limit ${text(line, limit)} is ${typeName(limit.kind)}. Both are of one kind.`,
@@ -266,15 +275,6 @@ function checkUnit(entry: QuantityEntry, kind: ValueKind): void {
     'unit-dimension',
     `The value is ${typeName(kind)}, and ${unit.text} measures ${typeName(unit.kind)}. Choose a unit of its own kind.`,
     span,
-  );
-}
-
-function checkAmbient(type: ValueType, entry: QuantityEntry, line: Line): void {
-  if (isQuantity(type) && sameDimension(type.dimension, TEMPERATURE_POINT.dimension)) return;
-  stop(
-    'ambient-kind',
-    `T_A is the ambient temperature at which every stage stands; ${operandText({ text: line.text }, entry.span, 'this')} is ${typeName(type)}. Write it as 25 degC, or give the cell another name.`,
-    entry.span,
   );
 }
 
