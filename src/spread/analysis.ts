@@ -109,7 +109,8 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     const n = sum.moments.count[w]!;
     if (n < sum.builds || !(low > -Infinity && high < Infinity)) return null;
     const bins = sum.bins.slice(w * BINS, (w + 1) * BINS);
-    const at = (p: number): number => quantileOf(bins, first.low[w]!, first.high[w]!, low, high, p);
+    const histogram = { counts: bins, low: first.low[w]!, high: first.high[w]!, least: low, largest: high };
+    const at = (p: number): number => quantileOf(histogram, p);
     return {
       n,
       mean: sum.moments.mean[w]!,

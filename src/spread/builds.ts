@@ -8,7 +8,7 @@ import type { SpreadModel } from '../sheet/index.ts';
 import { choicesOf } from './batch.ts';
 import { createDraws, positionOf } from './draws.ts';
 import { quantileAt } from './law.ts';
-import { valueAt } from './position.ts';
+import { fillValues, valueAt } from './position.ts';
 import type { Position } from './position.ts';
 import { serviceDraws, serviceStates } from './service.ts';
 import { BINS, emptyTally } from './tally.ts';
@@ -62,10 +62,7 @@ export function createBuilds(model: SpreadModel, seed: number, ranges: Ranges): 
       tally.attempts[part]! += attempts;
       tally.givenUp[part]! += givenUp;
     });
-    for (let k = 0; k < drawn.length; k++) {
-      const [place, column] = [draws.place(k), columns.input(k)];
-      for (let i = 0; i < count; i++) column[i] = valueAt(drawn[k]!, place[i]!);
-    }
+    for (let k = 0; k < drawn.length; k++) fillValues(drawn[k]!, draws.place(k), count, columns.input(k));
     for (const each of holds) each.fill(1, 0, count);
     states.forEach((state, s) => {
       state.forEach((t, n) => columns.input(service[n]!).fill(valueAt(drawn[service[n]!]!, t), 0, count));

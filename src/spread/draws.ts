@@ -4,8 +4,7 @@
 // Draws that go together are tied by the fold law; a specimen that reads outside a further limit of its part is drawn again,
 // all draws of that part together, until it belongs to the declared set.
 
-import { drawKey, uniformAt } from '../numeric/index.ts';
-import type { DrawKey } from '../numeric/index.ts';
+import { drawKey, fillUniform, uniformAt } from '../numeric/index.ts';
 import { createColumns, planColumns, reachOf, reaches } from '../program/index.ts';
 import { KERNELS } from '../sheet/index.ts';
 import type { SpreadModel, Tie } from '../sheet/index.ts';
@@ -40,16 +39,30 @@ export function createDraws(model: SpreadModel, seed: number, width: number): Dr
   const keys = drawn.map(({ name }) => drawKey(seed, name));
   const places = drawn.map(() => new Float64Array(width));
   const isVoid = new Uint8Array(width);
-  const parts = partsOf(model, width);
+  const parts = partsOf(model);
+  const own = drawn.flatMap(({ spread }, k) => (spread.service ? [] : [k]));
   const tieOf = new Map(ties.map((tie) => [tie.gain, tie]));
 
-  /** Draws number k of one build; the tied one after the one it follows. */
-  function place(k: number, build: number, attempt: number): number {
-    const each = drawn[k]!;
-    if (each.spread.service) return 0;
-    const u = uniformAt(keys[k]!, build, attempt);
+  /** Draws number k of one build once more. */
+  function again(k: number, build: number, attempt: number): number {
     const tie = tieOf.get(k);
-    return placeAt(each.spread.law, tie ? tied(tie, keys, build, attempt, u) : u);
+    const u = uniformAt(keys[k]!, build, attempt);
+    if (!tie) return placeAt(drawn[k]!.spread.law, u);
+    return placeAt(drawn[k]!.spread.law, tied(tie, uniformAt(keys[tie.threshold]!, build, attempt), u));
+  }
+
+  /** Draws builds first .. first + count for the first time: shares, then what is tied to them, then places. */
+  function drawAll(first: number, count: number): void {
+    for (const k of own) fillUniform(places[k]!, count, keys[k]!, first, 0);
+    for (const tie of ties) {
+      const [threshold, gain] = [places[tie.threshold]!, places[tie.gain]!];
+      for (let i = 0; i < count; i++) gain[i] = tied(tie, threshold[i]!, gain[i]!);
+    }
+    for (const k of own) {
+      const column = places[k]!;
+      if (drawn[k]!.spread.law === 'uniform') for (let i = 0; i < count; i++) column[i] = 2 * column[i]! - 1;
+      else for (let i = 0; i < count; i++) column[i] = placeAt('normal', column[i]!);
+    }
   }
 
   return {
@@ -57,15 +70,12 @@ export function createDraws(model: SpreadModel, seed: number, width: number): Dr
     place: (k) => places[k]!,
     draw(first, count) {
       isVoid.fill(0, 0, count);
-      for (let k = 0; k < drawn.length; k++) {
-        const column = places[k]!;
-        for (let i = 0; i < count; i++) column[i] = place(k, first + i, 0);
-      }
+      drawAll(first, count);
       return parts.map(({ cell, draws, check }) => {
         let pending = check(places, null, count);
         let attempts = count;
         for (let attempt = 1; pending.length > 0 && attempt < ATTEMPT_CAP; attempt++) {
-          for (const i of pending) for (const k of draws) places[k]![i] = place(k, first + i, attempt);
+          for (const i of pending) for (const k of draws) places[k]![i] = again(k, first + i, attempt);
           attempts += pending.length;
           pending = check(places, pending, pending.length);
         }
@@ -76,11 +86,9 @@ export function createDraws(model: SpreadModel, seed: number, width: number): Dr
   };
 }
 
-/** The quantile of the row that follows another. */
-function tied(tie: Tie, keys: readonly DrawKey[], build: number, attempt: number, r: number): number {
-  const drawnThreshold = uniformAt(keys[tie.threshold]!, build, attempt);
-  const u = tie.thresholdFalls ? 1 - drawnThreshold : drawnThreshold;
-  const v = follow(u, 2 * r - 1, tie.tracking);
+/** The share of the row that follows another, from that one's share and a draw of its own. */
+function tied(tie: Tie, threshold: number, r: number): number {
+  const v = follow(tie.thresholdFalls ? 1 - threshold : threshold, 2 * r - 1, tie.tracking);
   return tie.gainFalls ? 1 - v : v;
 }
 
@@ -92,7 +100,7 @@ interface CutPart {
   check(places: readonly Float64Array[], rows: readonly number[] | null, count: number): number[];
 }
 
-function partsOf(model: SpreadModel, width: number): CutPart[] {
+function partsOf(model: SpreadModel): CutPart[] {
   const { program, slots, drawn, cuts } = model;
   const frozen = choicesOf(model);
   const reach = reachOf(

@@ -14,6 +14,21 @@ export function valueAt({ spread: { low, nominal, high } }: Drawn, t: number): n
   return Math.abs(t) === 1 ? end : nominal + Math.abs(t) * (end - nominal);
 }
 
+/** Fills a column with the values of a draw at some places within its ends. */
+export function fillValues(
+  { spread: { low, nominal, high } }: Drawn,
+  places: Float64Array,
+  count: number,
+  values: Float64Array,
+): void {
+  const below = low === null ? 0 : low - nominal;
+  const above = high === null ? 0 : high - nominal;
+  for (let i = 0; i < count; i++) {
+    const t = places[i]!;
+    values[i] = t < 0 ? nominal - t * below : nominal + t * above;
+  }
+}
+
 /** Fills columns, one per draw, with the values of some positions. */
 export function fillColumns(
   drawn: readonly Drawn[],
