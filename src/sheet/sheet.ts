@@ -21,7 +21,7 @@ import type { Interface } from './interface.ts';
 import { KERNELS } from './kernels.ts';
 import type { CellReading, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
-import { faultAt, readCell } from './readings.ts';
+import { faultAt, readCell, waitingText } from './readings.ts';
 import { createScope } from './resolve.ts';
 import { sweepPlot } from './sweep.ts';
 
@@ -140,6 +140,8 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
           node.fault = wasFault;
         }
       }
+      const awaited = node.waitsFor === null ? null : (byName.get(node.waitsFor) ?? null);
+      node.root = awaited?.root ?? awaited;
       if (fresh || node.fault !== wasFault || node.waitsFor !== wasWaiting) node.changedAt = pass;
       if (node.changedAt === pass) {
         node.reading = null;
@@ -184,7 +186,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     const sorted = topologicalOrder(nodes.map((node) => node.uses));
     order = sorted.order;
     const changed = evaluate(sorted.cycles);
-    for (const node of relinked) {
+    for (const node of [...relinked, ...nodes.filter(waitsOtherwise)]) {
       node.reading = null;
       changed.add(node.key);
     }
@@ -283,11 +285,20 @@ function createNode(key: string, tree: CellTree): Node {
     capacity: 0,
     fault: null,
     waitsFor: null,
+    root: null,
+    waitingText: '',
     uses: [],
     usedBy: [],
     changedAt: 0,
     reading: null,
   };
+}
+
+/** Notes what is said of a node's waiting; says whether that is another text than before, as where the root has moved. */
+function waitsOtherwise(node: Node): boolean {
+  const before = node.waitingText;
+  node.waitingText = node.waitsFor ? waitingText(node) : '';
+  return node.waitingText !== before;
 }
 
 function install(segment: { constantSlots: Int32Array; constantValues: Float64Array }, slots: Float64Array): void {

@@ -9,6 +9,7 @@ import { absentValue } from '../absent-value.ts';
 import { deviceCautions } from '../cautions.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
+import { exampleAmount } from '../example-amount.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
 import { pointWorkings } from '../stage-workings.ts';
 import { stop } from '../stop.ts';
@@ -120,7 +121,12 @@ function readFields(
       stop('field-twice', `${name} stands twice in this point. Keep one of the two lines.`, field.labelSpan, line);
     const quantity = compileQuantityEntry(body, line, context);
     if (typeof quantity.type === 'string' || !sameKind(quantity.type, kind)) {
-      stop('field-dimension', `${name} is ${typeName(kind)}; this is ${typeName(quantity.type)}.`, body.span, line);
+      stop(
+        'field-dimension',
+        `${name} is ${typeName(kind)}; this is ${typeName(quantity.type)}. Write for example ${name}: ${exampleAmount(kind)}.`,
+        body.span,
+        line,
+      );
     }
     given.set(name, { ...quantity, tree: field });
   }
