@@ -21,6 +21,8 @@ const KEYED = 2 ** 24;
 export interface Builder extends Emitter {
   /** Calls any kernel of the table the builder was made with. */
   call(kernel: string, inputs: readonly Handle[], outputs: number): Handle[];
+  /** A number with a slot to itself, which may be turned without touching another number of the same value. */
+  input(x: number): Handle;
   /** One operation of `OP`; `b` is left out for those of one operand. */
   op(name: OperationName, a: Handle, b?: Handle): Handle;
   /** The same value in a slot of this segment: what a cell offers must change with its own segment. */
@@ -102,6 +104,7 @@ export function createBuilder(kernels: KernelTable): Builder {
 
   return {
     constant,
+    input: newConstant,
     op,
     call,
     add: (a, b) => op('add', a, b),

@@ -19,6 +19,8 @@ interface Surroundings {
   look(name: string): Interface | null;
   /** The same array as long as the names are the same. */
   names(): readonly string[];
+  /** The same array as long as the inputs have the same names. */
+  inputs(): readonly string[];
   has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
@@ -41,6 +43,8 @@ export interface CompiledCell {
   readonly seen: Map<string, Interface | null>;
   /** The names of all cells, where something was proposed from them. */
   readonly proposedFrom: readonly string[] | null;
+  /** The names of all inputs, likewise. */
+  readonly proposedInputs: readonly string[] | null;
   /** Names whose mere presence was asked for. */
   readonly presence: Map<string, boolean>;
   /** What was compiled rests on values as they stood, not on kinds alone. */
@@ -54,6 +58,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
   const seen = new Map<string, Interface | null>();
   const presence = new Map<string, boolean>();
   let proposedFrom: readonly string[] | null = null;
+  let proposedInputs: readonly string[] | null = null;
   let restsOnValues = false;
   let later: Placed | null = null;
   const names = (): readonly string[] => (proposedFrom = surroundings.names());
@@ -70,6 +75,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     builder,
     look,
     names,
+    inputs: () => (proposedInputs = surroundings.inputs()),
     has(name) {
       presence.set(name, surroundings.has(name));
       return presence.get(name)!;
@@ -115,10 +121,16 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     offers: new Map(
       offers.map((offer): [string, Offer] => [
         offer.name,
-        { type: offer.type, slot: offer.handle === null ? -1 : slot(offer.handle), missing: offer.missing },
+        {
+          type: offer.type,
+          slot: offer.handle === null ? -1 : slot(offer.handle),
+          missing: offer.missing,
+          isInput: offer.isInput ?? false,
+        },
       ]),
     ),
     extra: draft.extra && relocate(draft.extra, slot),
+    isInput: draft.isInput,
     toleranced: draft.spread !== null,
     settled: !failed,
   };
@@ -132,6 +144,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     waitsFor,
     seen,
     proposedFrom,
+    proposedInputs,
     presence,
     restsOnValues,
     shape: draft.shape?.() ?? null,

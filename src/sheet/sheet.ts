@@ -18,6 +18,7 @@ import { compileExpression } from './expression.ts';
 import { topologicalOrder } from './graph.ts';
 import { sameInterface } from './interface.ts';
 import type { Interface } from './interface.ts';
+import { inputNames } from './input-of.ts';
 import { KERNELS } from './kernels.ts';
 import type { CellReading, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
@@ -55,6 +56,15 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
 
   let allNames: readonly string[] = [];
   const names = (): readonly string[] => allNames;
+  /** Made when a message names them; kept until a tree has others. */
+  let inputsOf: { tree: SheetTree; names: readonly string[] } | null = null;
+  const inputs = (): readonly string[] => {
+    if (inputsOf?.tree === tree) return inputsOf.names;
+    const found = inputNames(tree);
+    const same = inputsOf?.names.length === found.length && found.every((name, i) => name === inputsOf!.names[i]);
+    inputsOf = { tree, names: same ? inputsOf!.names : found };
+    return inputsOf.names;
+  };
   const has = (name: string): boolean => byName.has(name);
   const look = (name: string): Interface | null => byName.get(name)?.compiled.interface ?? null;
 
@@ -74,6 +84,7 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
     const compiled = compileCell(cellTree, {
       look,
       names,
+      inputs,
       has,
       now,
       allocate(size) {
@@ -95,9 +106,10 @@ export function createSheet(text: string): Sheet & { compiled(): CompiledSheet }
 
   function needsCompiling(node: Node, cellTree: CellTree): boolean {
     if (node.standsIn || !sameCell(node.compiledTree, cellTree)) return true;
-    const { seen, proposedFrom, presence } = node.compiled;
+    const { seen, proposedFrom, proposedInputs, presence } = node.compiled;
     for (const [name, then] of seen) if (look(name) !== then) return true;
     for (const [name, then] of presence) if (has(name) !== then) return true;
+    if (proposedInputs !== null && proposedInputs !== inputs()) return true;
     return proposedFrom !== null && proposedFrom !== allNames;
   }
 
@@ -363,5 +375,12 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
   const nothing = (): never => {
     throw new Error('A broken cell asks for nothing.');
   };
-  return compileCell(broken, { look: nothing, names: nothing, has: nothing, now: nothing, allocate: nothing });
+  return compileCell(broken, {
+    look: nothing,
+    names: nothing,
+    inputs: nothing,
+    has: nothing,
+    now: nothing,
+    allocate: nothing,
+  });
 }

@@ -183,6 +183,7 @@ function offerOf(field: GivenField, all: readonly GivenField[], index: number): 
     sentence: PART_FIELDS[field.name]!.sentence,
     missing: null,
     as: body.type === 'quantity' ? (body.as?.unit ?? null) : null,
+    isInput: field.quantity.isInput,
   };
 }
 

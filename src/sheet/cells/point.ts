@@ -48,7 +48,9 @@ export function compilePointCell(context: CellContext): Draft {
   return {
     ...EMPTY_DRAFT,
     offers: OFFERED_VALUES.filter((row) => row.point).map((row): OfferDraft => {
-      const handle = lowering.values.get(row.name) ?? null;
+      // What is held is read as it was entered, so that turning its slot turns the point.
+      const held = given.get(row.name);
+      const handle = held?.handle ?? lowering.values.get(row.name) ?? null;
       const text = lowering.absent.get(row.name) ?? `${row.name} is not computed yet.`;
       return {
         name: row.name,
@@ -56,6 +58,7 @@ export function compilePointCell(context: CellContext): Draft {
         handle,
         sentence: row.sentence,
         missing: handle === null ? absentValue(text, entry.span) : null,
+        isInput: held?.isInput ?? false,
       };
     }),
     verify: (read) => {
@@ -71,7 +74,14 @@ export function compilePointCell(context: CellContext): Draft {
         const handle = lowering.values.get(offered);
         return handle === undefined ? NaN : read(handle);
       };
-      return deviceCautions({ part, partName: entry.of.name, value, idle: null, read }).map((text) => ({
+      return deviceCautions({
+        part,
+        partName: entry.of.name,
+        value,
+        idle: null,
+        thermalRoots: lowering.thermalRoots,
+        read,
+      }).map((text) => ({
         text,
         line: tree.line,
       }));

@@ -38,7 +38,7 @@ export function compileQuantityEntry(
   if (entry.value === null) {
     const { kind, value } = standIn(entry, line, kindOf);
     checkUnit(entry, kind);
-    const handle = context.builder.constant(value);
+    const handle = context.builder.input(value);
     return {
       type: kind,
       handle,
@@ -48,7 +48,9 @@ export function compileQuantityEntry(
       fromZero: false,
     };
   }
-  const { type: written, handle } = scope.compile(entry.value);
+  const isInput = isNumber(entry.value);
+  const { type: written, handle: computed } = scope.compile(entry.value);
+  const handle = isInput ? context.builder.input(numberOf(entry.value)) : computed;
   const type = isQuantity(written) ? kindOf(written) : written;
   if (isQuantity(type)) checkUnit(entry, type);
   else if (entry.spread)
@@ -58,7 +60,7 @@ export function compileQuantityEntry(
     type,
     handle,
     spread,
-    isInput: isNumber(entry.value),
+    isInput,
     chosen: false,
     fromZero: false,
   };
@@ -129,6 +131,11 @@ export function standInText(entry: QuantityEntry): string {
   return first.value * last.value <= 0 || first.kind.scale !== 'linear'
     ? 'the middle of its limits'
     : 'the geometric mean of its limits';
+}
+
+/** Whether an entry is one number, or limits alone: an input. */
+export function isInputEntry(entry: QuantityEntry): boolean {
+  return entry.value === null || isNumber(entry.value);
 }
 
 /** Whether an expression is one number, with or without a sign. */
