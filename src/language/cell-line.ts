@@ -7,6 +7,7 @@ import { kindOfEntry } from './entries.ts';
 import { bodySpan, labelAt, nameAt } from './label.ts';
 import { message, reading } from './messages.ts';
 import { Reader } from './reader.ts';
+import { orRemark } from './remark.ts';
 import { isCellName, proposeName } from './reserved.ts';
 import type { BrokenEntry, Entry, LineTree, Message, NameRef, Span } from './syntax.ts';
 import { readTail } from './tail.ts';
@@ -42,7 +43,7 @@ function readEntry(text: string, name: NameRef, span: Span): Entry {
   const kind = kindOfEntry(body);
   return reading(
     () => kind.read(new Reader(text, span.start, span.end)),
-    (fault) => brokenEntry(fault, span),
+    (fault) => brokenEntry(orRemark(fault, text, span), span),
   );
 }
 

@@ -10,6 +10,7 @@ import { atLiteral, readLiteral } from './literal.ts';
 import { halt, message, reading } from './messages.ts';
 import { nearestNames } from './nearest.ts';
 import { Reader, spanOf } from './reader.ts';
+import { orRemark } from './remark.ts';
 import type { FieldBody, LineTree, Literal, Message, NameRef, Span } from './syntax.ts';
 import type { Tail } from './tail.ts';
 import { readTail } from './tail.ts';
@@ -36,7 +37,7 @@ function readField(text: string, label: Label, fields: Fields): LineTree {
   const span = bodySpan(text, label.bodyStart, tail.limit);
   const read = reading(
     () => fields.read(new Reader(text, span.start, span.end), label.names),
-    (fault) => brokenBody(fault, span),
+    (fault) => brokenBody(orRemark(fault, text, span), span),
   );
   return field(label, tail.fault && read.type !== 'broken' ? brokenBody(tail.fault, span) : read, tail);
 }

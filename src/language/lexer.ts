@@ -151,6 +151,8 @@ function scanSign(text: string, start: number, limit: number): SignToken {
     if (end > limit || !text.startsWith(spelling, start)) continue;
     return sign ? { type: 'sign', start, end, sign } : halt('operator-spelling', { start, end }, spelling, right);
   }
+  const remark = text[start] === '#' ? text.slice(start + 1, limit).trim() : '';
+  if (remark !== '') halt('remark-mark', { start, end: start + 1 }, '#', remark);
   const character = String.fromCodePoint(text.codePointAt(start)!);
   return halt('character-unknown', { start, end: start + character.length }, visible(character));
 }

@@ -9,6 +9,8 @@ const meant = (names: readonly string[]): string => (names.length > 0 ? ` Did yo
 const TEXTS = {
   // Characters and numbers
   'character-unknown': (found: string) => `${found} has no meaning here.`,
+  'remark-mark': (mark: string, remark: string) =>
+    `${mark} begins no remark here: a remark stands behind ;, as in ; ${remark}.`,
   'decimals-missing': (found: string, right: string) => `${found} has no digit behind its point: write ${right}.`,
   'whole-part-missing': (right: string) => `The number has no digit before its point: write ${right}.`,
   'number-range': (found: string) =>
@@ -31,6 +33,8 @@ const TEXTS = {
   // Units
   'unit-unknown': (left: string, found: string, right: string | null) =>
     `${found} is no unit: write ${right ? `${left} ${right}` : `${left} * ${found} for a product`}.`,
+  'unit-mega': (left: string, found: string) =>
+    `${found} is no unit: mega is M here and stands before one, as in ${left} Mohm or ${left} MHz.`,
   'unit-glued': (found: string, right: string) =>
     `${found} has no blanks around its operator, so it reads as one unit, and it is none: write ${right}.`,
   'unit-blank': (found: string, right: string) => `${found} has a blank inside its unit: write ${right}.`,

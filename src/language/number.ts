@@ -107,6 +107,7 @@ function unitBehind(text: string, at: number, end: number, limit: number): { uni
     if (start === end) halt('code-decimals', whole, written, code, unit);
     if (word !== 'R') halt('code-blank', whole, written, code, unit);
   }
+  if (/^mega?$/i.test(word)) halt('unit-mega', whole, numeral, word);
   if (start > end) return null;
   const letter = /^([A-Za-zΑ-Ωα-ωµ])\d+$/.exec(word);
   if (letter && !CODE_LETTERS.includes(letter[1])) halt('code-letter', whole, text.slice(at, wordEnd), letter[1]);

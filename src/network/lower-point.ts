@@ -18,6 +18,8 @@ import type { Term } from './term.ts';
 export interface SolvedPoint {
   readonly path: StagePath;
   readonly status: Handle;
+  /** How many junction temperatures balance the heat; null where the FET does not heat itself. */
+  readonly thermalRoots: Handle | null;
   /** The offered values of the FET itself, by name. */
   readonly values: ReadonlyMap<string, Handle>;
   /** Voltage of every class of places, V. */
@@ -174,6 +176,7 @@ export function solvePoint(e: Emitter, graph: PlaceGraph, fet: NetFet, ambient: 
   return {
     path,
     status: out.get('status')!,
+    thermalRoots: heats ? (out.get('thermal_roots') ?? null) : null,
     values,
     voltages,
     lines,

@@ -26,6 +26,8 @@ export interface SpecimenLowering {
   readonly absent: ReadonlyMap<string, string>;
   /** A code of `POINT_STATUS`. */
   readonly status: Handle;
+  /** How many junction temperatures balance the heat; null where the FET does not heat itself. */
+  readonly thermalRoots: Handle | null;
   /** beta (A/V²) and V_TO (V) at the junction temperature. */
   readonly beta: Handle;
   readonly vto: Handle;
@@ -75,7 +77,14 @@ export function lowerPoint(specimen: SpecimenHeld, emitter: Emitter): SpecimenLo
   const power = e.mul(out.get('V_DS')!, out.get('I_D')!);
   values.set('P_D', specimen.channel === 1 ? power : e.neg(power));
   const absent = lowerCapacitances(e, specimen, values);
-  return { values, absent, status: out.get('status')!, beta: out.get('beta')!, vto: out.get('V_TO')! };
+  return {
+    values,
+    absent,
+    status: out.get('status')!,
+    thermalRoots: device.R_thJA === null ? null : out.get('thermal_roots')!,
+    beta: out.get('beta')!,
+    vto: out.get('V_TO')!,
+  };
 }
 
 const FET_NAMES = [

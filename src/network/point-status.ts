@@ -17,7 +17,7 @@ export const LEFT_OPEN = 4;
 export const POINT_STATUS_SENTENCES: readonly string[] = [
   '',
   'The current source drives a current that this FET cannot carry at any voltage of its terminals.',
-  'No junction temperature below 600 K balances the heat: the FET runs away. Lower R_thJA or the dissipation.',
+  'No junction temperature below 600 K balances the heat: the FET runs away (thermal runaway). Lower R_thJA or the dissipation.',
   'A value that the operating point needs is not a finite number, or a resistance or beta is not above zero.',
   'The current source leaves the voltage of its place open: give it a resistor to a rail.',
 ];

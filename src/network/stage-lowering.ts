@@ -41,6 +41,8 @@ export interface StageLowering {
   readonly path: StagePath;
   /** Code of the solve, a key of `POINT_STATUS`; where it is not 0 no value of the stage is one. */
   readonly status: Handle | null;
+  /** How many junction temperatures balance the heat; null where the FET does not heat itself. */
+  readonly thermalRoots: Handle | null;
   /** Codes of what limits the swing, keys of `SWING_LIMIT`. */
   readonly swingLimits: { readonly up: Handle; readonly down: Handle } | null;
   /** Bias line and load line; null where a current is forced. */

@@ -19,10 +19,10 @@ const SYMMETRIC: ReadonlySet<OperationName> = new Set(['add', 'mul', 'min', 'max
 const KEYED = 2 ** 24;
 
 export interface Builder extends Emitter {
-  /** A number with a slot of its own, though another of the same value may stand beside it: what is turned or drawn alone. */
-  input(x: number): Handle;
   /** Calls any kernel of the table the builder was made with. */
   call(kernel: string, inputs: readonly Handle[], outputs: number): Handle[];
+  /** A number with a slot to itself, which may be turned without touching another number of the same value. */
+  input(x: number): Handle;
   /** One operation of `OP`; `b` is left out for those of one operand. */
   op(name: OperationName, a: Handle, b?: Handle): Handle;
   /** The same value in a slot of this segment: what a cell offers must change with its own segment. */

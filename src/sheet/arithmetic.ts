@@ -106,9 +106,11 @@ export function sideBySide(
   const reciprocal = sameKind(first.type, RESISTANCE) || sameKind(first.type, INDUCTANCE);
   const additive = sameKind(first.type, CONDUCTANCE) || sameKind(first.type, CAPACITANCE);
   if (!reciprocal && !additive) {
+    const between = scope.text.slice(spans[0]!.end, spans[1]?.start ?? spans[0]!.end);
+    const remark = between.includes('//') ? ' Before a remark stands ; instead of //.' : '';
     stop(
       'parallel-kind',
-      `${operandText(scope, spans[0]!, 'This')} is ${typeName(first.type)}: only resistances, conductances, inductances and capacitances stand in parallel.`,
+      `${operandText(scope, spans[0]!, 'This')} is ${typeName(first.type)}: only resistances, conductances, inductances and capacitances stand in parallel.${remark}`,
       spans[0]!,
     );
   }

@@ -4,6 +4,7 @@
 import type { CellTree } from '../language/index.ts';
 import { pathsOf } from '../language/index.ts';
 import { VOLTAGE, formatValue } from '../quantity/index.ts';
+import type { Handle } from '../network/index.ts';
 import type { Read } from './draft.ts';
 import type { PartInterface } from './interface.ts';
 import type { StageInHand } from './stage-in-hand.ts';
@@ -29,7 +30,7 @@ export function stageCautions(stage: StageInHand): Found[] {
   const value = (offered: string): number => (lowering.values.has(offered) ? read(lowering.values.get(offered)!) : NaN);
   const idle = lowering.lines ? read(lowering.lines.V_L) : null;
   return [
-    ...deviceCautions({ part, partName, value, idle, read }).map(own),
+    ...deviceCautions({ part, partName, value, idle, thermalRoots: lowering.thermalRoots, read }).map(own),
     ...voltageCautions(stage).map(own),
     ...legCautions(stage),
   ];
@@ -43,11 +44,12 @@ interface FetInHand {
   readonly value: (offered: string) => number;
   /** V_DS when no current flows, where the wiring sets one. */
   readonly idle: number | null;
+  readonly thermalRoots: Handle | null;
   readonly read: Read;
 }
 
 /** What the numbers of one FET, in a stage or at a point, do not say. */
-export function deviceCautions({ part, partName, value, idle, read }: FetInHand): string[] {
+export function deviceCautions({ part, partName, value, idle, thermalRoots, read }: FetInHand): string[] {
   const found: string[] = [];
   const vgs = part.channel * value('V_GS');
   const vds = part.channel * value('V_DS');
@@ -93,6 +95,13 @@ export function deviceCautions({ part, partName, value, idle, read }: FetInHand)
   over('V_GS', vgs, 'V_GSmax');
   over('V_DG', vdg, 'V_DGmax');
   over('I_D', value('I_D'), 'I_Dmax');
+  const equilibria = thermalRoots === null ? 1 : read(thermalRoots);
+  if (equilibria > 1) {
+    const beyond = equilibria === 2 ? 'it runs away (thermal runaway)' : 'it goes on to a hotter one, or runs away';
+    found.push(
+      `${partName} has ${equilibria} thermal equilibria below 600 K. The coolest is shown, which a cold start reaches; once heated beyond the next one, ${beyond}. Lower R_thJA or the dissipation.`,
+    );
+  }
   if (value('T_J') > limit('T_Jmax')) found.push(`The junction of ${partName} is hotter than its limit T_Jmax.`);
   if (idle !== null && Math.abs(idle) > limit('V_DSmax')) {
     found.push(`With ${partName} off, V_DS is ${volts(idle)}, beyond its limit V_DSmax.`);

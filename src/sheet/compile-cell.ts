@@ -21,6 +21,8 @@ interface Surroundings {
   /** The same array as long as the names are the same. */
   names(): readonly string[];
   treeOf(name: string): CellTree | null;
+  /** The same array as long as the inputs have the same names. */
+  inputs(): readonly string[];
   has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
@@ -56,6 +58,8 @@ export interface CompiledCell {
   readonly ends: readonly WantedEnd[];
   /** Every cell whose text was taken over. */
   readonly copied: ReadonlyMap<string, CellTree | null>;
+  /** The names of all inputs, likewise. */
+  readonly proposedInputs: readonly string[] | null;
   /** Names whose mere presence was asked for. */
   readonly presence: Map<string, boolean>;
   /** What was compiled rests on values as they stood, not on kinds alone. */
@@ -71,6 +75,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
   const copied = new Map<string, CellTree | null>();
   const ends: { which: EndName; of: Handle; into: Handle }[] = [];
   let proposedFrom: readonly string[] | null = null;
+  let proposedInputs: readonly string[] | null = null;
   let restsOnValues = false;
   let later: Placed | null = null;
   const names = (): readonly string[] => (proposedFrom = surroundings.names());
@@ -95,6 +100,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     builder,
     look,
     names,
+    inputs: () => (proposedInputs = surroundings.inputs()),
     has(name) {
       presence.set(name, surroundings.has(name));
       return presence.get(name)!;
@@ -150,10 +156,16 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     offers: new Map(
       offers.map((offer): [string, Offer] => [
         offer.name,
-        { type: offer.type, slot: offer.handle === null ? -1 : slot(offer.handle), missing: offer.missing },
+        {
+          type: offer.type,
+          slot: offer.handle === null ? -1 : slot(offer.handle),
+          missing: offer.missing,
+          isInput: offer.isInput ?? false,
+        },
       ]),
     ),
     extra: draft.extra && relocate(draft.extra, slot),
+    isInput: draft.isInput,
     toleranced: draft.spread !== null,
     settled: !failed,
   };
@@ -167,6 +179,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     waitsFor,
     seen,
     proposedFrom,
+    proposedInputs,
     presence,
     copied,
     ends: failed ? [] : ends.map(({ which, of, into }) => ({ which, of: slot(of), into: slot(into) })),

@@ -63,6 +63,8 @@ function reason(expr: Expr): string {
   }
   if (expr.type === 'binary') {
     if (expr.operator === '^') return 'A negative base wants a whole exponent.';
+    if (expr.operator === '*') return 'Nothing times infinite is no number.';
+    if (expr.operator === '+' || expr.operator === '-') return 'Infinite less infinite is no number.';
     if (expr.operator === '/') return 'Nothing divided by nothing, or infinite by infinite, is no number.';
   }
   return 'What comes out is no number.';

@@ -28,6 +28,8 @@ export interface OfferDraft {
   readonly missing: Message | null;
   /** Unit in which the author asked for it. */
   readonly as?: Unit | null;
+  /** A field that was entered as one number; left out where it was not. */
+  readonly isInput?: boolean;
 }
 
 /** A field with the line it stands in. */
@@ -112,6 +114,8 @@ export interface CellContext {
   ambient(): Handle;
   /** Names of all cells, for proposals; the cell is compiled again when they change. */
   names(): readonly string[];
+  /** Names of all inputs, for proposals; the cell is compiled again when they change. */
+  inputs(): readonly string[];
   /** Whether there is a cell of this name, without using it; the cell is compiled again when that changes. */
   has(name: string): boolean;
   /** Something is understood but not computed by now: the cell gets no value. */

@@ -73,17 +73,21 @@ export const FUNCTIONS: ReadonlyMap<string, SheetFunction> = new Map<string, She
   ...analysis('THD', 'THD(A, amplitude)', 'All harmonics against the fundamental.', [VOLTAGE], PLAIN),
 ]);
 
+/** Logarithms under names that do not tell their base, or tell it otherwise. */
+const LOGARITHMS: ReadonlyMap<string, string> = new Map([
+  ['log', ' Write ln for the natural logarithm, log10 for the decimal one.'],
+  ['lg', ' Write log10 for the decimal logarithm.'],
+  ['loge', ' Write ln for the natural logarithm.'],
+]);
+
 /** Compiles a call; stops when the function is unknown or its arguments do not fit. */
 export function compileCall(expr: CallExpr, scope: Scope): Typed {
   const { name, span } = expr.name;
   const found = FUNCTIONS.get(name);
   if (!found) {
     const near = nearestNames(name, [...FUNCTIONS.keys()]);
-    stop(
-      'unknown-function',
-      `There is no function ${name}.${near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ''}`,
-      span,
-    );
+    const hint = near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : '';
+    stop('unknown-function', `There is no function ${name}.${LOGARITHMS.get(name) ?? hint}`, span);
   }
   const [least, most] = found.arity;
   if (expr.args.length < least || expr.args.length > most) {

@@ -10,6 +10,8 @@ export interface Offer {
   /** -1 where it is not computed. */
   readonly slot: number;
   readonly missing: Message | null;
+  /** A field that was entered as one number: its slot may be turned. */
+  readonly isInput: boolean;
 }
 
 /** What a part tells points and stages. */
@@ -33,6 +35,8 @@ export interface Interface {
   readonly slot: number;
   readonly offers: ReadonlyMap<string, Offer>;
   readonly extra: PartInterface | null;
+  /** Its entry is one number: its slot may be turned. */
+  readonly isInput: boolean;
   /** Its value is declared with a spread. */
   readonly toleranced: boolean;
   /** False where the type (or the offers) could not be settled: users wait, unchecked. */
@@ -45,5 +49,5 @@ export function sameInterface(a: Interface, b: Interface): boolean {
 }
 
 function signature(x: Interface): string {
-  return JSON.stringify([x.kind, x.type, x.slot, x.settled, x.toleranced, [...x.offers], x.extra]);
+  return JSON.stringify([x.kind, x.type, x.slot, x.settled, x.isInput, x.toleranced, [...x.offers], x.extra]);
 }

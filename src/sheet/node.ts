@@ -20,6 +20,10 @@ export interface Node {
   /** Why it has no values just now; own faults before waiting. */
   fault: Placed | null;
   waitsFor: string | null;
+  /** The cell without values at the root of the waiting; null where it does not wait. */
+  root: Node | null;
+  /** What is said of its waiting: it changes with the line of the root. */
+  waitingText: string;
   uses: readonly number[];
   usedBy: number[];
   /** The pass in which its values last changed. */

@@ -1,6 +1,6 @@
 // What others read of a cell, made from its compiled form and the slots as they stand.
 
-import type { CellTree, Line, Message } from '../language/index.ts';
+import type { Line, Message } from '../language/index.ts';
 import type { Placed, Read } from './draft.ts';
 import type { CellReading, Fault, OfferedReading, Reading } from './model.ts';
 import type { Node } from './node.ts';
@@ -19,7 +19,7 @@ export function readCell(node: Node, nodes: readonly Node[], slot: (index: numbe
   const present = (line: Line): Line => lineNow(node, line);
   const place = (placed: Placed): Fault => faultAt(placed.message, present(placed.line));
   const alive = !node.fault && !node.waitsFor;
-  const fault = node.fault ? place(node.fault) : node.waitsFor ? waitsFor(node.waitsFor, tree) : null;
+  const fault = node.fault ? place(node.fault) : node.waitsFor ? waiting(node) : null;
   const as = tree.entry.type === 'quantity' ? (tree.entry.as?.unit ?? null) : null;
   const own: Reading | null =
     draft.type === null || compiled.fault || compiled.waitsFor
@@ -60,8 +60,16 @@ export function readCell(node: Node, nodes: readonly Node[], slot: (index: numbe
   };
 }
 
-function waitsFor(name: string, tree: CellTree): Fault {
-  return { code: 'waits-for', text: `waits for ${name}`, line: tree.line.index, span: tree.name.span };
+function waiting({ waitingText: text, tree }: Node): Fault {
+  return { code: 'waits-for', text, line: tree.line.index, span: tree.name.span };
+}
+
+/** `waits for R_1, which is broken in line 3`: the cell it waits for, and the one at the root of it where that is another. */
+export function waitingText({ waitsFor, root }: Node): string {
+  if (!root?.fault) return `waits for ${waitsFor}`;
+  const state = root.fault.message.code === 'not-computed-yet' ? 'is not computed yet' : 'is broken';
+  const which = root.tree.name.name === waitsFor ? 'which' : `because ${root.tree.name.name}`;
+  return `waits for ${waitsFor}, ${which} ${state} in line ${lineNow(root, root.fault.line).index + 1}`;
 }
 
 /** Where a line of the compiled tree stands now. */

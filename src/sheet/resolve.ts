@@ -45,10 +45,10 @@ export function createScope(builder: Builder, line: Pick<Line, 'text'>, lookup: 
     },
     later,
     end: lookup.end ?? null,
-    resolve: (path) => resolve(path, builder, lookup),
+    resolve: (path) => resolve(path, builder, line.text, lookup),
     stageOf(path) {
       const { name, span } = path.names[0]!;
-      const cell = find(path, lookup);
+      const cell = find(path, line.text, lookup);
       if (cell.kind !== 'stage')
         stop('stage-expected', `${name} is ${kindName(cell.kind)}; a stage is wanted here.`, span);
       return name;
@@ -69,7 +69,7 @@ export function kindName(kind: CellKind): string {
   }
 }
 
-function resolve(path: PathExpr, builder: Builder, lookup: Lookup): Typed {
+function resolve(path: PathExpr, builder: Builder, text: string, lookup: Lookup): Typed {
   const [first, ...rest] = path.names;
   if (rest.length === 0) {
     const constant = CONSTANTS.get(first!.name);
@@ -79,7 +79,7 @@ function resolve(path: PathExpr, builder: Builder, lookup: Lookup): Typed {
     if (first!.name === 'T_A' && !lookup.look('T_A'))
       return { type: TEMPERATURE_POINT, handle: builder.constant(DEFAULT_AMBIENT) };
   }
-  const cell = find(path, lookup);
+  const cell = find(path, text, lookup);
   if (rest.length === 0) {
     if (cell.type !== null) return { type: cell.type, handle: cell.slot };
     const example = cell.offers.keys().next().value;
@@ -111,17 +111,31 @@ function resolve(path: PathExpr, builder: Builder, lookup: Lookup): Typed {
   return { type: offer.type, handle: offer.slot };
 }
 
-function find(path: PathExpr, lookup: Lookup): Interface {
+function find(path: PathExpr, text: string, lookup: Lookup): Interface {
   const { name, span } = path.names[0]!;
   const cell = lookup.look(name);
   if (!cell) {
-    const near = nearestNames(name, lookup.names());
-    stop(
-      'unknown-name',
-      `There is no cell ${name}.${near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ''}`,
-      span,
-    );
+    stop('unknown-name', `There is no cell ${name}.${hintFor(name, text.slice(0, span.start), lookup)}`, span);
   }
   if (!cell.settled) throw new Waiting(name);
   return cell;
+}
+
+/** What other books and other cases call a region. */
+const REGION_WORDS: ReadonlyMap<string, string> = new Map([
+  ...REGIONS.map((region) => [region, region] as const),
+  ['off', 'cutoff'],
+  ['triode', 'ohmic'],
+  ['linear', 'ohmic'],
+  ['active', 'saturation'],
+  ['saturated', 'saturation'],
+]);
+
+/** What was probably meant by a name that no cell bears; `before` is the line up to it. */
+function hintFor(name: string, before: string, lookup: Lookup): string {
+  const region = REGION_WORDS.get(name.toLowerCase());
+  if (region) return ` The regions are ${REGIONS.join(', ')}; ${name} is written ${region}.`;
+  if (/\/\/\s*$/.test(before)) return ` If it is a remark, write ; ${name}.`;
+  const near = nearestNames(name, lookup.names());
+  return near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : '';
 }

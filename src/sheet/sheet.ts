@@ -18,9 +18,11 @@ import { compileExpression } from './expression.ts';
 import { topologicalOrder } from './graph.ts';
 import { sameInterface } from './interface.ts';
 import type { Interface } from './interface.ts';
+import { inputNames } from './input-of.ts';
 import { KERNELS } from './kernels.ts';
 import type { Analyses, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
+import { waitingText } from './readings.ts';
 import { createScope } from './resolve.ts';
 import { spreadModel } from './spread-model.ts';
 import { createView, stateAt, waiting } from './view.ts';
@@ -56,6 +58,15 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
 
   let allNames: readonly string[] = [];
   const names = (): readonly string[] => allNames;
+  /** Made when a message names them; kept until a tree has others. */
+  let inputsOf: { tree: SheetTree; names: readonly string[] } | null = null;
+  const inputs = (): readonly string[] => {
+    if (inputsOf?.tree === tree) return inputsOf.names;
+    const found = inputNames(tree);
+    const same = inputsOf?.names.length === found.length && found.every((name, i) => name === inputsOf!.names[i]);
+    inputsOf = { tree, names: same ? inputsOf!.names : found };
+    return inputsOf.names;
+  };
   const has = (name: string): boolean => byName.has(name);
   const treeOf = (name: string): CellTree | null => byName.get(name)?.tree ?? null;
   const look = (name: string): Interface | null => byName.get(name)?.compiled.interface ?? null;
@@ -76,6 +87,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
     const compiled = compileCell(cellTree, {
       look,
       names,
+      inputs,
       has,
       treeOf,
       now,
@@ -99,10 +111,11 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
 
   function needsCompiling(node: Node, cellTree: CellTree): boolean {
     if (node.standsIn || !sameCell(node.compiledTree, cellTree)) return true;
-    const { seen, proposedFrom, presence, copied } = node.compiled;
+    const { seen, proposedFrom, proposedInputs, presence, copied } = node.compiled;
     for (const [name, then] of seen) if (look(name) !== then) return true;
     for (const [name, then] of presence) if (has(name) !== then) return true;
     for (const [name, then] of copied) if (!isSameText(treeOf(name), then)) return true;
+    if (proposedInputs !== null && proposedInputs !== inputs()) return true;
     return proposedFrom !== null && proposedFrom !== allNames;
   }
 
@@ -146,6 +159,8 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
           node.fault = wasFault;
         }
       }
+      const awaited = node.waitsFor === null ? null : (byName.get(node.waitsFor) ?? null);
+      node.root = awaited?.root ?? awaited;
       if (fresh || node.fault !== wasFault || node.waitsFor !== wasWaiting) node.changedAt = pass;
       if (node.changedAt === pass) {
         node.reading = null;
@@ -234,7 +249,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
     const sorted = topologicalOrder(nodes.map((node) => node.uses));
     order = sorted.order;
     const changed = evaluate(sorted.cycles);
-    for (const node of relinked) {
+    for (const node of [...relinked, ...nodes.filter(waitsOtherwise)]) {
       node.reading = null;
       changed.add(node.key);
     }
@@ -302,11 +317,20 @@ function createNode(key: string, tree: CellTree): Node {
     capacity: 0,
     fault: null,
     waitsFor: null,
+    root: null,
+    waitingText: '',
     uses: [],
     usedBy: [],
     changedAt: 0,
     reading: null,
   };
+}
+
+/** Notes what is said of a node's waiting; says whether that is another text than before, as where the root has moved. */
+function waitsOtherwise(node: Node): boolean {
+  const before = node.waitingText;
+  node.waitingText = node.waitsFor ? waitingText(node) : '';
+  return node.waitingText !== before;
 }
 
 function install(segment: { constantSlots: Int32Array; constantValues: Float64Array }, slots: Float64Array): void {
@@ -370,6 +394,7 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
     look: nothing,
     names: nothing,
     treeOf: nothing,
+    inputs: nothing,
     has: nothing,
     now: nothing,
     hasEnds: false,

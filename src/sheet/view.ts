@@ -81,6 +81,8 @@ export function stateAt(state: SheetState, at: ReadonlyMap<number, number>): She
     const { compiled } = node;
     if (node.standsIn || compiled.fault || compiled.waitsFor || compiled.later) continue;
     node.waitsFor = waiting(compiled, byName);
+    const awaited = node.waitsFor === null ? null : (byName.get(node.waitsFor) ?? null);
+    node.root = awaited?.root ?? awaited;
     node.fault = null;
     if (node.waitsFor) continue;
     const { ops, args } = compiled.segment;

@@ -56,7 +56,11 @@ describe('the JSON report', () => {
 
   it('says which cell another one waits for', () => {
     const { cells } = report('a_1 = 1 V + 2 mA\nb_1 = a_1 / 2');
-    expect(cells.b_1.error).toMatchObject({ code: 'waits-for', message: 'waits for a_1', line: 2 });
+    expect(cells.b_1.error).toMatchObject({
+      code: 'waits-for',
+      message: 'waits for a_1, which is broken in line 1',
+      line: 2,
+    });
   });
 
   it('keys a line without a name, and the second of two cells of one name, by its number', () => {

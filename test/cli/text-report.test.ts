@@ -38,7 +38,7 @@ Requirements
   broken       1 V + 2 mA
     line 10, column 10: 1 V is a voltage and 2 mA is a current: they cannot be added. Multiply the
     current by a resistance first.
-  half         broken / 2          waits for broken
+  half         broken / 2          waits for broken, which is broken in line 10
 `,
     });
   });

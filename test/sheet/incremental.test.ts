@@ -269,3 +269,17 @@ describe('no number is not taken for one', () => {
     expect(createSheet(text).value('x')).toBe(value);
   });
 });
+
+describe('a cell that waits for a broken one', () => {
+  it('names it and its line, wherever edits move it', () => {
+    const sheet = createSheet('z = y\ny = x\nx = 3 R\n');
+    const said = (): (string | undefined)[] => ['z', 'y'].map((name) => sheet.error(name)?.text);
+    expect(said()).toEqual(['waits for y, because x is broken in line 3', 'waits for x, which is broken in line 3']);
+    expect([...sheet.update('z = y\ny = x\n> moved\nx = 3 R\n')].toSorted()).toEqual(['y', 'z']);
+    expect(said()).toEqual(['waits for y, because x is broken in line 4', 'waits for x, which is broken in line 4']);
+    sheet.update('z = y\ny = 1 V + 1 A\n> moved\nx = 3 R\n');
+    expect(said()[0]).toBe('waits for y, which is broken in line 2');
+    sheet.update('z = y\ny = 1 V\n');
+    expect(said()).toEqual([undefined, undefined]);
+  });
+});

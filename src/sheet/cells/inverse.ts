@@ -3,6 +3,7 @@
 import type { InverseEntry } from '../../language/index.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft } from '../draft.ts';
+import { checkInput } from '../input-of.ts';
 import { operandText } from '../scope.ts';
 import { stop } from '../stop.ts';
 import { sameType, typeName } from '../value-type.ts';
@@ -13,6 +14,7 @@ export function compileInverseCell(context: CellContext): Draft {
   const entry = tree.entry as InverseEntry;
   const scope = context.scope(tree.line);
   const input = scope.resolve(entry.input);
+  checkInput(entry.input, context);
   const target = scope.compile(entry.target);
   const value = scope.compile(entry.value);
   if (!sameType(target.type, value.type)) {

@@ -8,6 +8,7 @@ import type { FieldTree, Line, PartEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, FieldDraft, OfferDraft, Placed, Read } from '../draft.ts';
+import { exampleAmount } from '../example-amount.ts';
 import type { LimitName } from '../interface.ts';
 import { CONDITION_KINDS, PART_FIELDS } from '../part-fields.ts';
 import type { GivenField, GivenFields } from '../part-given.ts';
@@ -86,12 +87,13 @@ function readFields(entry: PartEntry, context: CellContext): GivenFields {
       stop('field-twice', `${name} stands twice in this part. Keep one of the two lines.`, field.labelSpan, line);
     }
     const written = compileQuantityEntry(body, line, context);
-    const isAmount = wantedSign(name, entry.family, entry.channel === 'n' ? 1 : -1) === 'not negative';
-    const quantity = isAmount ? heldAtZero(written, body) : written;
+    const wanted = wantedSign(name, entry.family, entry.channel === 'n' ? 1 : -1);
+    const quantity = wanted === 'not negative' ? heldAtZero(written, body) : written;
     if (typeof quantity.type === 'string' || !sameKind(quantity.type, known.kind)) {
+      const isNegative = wanted === 'negative' || name === 'tempco';
       stop(
         'field-dimension',
-        `${name} is ${typeName(known.kind)}; this is ${typeName(quantity.type)}.`,
+        `${name} is ${typeName(known.kind)}; this is ${typeName(quantity.type)}. Write for example ${name}: ${exampleAmount(known.kind, isNegative ? -1 : 1)}.`,
         body.span,
         line,
       );
@@ -182,6 +184,7 @@ function offerOf(field: GivenField, name: string): OfferDraft {
     sentence: PART_FIELDS[field.name]!.sentence,
     missing: null,
     as: body.type === 'quantity' ? (body.as?.unit ?? null) : null,
+    isInput: field.quantity.isInput,
   };
 }
 

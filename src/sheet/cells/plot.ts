@@ -5,6 +5,7 @@ import { FREQUENCY, sameKind } from '../../quantity/index.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft } from '../draft.ts';
 import { compileQuantity } from '../operand.ts';
+import { checkInput } from '../input-of.ts';
 import type { CellKind } from '../model.ts';
 import { Waiting, kindName } from '../resolve.ts';
 import { operandText } from '../scope.ts';
@@ -48,6 +49,7 @@ export function compilePlotCell(context: CellContext): Draft {
     return EMPTY_DRAFT;
   }
   const input = scope.resolve(entry.against!);
+  checkInput(entry.against!, context);
   const low = range(entry, context);
   if (!sameType(input.type, low)) {
     const name = operandText(scope, entry.against!.span, 'the input');

@@ -11,6 +11,7 @@ import { drawsOf } from '../compiled-quantity.ts';
 import type { CompiledQuantity } from '../compiled-quantity.ts';
 import { EMPTY_DRAFT, NO_SPREAD } from '../draft.ts';
 import type { CellContext, Draft, OfferDraft } from '../draft.ts';
+import { exampleAmount } from '../example-amount.ts';
 import { OFFERED_KIND } from '../offered-kind.ts';
 
 import { pointWorkings } from '../stage-workings.ts';
@@ -49,7 +50,9 @@ export function compilePointCell(context: CellContext): Draft {
   return {
     ...EMPTY_DRAFT,
     offers: OFFERED_VALUES.filter((row) => row.point).map((row): OfferDraft => {
-      const handle = lowering.values.get(row.name) ?? null;
+      // What is held is read as it was entered, so that turning its slot turns the point.
+      const held = given.get(row.name);
+      const handle = held?.handle ?? lowering.values.get(row.name) ?? null;
       const text = lowering.absent.get(row.name) ?? `${row.name} is not computed yet.`;
       return {
         name: row.name,
@@ -57,6 +60,7 @@ export function compilePointCell(context: CellContext): Draft {
         handle,
         sentence: row.sentence,
         missing: handle === null ? absentValue(text, entry.span) : null,
+        isInput: held?.isInput ?? false,
       };
     }),
     verify: (read) => {
@@ -72,7 +76,14 @@ export function compilePointCell(context: CellContext): Draft {
         const handle = lowering.values.get(offered);
         return handle === undefined ? NaN : read(handle);
       };
-      return deviceCautions({ part, partName: entry.of.name, value, idle: null, read }).map((text) => ({
+      return deviceCautions({
+        part,
+        partName: entry.of.name,
+        value,
+        idle: null,
+        thermalRoots: lowering.thermalRoots,
+        read,
+      }).map((text) => ({
         text,
         line: tree.line,
       }));
@@ -123,7 +134,12 @@ function readFields(
       stop('field-twice', `${name} stands twice in this point. Keep one of the two lines.`, field.labelSpan, line);
     const quantity = compileQuantityEntry(body, line, context);
     if (typeof quantity.type === 'string' || !sameKind(quantity.type, kind)) {
-      stop('field-dimension', `${name} is ${typeName(kind)}; this is ${typeName(quantity.type)}.`, body.span, line);
+      stop(
+        'field-dimension',
+        `${name} is ${typeName(kind)}; this is ${typeName(quantity.type)}. Write for example ${name}: ${exampleAmount(kind)}.`,
+        body.span,
+        line,
+      );
     }
     given.set(name, { ...quantity, tree: field });
   }

@@ -150,6 +150,11 @@ export function standInText(entry: QuantityEntry): string {
     : 'the geometric mean of its limits';
 }
 
+/** Whether an entry is one number, or limits alone: an input. */
+export function isInputEntry(entry: QuantityEntry): boolean {
+  return entry.value === null || isNumber(entry.value);
+}
+
 /** Whether an expression is one number, with or without a sign. */
 function isNumber(expr: Expr): boolean {
   return (

@@ -13,6 +13,8 @@ import { typeName } from '../value-type.ts';
 
 /** The labels that a stage's fields may bear besides its places. */
 const SETTINGS = ['output', 'driven', 'midband'];
+/** Names that other notations have for the place at 0 V. */
+const GROUND = /^(gnd|agnd|dgnd|ground|earth)$/i;
 const TERMINALS = ['gate', 'drain', 'source', 'bulk'];
 
 export interface Places {
@@ -20,6 +22,8 @@ export interface Places {
   readonly nodes: readonly string[];
   /** The terminals that a leg or an output may name. */
   readonly terminals: readonly string[];
+  /** Those of them that its FETs have, to be named in messages. */
+  readonly present: readonly string[];
 }
 
 /** Collects the places of a stage; stops when a node bears the name of a cell. */
@@ -27,12 +31,18 @@ export function placesOf(tree: CellTree, entry: StageEntry, context: CellContext
   const named = entry.fets.filter((fet) => fet.name !== null).map((fet) => fet.name!.name);
   const terminals =
     named.length > 0 ? named.flatMap((fet) => TERMINALS.map((terminal) => `${fet}.${terminal}`)) : TERMINALS;
+  const present = entry.fets.flatMap((fet) => {
+    const hasBulk = context.look(fet.part.name)?.extra?.family !== 'JFET';
+    return TERMINALS.filter((terminal) => hasBulk || terminal !== 'bulk').map((terminal) =>
+      fet.name === null ? terminal : `${fet.name.name}.${terminal}`,
+    );
+  });
   const nodes: string[] = [];
   for (const field of tree.fields) {
     const label = labelOf(field);
     if (SETTINGS.includes(label) || terminals.includes(label)) continue;
     const [first] = field.label;
-    if (field.label.length > 1 || TERMINALS.includes(label)) unknownTerminal(field, terminals);
+    if (field.label.length > 1 || TERMINALS.includes(label.toLowerCase())) unknownTerminal(field, present);
     if (context.has(label)) {
       stop(
         'node-named-like-cell',
@@ -51,7 +61,7 @@ export function placesOf(tree: CellTree, entry: StageEntry, context: CellContext
     }
     nodes.push(label);
   }
-  return { nodes, terminals };
+  return { nodes, terminals, present };
 }
 
 /** `gate`, `Qa.gate`, `out`. */
@@ -86,9 +96,12 @@ export function resolvePlace(leg: Leg, field: FieldTree, places: Places, context
 }
 
 function unknownPlace(name: string, at: NameRef, field: FieldTree, places: Places, context: CellContext): never {
-  const near = nearestNames(name, [...places.terminals, ...places.nodes, 'signal', ...context.names()]);
-  const hint =
-    near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ` A node of its own gets a line: ${name}: R to 0 V.`;
+  const near = nearestNames(name, [...places.present, ...places.nodes, 'signal', ...context.names()]);
+  const hint = GROUND.test(name)
+    ? ' Ground is a rail of 0 V: write to 0 V.'
+    : near.length > 0
+      ? ` Did you mean ${near.join(' or ')}?`
+      : ` A node of its own gets a line: ${name}: R to 0 V.`;
   stop('unknown-place', `There is no place ${name} in this stage and no such cell.${hint}`, at.span, field.line);
 }
 

@@ -147,7 +147,7 @@ function outputOf(fields: readonly FieldTree[], places: Places): StageNet['outpu
     if (!places.nodes.includes(text) && !places.terminals.includes(text)) {
       stop(
         'unknown-place',
-        `The output is a place of this stage; there is no ${text}. Its places are ${[...places.terminals, ...places.nodes].join(', ')}.`,
+        `The output is a place of this stage; there is no ${text}. Its places are ${[...places.present, ...places.nodes].join(', ')}.`,
         path.span,
         field.line,
       );
