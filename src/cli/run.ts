@@ -1,7 +1,8 @@
 // One run of the terminal entry, from its arguments to its exit status, without the process around it.
 
 import { nearestNames, parseExpression } from '../language/index.ts';
-import { verdictOf } from '../record/index.ts';
+import { samplingOf, verdictOf } from '../record/index.ts';
+import { ANALYSES, analyse } from '../spread/index.ts';
 import { createSheet } from '../sheet/index.ts';
 import type { Sheet } from '../sheet/index.ts';
 import { HELP, parseArguments, USAGE } from './arguments.ts';
@@ -47,13 +48,19 @@ function compute(args: readonly string[], { read, print, complain, width }: Surr
     complain(`${file.fault}\n`);
     return EXIT.notComputed;
   }
-  const sheet = createSheet(file.text);
+  const sheet = createSheet(file.text, ANALYSES);
   const name = call.workings === null ? null : cellName(sheet, call.workings);
   if (call.workings !== null && name === null) return refuse(unknownCell(sheet, call.workings));
 
-  if (call.json) print(`${JSON.stringify(jsonReport(sheet, name), null, 2)}\n`);
-  else print(name === null ? textReport(sheet, width) : workingsReport(sheet, name, width));
-  return exitStatus(verdictOf(sheet));
+  const asked = samplingOf(sheet.tree);
+  const spread = analyse(sheet.spreadModel(), {
+    samples: call.samples ?? asked.samples,
+    seed: call.seed ?? asked.seed,
+  });
+  const judged = spread && { spread, leastYield: call.leastYield ?? asked.leastYield };
+  if (call.json) print(`${JSON.stringify(jsonReport(sheet, name, judged), null, 2)}\n`);
+  else print(name === null ? textReport(sheet, width, judged) : workingsReport(sheet, name, width));
+  return exitStatus(verdictOf(sheet, judged));
 
   function refuse(text: string): number {
     complain(`${text}\n${USAGE}\n`);

@@ -3,7 +3,19 @@
 
 import { lineColumn } from '../language/index.ts';
 import type { FieldTree, Line, Note, Source } from '../language/index.ts';
-import { checkText, shownCell, shownOwn, shownReading, verdictOf } from '../record/index.ts';
+import {
+  checkText,
+  endsText,
+  failingText,
+  failsCheck,
+  shareText,
+  shownCell,
+  shownOwn,
+  shownReading,
+  verdictOf,
+} from '../record/index.ts';
+import type { JudgedSpread } from '../record/index.ts';
+import type { SheetSpread } from '../spread/index.ts';
 import type { CellReading, Fault, OfferedReading, Sheet } from '../sheet/index.ts';
 import { entryText } from './entry-text.ts';
 import type { Column } from './text-table.ts';
@@ -15,6 +27,8 @@ interface Row {
   readonly name: string;
   readonly entry: string;
   readonly value: string;
+  /** Low and high over the declared set. */
+  readonly ends: string;
   readonly remark: string;
 }
 interface Block {
@@ -32,17 +46,17 @@ const LEAST_REMARK = 8;
 const REMARK_LINES = 2;
 
 /** The report in lines of at most `width` characters, as far as names and values fit in it. */
-export function textReport(sheet: Sheet, width: number): string {
-  const verdict = verdictOf(sheet);
-  const failing = verdict.failing.map((cell): Row => ({
-    ...cellRow(cell),
-    name: INDENT + cell.name,
-    remark: `line ${cell.tree.line.index + 1}`,
-  }));
+export function textReport(sheet: Sheet, width: number, judged: JudgedSpread | null): string {
+  const verdict = verdictOf(sheet, judged);
+  const failing = verdict.failing.flatMap((cell): Item[] => {
+    const row = { ...cellRow(cell, judged), name: INDENT + cell.name, remark: `line ${cell.tree.line.index + 1}` };
+    const isPlain = cell.check?.holds === false;
+    return isPlain ? [row] : [row, { type: 'message', text: `${cell.name} ${failingText(cell, judged)}.` }];
+  });
   const blocks = [
     [sheet.tree.title?.text ?? 'Sheet without a title', ...wrapText(verdict.sentence, width)],
     failing.length === 0 ? [] : ['Failing checks', ...table(failing, width)],
-    ...sections(table(sheetItems(sheet), width)),
+    ...sections(table(sheetItems(sheet, judged), width)),
     listed(
       'Cautions',
       sheet.cautions().map(({ cell, line, text }) => `${cell}, line ${line + 1}: ${text}`),
@@ -67,7 +81,7 @@ export function faultText(lines: readonly Line[], fault: Fault): string {
 
 // ---------------------------------------------------------------- rows
 
-function sheetItems(sheet: Sheet): Item[] {
+function sheetItems(sheet: Sheet, judged: JudgedSpread | null): Item[] {
   const { lines } = sheet.tree;
   const cells = new Map(sheet.cells().map((cell) => [cell.tree.line.index, cell]));
   const loose = new Map(sheet.loose().map((fault) => [fault.line, fault]));
@@ -78,13 +92,14 @@ function sheetItems(sheet: Sheet): Item[] {
     if (line.tree.type === 'heading' && line !== sheet.tree.title?.line) {
       items.push({ type: 'section', text: line.tree.text });
     } else if (cell) {
-      items.push(...cellItems(cell, lines));
+      items.push(...cellItems(cell, lines, judged));
     } else if (fault) {
       items.push({
         type: 'row',
         name: `${INDENT}line ${line.index + 1}`,
         entry: line.text.trim(),
         value: '',
+        ends: '',
         remark: '',
       });
       items.push({ type: 'message', text: faultText(lines, fault) });
@@ -93,10 +108,10 @@ function sheetItems(sheet: Sheet): Item[] {
   return items;
 }
 
-function cellItems(cell: CellReading, lines: readonly Line[]): Item[] {
+function cellItems(cell: CellReading, lines: readonly Line[], judged: JudgedSpread | null): Item[] {
   const fieldAt = new Map(cell.fields.map((field) => [field.line, field]));
   const fault = cell.fault?.code === 'waits-for' ? null : cell.fault;
-  const items: Item[] = [cellRow(cell)];
+  const items: Item[] = [cellRow(cell, judged)];
   const message = (line: number): void => {
     if (fault?.line === line) items.push({ type: 'message', text: faultText(lines, fault) });
   };
@@ -110,28 +125,52 @@ function cellItems(cell: CellReading, lines: readonly Line[]): Item[] {
   if (cell.fault !== null) return items;
   // A part offers what was written in it, too; that stands in the fields' own rows.
   const written = new Set(cell.fields.map((field) => field.name));
-  return [...items, ...cell.values.filter((value) => !written.has(value.name)).map(offeredRow)];
+  return [
+    ...items,
+    ...cell.values
+      .filter((value) => !written.has(value.name))
+      .map((value) => offeredRow(value, cell.name, judged?.spread ?? null)),
+  ];
 }
 
-function offeredRow(value: OfferedReading): Row {
-  const name = INDENT.repeat(2) + value.name;
-  return { type: 'row', name, entry: '', value: shownReading(value) ?? '–', remark: value.missing?.text ?? '' };
+function offeredRow(value: OfferedReading, cell: string, spread: SheetSpread | null): Row {
+  return {
+    type: 'row',
+    name: INDENT.repeat(2) + value.name,
+    entry: '',
+    value: shownReading(value) ?? '–',
+    ends: (spread && endsText(value, spread.value(`${cell}.${value.name}`))) ?? '',
+    remark: value.missing?.text ?? '',
+  };
 }
 
-function cellRow(cell: CellReading): Row {
+function cellRow(cell: CellReading, judged: JudgedSpread | null): Row {
   const { line, entry, source, note } = cell.tree;
   return {
     type: 'row',
     name: INDENT + cell.name,
     entry: entryText(line, entry.span),
-    value: ownValue(cell),
+    value: ownValue(cell, judged),
+    ends: cellEnds(cell, judged?.spread ?? null),
     remark: remark(source, note, cell.isInput),
   };
 }
 
-function ownValue(cell: CellReading): string {
+/** What a cell's own row says of its spread; an input's stands in its entry, a check's is its yield. */
+function cellEnds(cell: CellReading, spread: SheetSpread | null): string {
+  if (!spread || cell.fault !== null) return '';
+  if (cell.kind === 'check') {
+    const found = spread.check(cell.name)?.yield ?? null;
+    return found === null ? '' : shareText(found.share);
+  }
+  return (!cell.isInput && cell.reading && endsText(cell.reading, spread.value(cell.name))) || '';
+}
+
+function ownValue(cell: CellReading, judged: JudgedSpread | null): string {
   if (cell.fault !== null) return cell.fault.code === 'waits-for' ? cell.fault.text : '';
-  return cell.kind === 'check' ? checkText(cell) : (shownCell(cell) ?? '');
+  if (cell.kind !== 'check') return shownCell(cell) ?? '';
+  const isHeld = cell.check?.holds !== true || !failsCheck(cell, judged);
+  return isHeld ? checkText(cell) : 'fails at an extreme';
 }
 
 function fieldRow(field: FieldTree, value: string, isInput: boolean): Row {
@@ -141,6 +180,7 @@ function fieldRow(field: FieldTree, value: string, isInput: boolean): Row {
     name: INDENT.repeat(2) + label,
     entry: entryText(field.line, field.body.span),
     value,
+    ends: '',
     remark: remark(field.source, field.note, isInput),
   };
 }
@@ -152,32 +192,57 @@ function remark(source: Source | null, note: Note | null, isInput: boolean): str
 
 // ---------------------------------------------------------------- layout
 
-function table(items: readonly Item[], width: number): string[] {
+function table(all: readonly Item[], width: number): string[] {
+  const items = hasRoomForEnds(all, width) ? all : all.map(withEndsBelow);
   const rows = items.filter((item) => item.type === 'row');
   const aligned = alignNumbers(rows.map((row) => row.value));
   const name = widest(rows.map((row) => row.name));
-  // What stands alone in its row may run on where remarks stand in others.
-  const value = widest(aligned.filter((_, i) => rows[i]!.remark !== '' || /^ *[−∞\d]/.test(aligned[i]!)));
-  const free = widthLeft(width, [name, value]);
+  const ends = widest(rows.map((row) => row.ends));
+  // What stands alone in its row may run on where ends and remarks stand in others.
+  const value = widest(
+    aligned.filter((_, i) => rows[i]!.remark + rows[i]!.ends !== '' || /^ *[−∞\d]/.test(aligned[i]!)),
+  );
+  const fixed = ends === 0 ? [name, value] : [name, value, ends];
+  const free = widthLeft(width, fixed);
   const entry = Math.min(widest(rows.map((row) => row.entry)), Math.max(LEAST_ENTRY, Math.floor(free * ENTRY_SHARE)));
-  const alone = [
-    { width: name, mostLines: Infinity },
-    { width: entry, mostLines: Infinity },
-    { width: Math.max(value, widthLeft(width, [name, entry])), mostLines: Infinity },
-  ];
-  const columns: Column[] = [name, entry, value].map((each) => ({ width: each, mostLines: Infinity }));
-  const left = widthLeft(width, [name, entry, value]);
+  const whole = (each: number): Column => ({ width: each, mostLines: Infinity });
+  const alone = [name, entry, Math.max(value, widthLeft(width, [name, entry]))].map(whole);
+  const columns: Column[] = (ends === 0 ? [name, entry, value] : [name, entry, value, ends]).map(whole);
+  const left = widthLeft(width, [...fixed, entry]);
   const isBeside = left >= LEAST_REMARK;
   if (isBeside) columns.push({ width: left, mostLines: REMARK_LINES });
+  // Without ends the remark takes their room, too.
+  const roomy = widthLeft(width, [name, entry, value]);
+  const withoutEnds: Column[] = [...[name, entry, value].map(whole), { width: roomy, mostLines: REMARK_LINES }];
   const below = (text: string): string[] =>
     wrapText(text, Math.max(LEAST_ENTRY, width - 2 * INDENT.length)).map((line) => INDENT.repeat(2) + line);
   let index = 0;
   return items.flatMap((item) => {
     if (item.type !== 'row') return item.type === 'section' ? ['', item.text] : below(item.text);
-    const cells = [item.name, item.entry, aligned[index++]!, item.remark];
-    if (item.remark === '') return rowLines(cells, alone);
-    return isBeside ? rowLines(cells, columns) : [...rowLines(cells, columns), ...below(item.remark)];
+    const first = [item.name, item.entry, aligned[index++]!];
+    const cells = [...first, ...(ends === 0 ? [] : [item.ends]), item.remark];
+    if (item.remark === '' && item.ends === '') return rowLines(first, alone);
+    if (item.ends === '' && roomy >= LEAST_REMARK) return rowLines([...first, item.remark], withoutEnds);
+    return isBeside || item.remark === ''
+      ? rowLines(cells, columns)
+      : [...rowLines(cells, columns), ...below(item.remark)];
   });
+}
+
+/** Whether entries keep some room beside names, values and ends. */
+function hasRoomForEnds(items: readonly Item[], width: number): boolean {
+  const rows = items.filter((item) => item.type === 'row');
+  const taken = [
+    rows.map(({ name }) => name),
+    alignNumbers(rows.map(({ value }) => value)),
+    rows.map(({ ends }) => ends),
+  ];
+  return widthLeft(width, taken.map(widest)) >= LEAST_ENTRY;
+}
+
+function withEndsBelow(item: Item): Item {
+  if (item.type !== 'row' || item.ends === '') return item;
+  return { ...item, ends: '', remark: [item.ends, item.remark].filter((part) => part !== '').join('; ') };
 }
 
 /** Numbers to the right, their units to the left of one line; what is no number stays. */

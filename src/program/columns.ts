@@ -39,7 +39,10 @@ interface Columns {
 const WIDTH = 1024;
 
 /** Leaves out what the caller supplies and what is frozen. */
-export function planColumns({ program, slots, varying, frozen, outputs }: ColumnRequest, _kernels: KernelTable): ColumnPlan {
+export function planColumns(
+  { program, slots, varying, frozen, outputs }: ColumnRequest,
+  _kernels: KernelTable,
+): ColumnPlan {
   const given = new Set([...Array.from(varying), ...Array.from(frozen)]);
   const kept: number[] = [];
   for (let i = 0; i < program.ops.length; i += STRIDE) {

@@ -18,8 +18,12 @@ export function checkText(cell: Pick<CellReading, 'check' | 'tree'>): string {
   const verb = check.holds ? 'holds' : 'fails';
   if (check.reserve === null || check.reserveType === null || Number.isNaN(check.reserve)) return verb;
   if (check.reserve === 0) return check.holds ? 'holds, nothing to spare' : 'fails, exactly at the limit';
-  const unit = cell.tree.entry.type === 'check' ? limitUnit(cell.tree.entry.condition, check.reserveType) : null;
-  return `${verb}, ${reserveText(check.reserve, check.reserveType, unit)}`;
+  return `${verb}, ${reserveText(check.reserve, check.reserveType, checkUnit(cell))}`;
+}
+
+/** The unit of a check's limit; null where it has none. */
+export function checkUnit({ check, tree }: Pick<CellReading, 'check' | 'tree'>): Unit | null {
+  return tree.entry.type === 'check' && check?.reserveType ? limitUnit(tree.entry.condition, check.reserveType) : null;
 }
 
 /** `0.40 V to spare`, `1.79 V short`; `unit` is that of the limit, null where it has none. */

@@ -2,6 +2,7 @@
 // All of it is text or plain trees; nothing is rendered here.
 
 export { checkText, reserveText } from './check-text.ts';
+export { endsText } from './ends-text.ts';
 export { recordHtml } from './html.ts';
 export { inputTally, openPoints } from './open-points.ts';
 export type { OpenPoint } from './open-points.ts';
@@ -12,9 +13,13 @@ export { shownCell, shownOwn, shownReading } from './shown.ts';
 export { texOfExpression } from './tex.ts';
 export { texOfName, texOfPath } from './tex-name.ts';
 export { texOfUnit } from './tex-number.ts';
+export { parseSamples, parseSeed, parseShare, samplingOf } from './sampling.ts';
+export type { Sampling } from './sampling.ts';
 export { TITLE_LABELS } from './title-fields.ts';
 export type { TitleField } from './title-fields.ts';
-export { verdictOf } from './verdict.ts';
-export type { Verdict } from './verdict.ts';
+export { failingText, failsCheck, verdictOf } from './verdict.ts';
+export type { JudgedSpread, Verdict } from './verdict.ts';
+export { whereText } from './where-text.ts';
+export { countText, shareText, yieldText } from './yield-text.ts';
 export { printStep, stepSides, stepText, workingsOf } from './workings.ts';
 export type { PrintedStep } from './workings.ts';

@@ -12,6 +12,7 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
   const ties: Tie[] = [];
   const values: Wanted[] = [];
   const checks: WantedCheck[] = [];
+  const stages: SpreadModel['stages'][number][] = [];
   for (const node of nodes) {
     if (node.fault || node.waitsFor) continue;
     const { draft, slot } = node.compiled;
@@ -61,9 +62,14 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
         reserve: draft.reserve === null ? null : slot(draft.reserve),
       });
     }
+    const { entry } = node.tree;
+    const current = node.compiled.interface.offers.get('I_D')?.slot ?? -1;
+    if (entry.type === 'stage' && entry.fets.length === 1 && current >= 0) {
+      stages.push({ stage: cell, part: entry.fets[0]!.part.name, current });
+    }
     for (const [name, offer] of node.compiled.interface.offers) {
       if (offer.slot >= 0) values.push({ path: path(name), cell, slot: offer.slot, type: offer.type });
     }
   }
-  return { program, slots, drawn, cuts, ties, values, checks };
+  return { program, slots, drawn, cuts, ties, values, checks, stages };
 }

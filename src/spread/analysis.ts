@@ -8,6 +8,7 @@ import { createBuilds } from './builds.ts';
 import { declaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
 import type { Extreme, SearchEffort } from './extremes.ts';
+import { stageDevices } from './devices.ts';
 import { openEnds } from './open-ends.ts';
 import type {
   Cause,
@@ -64,6 +65,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
   const first = ranges();
   const builds = createBuilds(model, seed, first);
   const sum = emptyTally(builds.shape);
+  const devices = stageDevices(model, effort);
   let repaired = 0;
 
   function take(tally: Tally): void {
@@ -94,6 +96,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     const { unsolved, low, high } = search.of(w);
     return {
       path: values[w]!.path,
+      isWord: typeof values[w]!.type === 'string',
       moves: drawn.some((_, k) => counting(w)(k)),
       low: end(w, 'low'),
       high: end(w, 'high'),
@@ -174,6 +177,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
         checks.length === 0 || sum.builds === 0 || checks.some((_, c) => open[verdictAt(c)]!.any.length > 0)
           ? null
           : share(sum.allPass, sum.builds),
+      devices,
       repaired,
     }),
   };

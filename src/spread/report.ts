@@ -1,6 +1,7 @@
 // What is known of the spread of a sheet: for each value its ends, where they are, and how its builds are distributed; for
 // each check whether it holds everywhere and in what share of builds. Plain data.
 
+import type { StageDevices } from './devices.ts';
 import type { StandingDraw } from './where.ts';
 
 /** One end of a value. */
@@ -29,6 +30,8 @@ export interface Distribution {
 
 export interface ValueSpread {
   readonly path: string;
+  /** It is a region or a condition, not a number. */
+  readonly isWord: boolean;
   /** Whether anything that spreads moves it. */
   readonly moves: boolean;
   readonly low: End;
@@ -87,6 +90,7 @@ export interface SpreadReport {
   readonly checks: readonly CheckSpread[];
   /** All checks together. */
   readonly all: Share | null;
+  readonly devices: readonly StageDevices[];
   /** Extremes that a build beat, and that were then searched for again. */
   readonly repaired: number;
 }

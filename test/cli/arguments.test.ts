@@ -4,10 +4,26 @@ import { runOn, runSheet } from './run.ts';
 
 describe('the arguments', () => {
   it('name a file, with flags before or behind it', () => {
-    const call = { kind: 'compute', file: 'a.txt', json: true, workings: 'A1' };
+    const call = {
+      kind: 'compute',
+      file: 'a.txt',
+      json: true,
+      workings: 'A1',
+      samples: null,
+      seed: null,
+      leastYield: null,
+    };
     expect(parseArguments(['a.txt', '--json', '--workings', 'A1'])).toEqual(call);
     expect(parseArguments(['--workings', 'A1', '--json', 'a.txt'])).toEqual(call);
     expect(parseArguments(['--workings=A1', '--json', 'a.txt'])).toEqual(call);
+  });
+
+  it('take how many builds, by which seed, and the share that is enough', () => {
+    expect(parseArguments(['a', '--samples', '500', '--seed=7', '--yield', '95 %'])).toMatchObject({
+      samples: 500,
+      seed: 7,
+      leastYield: 0.95,
+    });
   });
 
   it('take - as standard input and what follows -- as a file', () => {
@@ -18,9 +34,13 @@ describe('the arguments', () => {
   it.each([
     [[], 'The name of a sheet file is missing; - reads standard input.'],
     [['a', 'b'], 'One sheet is computed at a time; 2 were named: a, b.'],
-    [['a', '--jsno'], '--jsno is not known; there are --json, --workings NAME and --help.'],
-    [['a', '-j'], '-j is not known; there are --json, --workings NAME and --help.'],
-    [['a', '--json=1'], '--json=1 is not known; there are --json, --workings NAME and --help.'],
+    [['a', '--jsno'], '--jsno is not known; there are --json, --workings, --samples, --seed, --yield and --help.'],
+    [['a', '-j'], '-j is not known; there are --json, --workings, --samples, --seed, --yield and --help.'],
+    [['a', '--json=1'], '--json=1 is not known; there are --json, --workings, --samples, --seed, --yield and --help.'],
+    [['a', '--samples', 'many'], '--samples wants a whole number from 1 to 10 000 000 behind it.'],
+    [['a', '--seed', '1.5'], '--seed wants a whole number from 0 to 4 294 967 295 behind it.'],
+    [['a', '--yield', '95'], '--yield wants a share from 0 to 1 behind it, such as 0.95.'],
+    [['a', '--seed', '1', '--seed', '2'], '--seed stands twice; give one seed.'],
     [['a', '--workings'], '--workings wants the name of a cell behind it.'],
     [['--workings', '--json', 'a'], '--workings wants the name of a cell behind it.'],
     [['a', '--workings='], '--workings wants the name of a cell behind it.'],
@@ -33,7 +53,7 @@ describe('the arguments', () => {
     expect(ran).toEqual({
       status: 3,
       out: '',
-      complaints: `${text}\nUsage: npm run -s sheet -- FILE [--json] [--workings NAME]\n`,
+      complaints: `${text}\nUsage: npm run -s sheet -- FILE [FLAG ..]; --help lists the flags\n`,
     });
   });
 

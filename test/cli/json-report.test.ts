@@ -6,14 +6,14 @@ import { report, runOn, runSheet } from './run.ts';
 describe('the JSON report', () => {
   it('of a quantity has its entry, its value in SI and its text', () => {
     const { title, cells, checks, cautions } = report(
-      '# Title, rev B\nR_S = 1.2 kohm ± 1 %  [stock] ; note\nR_2 = R_S / 3 as ohm',
+      '# Title, rev B\nR_S = 1.2 kohm  [stock] ; note\nR_2 = R_S / 3 as ohm',
     );
     expect({ title, checks, cautions }).toEqual({ title: 'Title, rev B', checks: {}, cautions: [] });
     expect(cells).toEqual({
       R_S: {
         kind: 'quantity',
         line: 2,
-        entry: '1.2 kohm ± 1 %',
+        entry: '1.2 kohm',
         value: 1200,
         unit: 'ohm',
         text: '1.2 kΩ',
@@ -21,6 +21,55 @@ describe('the JSON report', () => {
       },
       R_2: { kind: 'quantity', line: 3, entry: 'R_S / 3 as ohm', value: 400, unit: 'ohm', text: '400 Ω', error: null },
     });
+  });
+
+  it('has the spread of a value, where its ends are, and the yield of a check', () => {
+    const {
+      cells,
+      checks,
+      yield: all,
+    } = report('R_1 = 1 kohm ± 10 %\nR_2 = 1 kohm\nx = R_2 / (R_1 + R_2)\na = check x > 0.49', '--samples', '4000');
+    const { spread } = cells.x;
+    expect(spread!.low).toBeCloseTo(1 / 2.1, 14);
+    expect(spread!.high).toBeCloseTo(1 / 1.9, 14);
+    expect(spread!.low_at).toEqual({ R_1: 1100 });
+    expect(spread!.high_at).toEqual({ R_1: 900 });
+    expect(spread!.open).toEqual([]);
+    // R_1 is even in 900 .. 1100 ohm, so the share of builds below a value is that of R_1 above what gives it.
+    for (const [key, share] of [
+      ['p05', 0.05],
+      ['p50', 0.5],
+      ['p95', 0.95],
+    ] as const) {
+      expect(Math.abs(spread![key]! - 1000 / (2000 + 100 - 200 * share))).toBeLessThan(1e-3);
+    }
+    expect(cells.R_2.spread).toBeUndefined();
+    // x > 0.49 where R_1 < 1040.8 ohm.
+    const share = (1000 / 0.49 - 1000 - 900) / 200;
+    expect(checks.a.holds).toBe(true);
+    expect(checks.a.holds_at_extremes).toBe(false);
+    expect(checks.a.least_reserve).toBeCloseTo(1 / 2.1 - 0.49, 14);
+    expect(checks.a.fails_at).toEqual({ R_1: 1100 });
+    expect(checks.a.yield!.n).toBe(4000);
+    expect(checks.a.yield!.low).toBeLessThan(share);
+    expect(checks.a.yield!.high).toBeGreaterThan(share);
+    expect(all).toEqual(checks.a.yield);
+  });
+
+  it('is the same for the same seed, and another for another', () => {
+    const text = 'R_1 = 1 kohm ± 10 %\nx = R_1 * 2';
+    expect(report(text, '--seed', '5')).toEqual(report(text, '--seed', '5'));
+    expect(report(text, '--seed', '5').cells.x.spread!.mean).not.toBe(report(text).cells.x.spread!.mean);
+    expect(report(`# T\n  seed: 5\n${text}`).cells.x.spread!.mean).toBe(
+      report(text, '--seed', '5').cells.x.spread!.mean,
+    );
+  });
+
+  it('names the input whose open end leaves a value open', () => {
+    const { cells, checks } = report('R_1 = 1 kohm ..\nx = R_1 * 2\na = check x > 1 kohm\nb = check x < 9 kohm');
+    expect(cells.x.spread).toMatchObject({ low: 2000, high: null, mean: null, open: ['R_1'] });
+    expect(checks.a).toMatchObject({ holds_at_extremes: true, yield: null });
+    expect(checks.b).toMatchObject({ holds_at_extremes: null, yield: null });
   });
 
   it('has the digest of the text as it stands in the file', () => {
