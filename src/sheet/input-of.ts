@@ -21,9 +21,10 @@ export function checkInput(path: PathExpr, context: CellContext): void {
     known.length === 0
       ? ''
       : ` Inputs here are ${known.slice(0, MOST_NAMED).join(', ')}${known.length > MOST_NAMED ? ' and others' : ''}.`;
+  const ambient = named === 'T_A' && !cell ? ' Write T_A = 25 degC in a line of its own first.' : '';
   stop(
     'input-expected',
-    `${named} is computed. What is turned here is an input: a quantity, or a field of a part or point, whose entry is one number.${which}`,
+    `${named} is no input. What is turned here is a quantity, or a field of a part or point, whose entry is one number.${ambient}${which}`,
     path.span,
   );
 }

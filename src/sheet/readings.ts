@@ -1,6 +1,6 @@
 // What others read of a cell, made from its compiled form and the slots as they stand.
 
-import type { Line, Message } from '../language/index.ts';
+import type { Line, Message, Span } from '../language/index.ts';
 import type { Placed, Read } from './draft.ts';
 import type { CellReading, Fault, OfferedReading, Reading } from './model.ts';
 import type { Node } from './node.ts';
@@ -25,17 +25,18 @@ export function readCell(node: Node, nodes: readonly Node[], slot: (index: numbe
     draft.type === null || compiled.fault || compiled.waitsFor
       ? null
       : { type: draft.type, value: alive ? readable(draft.type, slot(compiled.interface.slot)) : null, as };
-  const values: OfferedReading[] = draft.offers.map((offer) => ({
-    name: offer.name,
-    type: offer.type,
-    as: offer.as ?? null,
-    sentence: offer.sentence,
-    value:
-      alive && offer.handle !== null
-        ? readable(offer.type, slot(compiled.interface.offers.get(offer.name)!.slot))
-        : null,
-    missing: offer.missing ? faultAt(offer.missing, tree.line) : null,
-  }));
+  const values: OfferedReading[] = draft.offers.map((offer) => {
+    const number = alive && offer.handle !== null ? slot(compiled.interface.offers.get(offer.name)!.slot) : null;
+    const missing = number !== null && Number.isNaN(number) ? noNumber(offer.name, tree.entry.span) : offer.missing;
+    return {
+      name: offer.name,
+      type: offer.type,
+      as: offer.as ?? null,
+      sentence: offer.sentence,
+      value: number === null || Number.isNaN(number) ? null : readable(offer.type, number),
+      missing: missing ? faultAt(missing, tree.line) : null,
+    };
+  });
   const names = (indices: readonly number[]): string[] => indices.map((i) => nodes[i]!.tree.name.name);
   return {
     name: tree.name.name,
@@ -70,6 +71,15 @@ export function waitingText({ waitsFor, root }: Node): string {
   const state = root.fault.message.code === 'not-computed-yet' ? 'is not computed yet' : 'is broken';
   const which = root.tree.name.name === waitsFor ? 'which' : `because ${root.tree.name.name}`;
   return `waits for ${waitsFor}, ${which} ${state} in line ${lineNow(root, root.fault.line).index + 1}`;
+}
+
+/** Why an offered value that is computed has no number. */
+function noNumber(name: string, span: Span): Message {
+  return {
+    code: 'no-value',
+    text: `${name} comes out as no number here: what it is made of overflows, or is nothing over nothing.`,
+    span,
+  };
 }
 
 /** Where a line of the compiled tree stands now. */

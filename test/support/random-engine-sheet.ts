@@ -290,7 +290,12 @@ export function randomEngineSheet(draw: Draw, quantities = 14): RandomEngineShee
   // ---------------------------------------------------------------- the first sheet
   blocks.push({ name: 'V_DD', kind: 'V', lines: ['V_DD = 15 V ± 5 %'], offers: [] });
   if (chance(0.5))
-    blocks.push({ name: 'T_A', kind: 'degC', lines: [`T_A = ${Math.round(-20 + 90 * draw())} degC`], offers: [] });
+    blocks.push({
+      name: 'T_A',
+      kind: 'degC',
+      lines: [`T_A = ${pick([`${Math.round(-20 + 90 * draw())} degC`, '300 K'])}`],
+      offers: [],
+    });
   for (const kind of KINDS) if (chance(0.7)) blocks.push(input(kind));
   blocks.push({ name: fresh('R'), kind: 'ohm', lines: [`R_${counter} = ${scale(0.5, 5, 'kohm')}`], offers: [] });
   for (let k = 0; k < 2; k++) blocks.push(part());

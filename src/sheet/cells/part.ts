@@ -2,21 +2,22 @@
 // route, and shown in every convention of the trade.
 
 import { wantedSign } from '../../fet/index.ts';
-import { formatValue, sameKind } from '../../quantity/index.ts';
+import { TEMPERATURE_POINT, formatValue, sameKind } from '../../quantity/index.ts';
 import { nearestNames } from '../../language/index.ts';
-import type { FieldTree, Line, PartEntry } from '../../language/index.ts';
+import type { PartEntry } from '../../language/index.ts';
 import type { Handle } from '../../network/index.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft, FieldDraft, OfferDraft, Placed, Read } from '../draft.ts';
 import { exampleAmount } from '../example-amount.ts';
 import type { LimitName } from '../interface.ts';
-import { CONDITION_KINDS, PART_FIELDS } from '../part-fields.ts';
+import { PART_FIELDS } from '../part-fields.ts';
 import type { GivenField, GivenFields } from '../part-given.ts';
 import { partDevice } from '../part-device.ts';
 import { partLaw } from '../part-law.ts';
 import { fieldName, partSpread } from '../part-spread.ts';
 import { partWorkings } from '../part-workings.ts';
 import { stop } from '../stop.ts';
+import { conditionsOf } from '../test-conditions.ts';
 import { typeName } from '../value-type.ts';
 import { compileQuantityEntry, fromZeroText, heldAtZero, standInText } from './quantity.ts';
 import { labelOf } from './stage-places.ts';
@@ -49,7 +50,7 @@ export function compilePartCell(context: CellContext): Draft {
       ...law.forms.filter((form) => !given.has(form.name)),
     ],
     verify: (read) => verifyPart(entry, channel, fields, law.verify, read),
-    cautions: (read) => law.cautions(read),
+    cautions: (read) => [...law.cautions(read), ...temperatureCautions(fields, device.T_nom, read)],
     assumptions: [
       ...fields.filter((field) => field.quantity.chosen).map((field) => chosenText(tree.name.name, field)),
       ...fields
@@ -100,7 +101,7 @@ function readFields(entry: PartEntry, context: CellContext): GivenFields {
     }
     given.set(name, [
       ...present,
-      { name, handle: quantity.handle, kind: known.kind, quantity, conditions: conditionsOf(field, line), tree: field },
+      { name, handle: quantity.handle, kind: known.kind, quantity, conditions: conditionsOf(body, line), tree: field },
     ]);
   }
   return given;
@@ -110,36 +111,6 @@ function familyText(name: string, entry: PartEntry): string {
   if (name === 'beta')
     return 'beta is not used for MOSFETs, because half of the books mean twice the other half by it. Write K, with I_D = K (V_GS - V_TO)².';
   return `${name} is no field of a ${entry.family}.`;
-}
-
-function conditionsOf(field: FieldTree, line: Line): Map<string, number> {
-  const { body } = field;
-  const found = new Map<string, number>();
-  if (body.type !== 'quantity') return found;
-  for (const { name, literal } of body.conditions) {
-    const kind = Object.hasOwn(CONDITION_KINDS, name.name) ? CONDITION_KINDS[name.name] : undefined;
-    if (!kind) {
-      const near = nearestNames(name.name, Object.keys(CONDITION_KINDS));
-      stop(
-        'unknown-condition',
-        `${name.name} is no test condition.${near.length > 0 ? ` Did you mean ${near.join(' or ')}?` : ` Conditions are ${Object.keys(CONDITION_KINDS).join(', ')}.`}`,
-        name.span,
-        line,
-      );
-    }
-    if (!sameKind(kind, literal.kind)) {
-      stop(
-        'condition-dimension',
-        `${name.name} is ${typeName(kind)}; ${line.text.slice(literal.span.start, literal.span.end)} is ${typeName(literal.kind)}.`,
-        literal.span,
-        line,
-      );
-    }
-    if (found.has(name.name))
-      stop('condition-twice', `${name.name} stands twice behind at. Keep one.`, name.span, line);
-    found.set(name.name, literal.value);
-  }
-  return found;
 }
 
 function verifyPart(
@@ -173,6 +144,24 @@ function reverseCapacitanceFault(fields: readonly GivenField[], read: Read): Pla
     return { line, message: { code: 'capacitance-order', text, span: body.span } };
   }
   return null;
+}
+
+/** Temperature in K by which a row's own may differ from T_nom without a word. */
+const SAME_TEMPERATURE = 0.5;
+
+/** What is said of rows that name a temperature: all are read at T_nom. */
+function temperatureCautions(fields: readonly GivenField[], T_nom: Handle, read: Read): ReturnType<Draft['cautions']> {
+  const nominal = read(T_nom);
+  return fields.flatMap((field) => {
+    const stated = field.conditions.get('T_J') ?? field.conditions.get('T_A');
+    if (PART_FIELDS[field.name]!.role === 'limit' || stated === undefined) return [];
+    if (Math.abs(stated - nominal) <= SAME_TEMPERATURE) return [];
+    const [at, here] = [stated, nominal].map(
+      (kelvin) => formatValue(kelvin, TEMPERATURE_POINT, { zeros: 'drop' }).text,
+    );
+    const text = `${field.name} is stated at ${at} and read as if at T_nom, ${here}: the temperature behind at changes nothing. Give all rows at one temperature, and name it as T_nom.`;
+    return [{ text, line: field.tree.line }];
+  });
 }
 
 function offerOf(field: GivenField, name: string): OfferDraft {

@@ -132,6 +132,14 @@ function readFields(
     }
     if (given.has(name))
       stop('field-twice', `${name} stands twice in this point. Keep one of the two lines.`, field.labelSpan, line);
+    if (body.conditions.length > 0) {
+      stop(
+        'condition-misplaced',
+        `${name} of a point carries no test condition: the point itself is one, and stands at T_A. Leave out what is behind at.`,
+        body.conditions[0]!.name.span,
+        line,
+      );
+    }
     const quantity = compileQuantityEntry(body, line, context);
     if (typeof quantity.type === 'string' || !sameKind(quantity.type, kind)) {
       stop(

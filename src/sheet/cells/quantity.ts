@@ -11,8 +11,10 @@ import { drawsOf } from '../compiled-quantity.ts';
 import type { CompiledQuantity, QuantityDraw } from '../compiled-quantity.ts';
 import { EMPTY_DRAFT, NO_SPREAD } from '../draft.ts';
 import type { CellContext, Draft, Read } from '../draft.ts';
+import { limitSignCautions, limitSignFault } from '../limit-sign.ts';
 import type { DeclaredSpread } from '../model.ts';
 import { stop } from '../stop.ts';
+import { conditionCautions } from '../test-conditions.ts';
 import { isQuantity, typeName } from '../value-type.ts';
 import { expressionStep } from '../workings.ts';
 
@@ -118,15 +120,21 @@ export function compileQuantityCell(context: CellContext): Draft {
     verify: (read) => {
       const value = read(compiled.handle);
       if (Number.isNaN(value)) return { line: tree.line, message: diagnose(entry.value!, context, tree.line) };
-      return isAmbient ? ambientFault(value, compiled.spread?.(read) ?? null, entry, tree.line) : null;
+      const spread = compiled.spread?.(read) ?? null;
+      if (isAmbient) return ambientFault(value, spread, entry, tree.line);
+      return spread && isQuantity(compiled.type)
+        ? limitSignFault(tree.name.name, compiled.type, spread, entry, tree.line)
+        : null;
     },
-    cautions: (read) =>
-      isAmbient
-        ? ambientCautions(read(compiled.handle), compiled.spread?.(read) ?? null).map((text) => ({
-            text,
-            line: tree.line,
-          }))
-        : [],
+    cautions: (read) => {
+      const spread = compiled.spread?.(read) ?? null;
+      const texts = [
+        ...conditionCautions(entry),
+        ...(isAmbient ? ambientCautions(read(compiled.handle), spread) : []),
+        ...(spread && isQuantity(compiled.type) ? limitSignCautions(tree.name.name, compiled.type, spread, entry) : []),
+      ];
+      return texts.map((text) => ({ text, line: tree.line }));
+    },
     workings: (read) =>
       entry.value === null || isNumber(entry.value)
         ? []
