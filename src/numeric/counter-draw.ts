@@ -5,7 +5,7 @@
 // Source: C. Wellons, "Prospecting for hash functions" (2018), lowbias32.
 
 /** What a name draws by: two words that depend on every letter and on the seed. */
-export interface DrawKey {
+interface DrawKey {
   readonly first: number;
   readonly second: number;
 }

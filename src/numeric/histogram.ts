@@ -1,7 +1,7 @@
 // Quantiles from the counts of equal bins.
 
 /** A histogram: counts of equal bins from `low` to `high`; what lies beyond stands in the end bins, which reach to `least` and `largest`. */
-export interface Histogram {
+interface Histogram {
   readonly counts: Float64Array;
   readonly low: number;
   readonly high: number;

@@ -11,7 +11,6 @@ export { sha256Hex } from './sha256.ts';
 export { cos, sin, tan } from './trigonometry.ts';
 export { binomialInterval } from './binomial-interval.ts';
 export { drawKey, fillUniform, uniformAt } from './counter-draw.ts';
-export type { DrawKey } from './counter-draw.ts';
 export { quantileOf } from './histogram.ts';
 export { addColumn, addMoments, createMoments } from './moments.ts';
 export type { Moments } from './moments.ts';

@@ -4,7 +4,7 @@ import { OP, STRIDE } from './operations.ts';
 import type { Program } from './program.ts';
 
 /** A row of `words` words for each slot; bit k of a row says that the slot depends on the k-th source. */
-export interface Reach {
+interface Reach {
   readonly words: number;
   readonly bits: Int32Array;
 }

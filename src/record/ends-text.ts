@@ -1,6 +1,7 @@
 // The ends of a value as they are shown: low rounded down, high up, in one unit with the nominal.
 
-import { formatRow, formatValue } from '../quantity/index.ts';
+import { formatRow } from '../quantity/index.ts';
+import type { FormattedRow } from '../quantity/index.ts';
 import type { Reading } from '../sheet/index.ts';
 import type { ValueSpread } from '../spread/index.ts';
 
@@ -10,7 +11,7 @@ export function endsText({ value, type, as }: Reading, spread: ValueSpread | nul
   const { low, high } = spread;
   if (low.value === high.value && low.value === value) return null;
   const row = formatRow({ low: low.value, nominal: value, high: high.value }, type, { unit: as });
-  const text = (end: typeof low, shown: ReturnType<typeof formatValue> | null): string =>
+  const text = (end: typeof low, shown: FormattedRow['low']): string =>
     shown?.text ?? (end.open.length > 0 ? 'no limit' : '–');
   return `${text(low, row.low)} .. ${text(high, row.high)}`;
 }

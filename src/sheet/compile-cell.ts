@@ -33,7 +33,7 @@ interface Surroundings {
 }
 
 /** The least or largest of the value in a slot, wanted in another slot. */
-export interface WantedEnd {
+interface WantedEnd {
   readonly which: EndName;
   readonly of: number;
   readonly into: number;

@@ -19,7 +19,7 @@ export interface SheetSpread {
 }
 
 /** A report with its model; values and checks by name. */
-export function readSpread(model: SpreadModel, report: SpreadReport): SheetSpread {
+function readSpread(model: SpreadModel, report: SpreadReport): SheetSpread {
   const values = new Map(report.values.map((value) => [value.path, value]));
   const checks = new Map(report.checks.map((check) => [check.name, check]));
   return {

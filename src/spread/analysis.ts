@@ -24,7 +24,7 @@ import { BINS, addTally, emptyTally } from './tally.ts';
 import type { Tally } from './tally.ts';
 import { whereIs } from './where.ts';
 
-export interface Analysis {
+interface Analysis {
   /** The present ranges, as those who count builds need them. */
   ranges(): { low: Float64Array; high: Float64Array };
   /** Takes a tally of the builds that follow those taken so far. */

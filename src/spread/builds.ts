@@ -15,12 +15,12 @@ import { BINS, emptyTally } from './tally.ts';
 import type { Tally, TallyShape } from './tally.ts';
 
 /** The least and largest of each value as far as they are known, between which its histogram lies. */
-export interface Ranges {
+interface Ranges {
   readonly low: Float64Array;
   readonly high: Float64Array;
 }
 
-export interface Builds {
+interface Builds {
   readonly shape: TallyShape;
   /** Counts builds first .. first + count. */
   count(first: number, count: number): Tally;

@@ -25,7 +25,7 @@ export interface Plane {
   readonly b: number;
 }
 
-export interface DeclaredSet {
+interface DeclaredSet {
   readonly planes: readonly Plane[];
   /** Says of each position whether it belongs to the set. */
   membership(positions: readonly Position[]): Uint8Array;

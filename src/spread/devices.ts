@@ -9,7 +9,7 @@ import { whereIs } from './where.ts';
 import type { StandingDraw } from './where.ts';
 
 /** One device of a stage. */
-export interface Device {
+interface Device {
   /** The draws of its part that stand away from their nominal. */
   readonly where: readonly StandingDraw[];
   /** Every value of the stage with this device, SI, by path. */

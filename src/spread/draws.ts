@@ -18,14 +18,14 @@ import { follow } from './tracking.ts';
 const ATTEMPT_CAP = 2000;
 
 /** How often the specimens of a part had to be drawn. */
-export interface Trial {
+interface Trial {
   readonly cell: string;
   readonly attempts: number;
   /** Builds whose specimen was given up. */
   readonly givenUp: number;
 }
 
-export interface Draws {
+interface Draws {
   /** Where the draws of builds first .. first + count stand: position k of build i in `place(k)[i]`. Service stays at its nominal. */
   draw(first: number, count: number): readonly Trial[];
   place(k: number): Float64Array;

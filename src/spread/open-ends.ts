@@ -10,7 +10,7 @@ import type { ExtremeSearch } from './extremes.ts';
 const BEYOND = [0.1, 1, 9, 999];
 
 /** What is open of one value: names of the draws whose missing limit would move its ends. */
-export interface OpenEnds {
+interface OpenEnds {
   readonly low: readonly string[];
   readonly high: readonly string[];
   /** Draws with an open end on which the value depends at all: its spread is not known. */

@@ -6,7 +6,7 @@ import type { SpreadModel } from '../sheet/index.ts';
 const COMBINED = 6;
 
 /** One state of service: where its draws stand, in the order of `serviceDraws`. */
-export type ServiceState = readonly number[];
+type ServiceState = readonly number[];
 
 /** The draws that change in use, by their index. */
 export function serviceDraws({ drawn }: SpreadModel): number[] {
