@@ -14,6 +14,8 @@ import { CANNOT_CARRY, LEFT_OPEN, NOT_A_NUMBER, RUNAWAY, SOLVED } from './point-
 import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 import { balanceHeat, thermalRoots } from './thermal-balance.ts';
 
+const unknownPower = (): number => Infinity;
+
 /** Drain to source voltage in V up to which a forced current is tried; no discrete FET of this trade stands more. */
 const FORCED_CEILING = 1000;
 
@@ -104,7 +106,7 @@ export const forcedPoint: Kernel = {
     given[VDS] *= channel;
     given[VSB] *= channel;
     thermalRoots[0] = 1;
-    const T = given[RTH] > 0 ? balanceHeat(given[TA], given[RTH], powerAt) : given[TA];
+    const T = given[RTH] > 0 ? balanceHeat(given[TA], given[RTH], powerAt, unknownPower) : given[TA];
     if (T !== T || !solveAt(T)) {
       solveAt(T === T ? T : given[TA]);
       refuse(s, a, o, at.y === at.y ? RUNAWAY : CANNOT_CARRY, count);

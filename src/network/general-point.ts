@@ -96,7 +96,7 @@ export const generalPoint: Kernel = {
     given[RM] = Math.max(0, Math.min(given[RM], given[RL]));
     given[RB] = Math.max(0, Math.min(given[RB], given[RL]));
     thermalRoots[0] = 1;
-    const T = given[RTH] > 0 ? balanceHeat(given[TA], given[RTH], powerAt) : given[TA];
+    const T = given[RTH] > 0 ? balanceHeat(given[TA], given[RTH], powerAt, mostPowerBelow) : given[TA];
     if (T !== T) {
       refuse(s, a, o, RUNAWAY, GENERAL_OUTPUTS.length);
       return;
@@ -130,6 +130,16 @@ function powerAt(T: number): number {
   solveAt(T);
   return at.vds * at.current;
 }
+
+/** A power that the FET does not exceed up to T: a network of R_L delivers V² / (4 R_L) at most, and leakage grows with T. */
+function mostPowerBelow(T: number): number {
+  const leakage = given[IGSS] === 0 ? 0 : leakageAt(given[IGSS], given[DOUBLING], T, given[TNOM]);
+  const volts = Math.abs(given[VL]) + Math.abs(given[QDS] * leakage);
+  return (ROUNDING * volts * volts) / (4 * given[RL]);
+}
+
+/** Above 1 by more than rounding. */
+const ROUNDING = 1 + 1e-9;
 
 /** The point at junction temperature T: `line` in the conducting sense, `at` in the n-channel frame. */
 function solveAt(T: number): void {

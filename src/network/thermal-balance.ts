@@ -15,8 +15,19 @@ const SCAN_STEPS = 64;
 /** How many thermal roots the last balance found below the ceiling. */
 export const thermalRoots = new Int32Array(1);
 
-/** The cold-start junction temperature in K for a dissipation `power(T)` in W; NaN where the FET runs away or power is NaN. */
-export function balanceHeat(ambient: number, rth: number, power: (T: number) => number): number {
+/** Steps that are skipped at once where the power is known to be too small for a root in them. */
+const CHUNK = 8;
+
+/**
+ * The cold-start junction temperature in K for a dissipation `power(T)` in W; NaN where the FET runs away or power is NaN.
+ * `most(T)` is a power in W that is not exceeded at T or below; Infinity where nothing is known.
+ */
+export function balanceHeat(
+  ambient: number,
+  rth: number,
+  power: (T: number) => number,
+  most: (T: number) => number,
+): number {
   const excess = (T: number): number => T - ambient - rth * power(T);
   thermalRoots[0] = 1;
   let before = excess(ambient);
@@ -26,6 +37,14 @@ export function balanceHeat(ambient: number, rth: number, power: (T: number) => 
   const step = (THERMAL_CEILING - ambient) / SCAN_STEPS;
   let first = NaN;
   for (let n = 1; n <= SCAN_STEPS; n++) {
+    if (before > 0) {
+      // H is above 0 at every step up to the end of the chunk: none of them has to be looked at.
+      const last = n + CHUNK - 1 - ((n - 1) % CHUNK);
+      if (n * step > rth * most(ambient + last * step)) {
+        n = last;
+        continue;
+      }
+    }
     const T = ambient + n * step;
     const here = excess(T);
     if (here > 0 !== before > 0) {

@@ -110,7 +110,8 @@ export function runOperations(
   }
 }
 
-function parallel(a: number, b: number): number {
+/** Two resistances side by side. */
+export function parallel(a: number, b: number): number {
   if (a === Infinity) return b;
   if (b === Infinity) return a;
   if (a === 0 || b === 0) return 0;

@@ -1,6 +1,7 @@
 // The compiled form of a sheet: plain data that one evaluation, an incremental one, a sweep and many samples share.
 
-export { createColumns, planColumns } from './columns.ts';
+export { planColumns } from './column-plan.ts';
+export { createColumns } from './columns.ts';
 export { createBuilder } from './builder.ts';
 export type { Builder } from './builder.ts';
 export { runOperations } from './evaluate.ts';

@@ -21,10 +21,13 @@ export function choicesOf({ program }: SpreadModel): number[] {
 /** Prepares the evaluation of the values in these slots. */
 export function createBatch(model: SpreadModel, wanted: readonly number[]): Batch {
   const { program, slots, drawn } = model;
-  const plan = planColumns(
-    { program, slots, varying: drawn.map(({ slot }) => slot), frozen: choicesOf(model), outputs: wanted },
-    KERNELS,
-  );
+  const plan = planColumns({
+    program,
+    slots,
+    varying: drawn.map(({ slot }) => slot),
+    frozen: choicesOf(model),
+    outputs: wanted,
+  });
   const columns = createColumns(plan, KERNELS);
   return {
     run(positions, visit) {

@@ -34,16 +34,13 @@ export function createBuilds(model: SpreadModel, seed: number, ranges: Ranges): 
   const service = serviceDraws(model);
   const states = serviceStates(model);
   const columns = createColumns(
-    planColumns(
-      {
-        program,
-        slots,
-        varying: drawn.map(({ slot }) => slot),
-        frozen: choicesOf(model),
-        outputs: [...values, ...checks].map(({ slot }) => slot),
-      },
-      KERNELS,
-    ),
+    planColumns({
+      program,
+      slots,
+      varying: drawn.map(({ slot }) => slot),
+      frozen: choicesOf(model),
+      outputs: [...values, ...checks].map(({ slot }) => slot),
+    }),
     KERNELS,
   );
   const { width } = columns;

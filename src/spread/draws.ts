@@ -111,10 +111,13 @@ function partsOf(model: SpreadModel): CutPart[] {
   return [...new Set(cuts.map(({ cell }) => cell))].map((cell) => {
     const own = cuts.filter((cut) => cut.cell === cell);
     const draws = drawn.flatMap((_, k) => (own.some(({ slot }) => reaches(reach, k, slot)) ? [k] : []));
-    const plan = planColumns(
-      { program, slots, varying: draws.map((k) => drawn[k]!.slot), frozen, outputs: own.map(({ slot }) => slot) },
-      KERNELS,
-    );
+    const plan = planColumns({
+      program,
+      slots,
+      varying: draws.map((k) => drawn[k]!.slot),
+      frozen,
+      outputs: own.map(({ slot }) => slot),
+    });
     const columns = createColumns(plan, KERNELS);
     return {
       cell,
