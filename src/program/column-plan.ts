@@ -132,7 +132,7 @@ function liveSteps(steps: readonly Step[], outputs: readonly number[]): Step[] {
     for (const value of step.inputs) needed.add(value);
     live.push(step);
   }
-  return live.reverse();
+  return live.toReversed();
 }
 
 /** Gives each value a column; one that nothing reads any more hands its column on. */
