@@ -14,6 +14,7 @@ export { texOfExpression } from './tex.ts';
 export { texOfName, texOfPath } from './tex-name.ts';
 export { texOfUnit } from './tex-number.ts';
 export { parseSamples, parseSeed, parseShare, samplingOf } from './sampling.ts';
+export type { Sampling } from './sampling.ts';
 export { TITLE_LABELS } from './title-fields.ts';
 export type { TitleField } from './title-fields.ts';
 export { failingText, failsCheck, verdictOf } from './verdict.ts';

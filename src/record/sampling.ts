@@ -3,7 +3,7 @@
 import type { SheetTree } from '../language/index.ts';
 import { titleField } from './title-fields.ts';
 
-interface Sampling {
+export interface Sampling {
   /** Builds. */
   readonly samples: number;
   readonly seed: number;

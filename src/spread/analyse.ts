@@ -4,11 +4,9 @@ import type { Analyses, SpreadModel } from '../sheet/index.ts';
 import { createAnalysis } from './analysis.ts';
 import { createBuilds } from './builds.ts';
 import { searchExtremes } from './extremes.ts';
+import { PORTION } from './portion.ts';
 import { openEnds } from './open-ends.ts';
 import type { CheckSpread, SpreadReport, ValueSpread } from './report.ts';
-
-/** Builds that are counted in one portion, whoever counts them. */
-export const PORTION = 8192;
 
 /** What is known of the spread of a sheet, with the model it speaks of. */
 export interface SheetSpread {
@@ -19,7 +17,7 @@ export interface SheetSpread {
 }
 
 /** A report with its model; values and checks by name. */
-function readSpread(model: SpreadModel, report: SpreadReport): SheetSpread {
+export function readSpread(model: SpreadModel, report: SpreadReport): SheetSpread {
   const values = new Map(report.values.map((value) => [value.path, value]));
   const checks = new Map(report.checks.map((check) => [check.name, check]));
   return {

@@ -3,6 +3,7 @@
 
 import { createMemo, createSignal } from 'solid-js';
 import type { SheetDocument } from '../document/index.ts';
+import type { SpreadFeed } from '../spread/index.ts';
 import type { Command } from './command.ts';
 
 /** The columns of the sheet, in order. */
@@ -28,6 +29,8 @@ interface Status {
 
 export interface Desk {
   readonly document: SheetDocument;
+  /** The spread of the sheet as far as it is known. */
+  readonly spread: SpreadFeed;
   selection(): Selection | null;
   select(selection: Selection | null): void;
   /** Selects a cell by name and asks the sheet to bring it into view and focus it. */
@@ -48,7 +51,7 @@ export interface Desk {
 }
 
 /** Creates the shared state around a document. */
-export function createDesk(document: SheetDocument): Desk {
+export function createDesk(document: SheetDocument, spread: SpreadFeed): Desk {
   const [selection, select] = createSignal<Selection | null>(null);
   const [jumped, setJumped] = createSignal(0);
   const [following, setFollowing] = createSignal(true);
@@ -78,6 +81,7 @@ export function createDesk(document: SheetDocument): Desk {
 
   return {
     document,
+    spread,
     selection,
     select,
     jump(cell, value = null) {

@@ -4,7 +4,7 @@
 import { batch, createEffect, createMemo, createSelector, createSignal, on, untrack } from 'solid-js';
 import type { Column, Desk } from '../desk/index.ts';
 import { sheetRows } from '../rows/index.ts';
-import type { Row, SheetRows } from '../rows/index.ts';
+import type { Row, RowSpread, SheetRows } from '../rows/index.ts';
 import { columnBeside, nearestColumn, typedColumn } from './columns.ts';
 import { createCompleting } from './completing.ts';
 import type { Completing } from './completing.ts';
@@ -98,9 +98,13 @@ export function createGrid(desk: Desk): Grid {
   let wished: Column = 'entry';
   let listener: (key: string, column: Column, jump: boolean) => void = () => {};
 
+  const rowSpread = createMemo<RowSpread | null>(() => {
+    const judged = desk.spread.judged();
+    return judged && { judged, refining: desk.spread.progress() !== null };
+  });
   const model = createMemo<SheetRows>((previous) => {
     document.version();
-    return sheetRows(document.sheet, folds.isFolded, previous ?? null);
+    return sheetRows(document.sheet, folds.isFolded, previous ?? null, rowSpread());
   });
   const keys = createMemo<readonly string[]>(() => shownKeys(model(), draft(), pendingLine()), [], {
     equals: (a, b) => a.length === b.length && a.every((key, i) => key === b[i]),

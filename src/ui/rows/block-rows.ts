@@ -10,6 +10,8 @@ import { innerName, labelText, wordName } from './names.ts';
 import { inputNumbers, NO_NUMBERS, typedUnit, valueFigure } from './numbers.ts';
 import type { Numbers } from './numbers.ts';
 import { conditionText, tableEntry } from './part-numbers.ts';
+import { numbersAt } from './row-spread.ts';
+import type { RowSpread } from './row-spread.ts';
 import { splitValues } from './pinned.ts';
 import { emptyRow, MARK_TEXT } from './row.ts';
 import type { Figure, Mark, Row, RowEntry } from './row.ts';
@@ -30,7 +32,12 @@ const TABLE: readonly Column[] = ['name', 'low', 'nominal', 'high', 'entry', 'so
 const PLAIN: readonly Column[] = ['name', 'entry', 'source'];
 
 /** All rows of a block below its own line. */
-export function blockRows(cell: CellReading, used: ReadonlySet<string>, isFolded: Folding): PlacedRow[] {
+export function blockRows(
+  cell: CellReading,
+  used: ReadonlySet<string>,
+  isFolded: Folding,
+  spread: RowSpread | null,
+): PlacedRow[] {
   const { tree } = cell;
   const fields = fieldRows(cell);
   const benchRows = tree.rows.map(({ line }, k): PlacedRow => {
@@ -42,13 +49,13 @@ export function blockRows(cell: CellReading, used: ReadonlySet<string>, isFolded
       row: { ...row, cell: cell.name, inside: true, name: wordName(`${k + 1}`), entry, editable: ['entry'] },
     };
   });
-  if (cell.kind !== 'stage') return [...fields, ...benchRows, ...valueRows(cell, used, isFolded)];
+  if (cell.kind !== 'stage') return [...fields, ...benchRows, ...valueRows(cell, used, isFolded, spread)];
   const solved = cell.values.length > 0 && cell.fault === null && cell.waitsFor === null;
   const faulty = fields.some(({ row }) => row.fault !== null);
   const key = `wiring:${cell.name}`;
   const folded = !faulty && fields.length > 0 && isFolded(key, solved);
   const wiring = fields.length === 0 || faulty ? [] : [{ line: null, row: wiringRow(key, tree, !folded) }];
-  return [...wiring, ...(folded ? [] : fields), ...valueRows(cell, used, isFolded)];
+  return [...wiring, ...(folded ? [] : fields), ...valueRows(cell, used, isFolded, spread)];
 }
 
 function fieldRows(cell: CellReading): PlacedRow[] {
@@ -137,17 +144,22 @@ function wiringRow(key: string, tree: CellTree, open: boolean): Row {
   };
 }
 
-function valueRows(cell: CellReading, used: ReadonlySet<string>, isFolded: Folding): PlacedRow[] {
+function valueRows(
+  cell: CellReading,
+  used: ReadonlySet<string>,
+  isFolded: Folding,
+  spread: RowSpread | null,
+): PlacedRow[] {
   if (cell.fault !== null || cell.waitsFor !== null || cell.values.length === 0) return [];
   const { pinned, folded } = splitValues(cell, used);
   const key = `more:${cell.name}`;
   const closed = folded.length > 0 && isFolded(key, true);
-  const rowOf = (value: OfferedReading): PlacedRow => ({ line: null, row: valueRow(value, cell) });
+  const rowOf = (value: OfferedReading): PlacedRow => ({ line: null, row: valueRow(value, cell, spread) });
   const more = folded.length === 0 ? [] : [{ line: null, row: moreRow(key, cell, folded.length, !closed) }];
   return [...pinned.map(rowOf), ...more, ...(closed ? [] : folded.map(rowOf))];
 }
 
-function valueRow(value: OfferedReading, cell: CellReading): Row {
+function valueRow(value: OfferedReading, cell: CellReading, spread: RowSpread | null): Row {
   const { missing } = value;
   return {
     ...emptyRow(`value:${cell.name}.${value.name}`, 'value'),
@@ -158,7 +170,7 @@ function valueRow(value: OfferedReading, cell: CellReading): Row {
     markText: MARK_TEXT.computed,
     name: innerName(value.name, ownerText(cell)),
     entry: { text: valueWords(value), look: 'words' },
-    nominal: valueFigure(value),
+    ...(numbersAt(`${cell.name}.${value.name}`, value, spread) ?? { nominal: valueFigure(value) }),
     source: missing ? { text: missing.text, note: '', look: 'words' } : null,
   };
 }

@@ -10,6 +10,8 @@ import { isBroken, rowFault } from './faults.ts';
 import { cellName } from './names.ts';
 import { inputNumbers, NO_NUMBERS, typedUnit, valueFigure } from './numbers.ts';
 import type { Numbers } from './numbers.ts';
+import { failsAtAnEnd, numbersAt } from './row-spread.ts';
+import type { RowSpread } from './row-spread.ts';
 import { emptyRow, MARK_TEXT } from './row.ts';
 import type { Mark, Row, RowEntry, RowSource } from './row.ts';
 
@@ -29,12 +31,13 @@ const KIND_MARKS: Readonly<Record<CellKind, Mark>> = {
 };
 
 /** The row of a cell, whatever its kind. */
-export function cellRow(key: string, cell: CellReading, sheet: Sheet): Row {
+export function cellRow(key: string, cell: CellReading, sheet: Sheet, spread: RowSpread | null): Row {
   const { tree } = cell;
   const { line } = tree;
   if (line.tree.type === 'broken') return brokenLineRow(key, cell, line);
   const broken = isBroken(cell.fault);
-  const mark = broken ? 'broken' : markOf(cell);
+  const atEnd = failsAtAnEnd(cell, spread);
+  const mark = broken ? 'broken' : atEnd === null ? markOf(cell) : 'fails-at-an-end';
   const text = line.text.slice(tree.entry.span.start, tree.entry.span.end);
   return {
     ...emptyRow(key, 'cell'),
@@ -43,9 +46,9 @@ export function cellRow(key: string, cell: CellReading, sheet: Sheet): Row {
     markText: MARK_TEXT[mark],
     name: cellName(line.text.slice(tree.name.span.start, tree.name.span.end)),
     entry: { text, look: cell.isInput && !broken ? 'input' : 'formula' },
-    ...(broken ? NO_NUMBERS : numbersOf(cell, sheet)),
+    ...(broken ? NO_NUMBERS : numbersOf(cell, sheet, spread)),
     turns: cell.isInput && nominalOf(tree) !== null,
-    source: sourceOf(cell, broken),
+    source: atEnd === null ? sourceOf(cell, broken) : { text: atEnd, note: cell.tree.note?.text ?? '', look: 'fail' },
     fault: broken && cell.fault!.line === line.index ? rowFault(cell.fault!, line) : null,
     cautions: ownCautions(cell),
     waitsFor: cell.waitsFor,
@@ -84,13 +87,15 @@ function markOf(cell: CellReading): Mark {
   return KIND_MARKS[cell.kind];
 }
 
-function numbersOf(cell: CellReading, sheet: Sheet): Numbers {
+function numbersOf(cell: CellReading, sheet: Sheet, spread: RowSpread | null): Numbers {
   const { tree } = cell;
   if (cell.kind === 'check' && tree.entry.type === 'check' && cell.check !== null) {
-    return checkNumbers(tree.entry.condition, tree.line, sheet);
+    return checkNumbers(tree.entry.condition, tree.line, sheet, spread);
   }
   if (cell.reading === null) return NO_NUMBERS;
-  if (!cell.isInput && cell.spread === null) return { ...NO_NUMBERS, nominal: valueFigure(cell.reading) };
+  if (!cell.isInput && cell.spread === null) {
+    return numbersAt(cell.name, cell.reading, spread) ?? { ...NO_NUMBERS, nominal: valueFigure(cell.reading) };
+  }
   return inputNumbers(cell.reading, cell.spread, {
     unit: typedUnit(nominalOf(tree) ?? firstBound(tree.entry), tree.line.text),
     endsTyped: cell.spread?.form === 'limits',

@@ -6,6 +6,8 @@ import { pathsOf } from '../../language/index.ts';
 import type { Expr, Line } from '../../language/index.ts';
 import { evaluateExpression } from '../../sheet/index.ts';
 import type { Reading, Sheet } from '../../sheet/index.ts';
+import { numbersAt } from './row-spread.ts';
+import type { RowSpread } from './row-spread.ts';
 import { NO_NUMBERS, valueFigure } from './numbers.ts';
 import type { Numbers } from './numbers.ts';
 
@@ -17,7 +19,7 @@ interface Compared {
 }
 
 /** The numbers of a single comparison; none where several are joined. */
-export function checkNumbers(condition: Expr, line: Line, sheet: Sheet): Numbers {
+export function checkNumbers(condition: Expr, line: Line, sheet: Sheet, spread: RowSpread | null): Numbers {
   const compared = comparedOf(condition);
   if (compared === null) return NO_NUMBERS;
   const read = (expr: Expr | null): Reading | null => expr && readingOf(expr, line, sheet);
@@ -25,19 +27,21 @@ export function checkNumbers(condition: Expr, line: Line, sheet: Sheet): Numbers
   if (reading === null) return NO_NUMBERS;
   const [low, high] = [numberOf(read(compared.low)), numberOf(read(compared.high))];
   const value = numberOf(reading);
+  const moved = compared.value.type === 'path' ? numbersAt(pathText(compared.value), reading, spread) : null;
+  const ends = compared.value.type === 'path' ? (spread?.judged.spread.value(pathText(compared.value)) ?? null) : null;
   const bar =
     value === null || (low === null && high === null)
       ? null
       : spreadBar({
-          low: value,
+          low: moved && ends ? ends.low.value : value,
           nominal: value,
-          high: value,
+          high: moved && ends ? ends.high.value : value,
           own: true,
           limits: { low, high },
           devices: { low: null, high: null },
-          refining: false,
+          refining: spread?.refining ?? false,
         });
-  return { ...NO_NUMBERS, nominal: valueFigure(reading), bar };
+  return moved ? { ...moved, bar } : { ...NO_NUMBERS, nominal: valueFigure(reading), bar };
 }
 
 function comparedOf(expr: Expr): Compared | null {

@@ -13,3 +13,4 @@ export type { Completion } from './completion.ts';
 export { INSERTIONS, insertionLines } from './insertions.ts';
 export type { InsertionChoice } from './insertions.ts';
 export { setNumbers } from './part-numbers.ts';
+export type { RowSpread } from './row-spread.ts';

@@ -7,6 +7,7 @@ import type { Literal } from '../../language/index.ts';
 import { formatRow, formatValue } from '../../quantity/index.ts';
 import type { FormatOptions, FormattedValue, Unit, ValueKind } from '../../quantity/index.ts';
 import type { DeclaredSpread, Reading } from '../../sheet/index.ts';
+import type { End, ValueSpread } from '../../spread/index.ts';
 import type { Figure } from './row.ts';
 
 export interface Numbers {
@@ -57,6 +58,47 @@ export function inputNumbers(
     high: endFigure(ends.high, nominal),
     bar,
   };
+}
+
+/** The numbers of a computed value with its ends over the declared set; null where nothing moves it. */
+export function spreadNumbers(
+  reading: Reading,
+  spread: ValueSpread | null,
+  devices: Devices,
+  refining: boolean,
+): Numbers | null {
+  const { value, type, as } = reading;
+  if (!spread?.moves || spread.isWord || typeof value !== 'number' || typeof type === 'string') return null;
+  if (!Number.isFinite(value)) return null;
+  const { low, high } = spread;
+  if (low.value === high.value && low.value === value) return null;
+  const row = formatRow({ low: low.value, nominal: value, high: high.value }, type, { unit: as });
+  const nominal = valueFigure(reading);
+  return {
+    low: spreadEnd(row.low, low, row.nominal),
+    nominal,
+    high: spreadEnd(row.high, high, row.nominal),
+    bar: spreadBar({
+      low: low.value,
+      nominal: value,
+      high: high.value,
+      own: type.scale !== 'linear',
+      limits: { low: null, high: null },
+      devices,
+      refining,
+    }),
+  };
+}
+
+/** The values of the low and the high device; null where there are none. */
+export interface Devices {
+  readonly low: number | null;
+  readonly high: number | null;
+}
+
+function spreadEnd(end: FormattedValue | null, { open }: End, nominal: FormattedValue): Figure {
+  if (end === null) return word(open.length > 0 ? 'no limit' : 'unsolved');
+  return { number: end.number, unit: end.unit === nominal.unit ? '' : end.unit, look: 'plain' };
 }
 
 /** The unit a number was typed in; null for bare numbers and for codes such as 4k7, which choose a prefix of their own. */

@@ -6,6 +6,7 @@ import type { CellReading, Sheet } from '../../sheet/index.ts';
 import { blockRows } from './block-rows.ts';
 import type { Folding, PlacedRow } from './block-rows.ts';
 import { cellRow } from './cell-row.ts';
+import type { RowSpread } from './row-spread.ts';
 import type { Row } from './row.ts';
 import { sameData } from './same.ts';
 
@@ -13,6 +14,7 @@ import { sameData } from './same.ts';
 export interface Made {
   readonly cell: CellReading;
   readonly used: string;
+  readonly spread: RowSpread | null;
   /** Every fold that was asked for, with its default and the answer. */
   readonly folds: readonly (readonly [key: string, byDefault: boolean, folded: boolean])[];
   readonly rows: readonly PlacedRow[];
@@ -25,12 +27,14 @@ export function rowsOfCell(
   sheet: Sheet,
   used: ReadonlySet<string>,
   isFolded: Folding,
+  spread: RowSpread | null,
   known: Made | undefined,
 ): Made {
   const usedText = [...used].join(' ');
   const stands =
     known !== undefined &&
     known.used === usedText &&
+    known.spread === spread &&
     known.folds.every(([fold, byDefault, folded]) => isFolded(fold, byDefault) === folded) &&
     sameReading(known.cell, cell);
   if (stands) return known;
@@ -40,8 +44,8 @@ export function rowsOfCell(
     folds.push([fold, byDefault, folded]);
     return folded;
   };
-  const rows = makeRows(key, cell, sheet, used, asked);
-  return { cell, used: usedText, folds, rows };
+  const rows = makeRows(key, cell, sheet, used, asked, spread);
+  return { cell, used: usedText, spread, folds, rows };
 }
 
 /** Whether two readings say the same of the same lines, so that their rows are the same. */
@@ -81,10 +85,11 @@ function makeRows(
   sheet: Sheet,
   used: ReadonlySet<string>,
   isFolded: Folding,
+  spread: RowSpread | null,
 ): readonly PlacedRow[] {
-  const row = cellRow(key, cell, sheet);
+  const row = cellRow(key, cell, sheet, spread);
   const line = cell.tree.line.index;
-  const below = blockRows(cell, used, isFolded);
+  const below = blockRows(cell, used, isFolded, spread);
   if (below.length === 0) return [{ row, line }];
   const foldKey = `block:${key}`;
   const faulty = below.some((inner) => inner.row.fault !== null);

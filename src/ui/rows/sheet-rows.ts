@@ -10,6 +10,7 @@ import { rowsOfCell } from './rows-of-cell.ts';
 import type { Made } from './rows-of-cell.ts';
 import { rowFault } from './faults.ts';
 import { labelText, wordName } from './names.ts';
+import type { RowSpread } from './row-spread.ts';
 import { usedValues } from './pinned.ts';
 import { emptyRow, MARK_TEXT } from './row.ts';
 import type { Mark, Row, RowSource } from './row.ts';
@@ -29,6 +30,7 @@ export interface SheetRows {
 const NONE: ReadonlySet<string> = new Set();
 
 /** Marks that a folded row passes on, worst first. */
+const CHECK_MARKS: readonly Mark[] = ['holds', 'fails', 'fails-at-an-end'];
 const WORST: readonly Mark[] = ['broken', 'fails', 'fails-at-an-end'];
 
 const TITLE_FOLD = 'title';
@@ -42,7 +44,12 @@ const TITLE_WORDS: Readonly<Record<(typeof SHOWN_IN_TITLE)[number], string>> = {
 const EMPTY_SHEET = 'V_DD = 15 V ± 5 %';
 
 /** The rows of a sheet; rows that are as they were in `previous` are the same objects. */
-export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows | null = null): SheetRows {
+export function sheetRows(
+  sheet: Sheet,
+  isFolded: Folding,
+  previous: SheetRows | null = null,
+  spread: RowSpread | null = null,
+): SheetRows {
   const { tree } = sheet;
   const cellAt = new Map(sheet.cells().map((cell) => [cell.tree.line.index, cell]));
   const used = usedValues(tree);
@@ -61,7 +68,15 @@ export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows |
       const cell = cellAt.get(line.index);
       if (cell) {
         const key = keys(`cell:${cell.name}`);
-        const made = rowsOfCell(key, cell, sheet, used.get(cell.name) ?? NONE, isFolded, previous?.made.get(key));
+        const made = rowsOfCell(
+          key,
+          cell,
+          sheet,
+          used.get(cell.name) ?? NONE,
+          isFolded,
+          spread,
+          previous?.made.get(key),
+        );
         allMade.set(key, made);
         inner.push(...made.rows);
       } else {
@@ -76,7 +91,7 @@ export function sheetRows(sheet: Sheet, isFolded: Folding, previous: SheetRows |
     }
     const foldKey = keys(`section:${section.heading.text}`);
     const folded = isFolded(foldKey, false);
-    const row = sectionRow(k, section.heading, inner, foldKey, !folded);
+    const row = sectionRow(k, section.heading, inner, foldKey, !folded, spread);
     placed.push({ row, line: section.heading.line.index });
     if (!folded) placed.push(...inner, ...(ghost ? [ghost] : []));
   }
@@ -112,6 +127,7 @@ function sectionRow(
   inner: readonly PlacedRow[],
   foldKey: string,
   open: boolean,
+  spread: RowSpread | null,
 ): Row {
   const mark = open ? null : (WORST.find((each) => inner.some(({ row }) => row.mark === each)) ?? null);
   return {
@@ -119,17 +135,17 @@ function sectionRow(
     mark,
     markText: mark ? `${MARK_TEXT[mark]} inside` : 'section',
     name: wordName(heading.text),
-    source: checksText(inner),
+    source: checksText(inner, spread),
     fold: { key: foldKey, open },
     editable: ['name'],
   };
 }
 
-function checksText(inner: readonly PlacedRow[]): RowSource | null {
-  const checks = inner.filter(({ row }) => row.mark === 'holds' || row.mark === 'fails').map(({ row }) => row.mark);
+function checksText(inner: readonly PlacedRow[], spread: RowSpread | null): RowSource | null {
+  const checks = inner.flatMap(({ row }) => (row.mark !== null && CHECK_MARKS.includes(row.mark) ? [row.mark] : []));
   if (checks.length === 0) return null;
   const holding = checks.filter((mark) => mark === 'holds').length;
-  const text = `${holding} of ${checks.length} hold at the nominal values`;
+  const text = `${holding} of ${checks.length} hold ${spread ? 'at every extreme' : 'at the nominal values'}`;
   return { text, note: '', look: holding === checks.length ? 'words' : 'fail' };
 }
 

@@ -9,6 +9,7 @@ import { SheetGrid } from '../grid/index.ts';
 import { RecordView, installPrint } from '../record/index.ts';
 import type { Session } from '../session/index.ts';
 import { sheetTitle } from '../session/index.ts';
+import { createSpreadFeed } from '../spread/index.ts';
 import { VerdictLine } from '../verdict/index.ts';
 import { WorkingsPane } from '../workings/index.ts';
 import { Banners } from './banner.tsx';
@@ -34,7 +35,7 @@ const THEME_TITLES = { system: 'Light or dark', light: 'Light', dark: 'Dark' } a
 /** The whole page for an open session. */
 export function Shell(props: { readonly session: Session }) {
   const { session } = props;
-  const desk = createDesk(session.document);
+  const desk = createDesk(session.document, createSpreadFeed(session.document));
   const [dialog, setDialog] = createSignal<DialogName | null>(null);
   const [finding, setFinding] = createSignal(false);
   const [tab, setTab] = createSignal<Tab>('sheet');

@@ -12,7 +12,7 @@ import './verdict.css';
 /** The verdict line. */
 export function VerdictLine(props: { readonly desk: Desk }) {
   const { document } = props.desk;
-  const verdict = createMemo(() => (document.version(), verdictOf(document.sheet)));
+  const verdict = createMemo(() => (document.version(), verdictOf(document.sheet, props.desk.spread.judged())));
   const target = createMemo(() => verdictTarget(verdict(), document.cells()));
   const sentence = createMemo(() => verdict().sentence);
   const said = createAnnouncement(sentence, document.text);
