@@ -44,7 +44,8 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     const before = checks.slice(0, c).filter(({ reserve }) => reserve !== null).length;
     return values.length + checks.length + before;
   };
-  const search = searchExtremes(model, wanted, effort);
+  const set = declaredSet(model);
+  const search = searchExtremes(model, wanted, effort, set);
   const reach = reachOf(
     model.program,
     drawn.map(({ slot }) => slot),
@@ -55,7 +56,6 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     (k: number): boolean =>
       reaches(reach, k, wanted[w]!);
   let open = openEnds(model, wanted, search);
-  const set = declaredSet(model);
   const holdsNominal = set.membership([new Float64Array(drawn.length)])[0] === 1;
   const parts = [...new Set(model.cuts.map(({ cell }) => cell))];
   const ranges = (): { low: Float64Array; high: Float64Array } => ({
@@ -65,7 +65,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
   const first = ranges();
   const builds = createBuilds(model, seed, first);
   const sum = emptyTally(builds.shape);
-  const devices = stageDevices(model, effort);
+  const devices = stageDevices(model, effort, set);
   let repaired = 0;
 
   function take(tally: Tally): void {

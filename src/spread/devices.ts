@@ -3,6 +3,7 @@
 
 import type { SpreadModel } from '../sheet/index.ts';
 import { createBatch } from './batch.ts';
+import type { DeclaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
 import type { SearchEffort } from './extremes.ts';
 import { whereIs } from './where.ts';
@@ -24,11 +25,11 @@ export interface StageDevices {
 }
 
 /** The devices of every stage whose part spreads. */
-export function stageDevices(model: SpreadModel, effort: SearchEffort): StageDevices[] {
+export function stageDevices(model: SpreadModel, effort: SearchEffort, set: DeclaredSet): StageDevices[] {
   return model.stages.flatMap(({ stage, part, current }) => {
     const isOfPart = (k: number): boolean => model.drawn[k]!.cell === part;
     if (!model.drawn.some((_, k) => isOfPart(k))) return [];
-    const search = searchExtremes(model, [current], effort, isOfPart);
+    const search = searchExtremes(model, [current], effort, set, isOfPart);
     const { low, high, unsolved } = search.of(0);
     if (search.isEmpty || unsolved !== null || low.value === high.value) return [];
     const wanted = model.values.filter(({ cell, type }) => cell === stage && typeof type !== 'string');

@@ -10,7 +10,7 @@ import { reachOf, reaches } from '../program/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
 import { choicesOf, createBatch } from './batch.ts';
 import { declaredSet } from './declared-set.ts';
-import type { Plane } from './declared-set.ts';
+import type { DeclaredSet, Plane } from './declared-set.ts';
 import type { Position } from './position.ts';
 
 /** One end of a value. */
@@ -40,6 +40,8 @@ export interface ExtremeSearch {
 const PLACES = [-1, -0.5, 0, 0.5, 1];
 /** Radians to either side within which a place on a border is narrowed down: further than its neighbours. */
 const FAN = 0.2;
+/** How often moving and settling may take turns. */
+const PASS_CAP = 4;
 /** Rounds after which a search is given up where it stands; most end within four. */
 const ROUND_CAP = 24;
 /** Places tried at once when a draw is narrowed down, and how often: the last bracket is below 1e-9 of the range. */
@@ -54,10 +56,10 @@ export function searchExtremes(
   model: SpreadModel,
   wanted: readonly number[],
   effort: SearchEffort = 'full',
+  set: DeclaredSet = declaredSet(model),
   moving: (k: number) => boolean = () => true,
 ): ExtremeSearch {
   const { drawn, program } = model;
-  const set = declaredSet(model);
   const batch = createBatch(model, wanted);
   const reach = reachOf(
     program,
@@ -117,8 +119,22 @@ export function searchExtremes(
     return set.membership([position])[0] === 1 ? position : null;
   }
 
-  /** Moves each of these ends as far as it goes. */
+  /** Moves each of these ends as far as it goes, then settles what stands between; again, where that opened a way. */
   function climb(ends: readonly number[]): void {
+    const effective = new Map<number, ReadonlySet<number>>();
+    let open = ends;
+    for (let pass = 0; pass < PASS_CAP && open.length > 0; pass++) {
+      const before = best.slice();
+      moveAll(open, effective);
+      if (effort === 'quick') return;
+      const moved = open.filter((e) => pass === 0 || hasMoved(before[e]!, best[e]!));
+      const settled = best.slice();
+      narrow(moved, effective);
+      open = moved.filter((e) => hasMoved(settled[e]!, best[e]!));
+    }
+  }
+
+  function moveAll(ends: readonly number[], effective: Map<number, ReadonlySet<number>>): void {
     const seen = new Map<number, Position>();
     const then = best.map(() => NaN);
     const rounds = effort === 'quick' ? 1 : ROUND_CAP;
@@ -137,13 +153,18 @@ export function searchExtremes(
       }
       for (const [position, wantedDraws] of places) {
         const group = open.filter((e) => seen.get(e) === position);
-        move(position, [...wantedDraws], group);
+        move(position, [...wantedDraws], group, effective);
       }
     }
   }
 
   /** Moves every draw alone around a position, then, for each end, all moves that helped it at once. */
-  function move(position: Position, wantedDraws: readonly number[], ends: readonly number[]): void {
+  function move(
+    position: Position,
+    wantedDraws: readonly number[],
+    ends: readonly number[],
+    effective: Map<number, ReadonlySet<number>>,
+  ): void {
     const moves: Position[] = [];
     /** Moves of one group exclude each other. */
     const group: number[] = [];
@@ -175,7 +196,10 @@ export function searchExtremes(
       ends.forEach((e, n) => values[n]!.set(batch.column(e >> 1).subarray(0, count), from));
     });
     visit(reachable);
-    const effective = ends.map((_, n) => new Set(group.filter((_g, i) => values[n]![i] !== before[n])));
+    ends.forEach((e, n) => {
+      const groups = new Set(group.filter((_, i) => values[n]![i] !== before[n]));
+      effective.set(e, new Set([...groups].map((g) => wantedDraws[g] ?? -1)));
+    });
     const joined = ends.flatMap((e, n): Position[] => {
       const helpful = new Map<number, number>();
       for (let i = 0; i < reachable.length; i++) {
@@ -200,17 +224,12 @@ export function searchExtremes(
         ),
       );
     }
-    if (effort === 'quick') return;
-    narrow(
-      ends,
-      ends.map((_, n) => new Set([...effective[n]!].map((g) => wantedDraws[g] ?? -1))),
-    );
   }
 
   /** Settles draws that have an effect and stand between their ends, and places on a border, each end of a value for itself. */
-  function narrow(ends: readonly number[], effective: readonly ReadonlySet<number>[]): void {
-    const jobs = ends.flatMap((e, n) => [
-      ...[...effective[n]!]
+  function narrow(ends: readonly number[], effective: ReadonlyMap<number, ReadonlySet<number>>): void {
+    const jobs = ends.flatMap((e) => [
+      ...[...(effective.get(e) ?? [])]
         .filter((k) => k >= 0 && !inPlane.has(k) && isBetween(bestAt[e]!, k))
         .map((k) => drawJob(e, k)),
       ...planes.filter((plane) => isOnSlope(plane, e)).map((plane) => borderJob(e, plane)),

@@ -1,38 +1,16 @@
-// The worker: takes a model, searches its extremes and counts its builds portion by portion, and says after each step what
-// is known so far. A newer question takes the place of one that is still being worked on.
+// The worker: answers a question about the spread of a model step by step, each step when it is asked to go on. A new
+// question takes the place of the one before.
 
 import { createSpreadJob } from './job.ts';
 import type { SpreadAnswer, SpreadQuestion } from './job.ts';
 
-let latest = 0;
+let job: Generator<SpreadAnswer> | null = null;
 
-self.addEventListener('message', ({ data }: MessageEvent<SpreadQuestion>) => {
-  latest = data.id;
-  void work(data);
+/** A question, or null: go on with the one before. */
+self.addEventListener('message', ({ data }: MessageEvent<SpreadQuestion | null>) => {
+  if (data !== null) job = createSpreadJob(data);
+  const step = job?.next();
+  if (!step || step.done) job = null;
+  // oxlint-disable-next-line unicorn/require-post-message-target-origin -- windows have an origin, workers do not
+  else self.postMessage(step.value);
 });
-
-async function work(question: SpreadQuestion): Promise<void> {
-  const job = createSpreadJob(question);
-  for (const answer of job) {
-    post(answer);
-    await others();
-    if (latest !== question.id) return;
-  }
-}
-
-function post(answer: SpreadAnswer): void {
-  self.postMessage(answer);
-}
-
-/** Lets messages that wait come in. */
-function others(): Promise<void> {
-  return new Promise((resolve) => {
-    const { port1, port2 } = new MessageChannel();
-    port1.addEventListener('message', () => {
-      port1.close();
-      resolve();
-    });
-    port1.start();
-    port2.postMessage(null);
-  });
-}
