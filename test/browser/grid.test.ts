@@ -150,9 +150,9 @@ test('a number is stepped along its series and dragged by its tick, each run one
   const entry = cellOf(page, 'cell:R_D', 'entry');
   await entry.click();
   for (let k = 0; k < 3; k++) await page.keyboard.press('Alt+PageUp');
-  expect(await entry.textContent()).toBe('9.1 kohm ± 1 %');
+  await expect.poll(() => entry.textContent()).toBe('9.1 kohm ± 1 %');
   await page.keyboard.press('Control+z');
-  expect(await entry.textContent()).toBe('6.8 kohm ± 1 %');
+  await expect.poll(() => entry.textContent()).toBe('6.8 kohm ± 1 %');
   const bar = (await page.locator('[data-key="cell:R_D"] .bar').boundingBox())!;
   const y = bar.y + bar.height / 2;
   await page.mouse.move(bar.x + bar.width / 2, y);
@@ -160,9 +160,9 @@ test('a number is stepped along its series and dragged by its tick, each run one
   // A quarter of the scale is a factor of two.
   await page.mouse.move(bar.x + (bar.width * 3) / 4, y, { steps: 5 });
   await page.mouse.up();
-  expect(await entry.textContent()).toBe('13 kohm ± 1 %');
+  await expect.poll(() => entry.textContent()).toBe('13 kohm ± 1 %');
   await page.keyboard.press('Control+z');
-  expect(await entry.textContent()).toBe('6.8 kohm ± 1 %');
+  await expect.poll(() => entry.textContent()).toBe('6.8 kohm ± 1 %');
 });
 
 test('lines are put in, moved and removed; what was removed can be had back', async ({ page, address }) => {

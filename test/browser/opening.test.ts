@@ -18,7 +18,8 @@ function report(): { cells: Record<string, { kind: string; text: string | null }
     complain: (line: string) => lines.push(line),
     width: 100,
   });
-  expect(status).toBe(0);
+  // One check of the worked sheet fails at an extreme: that is what the tool is for.
+  expect(status).toBe(1);
   return JSON.parse(lines.join('\n'));
 }
 
@@ -26,7 +27,11 @@ test('the first visit opens the worked sheet and says that it is one', async ({ 
   await page.goto(address);
   await page.getByRole('heading', { level: 1, name: 'Crevasse listener, probe electronics' }).waitFor();
   await page.getByText('This is a worked example, yours to change.').waitFor();
-  await page.getByRole('button', { name: /^All 9 checks hold at the nominal values\./ }).waitFor();
+  await page
+    .getByRole('button', {
+      name: /^8 of 9 checks hold at every extreme\. current holds nominally but is 0\.042 mA short/,
+    })
+    .waitFor();
 });
 
 test('every quantity stands on the page as the terminal prints it', async ({ page, address }) => {

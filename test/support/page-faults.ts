@@ -15,7 +15,10 @@ export function watchFaults(context: BrowserContext, ownAddress: string): string
     if (url.origin !== origin && !isLocal) faults.push(`request outside: ${request.url()}`);
   });
   context.on('requestfailed', (request) => {
-    faults.push(`request failed: ${request.url()} ${request.failure()?.errorText ?? ''}`);
+    const why = request.failure()?.errorText ?? '';
+    // A page that goes takes the worker along that it was still fetching.
+    if (why === 'net::ERR_ABORTED' && /\/worker-[\w-]+\.js$/.test(request.url())) return;
+    faults.push(`request failed: ${request.url()} ${why}`);
   });
   context.on('response', (response) => {
     if (response.status() >= 400) faults.push(`answer ${response.status()}: ${response.url()}`);

@@ -3,6 +3,7 @@
 
 import { createMemo, createSignal } from 'solid-js';
 import type { SheetDocument } from '../document/index.ts';
+import type { Folds } from '../session/index.ts';
 import type { SpreadFeed } from '../spread/index.ts';
 import type { Command } from './command.ts';
 
@@ -31,10 +32,14 @@ export interface Desk {
   readonly document: SheetDocument;
   /** The spread of the sheet as far as it is known. */
   readonly spread: SpreadFeed;
+  /** What is folded of the sheet. */
+  readonly folds: Folds;
   selection(): Selection | null;
   select(selection: Selection | null): void;
   /** Selects a cell by name and asks the sheet to bring it into view and focus it. */
   jump(cell: string, value?: string | null): void;
+  /** The same for a line that belongs to no cell; lines count from 0. */
+  jumpToLine(line: number): void;
   /** Counts jumps: the sheet scrolls to the selection and focuses it whenever it changes. */
   jumped(): number;
   /** The stage that figures speak of, or null. */
@@ -51,7 +56,7 @@ export interface Desk {
 }
 
 /** Creates the shared state around a document. */
-export function createDesk(document: SheetDocument, spread: SpreadFeed): Desk {
+export function createDesk(document: SheetDocument, spread: SpreadFeed, folds: Folds): Desk {
   const [selection, select] = createSignal<Selection | null>(null);
   const [jumped, setJumped] = createSignal(0);
   const [following, setFollowing] = createSignal(true);
@@ -82,10 +87,15 @@ export function createDesk(document: SheetDocument, spread: SpreadFeed): Desk {
   return {
     document,
     spread,
+    folds,
     selection,
     select,
     jump(cell, value = null) {
       select({ row: value ? `value:${cell}.${value}` : `cell:${cell}`, column: 'name', cell, value });
+      setJumped((n) => n + 1);
+    },
+    jumpToLine(line) {
+      select({ row: `line:${line}`, column: 'entry', cell: null, value: null });
       setJumped((n) => n + 1);
     },
     jumped,

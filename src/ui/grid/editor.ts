@@ -12,6 +12,7 @@ import type { EditPlace, RowFault } from '../rows/index.ts';
 
 /** Messages about what is being typed wait for this much rest, in milliseconds. */
 const REST = 600;
+const HEADING = /^\s*#/;
 /** The narrowest field, in characters. */
 const LEAST_WIDTH = 8;
 
@@ -54,7 +55,8 @@ export function createEditor(document: SheetDocument): Editor {
   function preview(present: Editing, written: string): void {
     // A name is taken over everywhere at once, or not at all.
     if (present.place.column === 'name' && !present.place.isNew) return;
-    const wanted = splices(present, written);
+    // A heading computes nothing, and would move the place for a new line while it is being written there.
+    const wanted = present.place.isNew && HEADING.test(written) ? [] : splices(present, written);
     document.preview(wanted.length === 0 ? null : wanted);
   }
 

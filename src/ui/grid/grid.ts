@@ -12,8 +12,7 @@ import { DRAFT, DRAFT_ROW, shownKeys } from './draft.ts';
 import type { Draft } from './draft.ts';
 import { createEditor } from './editor.ts';
 import type { Editor } from './editor.ts';
-import { createFolds } from './folds.ts';
-import type { Folds } from './folds.ts';
+import type { Folds } from '../session/index.ts';
 import { heldCells } from './held.ts';
 import { reveal } from './reveal.ts';
 
@@ -86,7 +85,7 @@ export interface Grid {
 /** Creates the grid of a desk; to be called inside a component. */
 export function createGrid(desk: Desk): Grid {
   const { document } = desk;
-  const folds = createFolds();
+  const { folds } = desk;
   const editor = createEditor(document);
   const completing = createCompleting(document, editor);
   const [field, setField] = createSignal<HTMLInputElement | null>(null);
@@ -207,11 +206,22 @@ export function createGrid(desk: Desk): Grid {
     }
     // An edit may have given the row another name, and with it another key.
     const key = isDraft || !model().row(edited.key) ? (line !== null && model().ofLine(line)?.key) || null : edited.key;
-    if (edited.type === 'ghost' && !isDraft) return focus(edited.key, 'name');
+    if (edited.type === 'ghost' && !isDraft) return focus(placeAfter(line) ?? edited.key, 'name');
     if (key === null) return focusIndex(index, column);
     if (then === 'stay') return focus(key, column);
     if (then === 'down') return focusIndex(indexOf(key) + 1, isDraft ? wished : column);
     focusBeside(key, column, then);
+  }
+
+  /** The place for a new line behind a line: behind a heading that of its own section. */
+  function placeAfter(line: number | null): string | null {
+    const from = line === null ? null : model().ofLine(line);
+    if (!from) return null;
+    const shown = keys();
+    for (let index = indexOf(from.key); index >= 0 && index < shown.length; index++) {
+      if (row(shown[index]!)?.type === 'ghost') return shown[index]!;
+    }
+    return null;
   }
 
   /** The next editable cell to the right or left, going on in the next row. */

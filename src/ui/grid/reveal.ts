@@ -2,7 +2,7 @@
 
 import type { SheetTree } from '../../language/index.ts';
 import type { SheetRows } from '../rows/index.ts';
-import type { Folds } from './folds.ts';
+import type { Folds } from '../session/index.ts';
 
 /** Unfolds the section, the block and the part of it that a row stands in; nothing where it is seen. */
 export function reveal(key: string, tree: SheetTree, model: SheetRows, folds: Folds): void {

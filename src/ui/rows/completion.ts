@@ -71,6 +71,8 @@ function contextOf(sheet: Sheet, tree: SheetTree, place: EditPlace, before: stri
   const { column, row, line, isNew } = place;
   if (column === 'source') return before.includes(';') ? null : sources(tree, line, before.trimStart());
   if (column === 'name' && !isNew) return null;
+  // A note and what stands behind a source are the user's own words.
+  if (/[;\]]/.test(before)) return null;
   const bracket = /\[([^\]]*)$/.exec(before);
   if (bracket && isNew) return sources(tree, line, bracket[1]!);
   if (column === 'low' || column === 'nominal' || column === 'high') return units(before, place, sheet);
@@ -92,6 +94,8 @@ function entryContext(before: string, place: EditPlace, self: string | null, she
     const kinds: readonly CellReading['kind'][] = of[1]!.startsWith('plot') ? ['stage', 'point'] : ['part', 'another'];
     return { token: of[2]!, items: cellSuggestions(sheet, kinds), expected: null };
   }
+  // The word log behind a range is complete in itself.
+  if (/\bover\b.*\.\..*\s(?:l|lo|log)$/.test(before)) return null;
   const unit = units(before, place, sheet);
   if (unit) return unit;
   const token = tokenOf(before);

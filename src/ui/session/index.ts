@@ -3,3 +3,4 @@
 export { EXAMPLES } from './examples.ts';
 export { createSession, sheetTitle } from './session.ts';
 export type { Origin, Session } from './session.ts';
+export type { Folds } from './folds.ts';

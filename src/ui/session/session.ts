@@ -3,7 +3,7 @@
 // A sheet that was received or opened as an example stands on no shelf until it is edited or kept, so
 // opening one overwrites nothing. The tab remembers which sheet it has open, and a reload comes back to it.
 
-import { createEffect, createRoot, createSignal, on } from 'solid-js';
+import { batch, createEffect, createRoot, createSignal, on } from 'solid-js';
 import { sha256Hex } from '../../numeric/index.ts';
 import {
   createKeeper,
@@ -21,6 +21,8 @@ import type { Keeper, KeepState, Shelf, SheetRecord, StorageFault, Written } fro
 import { createSheetDocument } from '../document/index.ts';
 import type { SheetDocument } from '../document/index.ts';
 import { EXAMPLES } from './examples.ts';
+import { createFolds } from './folds.ts';
+import type { Folds } from './folds.ts';
 
 /** How the open sheet came here. */
 export type Origin = 'shelf' | 'example' | 'received' | 'new';
@@ -28,6 +30,8 @@ export type Origin = 'shelf' | 'example' | 'received' | 'new';
 export interface Session {
   readonly document: SheetDocument;
   readonly shelf: Shelf;
+  /** What is folded of the open sheet; kept with it. */
+  readonly folds: Folds;
   /** True once a sheet is open. */
   ready(): boolean;
   origin(): Origin;
@@ -57,6 +61,7 @@ export function createSession(page: SessionWindow): Session {
   const tabs = joinTabs();
   const shelf = createShelf({ store: openStore(), tabs, now: Date.now, newId: randomId });
   const document = createSheetDocument('');
+  const folds = createFolds();
   const [ready, setReady] = createSignal(false);
   const [origin, setOrigin] = createSignal<Origin>('new');
   const [keepState, setKeepState] = createSignal<KeepState>({ state: 'kept', at: null });
@@ -70,7 +75,10 @@ export function createSession(page: SessionWindow): Session {
     const last = keeper;
     keeper = null;
     await last?.close();
-    document.load(record.text, record.history);
+    batch(() => {
+      folds.reset(record.folded);
+      document.load(record.text, record.history);
+    });
     const next = createKeeper(record, {
       shelf,
       tabs,
@@ -98,7 +106,7 @@ export function createSession(page: SessionWindow): Session {
     if (page.location.hash !== '') page.history.replaceState(null, '', page.location.pathname + page.location.search);
   }
 
-  const content = () => ({ text: document.text(), history: document.history(), folded: [] });
+  const content = () => ({ text: document.text(), history: document.history(), folded: folds.said() });
 
   async function openLink(): Promise<boolean> {
     const read = await readLink(page.location.hash, sha256Hex);
@@ -134,6 +142,18 @@ export function createSession(page: SessionWindow): Session {
       ),
     );
   });
+  createRoot(() => {
+    // What is folded is kept with a sheet that is kept already; it puts none on the shelf.
+    createEffect(
+      on(
+        folds.said,
+        () => {
+          if (keeper && origin() === 'shelf') keeper.keep(content());
+        },
+        { defer: true },
+      ),
+    );
+  });
   page.addEventListener('hashchange', () => void openLink());
   void openLink().then((opened) => (opened ? undefined : openLatest()));
 
@@ -144,6 +164,7 @@ export function createSession(page: SessionWindow): Session {
   return {
     document,
     shelf,
+    folds,
     ready,
     origin,
     keepState,

@@ -35,7 +35,7 @@ const THEME_TITLES = { system: 'Light or dark', light: 'Light', dark: 'Dark' } a
 /** The whole page for an open session. */
 export function Shell(props: { readonly session: Session }) {
   const { session } = props;
-  const desk = createDesk(session.document, createSpreadFeed(session.document));
+  const desk = createDesk(session.document, createSpreadFeed(session.document), session.folds);
   const [dialog, setDialog] = createSignal<DialogName | null>(null);
   const [finding, setFinding] = createSignal(false);
   const [tab, setTab] = createSignal<Tab>('sheet');

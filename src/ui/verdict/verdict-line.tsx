@@ -7,6 +7,7 @@ import { Prose } from '../typeset/index.ts';
 import { createAnnouncement } from './announcement.ts';
 import { VerdictMark } from './verdict-mark.tsx';
 import { verdictTarget } from './verdict-target.ts';
+import type { Target } from './verdict-target.ts';
 import './verdict.css';
 
 /** The verdict line. */
@@ -16,6 +17,8 @@ export function VerdictLine(props: { readonly desk: Desk }) {
   const target = createMemo(() => verdictTarget(verdict(), document.cells()));
   const sentence = createMemo(() => verdict().sentence);
   const said = createAnnouncement(sentence, document.text);
+  const go = (to: Target): void => ('cell' in to ? props.desk.jump(to.cell) : props.desk.jumpToLine(to.line));
+  const targetName = (to: Target): string => ('cell' in to ? to.cell : `line ${to.line + 1}`);
   const words = () => (
     <>
       <VerdictMark state={verdict().state} />
@@ -28,12 +31,12 @@ export function VerdictLine(props: { readonly desk: Desk }) {
   return (
     <div class="verdict" data-state={verdict().state} role="group" aria-label="Verdict">
       <Show when={target()} fallback={<p class="verdict-words">{words()}</p>}>
-        {(name) => (
+        {(to) => (
           <button
             type="button"
             class="verdict-words"
-            aria-label={`${sentence()} Go to ${name()}.`}
-            onClick={() => props.desk.jump(name())}
+            aria-label={`${sentence()} Go to ${targetName(to())}.`}
+            onClick={() => go(to())}
           >
             {words()}
           </button>
