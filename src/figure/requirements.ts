@@ -1,6 +1,6 @@
 // What the checks of a sheet ask of single values, as limits that a figure can show.
 
-import type { CellReading, Sheet } from '../sheet/index.ts';
+import type { CellReading, SheetView } from '../sheet/index.ts';
 
 /** A limit in SI on what is written as `text` (without blanks), and the side of it that is not allowed. */
 interface Requirement {
@@ -16,7 +16,7 @@ type Side = Requirement['forbids'];
 const FORBIDDEN: Readonly<Record<string, Side>> = { '>=': 'below', '>': 'below', '<=': 'above', '<': 'above' };
 
 /** Every comparison of a value with a number or a named number, in sheet order; other conditions say nothing here. */
-export function requirementsOf(sheet: Sheet): readonly Requirement[] {
+export function requirementsOf(sheet: SheetView): readonly Requirement[] {
   return sheet.cells().flatMap(({ tree }) => {
     if (tree.entry.type !== 'check') return [];
     return requirementsIn(tree.entry.condition, tree.line.text, sheet);
@@ -28,7 +28,7 @@ export function comparableText(text: string): string {
   return text.replace(/\s+/g, '');
 }
 
-function requirementsIn(condition: CheckCondition, line: string, sheet: Sheet): Requirement[] {
+function requirementsIn(condition: CheckCondition, line: string, sheet: SheetView): Requirement[] {
   const textOf = (expr: CheckCondition): string => comparableText(line.slice(expr.span.start, expr.span.end));
   const limit = (of: CheckCondition, at: CheckCondition, forbids: Side): Requirement[] => {
     const value = numberOf(at, sheet);
@@ -54,7 +54,7 @@ function requirementsIn(condition: CheckCondition, line: string, sheet: Sheet): 
   }
 }
 
-function numberOf(expr: CheckCondition, sheet: Sheet): number | null {
+function numberOf(expr: CheckCondition, sheet: SheetView): number | null {
   if (expr.type === 'number') return expr.value;
   if (expr.type === 'unary' && expr.operand.type === 'number') {
     return expr.operator === '-' ? -expr.operand.value : expr.operator === '+' ? expr.operand.value : null;

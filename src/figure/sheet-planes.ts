@@ -1,6 +1,6 @@
 // From a solved stage of a sheet to its two planes.
 
-import type { Sheet, StageReading } from '../sheet/index.ts';
+import type { SheetView, StageReading } from '../sheet/index.ts';
 import type { Chart } from './chart.ts';
 import type { OutputDevice } from './output-plane.ts';
 import { outputPlane } from './output-plane.ts';
@@ -13,10 +13,11 @@ type LabelledLine = StraightLine & { readonly label: string };
 /** How near a resistor must be to the slope of a line to be named on it. */
 const SAME_SLOPE = 1e-9;
 
-/** Transfer and output plane of a stage; null where it is not solved. */
+/** Transfer and output plane of a stage, with further devices in it beside its own; null where it is not solved. */
 export function planesOf(
   stage: StageReading,
-  sheet: Sheet,
+  sheet: SheetView,
+  others: readonly { readonly role: 'low' | 'high'; readonly label: string; readonly stage: StageReading }[] = [],
 ): { readonly transfer: Chart; readonly output: Chart } | null {
   const { name, q, threshold, law, lines } = stage;
   if (q === null || threshold === null) return null;
@@ -32,10 +33,22 @@ export function planesOf(
   const load = lines
     ? lineThrough(q.vds, lines.R_L, slopeLabel('load line', lines.R_L, stage))
     : forced('forced current');
-  const device: OutputDevice = { role: 'nominal', label: 'nominal', law, threshold, q, load };
+  const devices: OutputDevice[] = [{ role: 'nominal', label: 'nominal', law, threshold, q, load }];
+  for (const other of others) {
+    const { q: at, threshold: opens, law: itsLaw } = other.stage;
+    if (at === null || opens === null) continue;
+    devices.push({
+      role: other.role,
+      label: other.label,
+      law: itsLaw,
+      threshold: opens,
+      q: at,
+      load: { ...load, label: '' },
+    });
+  }
   return {
-    transfer: transferPlane({ name, channel, devices: [device], bias }),
-    output: outputPlane({ name, channel, devices: [device], margin: marginAsked(name, sheet) }),
+    transfer: transferPlane({ name, channel, devices, bias }),
+    output: outputPlane({ name, channel, devices, margin: marginAsked(name, sheet) }),
   };
 }
 
@@ -48,7 +61,7 @@ function slopeLabel(label: string, ohms: number, { legs }: StageReading): string
 }
 
 /** The largest margin in volts that a check asks of the stage; null where none does. */
-function marginAsked(name: string, sheet: Sheet): number | null {
+function marginAsked(name: string, sheet: SheetView): number | null {
   const asked = requirementsOf(sheet).filter(({ text, forbids }) => text === `${name}.margin` && forbids === 'below');
   return asked.length === 0 ? null : Math.max(...asked.map(({ value }) => value));
 }

@@ -1,6 +1,6 @@
 // From a plot cell of a sheet to its charts.
 
-import type { Sheet, ValueType } from '../sheet/index.ts';
+import type { SheetView, ValueType } from '../sheet/index.ts';
 import type { ValueKind } from '../quantity/index.ts';
 import type { Chart } from './chart.ts';
 import { planesOf } from './sheet-planes.ts';
@@ -15,7 +15,7 @@ const PLOT_POINTS = 161;
 type SheetPlot = { readonly charts: readonly Chart[] } | { readonly message: string };
 
 /** What a plot cell shows. */
-export function sheetPlot(sheet: Sheet, name: string): SheetPlot {
+export function sheetPlot(sheet: SheetView, name: string): SheetPlot {
   const cell = sheet.cell(name);
   if (cell === null || cell.tree.entry.type !== 'plot') return { message: `${name} is no figure.` };
   if (cell.fault !== null) return { message: cell.waitsFor ? `${name} waits for ${cell.waitsFor}.` : cell.fault.text };

@@ -2,11 +2,11 @@
 // symbols they name.
 
 import { CURRENT, formatValue, VOLTAGE } from '../quantity/index.ts';
-import type { Sheet, StageReading } from '../sheet/index.ts';
+import type { SheetView, StageReading } from '../sheet/index.ts';
 import type { LegEnd, SchematicInput, StageLeg } from './stage-input.ts';
 
 /** What `drawSchematic` takes, with voltages and current where the stage is solved. */
-export function schematicOf(stage: StageReading, sheet: Sheet): SchematicInput {
+export function schematicOf(stage: StageReading, sheet: SheetView): SchematicInput {
   const failing = new Set(
     sheet
       .cells()

@@ -1,7 +1,7 @@
 // The resistor that sets the bias: alone, or in a chain, between the source and a rail. Turning it moves Q along the
 // curve of the device; so a place on the curve asks for a resistance.
 
-import type { Sheet, StageReading } from '../sheet/index.ts';
+import type { SheetView, StageReading } from '../sheet/index.ts';
 
 /** The resistor to be turned, or why there is none. */
 export type SourceLeg =
@@ -15,7 +15,7 @@ export type SourceLeg =
 type Leg = StageReading['legs'][number];
 
 /** What turns when Q is dragged: the largest resistor of the chain, which must be a named input. */
-export function sourceLeg(stage: StageReading, sheet: Sheet): SourceLeg {
+export function sourceLeg(stage: StageReading, sheet: SheetView): SourceLeg {
   const stay = (why: string): SourceLeg => ({ reason: `Q of ${stage.name} cannot be dragged: ${why}.` });
   const { q, lines, channel, law } = stage;
   if (q === null) return stay('the stage is not solved');

@@ -19,6 +19,7 @@ export { TITLE_LABELS } from './title-fields.ts';
 export type { TitleField } from './title-fields.ts';
 export { failingText, failsCheck, verdictOf } from './verdict.ts';
 export type { JudgedSpread, Verdict } from './verdict.ts';
-export { shareText } from './yield-text.ts';
+export { countText, shareText, yieldText } from './yield-text.ts';
 export { printStep, stepSides, stepText, workingsOf } from './workings.ts';
 export type { PrintedStep } from './workings.ts';
+export { whereText } from './where-text.ts';

@@ -14,6 +14,7 @@ export type {
   OfferedReading,
   Reading,
   Sheet,
+  SheetView,
   SpreadModel,
   Drawn,
   Tie,

@@ -17,13 +17,28 @@ export interface SheetState {
   readonly order: readonly number[];
   readonly slots: Float64Array;
   now(expr: Expr, line: Line): { type: ValueType; value: number };
+  /** Readings at the nominal values, of a sheet that stands elsewhere. */
+  readonly nominal?: (key: string) => CellReading | null;
+}
+
+/** A reading elsewhere within the spread: what is declared stays as it is at the nominal values. */
+function declaredAs(reading: CellReading, nominal: CellReading | null): CellReading {
+  if (nominal === null) return reading;
+  const fields = reading.fields.map((field) => ({
+    ...field,
+    spread: nominal.fields.find(({ line }) => line === field.line)?.spread ?? field.spread,
+  }));
+  return { ...reading, spread: nominal.spread, fields };
 }
 
 /** The reading side of what `state` answers with at each call. */
 export function createView(state: () => SheetState): SheetView {
   function reading(node: Node): CellReading {
     const { nodes, slots } = state();
-    node.reading ??= readCell(node, nodes, (slot) => slots[slot]!);
+    node.reading ??= declaredAs(
+      readCell(node, nodes, (slot) => slots[slot]!),
+      state().nominal?.(node.key) ?? null,
+    );
     return node.reading;
   }
   const view: SheetView = {
@@ -89,7 +104,18 @@ export function stateAt(state: SheetState, at: ReadonlyMap<number, number>): She
     runOperations(ops, 0, ops.length, args, 0, slots, BUILD_KERNELS);
     node.fault = compiled.draft.verify?.((handle) => slots[compiled.slot(handle)]!) ?? null;
   }
-  return { ...state, nodes, byName, slots };
+  const nominals = new Map(state.nodes.map((node) => [node.key, node]));
+  const read = (slot: number): number => state.slots[slot]!;
+  return {
+    ...state,
+    nodes,
+    byName,
+    slots,
+    nominal: (key) => {
+      const node = nominals.get(key);
+      return node ? readCell(node, state.nodes, read) : null;
+    },
+  };
 }
 
 /** The first cell used that has no values just now. */

@@ -26,6 +26,11 @@ export function whereIs(model: SpreadModel, position: Position, counting: (k: nu
   });
 }
 
+/** The numbers that put a sheet where these draws stand, by slot. */
+export function slotsOf({ drawn }: SpreadModel, where: readonly StandingDraw[]): Map<number, number> {
+  return new Map(where.map(({ draw, t }) => [drawn[draw]!.slot, valueAt(drawn[draw]!, t)]));
+}
+
 /** The numbers that put a sheet on a position, by slot. */
 export function slotsAt({ drawn }: SpreadModel, position: Position): Map<number, number> {
   return new Map(drawn.map((each, k) => [each.slot, valueAt(each, position[k]!)]));

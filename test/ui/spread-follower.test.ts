@@ -53,6 +53,7 @@ function following(make: MakeWorker) {
   let progress: Progress | null = null;
   const follower = createFollower(make, {
     onKnown: (spread) => (known = spread),
+    onStale: () => undefined,
     onProgress: (now) => (progress = now),
   });
   return {

@@ -3,8 +3,10 @@
 
 import { createMemo, createSignal } from 'solid-js';
 import type { SheetDocument } from '../document/index.ts';
+import type { SheetView } from '../../sheet/index.ts';
+import { slotsOf } from '../../spread/index.ts';
 import type { Folds } from '../session/index.ts';
-import type { SpreadFeed } from '../spread/index.ts';
+import type { Corner, SpreadFeed } from '../spread/index.ts';
 import type { Command } from './command.ts';
 
 /** The columns of the sheet, in order. */
@@ -32,6 +34,11 @@ export interface Desk {
   readonly document: SheetDocument;
   /** The spread of the sheet as far as it is known. */
   readonly spread: SpreadFeed;
+  /** The corner of its spread at which the page stands; null at the nominal values. */
+  corner(): Corner | null;
+  stand(corner: Corner | null): void;
+  /** The readings that are shown: at the nominal values, or at the corner. */
+  view(): SheetView;
   /** What is folded of the sheet. */
   readonly folds: Folds;
   selection(): Selection | null;
@@ -63,6 +70,19 @@ export function createDesk(document: SheetDocument, spread: SpreadFeed, folds: F
   const [status, setStatus] = createSignal<Status | null>(null);
   const [commands, setCommands] = createSignal<readonly Command[]>([]);
 
+  const [corner, stand] = createSignal<Corner | null>(null);
+  const cornerView = createMemo<SheetView | null>(() => {
+    document.version();
+    const present = corner();
+    if (present === null) return null;
+    const model = document.sheet.spreadModel();
+    const where = model.drawn.flatMap(({ name }, draw) => {
+      const t = present.at.get(name);
+      return t === undefined ? [] : [{ draw, t, value: NaN }];
+    });
+    return document.sheet.standing(slotsOf(model, where));
+  });
+
   /** The stage of the selected row: the one it belongs to, else the one it reads, else the one that reads it. */
   const chosen = createMemo<string | null>(() => {
     const name = selection()?.cell;
@@ -87,6 +107,9 @@ export function createDesk(document: SheetDocument, spread: SpreadFeed, folds: F
   return {
     document,
     spread,
+    corner,
+    stand,
+    view: () => (document.version(), cornerView() ?? document.sheet),
     folds,
     selection,
     select,

@@ -2,6 +2,7 @@
 
 import { For, Show, createMemo } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
+import { StandGroup } from '../corner/index.ts';
 import { Prose } from '../typeset/index.ts';
 import { PlotFigure } from './plot-figure.tsx';
 import { StageFigure } from './stage-figure.tsx';
@@ -35,6 +36,7 @@ export function FiguresPane(props: { readonly desk: Desk }) {
             />
             follows the selection
           </label>
+          <StandGroup desk={desk} />
         </Show>
       </header>
       <Show when={desk.strayed() && desk.stage()}>

@@ -2,6 +2,7 @@
 
 import { For, Show, createMemo } from 'solid-js';
 import { drawSchematic, planesOf, schematicOf } from '../../figure/index.ts';
+import { slotsOf } from '../../spread/index.ts';
 import type { Desk } from '../desk/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
@@ -15,8 +16,8 @@ import { createQHandle } from './turn-q.ts';
 /** Everything drawn of one stage; where it is not solved, its schematic without numbers and why. */
 export function StageFigure(props: { readonly desk: Desk; readonly stage: string }) {
   const { document } = props.desk;
-  const cell = createMemo(() => document.cell(props.stage));
-  const reading = createMemo(() => (document.version(), document.sheet.stage(props.stage)));
+  const cell = createMemo(() => props.desk.view().cell(props.stage));
+  const reading = createMemo(() => props.desk.view().stage(props.stage));
   const message = (): string | null => {
     const fault = cell()?.fault;
     if (!fault) return null;
@@ -24,11 +25,21 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
   };
   const schematic = createMemo(() => {
     const stage = reading();
-    return stage ? drawSchematic(schematicOf(stage, document.sheet)) : null;
+    return stage ? drawSchematic(schematicOf(stage, props.desk.view())) : null;
+  });
+  /** The low and the high device beside the nominal one; none at a corner, which is a device of its own. */
+  const devices = createMemo(() => {
+    const spread = props.desk.spread.now();
+    const found = spread?.report.devices.find(({ stage }) => stage === props.stage);
+    if (!spread || !found || props.desk.corner() !== null || props.desk.spread.isStale()) return [];
+    return (['low', 'high'] as const).flatMap((role) => {
+      const stage = document.sheet.standing(slotsOf(spread.model, found[role].where)).stage(props.stage);
+      return stage ? [{ role, label: `${role} device`, stage }] : [];
+    });
   });
   const planes = createMemo(() => {
     const stage = reading();
-    return stage ? planesOf(stage, document.sheet) : null;
+    return stage ? planesOf(stage, props.desk.view(), devices()) : null;
   });
   const handle = createQHandle(props.desk, reading);
   const values = createMemo(() => {

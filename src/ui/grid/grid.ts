@@ -102,8 +102,7 @@ export function createGrid(desk: Desk): Grid {
     return judged && { judged, refining: desk.spread.progress() !== null };
   });
   const model = createMemo<SheetRows>((previous) => {
-    document.version();
-    return sheetRows(document.sheet, folds.isFolded, previous ?? null, rowSpread());
+    return sheetRows(desk.view(), folds.isFolded, previous ?? null, rowSpread());
   });
   const keys = createMemo<readonly string[]>(() => shownKeys(model(), draft(), pendingLine()), [], {
     equals: (a, b) => a.length === b.length && a.every((key, i) => key === b[i]),

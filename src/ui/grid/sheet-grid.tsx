@@ -92,7 +92,7 @@ export function SheetGrid(props: { readonly desk: Desk }) {
             low
           </span>
           <span role="columnheader" class="head-nominal">
-            nominal
+            {props.desk.corner() === null ? 'nominal' : 'at corner'}
           </span>
           <span role="columnheader" class="head-number">
             high

@@ -3,7 +3,7 @@
 import { literalOf } from '../../language/index.ts';
 import type { CellTree, Entry, Line, Note, Source } from '../../language/index.ts';
 import { checkText } from '../../record/index.ts';
-import type { CellKind, CellReading, Sheet } from '../../sheet/index.ts';
+import type { CellKind, CellReading, SheetView } from '../../sheet/index.ts';
 import type { Column } from '../desk/index.ts';
 import { checkNumbers } from './check-numbers.ts';
 import { isBroken, rowFault } from './faults.ts';
@@ -31,7 +31,7 @@ const KIND_MARKS: Readonly<Record<CellKind, Mark>> = {
 };
 
 /** The row of a cell, whatever its kind. */
-export function cellRow(key: string, cell: CellReading, sheet: Sheet, spread: RowSpread | null): Row {
+export function cellRow(key: string, cell: CellReading, sheet: SheetView, spread: RowSpread | null): Row {
   const { tree } = cell;
   const { line } = tree;
   if (line.tree.type === 'broken') return brokenLineRow(key, cell, line);
@@ -87,7 +87,7 @@ function markOf(cell: CellReading): Mark {
   return KIND_MARKS[cell.kind];
 }
 
-function numbersOf(cell: CellReading, sheet: Sheet, spread: RowSpread | null): Numbers {
+function numbersOf(cell: CellReading, sheet: SheetView, spread: RowSpread | null): Numbers {
   const { tree } = cell;
   if (cell.kind === 'check' && tree.entry.type === 'check' && cell.check !== null) {
     return checkNumbers(tree.entry.condition, tree.line, sheet, spread);

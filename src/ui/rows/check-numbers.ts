@@ -5,7 +5,7 @@ import { plainText } from '../../quantity/index.ts';
 import { pathsOf } from '../../language/index.ts';
 import type { Expr, Line } from '../../language/index.ts';
 import { evaluateExpression } from '../../sheet/index.ts';
-import type { Reading, Sheet } from '../../sheet/index.ts';
+import type { Reading, SheetView } from '../../sheet/index.ts';
 import { numbersAt } from './row-spread.ts';
 import type { RowSpread } from './row-spread.ts';
 import { NO_NUMBERS, valueFigure } from './numbers.ts';
@@ -19,7 +19,7 @@ interface Compared {
 }
 
 /** The numbers of a single comparison; none where several are joined. */
-export function checkNumbers(condition: Expr, line: Line, sheet: Sheet, spread: RowSpread | null): Numbers {
+export function checkNumbers(condition: Expr, line: Line, sheet: SheetView, spread: RowSpread | null): Numbers {
   const compared = comparedOf(condition);
   if (compared === null) return NO_NUMBERS;
   const read = (expr: Expr | null): Reading | null => expr && readingOf(expr, line, sheet);
@@ -57,7 +57,7 @@ function comparedOf(expr: Expr): Compared | null {
 }
 
 /** What an expression is now: of a path as the sheet has it, else worked out with the present values put in. */
-function readingOf(expr: Expr, line: Line, sheet: Sheet): Reading | null {
+function readingOf(expr: Expr, line: Line, sheet: SheetView): Reading | null {
   if (expr.type === 'path') return readingAt(pathText(expr), sheet);
   let text = line.text.slice(expr.span.start, expr.span.end);
   for (const path of pathsOf(expr).toSorted((a, b) => b.span.start - a.span.start)) {
@@ -85,7 +85,7 @@ function pathText(expr: Expr & { readonly type: 'path' }): string {
   return expr.names.map((name) => name.name).join('.');
 }
 
-function readingAt(path: string, sheet: Sheet): Reading | null {
+function readingAt(path: string, sheet: SheetView): Reading | null {
   const [name, ...rest] = path.split('.');
   const cell = sheet.cell(name!);
   if (!cell) return null;

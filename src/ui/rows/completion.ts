@@ -3,7 +3,7 @@
 import type { SheetTree } from '../../language/index.ts';
 import { dimensionName, sameKind } from '../../quantity/index.ts';
 import type { ValueKind } from '../../quantity/index.ts';
-import type { CellReading, Sheet } from '../../sheet/index.ts';
+import type { CellReading, SheetView } from '../../sheet/index.ts';
 import { expectedKind } from './expected-kind.ts';
 import type { EditPlace } from './row-edits.ts';
 import { inBlock } from './row-edits.ts';
@@ -43,7 +43,7 @@ const MOST_ITEMS = 40;
 
 /** What fits at the caret; null where nothing does, or where too little is typed and it was not asked for. */
 export function complete(
-  sheet: Sheet,
+  sheet: SheetView,
   tree: SheetTree,
   place: EditPlace,
   typed: { readonly text: string; readonly caret: number; readonly asked: boolean },
@@ -67,7 +67,7 @@ export function complete(
   };
 }
 
-function contextOf(sheet: Sheet, tree: SheetTree, place: EditPlace, before: string): Context | null {
+function contextOf(sheet: SheetView, tree: SheetTree, place: EditPlace, before: string): Context | null {
   const { column, row, line, isNew } = place;
   if (column === 'source') return before.includes(';') ? null : sources(tree, line, before.trimStart());
   if (column === 'name' && !isNew) return null;
@@ -86,7 +86,7 @@ function contextOf(sheet: Sheet, tree: SheetTree, place: EditPlace, before: stri
   return { token: before.trimStart(), items: fieldSuggestions(block), expected: null };
 }
 
-function entryContext(before: string, place: EditPlace, self: string | null, sheet: Sheet): Context | null {
+function entryContext(before: string, place: EditPlace, self: string | null, sheet: SheetView): Context | null {
   const cell = self === null ? null : sheet.cell(self);
   if (place.row.type === 'field' && cell) return fieldContext(before, place.row.name?.text ?? '', cell, place, sheet);
   const of = /^\s*(stage|point|another|plot \w+)\s+(?:of\s+)?(?:.*[=,]\s*)?([\w.]*)$/.exec(before);
@@ -113,7 +113,7 @@ function fieldContext(
   label: string,
   cell: CellReading,
   place: EditPlace,
-  sheet: Sheet,
+  sheet: SheetView,
 ): Context | null {
   if (cell.kind === 'stage' || cell.tree.entry.type === 'stage') {
     const leads = /\b(?:to|from)\s+([^\s,]*)$/.exec(before);
@@ -132,7 +132,7 @@ function sources(tree: SheetTree, line: number, token: string): Context {
 }
 
 /** Behind a number: its unit. */
-function units(before: string, place: EditPlace, sheet: Sheet): Context | null {
+function units(before: string, place: EditPlace, sheet: SheetView): Context | null {
   const found = /(?:^|[^\w.])(?:\d+\.?\d*|\.\d+)(?:[eE][-+]?\d+)?\s?([A-Za-zµΩ°%√/][\w^²√/·]*)?$/u.exec(before);
   if (!found) return null;
   const token = found[1] ?? '';
@@ -140,7 +140,7 @@ function units(before: string, place: EditPlace, sheet: Sheet): Context | null {
   return { token, items: unitSuggestions(), expected: expectedKind(number, place, sheet) };
 }
 
-function blockAbove(tree: SheetTree, line: number, sheet: Sheet): CellReading | null {
+function blockAbove(tree: SheetTree, line: number, sheet: SheetView): CellReading | null {
   const cell = tree.cells.findLast((each) => each.line.index < line);
   return cell ? sheet.cell(cell.name.name) : null;
 }

@@ -1,6 +1,6 @@
 // What Insert writes: ordinary lines, with names that are free and values that work with what the sheet has.
 
-import type { Sheet } from '../../sheet/index.ts';
+import type { SheetView } from '../../sheet/index.ts';
 import { stageLines } from './stage-shapes.ts';
 import type { StageShape } from './stage-shapes.ts';
 import { firstStage, freeName, partOf } from './sheet-stock.ts';
@@ -49,7 +49,7 @@ export const INSERTIONS: readonly InsertionChoice[] = CHOICES.map((each, k) => (
 }));
 
 /** The lines of an insertion. */
-export function insertionLines(insertion: Insertion, sheet: Sheet): string[] {
+export function insertionLines(insertion: Insertion, sheet: SheetView): string[] {
   switch (insertion.type) {
     case 'quantity':
       return [`${freeName(sheet, 'R_')} = 10 kohm ± 1 %`];
@@ -86,14 +86,14 @@ function partLines(kind: PartKind, name: string): string[] {
   return [`${name} = ${kind}`, ...[...PART_ROWS[kind], 'lambda: 0.01 /V'].map((row) => `  ${row}  [assumed]`)];
 }
 
-function pointLines(sheet: Sheet): string[] {
+function pointLines(sheet: SheetView): string[] {
   return withPart(sheet, (part, extra) => {
     const sign = part.channel === 'p' ? '-' : '';
     return [...extra, `${freeName(sheet, 'P')} = point of ${part.name}`, '  I_D: 1 mA', `  V_DS: ${sign}10 V`];
   });
 }
 
-function checkLines(sheet: Sheet): string[] {
+function checkLines(sheet: SheetView): string[] {
   const stage = firstStage(sheet);
   const name = sheet.cell('headroom') ? freeName(sheet, 'check_') : 'headroom';
   if (stage !== null) return [`${name} = check ${stage} >= 1 V`];
@@ -103,7 +103,7 @@ function checkLines(sheet: Sheet): string[] {
     : [`${name} = check 1 >= 0`];
 }
 
-function withStage(sheet: Sheet, lines: (stage: string) => string[]): string[] {
+function withStage(sheet: SheetView, lines: (stage: string) => string[]): string[] {
   const stage = firstStage(sheet);
   if (stage !== null) return lines(stage.split('.')[0]!);
   const written = insertionLines({ type: 'stage', shape: 'common source' }, sheet);
@@ -113,7 +113,7 @@ function withStage(sheet: Sheet, lines: (stage: string) => string[]): string[] {
 type Part = NonNullable<ReturnType<typeof partOf>>;
 
 /** The first part of the sheet, or a new one whose lines come first. */
-function withPart(sheet: Sheet, lines: (part: Part, extra: readonly string[]) => string[]): string[] {
+function withPart(sheet: SheetView, lines: (part: Part, extra: readonly string[]) => string[]): string[] {
   const part = partOf(sheet);
   if (part !== null) return lines(part, []);
   const name = freeName(sheet, 'Q');

@@ -2,7 +2,7 @@
 // of it, or one of its folds has changed; comparing is much cheaper than setting the numbers again.
 
 import type { CellTree, Line } from '../../language/index.ts';
-import type { CellReading, Sheet } from '../../sheet/index.ts';
+import type { CellReading, SheetView } from '../../sheet/index.ts';
 import { blockRows } from './block-rows.ts';
 import type { Folding, PlacedRow } from './block-rows.ts';
 import { cellRow } from './cell-row.ts';
@@ -24,7 +24,7 @@ export interface Made {
 export function rowsOfCell(
   key: string,
   cell: CellReading,
-  sheet: Sheet,
+  sheet: SheetView,
   used: ReadonlySet<string>,
   isFolded: Folding,
   spread: RowSpread | null,
@@ -82,7 +82,7 @@ function linesOf(tree: CellTree): readonly Line[] {
 function makeRows(
   key: string,
   cell: CellReading,
-  sheet: Sheet,
+  sheet: SheetView,
   used: ReadonlySet<string>,
   isFolded: Folding,
   spread: RowSpread | null,

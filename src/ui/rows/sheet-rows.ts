@@ -3,7 +3,7 @@
 
 import { entrySpan } from '../../language/index.ts';
 import type { Line, SheetTree } from '../../language/index.ts';
-import type { Sheet } from '../../sheet/index.ts';
+import type { SheetView } from '../../sheet/index.ts';
 import type { Folding, PlacedRow } from './block-rows.ts';
 import { proseEntry } from './cell-row.ts';
 import { rowsOfCell } from './rows-of-cell.ts';
@@ -45,7 +45,7 @@ const EMPTY_SHEET = 'V_DD = 15 V ± 5 %';
 
 /** The rows of a sheet; rows that are as they were in `previous` are the same objects. */
 export function sheetRows(
-  sheet: Sheet,
+  sheet: SheetView,
   isFolded: Folding,
   previous: SheetRows | null = null,
   spread: RowSpread | null = null,

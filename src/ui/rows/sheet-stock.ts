@@ -1,7 +1,7 @@
 // What a sheet has to build on: free names, its parts, a supply.
 
 import { dimensionName } from '../../quantity/index.ts';
-import type { CellReading, Sheet } from '../../sheet/index.ts';
+import type { CellReading, SheetView } from '../../sheet/index.ts';
 
 /** A part with the constants of its square law, in the frame of an n-channel FET. */
 export interface StockPart {
@@ -15,7 +15,7 @@ export interface StockPart {
 }
 
 /** The first name of a kind that no cell bears: `R_1`, `Q2`. */
-export function freeName(sheet: Sheet, stem: string, taken: ReadonlySet<string> = new Set()): string {
+export function freeName(sheet: SheetView, stem: string, taken: ReadonlySet<string> = new Set()): string {
   const names = new Set([...sheet.tree.cells.map((cell) => cell.name.name), ...taken]);
   let k = 1;
   while (names.has(`${stem}${k}`)) k++;
@@ -23,7 +23,7 @@ export function freeName(sheet: Sheet, stem: string, taken: ReadonlySet<string> 
 }
 
 /** The first part that computes; null where there is none. */
-export function partOf(sheet: Sheet): StockPart | null {
+export function partOf(sheet: SheetView): StockPart | null {
   for (const cell of sheet.cells()) {
     const { entry } = cell.tree;
     if (entry.type !== 'part' || cell.fault !== null || cell.waitsFor !== null) continue;
@@ -44,13 +44,13 @@ export function partOf(sheet: Sheet): StockPart | null {
 }
 
 /** The margin of the first stage that computes, as a path; null where there is none. */
-export function firstStage(sheet: Sheet): string | null {
+export function firstStage(sheet: SheetView): string | null {
   const stage = sheet.cells().find((cell) => cell.kind === 'stage' && cell.fault === null && cell.waitsFor === null);
   return stage ? `${stage.name}.margin` : null;
 }
 
 /** A supply: an input in volts of a few volts at least, those called V_DD and the like first; null where there is none. */
-export function supplyOf(sheet: Sheet): { readonly name: string; readonly volts: number } | null {
+export function supplyOf(sheet: SheetView): { readonly name: string; readonly volts: number } | null {
   const found = sheet.cells().flatMap((cell) => {
     const { reading, isInput } = cell;
     if (!isInput || !reading || typeof reading.type === 'string' || typeof reading.value !== 'number') return [];

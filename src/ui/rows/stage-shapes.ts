@@ -5,7 +5,7 @@
 // resistor takes half of what is left. Rules of thumb, common practice, no source.
 
 import { plainText, preferredValue, RESISTANCE, VOLTAGE } from '../../quantity/index.ts';
-import type { Sheet } from '../../sheet/index.ts';
+import type { SheetView } from '../../sheet/index.ts';
 import { freeName, supplyOf } from './sheet-stock.ts';
 import type { StockPart } from './sheet-stock.ts';
 
@@ -26,7 +26,7 @@ interface Bias {
 }
 
 /** The lines of a stage of this part, its resistors first. */
-export function stageLines(shape: StageShape, part: StockPart, sheet: Sheet): string[] {
+export function stageLines(shape: StageShape, part: StockPart, sheet: SheetView): string[] {
   const present = supplyOf(sheet);
   const supply = present ?? SUPPLY;
   const rail = present ? [] : [`${SUPPLY.name} = ${SUPPLY.volts} V ± 5 %  [assumed]`];
@@ -124,7 +124,7 @@ interface Resistors {
   lines(): string[];
 }
 
-function createResistors(sheet: Sheet): Resistors {
+function createResistors(sheet: SheetView): Resistors {
   const names = new Set<string>();
   const written: string[] = [];
   return {

@@ -5,7 +5,7 @@ import type { ValueKind } from '../../quantity/index.ts';
 import type { SheetTree } from '../../language/index.ts';
 import { shownCell, shownReading } from '../../record/index.ts';
 import { FUNCTIONS, PART_FIELDS } from '../../sheet/index.ts';
-import type { CellReading, Sheet } from '../../sheet/index.ts';
+import type { CellReading, SheetView } from '../../sheet/index.ts';
 
 export interface Suggestion {
   /** What is put in place of the token. */
@@ -18,7 +18,7 @@ export interface Suggestion {
 }
 
 /** Names of cells and, for blocks, the values they offer (`A1.I_D`), but nothing of `except`. */
-export function nameSuggestions(sheet: Sheet, except: string | null): Suggestion[] {
+export function nameSuggestions(sheet: SheetView, except: string | null): Suggestion[] {
   return sheet.cells().flatMap((cell) => {
     if (cell.name === except || cell.kind === 'plot' || cell.kind === 'broken') return [];
     return [ownSuggestion(cell), ...valueSuggestions(cell)];
@@ -37,7 +37,7 @@ function valueSuggestions(cell: CellReading): Suggestion[] {
 }
 
 /** Cells of some kinds, by name. */
-export function cellSuggestions(sheet: Sheet, kinds: readonly CellReading['kind'][]): Suggestion[] {
+export function cellSuggestions(sheet: SheetView, kinds: readonly CellReading['kind'][]): Suggestion[] {
   return sheet
     .cells()
     .filter((cell) => kinds.includes(cell.kind))
@@ -131,7 +131,7 @@ export function fieldSuggestions(cell: CellReading): Suggestion[] {
 }
 
 /** What a leg can lead to: the nodes of the stage, its test source, rails. */
-export function placeSuggestions(cell: CellReading, sheet: Sheet): Suggestion[] {
+export function placeSuggestions(cell: CellReading, sheet: SheetView): Suggestion[] {
   const nodes = cell.tree.fields
     .filter((field) => field.body.type === 'legs')
     .map((field) => field.label.map((part) => part.name).join('.'));

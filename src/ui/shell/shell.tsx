@@ -3,6 +3,7 @@
 import { For, Show, createEffect, createSignal, onCleanup, onMount } from 'solid-js';
 import { sha256Hex } from '../../numeric/index.ts';
 import { saveFile } from '../../storage/index.ts';
+import { CornerLine } from '../corner/index.ts';
 import { commandForKey, createDesk, keyOf } from '../desk/index.ts';
 import { FiguresPane } from '../figures/index.ts';
 import { SheetGrid } from '../grid/index.ts';
@@ -83,6 +84,11 @@ export function Shell(props: { readonly session: Session }) {
     // While find is open, the same key is the browser's own.
     if (key === 'Ctrl+F' && finding()) return;
     const typing = event.target instanceof HTMLTextAreaElement || event.target instanceof HTMLInputElement;
+    if (key === 'Escape' && desk.corner() !== null) {
+      event.preventDefault();
+      desk.stand(null);
+      return;
+    }
     const command = commandForKey(desk.commands(), key);
     if (!command || (typing && !key.startsWith('F') && key !== 'Ctrl+F')) return;
     if (paneOf(event.target as Element) !== 'sheet' && ['Delete', 'Ctrl+Delete', 'Ctrl+Backspace'].includes(key))
@@ -116,7 +122,9 @@ export function Shell(props: { readonly session: Session }) {
         <Head desk={desk} />
       </div>
       <section data-pane="verdict" aria-label="Verdict on the sheet">
-        <VerdictLine desk={desk} />
+        <Show when={desk.corner()} fallback={<VerdictLine desk={desk} />}>
+          {(corner) => <CornerLine desk={desk} corner={corner()} />}
+        </Show>
       </section>
       <Banners session={session} openShelf={() => setDialog('shelf')} saveFile={save} />
       <Show when={finding()}>

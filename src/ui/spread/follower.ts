@@ -33,6 +33,8 @@ interface Follower {
 interface Listener {
   /** null: nothing spreads. */
   readonly onKnown: (spread: SheetSpread | null) => void;
+  /** What is known is of the sheet as it was. */
+  readonly onStale: () => void;
   /** null: nothing is being counted. */
   readonly onProgress: (progress: Progress | null) => void;
 }
@@ -49,7 +51,7 @@ const QUICK_BUILDS = 256;
 const REST = 250;
 
 /** Starts following; nothing is asked before the first sheet. */
-export function createFollower(makeWorker: MakeWorker, { onKnown, onProgress }: Listener): Follower {
+export function createFollower(makeWorker: MakeWorker, { onKnown, onStale, onProgress }: Listener): Follower {
   let present: Followed | null = null;
   let ids = 0;
   let quick: SpreadWorker | null = null;
@@ -110,6 +112,7 @@ export function createFollower(makeWorker: MakeWorker, { onKnown, onProgress }: 
         return;
       }
       present = { model, sampling };
+      onStale();
       if (asked === null) askQuick();
       timer = setTimeout(askFull, REST);
     },

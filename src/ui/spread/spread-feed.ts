@@ -1,6 +1,6 @@
 // The spread of the open sheet as it becomes known, for everything that shows it.
 
-import { createEffect, createMemo, createSignal, on, onCleanup } from 'solid-js';
+import { batch, createEffect, createMemo, createSignal, on, onCleanup } from 'solid-js';
 import { samplingOf } from '../../record/index.ts';
 import type { JudgedSpread } from '../../record/index.ts';
 import type { SheetSpread, SpreadAnswer, SpreadQuestion } from '../../spread/index.ts';
@@ -13,6 +13,8 @@ export interface SpreadFeed {
   now(): SheetSpread | null;
   /** The same with what is asked of the builds. */
   judged(): JudgedSpread | null;
+  /** Whether what is known is still of the sheet as it was before the last change. */
+  isStale(): boolean;
   /** null once all builds are counted. */
   progress(): Progress | null;
   /** Ends the counting; what was counted stays. */
@@ -32,15 +34,22 @@ const pageWorker: MakeWorker = (onAnswer) => {
 
 /** Follows a document; to be called inside a component or root. */
 export function createSpreadFeed(document: SheetDocument): SpreadFeed {
-  const [now, onKnown] = createSignal<SheetSpread | null>(null);
+  const [now, setNow] = createSignal<SheetSpread | null>(null);
+  const [isStale, setStale] = createSignal(false);
+  const onKnown = (spread: SheetSpread | null): void =>
+    batch(() => {
+      setNow(spread);
+      setStale(false);
+    });
+  const onStale = (): void => void setStale(true);
   const [progress, onProgress] = createSignal<Progress | null>(null);
   const sampling = createMemo(() => samplingOf(document.tree()));
-  const follower = createFollower(pageWorker, { onKnown, onProgress });
+  const follower = createFollower(pageWorker, { onKnown, onStale, onProgress });
   createEffect(on([document.version, sampling], () => follower.follow(document.sheet.spreadModel(), sampling())));
   onCleanup(() => follower.end());
   const judged = createMemo<JudgedSpread | null>(() => {
     const spread = now();
     return spread && { spread, leastYield: sampling().leastYield };
   });
-  return { now, judged, progress, stop: () => follower.stop() };
+  return { now, judged, isStale, progress, stop: () => follower.stop() };
 }

@@ -2,7 +2,7 @@
 
 import { shownReading } from '../../record/index.ts';
 import { formatRow, formatValue } from '../../quantity/index.ts';
-import type { CellReading, FieldReading, Sheet } from '../../sheet/index.ts';
+import type { CellReading, FieldReading, SheetView } from '../../sheet/index.ts';
 import { sourceWords } from './source-words.ts';
 
 export interface PartRow {
@@ -22,7 +22,7 @@ export interface FormRow {
 const DIGITS = 4;
 
 /** One row for each field that is a number. */
-export function partRows(cell: CellReading, sheet: Sheet): readonly PartRow[] {
+export function partRows(cell: CellReading, sheet: SheetView): readonly PartRow[] {
   return cell.fields.map((field) => {
     const tree = cell.tree.fields.find(({ line }) => line.index === field.line);
     const source = tree ? sourceWords(tree, sheet.tree.lines) : null;

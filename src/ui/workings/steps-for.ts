@@ -1,6 +1,6 @@
 // Which steps of a cell's workings lead to one of its values.
 
-import type { Sheet, WorkingStep } from '../../sheet/index.ts';
+import type { SheetView, WorkingStep } from '../../sheet/index.ts';
 
 interface Steps {
   /** Those to be read first. */
@@ -10,7 +10,7 @@ interface Steps {
 }
 
 /** The workings of a cell; with a `value` first the steps that it rests on. */
-export function stepsFor(sheet: Sheet, cell: string, value: string | null): Steps {
+export function stepsFor(sheet: SheetView, cell: string, value: string | null): Steps {
   const steps = sheet.workings(cell);
   const chain = value === null ? steps : chainTo(steps, value);
   return chain.length === 0 || chain.length === steps.length ? { first: steps, all: [] } : { first: chain, all: steps };

@@ -14,6 +14,7 @@ import { faultWords } from './fault-words.ts';
 import { formRows, partRows } from './part-rows.ts';
 import { FormTable, PartTable } from './part-tables.tsx';
 import { sourceWords } from './source-words.ts';
+import { SpreadSection } from './spread-section.tsx';
 import { spreadSentences } from './spread-words.ts';
 import { AllSteps, StepList } from './step-list.tsx';
 import { stepsFor } from './steps-for.ts';
@@ -26,7 +27,7 @@ export function WorkingsPane(props: { readonly desk: Desk }) {
   const { desk } = props;
   const cell = createMemo(() => {
     const name = desk.selection()?.cell;
-    return name ? desk.document.cell(name) : null;
+    return name ? desk.view().cell(name) : null;
   });
 
   const onKeyDown = (event: KeyboardEvent): void => {
@@ -57,7 +58,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
   const offered = createMemo(() => props.cell.values.find((each) => each.name === props.value) ?? null);
   // Formulas cost more to set than all else: while a value is being typed or turned they follow a few times a second.
   const version = createRested(document.version, PACE);
-  const steps = createMemo(() => (version(), stepsFor(document.sheet, name(), props.value)));
+  const steps = createMemo(() => (version(), stepsFor(props.desk.view(), name(), props.value)));
   const spread = createMemo(() => {
     const { spread: declared, reading } = props.cell;
     return declared && reading && typeof reading.type !== 'string'
@@ -132,7 +133,9 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
         <AllSteps steps={steps().all} subject={name()} />
       </Show>
 
-      <PartTable rows={partRows(props.cell, document.sheet)} />
+      <SpreadSection desk={props.desk} cell={props.cell} value={offered()} />
+
+      <PartTable rows={partRows(props.cell, props.desk.view())} />
       <Show when={hasForms()}>
         <FormTable title={props.cell.kind === 'point' ? 'offers' : 'other forms'} rows={formRows(props.cell)} />
       </Show>
