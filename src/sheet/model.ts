@@ -264,6 +264,8 @@ export interface SpreadModel {
   /** Every number, region and condition of the sheet that has a value. */
   readonly values: readonly Wanted[];
   readonly checks: readonly WantedCheck[];
+  /** Inputs that are the author's to choose: components, supplies and currents, not rows of a part. */
+  readonly tunable: readonly { readonly name: string; readonly slot: number; readonly type: ValueKind }[];
   /** Stages of one FET, with its part and the slot of its drain current. */
   readonly stages: readonly { readonly stage: string; readonly part: string; readonly current: number }[];
 }

@@ -1,9 +1,15 @@
 // The sheet as an analysis of spread sees it: what is drawn, which specimens there are, and every value that moves.
 
+import { CAPACITANCE, CURRENT, INDUCTANCE, RESISTANCE, VOLTAGE, sameKind } from '../quantity/index.ts';
+import type { ValueKind } from '../quantity/index.ts';
+import { isQuantity } from './value-type.ts';
 import type { Program } from '../program/index.ts';
 import type { Cut, Drawn, SpreadModel, Tie, Wanted, WantedCheck } from './model.ts';
 import type { Node } from './node.ts';
 import { lineNow } from './readings.ts';
+
+/** Kinds of input that one buys or sets. */
+const CHOOSABLE = [RESISTANCE, CAPACITANCE, INDUCTANCE, VOLTAGE, CURRENT];
 
 /** Collects the spread of the cells that have values; `nodes` in the order of the sheet. */
 export function spreadModel(nodes: readonly Node[], program: Program, slots: Float64Array): SpreadModel {
@@ -12,6 +18,7 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
   const ties: Tie[] = [];
   const values: Wanted[] = [];
   const checks: WantedCheck[] = [];
+  const tunable: SpreadModel['tunable'][number][] = [];
   const stages: SpreadModel['stages'][number][] = [];
   for (const node of nodes) {
     if (node.fault || node.waitsFor) continue;
@@ -63,6 +70,12 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
       });
     }
     const { entry } = node.tree;
+    const isChoosable = CHOOSABLE.some(
+      (kind) => draft.type !== null && isQuantity(draft.type) && sameKind(kind, draft.type),
+    );
+    if (entry.type === 'quantity' && draft.isInput && isChoosable && read(draft.value!) > 0) {
+      tunable.push({ name: cell, slot: node.compiled.interface.slot, type: draft.type as ValueKind });
+    }
     const current = node.compiled.interface.offers.get('I_D')?.slot ?? -1;
     if (entry.type === 'stage' && entry.fets.length === 1 && current >= 0) {
       stages.push({ stage: cell, part: entry.fets[0]!.part.name, current });
@@ -71,5 +84,5 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
       if (offer.slot >= 0) values.push({ path: path(name), cell, slot: offer.slot, type: offer.type });
     }
   }
-  return { program, slots, drawn, cuts, ties, values, checks, stages };
+  return { program, slots, drawn, cuts, ties, values, checks, tunable, stages };
 }

@@ -1,8 +1,8 @@
 // How far the values of a sheet move over what its limits allow, and in what share of builds its checks hold.
 
 export { ANALYSES, analyse, readSpread } from './analyse.ts';
-export { createSpreadJob } from './job.ts';
-export type { SpreadAnswer, SpreadQuestion } from './job.ts';
+export { createMendJob, createSpreadJob } from './job.ts';
+export type { Answer, MendAnswer, MendQuestion, Question, SpreadAnswer, SpreadQuestion } from './job.ts';
 export { PORTION } from './portion.ts';
 export type { SheetSpread } from './analyse.ts';
 export { searchExtremes } from './extremes.ts';
@@ -14,3 +14,4 @@ export { createAnalysis } from './analysis.ts';
 export { createBuilds } from './builds.ts';
 export { moversOf } from './movers.ts';
 export type { Mover } from './movers.ts';
+export { mendWith, tunersOf } from './mending.ts';

@@ -5,10 +5,16 @@ import { createAnalysis } from './analysis.ts';
 import { PORTION } from './portion.ts';
 import { createBuilds } from './builds.ts';
 import type { SearchEffort } from './extremes.ts';
+import { mendWith, reservesWith } from './mending.ts';
+import type { CheckStanding, Mending } from './mending.ts';
 import type { SpreadReport } from './report.ts';
 
-/** What is asked of the worker. */
+/** What is asked of the worker: how far values move, or what would mend the checks. */
+export type Question = SpreadQuestion | MendQuestion;
+export type Answer = SpreadAnswer | MendAnswer;
+
 export interface SpreadQuestion {
+  readonly kind: 'spread';
   /** Grows from question to question. */
   readonly id: number;
   readonly model: SpreadModel;
@@ -18,10 +24,39 @@ export interface SpreadQuestion {
 }
 
 export interface SpreadAnswer {
+  readonly kind: 'spread';
   readonly id: number;
   readonly report: SpreadReport;
   /** Nothing more will come. */
   readonly isLast: boolean;
+}
+
+export interface MendQuestion {
+  readonly kind: 'mend';
+  readonly id: number;
+  readonly model: SpreadModel;
+  /** The inputs to turn, each with the values one can buy, the most welcome first. */
+  readonly inputs: readonly { readonly name: string; readonly values: readonly number[] }[];
+}
+
+export interface MendAnswer {
+  readonly kind: 'mend';
+  readonly id: number;
+  readonly mending: Mending;
+  /** The first value to buy inside the window, with every check as it then stands at its worst extreme. */
+  readonly choice: { readonly value: number; readonly checks: readonly CheckStanding[] } | null;
+  readonly isLast: boolean;
+}
+
+/** Answers for one input after the other. */
+export function* createMendJob({ id, model, inputs }: MendQuestion): Generator<MendAnswer> {
+  for (const [n, { name, values }] of inputs.entries()) {
+    const mending = mendWith(model, name);
+    const { window } = mending;
+    const value = window && values.find((each) => each >= window.low && each <= window.high);
+    const choice = value ? { value, checks: reservesWith(model, name, value) } : null;
+    yield { kind: 'mend', id, mending, choice, isLast: n === inputs.length - 1 };
+  }
 }
 
 /** Builds after which the first counts are shown. */
@@ -41,6 +76,6 @@ export function* createSpreadJob({ id, model, samples, seed, effort }: SpreadQue
     portions++;
     const isLast = first >= samples;
     if (isLast || portions === 1 || portions % PORTIONS_PER_ANSWER === 0)
-      yield { id, report: analysis.report(), isLast };
+      yield { kind: 'spread', id, report: analysis.report(), isLast };
   }
 }

@@ -1,14 +1,14 @@
-// The worker: answers a question about the spread of a model step by step, each step when it is asked to go on. A new
-// question takes the place of the one before.
+// The worker: answers a question step by step, each step when it is asked to go on. A new question takes the place of the
+// one before.
 
-import { createSpreadJob } from './job.ts';
-import type { SpreadAnswer, SpreadQuestion } from './job.ts';
+import { createMendJob, createSpreadJob } from './job.ts';
+import type { Answer, Question } from './job.ts';
 
-let job: Generator<SpreadAnswer> | null = null;
+let job: Generator<Answer> | null = null;
 
 /** A question, or null: go on with the one before. */
-self.addEventListener('message', ({ data }: MessageEvent<SpreadQuestion | null>) => {
-  if (data !== null) job = createSpreadJob(data);
+self.addEventListener('message', ({ data }: MessageEvent<Question | null>) => {
+  if (data !== null) job = data.kind === 'spread' ? createSpreadJob(data) : createMendJob(data);
   const step = job?.next();
   if (!step || step.done) job = null;
   // oxlint-disable-next-line unicorn/require-post-message-target-origin -- windows have an origin, workers do not

@@ -66,7 +66,7 @@ export function createFollower(makeWorker: MakeWorker, { onKnown, onStale, onPro
     quick ??= makeWorker(takeQuick);
     asked = present;
     const { model, sampling } = present;
-    quick.ask({ id: ++ids, model, samples: QUICK_BUILDS, seed: sampling.seed, effort: 'quick' });
+    quick.ask({ kind: 'spread', id: ++ids, model, samples: QUICK_BUILDS, seed: sampling.seed, effort: 'quick' });
   }
 
   function takeQuick({ report }: SpreadAnswer): void {
@@ -83,7 +83,7 @@ export function createFollower(makeWorker: MakeWorker, { onKnown, onStale, onPro
     isCounting = true;
     const { model, sampling } = present;
     onProgress({ builds: 0, of: sampling.samples });
-    full.ask({ id: ++ids, model, samples: sampling.samples, seed: sampling.seed, effort: 'full' });
+    full.ask({ kind: 'spread', id: ++ids, model, samples: sampling.samples, seed: sampling.seed, effort: 'full' });
   }
 
   function takeFull({ report, isLast }: SpreadAnswer): void {

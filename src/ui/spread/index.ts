@@ -4,3 +4,4 @@ export { endCorner, stageCorners } from './corners.ts';
 export type { Corner } from './corners.ts';
 export { createSpreadFeed } from './spread-feed.ts';
 export type { SpreadFeed } from './spread-feed.ts';
+export { startWorker } from './page-worker.ts';

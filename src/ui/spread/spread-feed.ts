@@ -3,10 +3,11 @@
 import { batch, createEffect, createMemo, createSignal, on, onCleanup } from 'solid-js';
 import { samplingOf } from '../../record/index.ts';
 import type { JudgedSpread } from '../../record/index.ts';
-import type { SheetSpread, SpreadAnswer, SpreadQuestion } from '../../spread/index.ts';
+import type { SheetSpread } from '../../spread/index.ts';
 import type { SheetDocument } from '../document/index.ts';
 import { createFollower } from './follower.ts';
-import type { MakeWorker, Progress } from './follower.ts';
+import type { Progress } from './follower.ts';
+import { startWorker } from './page-worker.ts';
 
 export interface SpreadFeed {
   /** What is known of the spread of the sheet as it is shown; null where nothing spreads, or nothing is known yet. */
@@ -21,17 +22,6 @@ export interface SpreadFeed {
   stop(): void;
 }
 
-const pageWorker: MakeWorker = (onAnswer) => {
-  const worker = new Worker(new URL('../../spread/worker.ts', import.meta.url), { type: 'module' });
-  // oxlint-disable-next-line unicorn/require-post-message-target-origin -- windows have an origin, workers do not
-  const send = (message: SpreadQuestion | null): void => worker.postMessage(message);
-  worker.addEventListener('message', ({ data }: MessageEvent<SpreadAnswer>) => {
-    onAnswer(data);
-    if (!data.isLast) send(null);
-  });
-  return { ask: send, end: () => worker.terminate() };
-};
-
 /** Follows a document; to be called inside a component or root. */
 export function createSpreadFeed(document: SheetDocument): SpreadFeed {
   const [now, setNow] = createSignal<SheetSpread | null>(null);
@@ -44,7 +34,7 @@ export function createSpreadFeed(document: SheetDocument): SpreadFeed {
   const onStale = (): void => void setStale(true);
   const [progress, onProgress] = createSignal<Progress | null>(null);
   const sampling = createMemo(() => samplingOf(document.tree()));
-  const follower = createFollower(pageWorker, { onKnown, onStale, onProgress });
+  const follower = createFollower(startWorker, { onKnown, onStale, onProgress });
   createEffect(on([document.version, sampling], () => follower.follow(document.sheet.spreadModel(), sampling())));
   onCleanup(() => follower.end());
   const judged = createMemo<JudgedSpread | null>(() => {

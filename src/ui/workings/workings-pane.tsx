@@ -3,7 +3,7 @@
 
 import { For, Show, batch, createMemo } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
-import { shownReading } from '../../record/index.ts';
+import { failsCheck, shownReading } from '../../record/index.ts';
 import type { CellReading } from '../../sheet/index.ts';
 import { createRested } from '../pace/index.ts';
 import type { Pace } from '../pace/index.ts';
@@ -13,6 +13,7 @@ import { kindWords, valueWords } from './cell-words.ts';
 import { faultWords } from './fault-words.ts';
 import { formRows, partRows } from './part-rows.ts';
 import { FormTable, PartTable } from './part-tables.tsx';
+import { MendSection } from './mend-section.tsx';
 import { sourceWords } from './source-words.ts';
 import { SpreadSection } from './spread-section.tsx';
 import { spreadSentences } from './spread-words.ts';
@@ -66,6 +67,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
       : [];
   });
   const source = createMemo(() => sourceWords(props.cell.tree, document.tree().lines));
+  const isFailing = createMemo(() => failsCheck(props.cell, props.desk.spread.judged()));
   const hasForms = (): boolean => ['part', 'another', 'point'].includes(props.cell.kind);
 
   return (
@@ -81,10 +83,8 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
             {(text) => (
               <>
                 {': '}
-                <strong
-                  classList={{ fails: props.cell.check?.holds === false, holds: props.cell.check?.holds === true }}
-                >
-                  {text()}
+                <strong classList={{ fails: isFailing(), holds: props.cell.check?.holds === true && !isFailing() }}>
+                  {isFailing() && props.cell.check?.holds ? 'holds nominally, fails at an end' : text()}
                 </strong>
               </>
             )}
@@ -133,6 +133,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
         <AllSteps steps={steps().all} subject={name()} />
       </Show>
 
+      <MendSection desk={props.desk} cell={props.cell} />
       <SpreadSection desk={props.desk} cell={props.cell} value={offered()} />
 
       <PartTable rows={partRows(props.cell, props.desk.view())} />
