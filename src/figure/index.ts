@@ -31,7 +31,7 @@ export { plotCharts } from './plot.ts';
 export { drawSchematic } from './schematic.ts';
 export type { LegEnd, LegKind, SchematicInput, StageLeg } from './stage-input.ts';
 export { typeset } from './labels.ts';
-export { planesOf } from './sheet-planes.ts';
+export { deviceStages, planesOf } from './sheet-planes.ts';
 export { sheetPlot } from './sheet-plot.ts';
 export { schematicOf } from './sheet-schematic.ts';
 export type { Token } from './style.ts';

@@ -1,6 +1,8 @@
 // From a solved stage of a sheet to its two planes.
 
-import type { SheetView, StageReading } from '../sheet/index.ts';
+import type { Sheet, SheetView, StageReading } from '../sheet/index.ts';
+import { slotsOf } from '../spread/index.ts';
+import type { SheetSpread } from '../spread/index.ts';
 import type { Chart } from './chart.ts';
 import type { OutputDevice } from './output-plane.ts';
 import { outputPlane } from './output-plane.ts';
@@ -50,6 +52,20 @@ export function planesOf(
     transfer: transferPlane({ name, channel, devices, bias }),
     output: outputPlane({ name, channel, devices, margin: marginAsked(name, sheet) }),
   };
+}
+
+/** A stage as its low and its high device have it; none where its part does not spread. */
+export function deviceStages(
+  sheet: Sheet,
+  name: string,
+  spread: SheetSpread | null,
+): readonly { readonly role: 'low' | 'high'; readonly label: string; readonly stage: StageReading }[] {
+  const found = spread?.report.devices.find(({ stage }) => stage === name);
+  if (!spread || !found) return [];
+  return (['low', 'high'] as const).flatMap((role) => {
+    const stage = sheet.standing(slotsOf(spread.model, found[role].where)).stage(name);
+    return stage ? [{ role, label: `${role} device`, stage }] : [];
+  });
 }
 
 /** `bias line, 1/R_S` where one resistor of the stage alone makes the slope. */

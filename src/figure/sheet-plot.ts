@@ -1,6 +1,8 @@
 // From a plot cell of a sheet to its charts.
 
-import type { SheetView, ValueType } from '../sheet/index.ts';
+import type { CellReading, SheetView, ValueType } from '../sheet/index.ts';
+import type { SheetSpread } from '../spread/index.ts';
+import { histogramChart } from './histogram.ts';
 import type { ValueKind } from '../quantity/index.ts';
 import type { Chart } from './chart.ts';
 import { planesOf } from './sheet-planes.ts';
@@ -15,7 +17,7 @@ const PLOT_POINTS = 161;
 type SheetPlot = { readonly charts: readonly Chart[] } | { readonly message: string };
 
 /** What a plot cell shows. */
-export function sheetPlot(sheet: SheetView, name: string): SheetPlot {
+export function sheetPlot(sheet: SheetView, name: string, spread: SheetSpread | null = null): SheetPlot {
   const cell = sheet.cell(name);
   if (cell === null || cell.tree.entry.type !== 'plot') return { message: `${name} is no figure.` };
   if (cell.fault !== null) return { message: cell.waitsFor ? `${name} waits for ${cell.waitsFor}.` : cell.fault.text };
@@ -27,6 +29,7 @@ export function sheetPlot(sheet: SheetView, name: string): SheetPlot {
       ? { message: `${of?.name ?? 'The stage'} has no planes to draw.` }
       : { charts: [planes[figure]] };
   }
+  if (figure === 'spread') return spreadPlot(sheet, cell.tree, spread);
   const sweep = sheet.sweep(name, PLOT_POINTS);
   if (sweep === null) return { message: `A figure of this kind is not drawn yet.` };
   const { input } = sweep;
@@ -46,6 +49,50 @@ export function sheetPlot(sheet: SheetView, name: string): SheetPlot {
     }),
   };
 }
+
+/** The histogram of a value of the sheet. */
+function spreadPlot(sheet: SheetView, tree: CellReading['tree'], spread: SheetSpread | null): SheetPlot {
+  if (tree.entry.type !== 'plot') throw new Error('A plot is drawn of a plot cell.');
+  const [value] = tree.entry.values;
+  const path = value?.type === 'path' ? value.names.map((part) => part.name).join('.') : null;
+  if (path === null) return { message: 'The spread of one value is drawn: write plot spread of A1.I_D.' };
+  const [owner, ...rest] = path.split('.');
+  const cell = sheet.cell(owner!);
+  const reading = rest.length === 0 ? cell?.reading : cell?.values.find((each) => each.name === rest.join('.'));
+  if (!reading || !isKind(reading.type) || typeof reading.value !== 'number')
+    return { message: `${path} has no number.` };
+  const found = spread?.value(path) ?? null;
+  if (found === null || !found.moves) return { message: `Nothing that spreads moves ${path}.` };
+  const { distribution, low, high } = found;
+  if (distribution === null || low.value === null || high.value === null) {
+    const open = [...new Set([...low.open, ...high.open])];
+    return {
+      message:
+        open.length > 0
+          ? `${path} has no spread to draw: ${open.join(', ')} has an open end.`
+          : `The builds of ${path} are not counted yet.`,
+    };
+  }
+  const counts = Float64Array.from({ length: HISTOGRAM_BINS }, (_, bin) => {
+    const size = distribution.bins.length / HISTOGRAM_BINS;
+    return distribution.bins.subarray(bin * size, (bin + 1) * size).reduce((sum, count) => sum + count, 0);
+  });
+  const [from, to] = [low.value, high.value];
+  const edges = Float64Array.from({ length: HISTOGRAM_BINS + 1 }, (_, k) => from + ((to - from) * k) / HISTOGRAM_BINS);
+  const limits = requirementsOf(sheet)
+    .filter(({ text }) => text === comparableText(path))
+    .map(({ value: limit, forbids }) => ({
+      value: limit,
+      forbids,
+      passed: forbids === 'below' ? from < limit : to > limit,
+    }));
+  return {
+    charts: [histogramChart({ label: path, kind: reading.type, edges, counts, nominal: reading.value, limits })],
+  };
+}
+
+/** Bars of a histogram. */
+const HISTOGRAM_BINS = 32;
 
 function isKind(type: ValueType): type is ValueKind {
   return typeof type !== 'string';

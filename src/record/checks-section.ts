@@ -5,6 +5,9 @@ import { checkText } from './check-text.ts';
 import { name, plainText, sentence, strong } from './inline.ts';
 import type { Block, Inline, Mark, TableRow } from './record-tree.ts';
 import { typed } from './open-points.ts';
+import { failingText, failsCheck } from './verdict.ts';
+import type { JudgedSpread } from './verdict.ts';
+import { yieldText } from './yield-text.ts';
 import { workingsOf } from './workings.ts';
 
 const COLUMNS = [
@@ -14,22 +17,27 @@ const COLUMNS = [
   { title: 'result', kind: 'text' },
 ] as const;
 
+const YIELD = { title: 'builds that hold it', kind: 'text' } as const;
+
 const ORDER: readonly Mark[] = ['fails', 'unknown', 'holds'];
 
 /** The table of checks, or the sentence that nothing is required. */
-export function checksBlock(sheet: Sheet): Block {
+export function checksBlock(sheet: Sheet, judged: JudgedSpread | null): Block {
   const checks = sheet.cells().filter(({ tree }) => tree.entry.type === 'check');
   if (checks.length === 0) {
     return { type: 'paragraph', tone: 'plain', content: plainText('Nothing is required of this sheet yet.') };
   }
-  const rows = checks.map((cell) => row(cell, sheet));
+  const rows = checks.map((cell) => row(cell, sheet, judged));
   const sorted = ORDER.flatMap((mark) => rows.filter((each) => each.mark === mark));
-  return { type: 'table', name: 'checks', columns: COLUMNS, rows: sorted };
+  return { type: 'table', name: 'checks', columns: judged ? [...COLUMNS, YIELD] : COLUMNS, rows: sorted };
 }
 
-function row(cell: CellReading, sheet: Sheet): TableRow {
-  const mark: Mark = cell.check === null ? 'unknown' : cell.check.holds ? 'holds' : 'fails';
-  const result = cell.waitsFor === null ? checkText(cell) : `waits for ${cell.waitsFor}`;
+function row(cell: CellReading, sheet: Sheet, judged: JudgedSpread | null): TableRow {
+  const fails = failsCheck(cell, judged);
+  const mark: Mark = cell.check === null ? 'unknown' : fails ? 'fails' : 'holds';
+  const words = fails ? failingText(cell, judged) : checkText(cell);
+  const result = cell.waitsFor === null ? words : `waits for ${cell.waitsFor}`;
+  const share = judged?.spread.check(cell.name)?.yield ?? null;
   const step = workingsOf(sheet, cell.name)[0];
   const written: Inline = step
     ? { type: 'formula', tex: step.tex.formula, text: step.text.formula }
@@ -45,6 +53,7 @@ function row(cell: CellReading, sheet: Sheet): TableRow {
       { content: [written] },
       { content: filled },
       { content: mark === 'fails' ? [strong(result)] : sentence(result) },
+      ...(judged ? [{ content: plainText(share ? yieldText(share) : '–') }] : []),
     ],
   };
 }

@@ -1,8 +1,9 @@
 // The figures: the planes of every stage that is solved, then the plots that the sheet asks for.
 
-import { drawChart, planesOf, sheetPlot, stackCharts, svgText, TOKENS } from '../figure/index.ts';
+import { deviceStages, drawChart, planesOf, sheetPlot, stackCharts, svgText, TOKENS } from '../figure/index.ts';
 import type { Chart, Drawing } from '../figure/index.ts';
 import type { CellReading, Sheet } from '../sheet/index.ts';
+import type { SheetSpread } from '../spread/index.ts';
 import { sentence, strong } from './inline.ts';
 import type { Block, Figure, Inlines } from './record-tree.ts';
 
@@ -10,7 +11,7 @@ import type { Block, Figure, Inlines } from './record-tree.ts';
 const CHART = { width: 288, height: 190 };
 
 /** Figures with their captions, and a sentence for each plot that could not be drawn. */
-export function figuresBlocks(sheet: Sheet): readonly Block[] {
+export function figuresBlocks(sheet: Sheet, spread: SheetSpread | null): readonly Block[] {
   const figures: Figure[] = [];
   const messages: Inlines[] = [];
   const asked = new Map<string, string[]>();
@@ -27,14 +28,14 @@ export function figuresBlocks(sheet: Sheet): readonly Block[] {
   }
   for (const cell of sheet.cells().filter(({ kind, fault }) => kind === 'stage' && fault === null)) {
     const stage = sheet.stage(cell.name);
-    const planes = stage === null ? null : planesOf(stage, sheet);
+    const planes = stage === null ? null : planesOf(stage, sheet, deviceStages(sheet, cell.name, spread));
     if (planes === null) continue;
     for (const plane of ['transfer', 'output'] as const) {
       add(drawChart(planes[plane], CHART), asked.get(`${plane} of ${cell.name}`) ?? []);
     }
   }
   for (const cell of plots) {
-    const plot = sheetPlot(sheet, cell.name);
+    const plot = sheetPlot(sheet, cell.name, spread);
     if ('message' in plot)
       messages.push(sentence(plot.message.startsWith(cell.name) ? plot.message : `${cell.name}: ${plot.message}`));
     else if (planeKey(cell) === null) add(stackCharts(plot.charts, sizeFor(plot.charts)), [cell.name]);

@@ -23,3 +23,4 @@ export { countText, shareText, yieldText } from './yield-text.ts';
 export { printStep, stepSides, stepText, workingsOf } from './workings.ts';
 export type { PrintedStep } from './workings.ts';
 export { whereText } from './where-text.ts';
+export { stageEnds } from './stage-ends.ts';

@@ -4,11 +4,11 @@
 import { lineColumn } from '../language/index.ts';
 import type { FieldTree, Line } from '../language/index.ts';
 import type { CellReading, Fault, Sheet } from '../sheet/index.ts';
-import { checkText } from './check-text.ts';
 import { originOf } from './source.ts';
 import { TITLE_LABELS, titleField } from './title-fields.ts';
 import type { TitleField } from './title-fields.ts';
-import { verdictOf } from './verdict.ts';
+import { failingText, verdictOf } from './verdict.ts';
+import type { JudgedSpread } from './verdict.ts';
 
 export interface OpenPoint {
   readonly kind: 'field' | 'broken' | 'waiting' | 'failing' | 'assumed' | 'no source' | 'taken';
@@ -23,11 +23,13 @@ export interface OpenPoint {
 const NEEDED: readonly TitleField[] = ['project', 'number', 'revision', 'status', 'date', 'author', 'checker'];
 
 /** Everything that is open, the gravest first, each kind in sheet order. */
-export function openPoints(sheet: Sheet): readonly OpenPoint[] {
+export function openPoints(sheet: Sheet, judged: JudgedSpread | null = null): readonly OpenPoint[] {
   const cells = sheet.cells();
   return [
     ...brokenPoints(sheet),
-    ...verdictOf(sheet).failing.map((cell): OpenPoint => point('failing', cell, `${cell.name} ${checkText(cell)}.`)),
+    ...verdictOf(sheet, judged).failing.map((cell): OpenPoint =>
+      point('failing', cell, `${cell.name} ${failingText(cell, judged)}.`),
+    ),
     ...cells.flatMap((cell) => inputPoints('assumed', cell, inputLines(cell, sheet).filter(isAssumed))),
     ...sheet.assumptions().map(({ cell, text }): OpenPoint => {
       const line = sheet.cell(cell)?.tree.line.index ?? null;

@@ -13,8 +13,9 @@ import type { Block, Inlines, Mark, RecordTree, Section } from './record-tree.ts
 import { sheetBlocks } from './sheet-section.ts';
 import { TITLE_LABELS, paperOf, titleField } from './title-fields.ts';
 import type { TitleField } from './title-fields.ts';
-import type { Verdict } from './verdict.ts';
+import type { JudgedSpread, Verdict } from './verdict.ts';
 import { verdictOf } from './verdict.ts';
+import { countText } from './yield-text.ts';
 import { workingsBlocks } from './workings-section.ts';
 
 interface RecordOptions {
@@ -22,6 +23,8 @@ interface RecordOptions {
   readonly digest: string;
   /** When it is printed, as it is to be read. */
   readonly printedAt?: string;
+  /** The spread of the sheet with what is asked of it; left out where it has none, or none is known. */
+  readonly judged?: JudgedSpread | null;
 }
 
 const MARKS: Readonly<Record<Verdict['state'], Mark>> = {
@@ -32,10 +35,10 @@ const MARKS: Readonly<Record<Verdict['state'], Mark>> = {
 };
 
 /** The record of a sheet as it stands. */
-export function recordOf(sheet: Sheet, { digest, printedAt }: RecordOptions): RecordTree {
+export function recordOf(sheet: Sheet, { digest, printedAt, judged = null }: RecordOptions): RecordTree {
   const { tree } = sheet;
-  const verdict = verdictOf(sheet);
-  const open = openPoints(sheet);
+  const verdict = verdictOf(sheet, judged);
+  const open = openPoints(sheet, judged);
   return {
     title: tree.title?.text.trim() || 'Sheet without a title',
     edition: editionOf(sheet),
@@ -48,26 +51,39 @@ export function recordOf(sheet: Sheet, { digest, printedAt }: RecordOptions): Re
       label: TITLE_LABELS[label],
       content: orBlank(titleField(tree, label)),
     })),
-    sections: numberedSections(sheet, verdict, open),
+    sections: numberedSections(sheet, verdict, open, judged),
   };
 }
 
 /** A title, what is said behind it, and the blocks under it once its number is known; null to leave it out. */
 type Draft = readonly [title: string, remark: string, blocks: (number: string) => readonly Block[]];
 
-function numberedSections(sheet: Sheet, verdict: Verdict, open: readonly OpenPoint[]): readonly Section[] {
+function numberedSections(
+  sheet: Sheet,
+  verdict: Verdict,
+  open: readonly OpenPoint[],
+  judged: JudgedSpread | null,
+): readonly Section[] {
   const uncomputed = open.filter(({ kind }) => kind === 'broken' || kind === 'waiting');
   const toConfirm = open.filter(({ kind }) => ['assumed', 'taken', 'no source'].includes(kind));
   const drafts: readonly (Draft | null)[] = [
-    ['Result', '', () => resultBlocks(sheet, verdict, open)],
+    ['Result', '', () => resultBlocks(sheet, verdict, open, judged)],
     uncomputed.length === 0
       ? null
       : ['Not computed', 'broken lines, and what waits for them', () => [listOf(uncomputed, 'dot')]],
-    ['Checks', 'at the nominal values, failing ones first', () => [checksBlock(sheet)]],
+    [
+      'Checks',
+      judged ? 'at every extreme, failing ones first' : 'at the nominal values, failing ones first',
+      () => [checksBlock(sheet, judged)],
+    ],
     toConfirm.length === 0 ? null : ['To be confirmed', '', () => confirmBlocks(toConfirm)],
-    ['The sheet', 'values as entered and as computed, ends rounded outward', (number) => sheetBlocks(sheet, number)],
+    [
+      'The sheet',
+      'values as entered and as computed, ends rounded outward',
+      (number) => sheetBlocks(sheet, number, judged),
+    ],
     ['Workings', 'formula, numbers in place, result, at the nominal values', (number) => workingsBlocks(sheet, number)],
-    ['Figures', '', () => figuresBlocks(sheet)],
+    ['Figures', '', () => figuresBlocks(sheet, judged?.spread ?? null)],
     ['Cautions and limits', '', () => cautionBlocks(sheet)],
     ['Sign-off', '', () => signOffBlocks(sheet)],
     ['The sheet text', 'typed in again, this gives the record above', () => textBlocks(sheet)],
@@ -83,10 +99,15 @@ function numberedSections(sheet: Sheet, verdict: Verdict, open: readonly OpenPoi
   return sections;
 }
 
-function resultBlocks(sheet: Sheet, { state, sentence: words }: Verdict, open: readonly OpenPoint[]): readonly Block[] {
+function resultBlocks(
+  sheet: Sheet,
+  { state, sentence: words }: Verdict,
+  open: readonly OpenPoint[],
+  judged: JudgedSpread | null,
+): readonly Block[] {
   const content: Inlines = [
     strong(words),
-    ...plainText(' Tolerances, device limits and service are listed below but not searched in this record.'),
+    ...plainText(` ${searchedSentence(judged)}`),
     ...plainText(` ${openSentence(sheet, open)}`),
   ];
   const lead = leadProse(sheet.tree)
@@ -94,6 +115,14 @@ function resultBlocks(sheet: Sheet, { state, sentence: words }: Verdict, open: r
     .join(' ');
   const blocks: readonly Block[] = [{ type: 'verdict', mark: MARKS[state], content }];
   return lead === '' ? blocks : [...blocks, { type: 'paragraph', tone: 'prose', content: sentence(lead) }];
+}
+
+/** What was searched for this record. */
+function searchedSentence(judged: JudgedSpread | null): string {
+  if (judged === null) return 'Spread is not searched in this record.';
+  const { builds, repaired } = judged.spread.report;
+  const beaten = repaired === 0 ? '' : ` ${repaired} extremes were found by a build first and searched for again.`;
+  return `Ends are those of all values that the limits allow, service included; yields are of ${countText(builds)} builds, with the 95 % interval of sampling alone: the assumed laws are not in it.${beaten}`;
 }
 
 /** How much is open, in one sentence. */

@@ -11,7 +11,10 @@ import { originCell } from './origin-cell.ts';
 import { offeredBlocks, partBlocks } from './part-blocks.ts';
 import type { Block, Cell, Figure, Inlines, TableRow } from './record-tree.ts';
 import { shownCell } from './shown.ts';
-import { inputCells, valueCell } from './value-cells.ts';
+import type { SheetSpread } from '../spread/index.ts';
+import { stageEnds } from './stage-ends.ts';
+import { inputCells, spreadCells, valueCell } from './value-cells.ts';
+import type { JudgedSpread } from './verdict.ts';
 
 const INPUT_COLUMNS = [
   { title: 'name', kind: 'text' },
@@ -30,21 +33,23 @@ const KINDS: Readonly<Record<string, string>> = {
 };
 
 /** The blocks of the sheet; `number` is that of their section. */
-export function sheetBlocks(sheet: Sheet, number: string): readonly Block[] {
-  return new SheetWriter(sheet, number).blocks();
+export function sheetBlocks(sheet: Sheet, number: string, judged: JudgedSpread | null): readonly Block[] {
+  return new SheetWriter(sheet, number, judged?.spread ?? null).blocks();
 }
 
 class SheetWriter {
   readonly #blocks: Block[] = [];
   readonly #sheet: Sheet;
   readonly #number: string;
+  readonly #spread: SheetSpread | null;
   #rows: TableRow[] = [];
   #prose: string[] = [];
   #headings = 0;
 
-  constructor(sheet: Sheet, number: string) {
+  constructor(sheet: Sheet, number: string, spread: SheetSpread | null) {
     this.#sheet = sheet;
     this.#number = number;
+    this.#spread = spread;
   }
 
   blocks(): readonly Block[] {
@@ -70,7 +75,7 @@ class SheetWriter {
     if (cell === null) return;
     if (cell.kind === 'check' || cell.kind === 'plot') return;
     if (!(cell.kind in KINDS)) {
-      this.#rows.push(quantityRow(cell, this.#sheet));
+      this.#rows.push(quantityRow(cell, this.#sheet, this.#spread));
       return;
     }
     this.#endTable();
@@ -83,7 +88,9 @@ class SheetWriter {
       content: [strong(cell.name), ...plainText(', '), ...plainText(entry), ...remark],
     });
     if (cell.fault !== null) this.#blocks.push(faultBlock(cell, this.#sheet));
-    this.#blocks.push(...(cell.kind === 'stage' ? stageBlocks(cell, this.#sheet) : partBlocks(cell, this.#sheet)));
+    this.#blocks.push(
+      ...(cell.kind === 'stage' ? stageBlocks(cell, this.#sheet, this.#spread) : partBlocks(cell, this.#sheet)),
+    );
   }
 
   #heading(content: Inlines, remark: string): void {
@@ -105,33 +112,60 @@ class SheetWriter {
   }
 }
 
-function quantityRow(cell: CellReading, sheet: Sheet): TableRow {
+function quantityRow(cell: CellReading, sheet: Sheet, spread: SheetSpread | null): TableRow {
   const { line, entry } = cell.tree;
   const cells: Cell[] = [
     { content: [name(cell.name)] },
     { content: [{ type: 'entry', text: typed(line, entry.span) }] },
-    ...numbersOf(cell),
+    ...numbersOf(cell, spread),
     originCell(line, sheet, cell.isInput),
   ];
   return { mark: null, cells };
 }
 
-function numbersOf(cell: CellReading): [Cell, Cell, Cell] {
+function numbersOf(cell: CellReading, spread: SheetSpread | null): [Cell, Cell, Cell] {
   if (cell.fault !== null) {
     const words = cell.waitsFor === null ? 'broken' : `waits for ${cell.waitsFor}`;
     return [EMPTY_CELL, { content: [strong(words)] }, EMPTY_CELL];
   }
   if (cell.isInput && cell.reading) return inputCells(cell.reading, cell);
+  const ends = cell.reading && spreadCells(cell.reading, spread?.value(cell.name) ?? null);
+  if (ends) return ends;
   const shown = shownCell(cell);
   return [EMPTY_CELL, shown === null ? { content: plainText('no value') } : valueCell(shown), EMPTY_CELL];
 }
 
-function stageBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
+function stageBlocks(cell: CellReading, sheet: Sheet, spread: SheetSpread | null): readonly Block[] {
   const wiring = enteredTable(cell, sheet, ['place', 'what hangs on it']);
   const offered = offeredBlocks(cell);
   const values = offered.find(({ type }) => type === 'values') ?? null;
   const stage: Block = { type: 'stage', drawing: schematic(cell, sheet), wiring, values };
-  return [stage, ...offered.filter((block) => block !== values)];
+  const ends = spread && cell.fault === null ? endsBlocks(cell, spread) : [];
+  return [stage, ...offered.filter((block) => block !== values), ...ends];
+}
+
+const ENDS_COLUMNS = [
+  { title: 'over the declared set', kind: 'text' },
+  { title: 'low', kind: 'text' },
+  { title: 'low device', kind: 'text' },
+  { title: 'nominal', kind: 'text' },
+  { title: 'high device', kind: 'text' },
+  { title: 'high', kind: 'text' },
+  { title: 'max : min', kind: 'text' },
+] as const;
+
+/** The ends table of a stage; nothing where nothing moves it. */
+function endsBlocks(cell: CellReading, spread: SheetSpread): readonly Block[] {
+  const rows = stageEnds(cell, spread).map((end): TableRow => ({
+    mark: null,
+    cells: [
+      { content: [name(end.name, cell.name)] },
+      ...[end.low, end.lowDevice, end.nominal, end.highDevice, end.high, end.ratio].map((text) => ({
+        content: plainText(text),
+      })),
+    ],
+  }));
+  return rows.length === 0 ? [] : [{ type: 'table', name: 'ends', columns: ENDS_COLUMNS, rows }];
 }
 
 function schematic(cell: CellReading, sheet: Sheet): Figure | null {

@@ -3,6 +3,7 @@
 import { formatRow } from '../quantity/index.ts';
 import type { FormatOptions, FormattedValue } from '../quantity/index.ts';
 import type { CellReading, DeclaredSpread, Reading } from '../sheet/index.ts';
+import type { ValueSpread } from '../spread/index.ts';
 import { EMPTY_CELL, plainText, textCell } from './inline.ts';
 import type { Cell } from './record-tree.ts';
 import { shownOwn, shownReading } from './shown.ts';
@@ -25,6 +26,17 @@ export function inputCells(reading: Reading, of: Pick<CellReading, 'isInput' | '
     unit: as,
     ...endDigits(spread),
   });
+  return [endCell(low, shown.unit), shown, endCell(high, shown.unit)];
+}
+
+/** Low, nominal and high of a computed value over the declared set; null where nothing moves it. */
+export function spreadCells({ value, type, as }: Reading, spread: ValueSpread | null): [Cell, Cell, Cell] | null {
+  if (!spread?.moves || spread.isWord || typeof value !== 'number' || typeof type === 'string') return null;
+  if (!Number.isFinite(value)) return null;
+  const { low, nominal, high } = formatRow({ low: spread.low.value, nominal: value, high: spread.high.value }, type, {
+    unit: as,
+  });
+  const shown = valueCell(nominal.text);
   return [endCell(low, shown.unit), shown, endCell(high, shown.unit)];
 }
 

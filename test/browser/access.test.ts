@@ -1,24 +1,8 @@
 // What a reader, a keyboard or a low contrast would stumble over, by the rules of axe-core, in the states of the page.
 
-import { readFileSync } from 'node:fs';
-import { createRequire } from 'node:module';
-import type { Page } from 'playwright-core';
 import { expect } from 'vitest';
+import { findings } from '../support/axe-findings.ts';
 import { openUnwatchedContext, test } from '../support/page-test.ts';
-
-const axeSource = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
-
-/** Findings of axe as lines `rule: where`. */
-async function findings(page: Page): Promise<string[]> {
-  await page.evaluate(axeSource);
-  return page.evaluate(async () => {
-    const { axe } = globalThis as unknown as {
-      axe: { run(): Promise<{ violations: { id: string; nodes: { target: unknown[] }[] }[] }> };
-    };
-    const { violations } = await axe.run();
-    return violations.flatMap(({ id, nodes }) => nodes.map(({ target }) => `${id}: ${target.join(' ')}`));
-  });
-}
 
 const SIZES = [
   { width: 1440, height: 900 },

@@ -45,7 +45,8 @@ export function compilePlotCell(context: CellContext): Draft {
   }
   for (const value of entry.values) compileQuantity(value, scope);
   if (figure === 'spread') {
-    context.later('The spread of a value', entry.span, tree.line);
+    if (entry.values[0]!.type !== 'path')
+      context.later('The spread of a formula without a name', entry.span, tree.line);
     return EMPTY_DRAFT;
   }
   const input = scope.resolve(entry.against!);

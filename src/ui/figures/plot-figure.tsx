@@ -24,7 +24,7 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
   const version = createRested(document.version, PACE);
   const plot = createMemo(() => {
     version();
-    return open() ? sheetPlot(document.sheet, props.name) : null;
+    return open() ? sheetPlot(props.desk.view(), props.name, props.desk.spread.now()) : null;
   });
   const charts = createMemo(() => {
     const shown = plot();

@@ -1,8 +1,7 @@
 // The stage that the figures speak of: its schematic, its values beside it, its two planes.
 
 import { For, Show, createMemo } from 'solid-js';
-import { drawSchematic, planesOf, schematicOf } from '../../figure/index.ts';
-import { slotsOf } from '../../spread/index.ts';
+import { deviceStages, drawSchematic, planesOf, schematicOf } from '../../figure/index.ts';
 import type { Desk } from '../desk/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
@@ -29,13 +28,8 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
   });
   /** The low and the high device beside the nominal one; none at a corner, which is a device of its own. */
   const devices = createMemo(() => {
-    const spread = props.desk.spread.now();
-    const found = spread?.report.devices.find(({ stage }) => stage === props.stage);
-    if (!spread || !found || props.desk.corner() !== null || props.desk.spread.isStale()) return [];
-    return (['low', 'high'] as const).flatMap((role) => {
-      const stage = document.sheet.standing(slotsOf(spread.model, found[role].where)).stage(props.stage);
-      return stage ? [{ role, label: `${role} device`, stage }] : [];
-    });
+    if (props.desk.corner() !== null || props.desk.spread.isStale()) return [];
+    return deviceStages(document.sheet, props.stage, props.desk.spread.now());
   });
   const planes = createMemo(() => {
     const stage = reading();

@@ -19,7 +19,7 @@ const KINDS: readonly (readonly [kind: OpenPoint['kind'], title: string])[] = [
 /** The list, or the sentence that nothing is open. `onFollow` is called once the cell is gone to. */
 export function OpenList(props: { readonly desk: Desk; readonly onFollow: () => void }) {
   const { document } = props.desk;
-  const points = createMemo(() => (document.version(), openPoints(document.sheet)));
+  const points = createMemo(() => (document.version(), openPoints(document.sheet, props.desk.spread.judged())));
   const groups = createMemo(() =>
     KINDS.map(([kind, title]) => ({ title, points: points().filter((point) => point.kind === kind) })).filter(
       (group) => group.points.length > 0,

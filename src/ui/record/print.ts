@@ -22,7 +22,11 @@ export function installPrint(desk: Desk, digestOf: (text: string) => string): ()
   const begin = (): void => {
     end();
     const { sheet } = desk.document;
-    const tree = recordOf(sheet, { digest: digestOf(sheet.tree.text), printedAt: momentText(new Date()) });
+    const tree = recordOf(sheet, {
+      judged: desk.spread.isStale() ? null : desk.spread.judged(),
+      digest: digestOf(sheet.tree.text),
+      printedAt: momentText(new Date()),
+    });
     const root = document.documentElement;
     for (const [property, value] of Object.entries(pageWords(tree))) root.style.setProperty(property, value);
     root.classList.add(PRINTING);

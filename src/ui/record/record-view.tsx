@@ -12,7 +12,15 @@ import './record-view.css';
 /** The record of the sheet on the desk over the whole page; `digest` is the SHA-256 of its text. */
 export function RecordView(props: { readonly desk: Desk; readonly digest: string; readonly onClose: () => void }) {
   const { document } = props.desk;
-  const tree = createMemo(() => (document.version(), recordOf(document.sheet, { digest: props.digest })));
+  const tree = createMemo(
+    () => (
+      document.version(),
+      recordOf(document.sheet, {
+        digest: props.digest,
+        judged: props.desk.spread.isStale() ? null : props.desk.spread.judged(),
+      })
+    ),
+  );
   const [ready, setReady] = createSignal(false);
   let dialog!: HTMLDialogElement;
   let place!: HTMLDivElement;

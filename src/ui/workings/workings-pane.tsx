@@ -10,6 +10,7 @@ import type { Pace } from '../pace/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { CellLinks } from './cell-links.tsx';
 import { kindWords, valueWords } from './cell-words.ts';
+import { EndsTable } from './ends-table.tsx';
 import { faultWords } from './fault-words.ts';
 import { formRows, partRows } from './part-rows.ts';
 import { FormTable, PartTable } from './part-tables.tsx';
@@ -136,6 +137,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
       <MendSection desk={props.desk} cell={props.cell} />
       <SpreadSection desk={props.desk} cell={props.cell} value={offered()} />
 
+      <EndsTable desk={props.desk} cell={props.cell} />
       <PartTable rows={partRows(props.cell, props.desk.view())} />
       <Show when={hasForms()}>
         <FormTable title={props.cell.kind === 'point' ? 'offers' : 'other forms'} rows={formRows(props.cell)} />
