@@ -68,6 +68,7 @@ function simplify({ program, slots, varying, frozen, outputs }: ColumnRequest): 
   const given = new Set([...Array.from(varying), ...Array.from(frozen)]);
   const known = new Uint8Array(slotCount);
   for (const slot of program.constantSlots) known[slot] = 1;
+  for (const slot of given) known[slot] = 1;
   const read = (slot: number): number => {
     if (numberOf[slot] < 0) numberOf[slot] = constant(slots[slot]);
     return numberOf[slot];

@@ -2,9 +2,10 @@
 
 import { worstDifference } from '../agreement.ts';
 import { compare, formatTimings } from '../compare.ts';
+import { createColumnar } from './columnar.ts';
 import { createExpressions, mapScope, objectScope } from './expressions.ts';
 import { createHandLoop } from './hand.ts';
-import { drawInputs } from './inputs.ts';
+import { CELLS, SUMMED, drawInputs } from './inputs.ts';
 import { createTape } from './tape.ts';
 
 const SAMPLES = 1024;
@@ -14,9 +15,14 @@ export function benchOneStage(): string[] {
   const columns = drawInputs(SAMPLES);
   const hand = createHandLoop(columns);
   const tape = createTape(columns);
+  const all = createColumnar(
+    columns,
+    CELLS.map((_, k) => k),
+  );
+  const few = createColumnar(columns, SUMMED);
   const withObject = createExpressions(columns, objectScope());
   const withMap = createExpressions(columns, mapScope());
-  for (const other of [tape, withObject, withMap]) {
+  for (const other of [tape, all, withObject, withMap]) {
     for (let i = 0; i < SAMPLES; i++) {
       hand.runOne(i);
       other.runOne(i);
@@ -32,6 +38,14 @@ export function benchOneStage(): string[] {
     ],
     { units: SAMPLES },
   );
+  const columnar = compare(
+    [
+      { name: 'loop by hand, one row', run: hand.run },
+      { name: 'columns, all cells', run: all.run, target: { atMost: 1.3 } },
+      { name: 'columns, six cells', run: few.run, target: { atMost: 1.3 } },
+    ],
+    { units: SAMPLES },
+  );
   const general = compare(
     [
       { name: 'compiled form, scalar', run: tape.run },
@@ -40,8 +54,18 @@ export function benchOneStage(): string[] {
     ],
     { units: SAMPLES, rounds: 5, warmUps: 1 },
   );
+  const generalColumns = compare(
+    [
+      { name: 'columns, all cells', run: all.run },
+      { name: 'general library, names in an object', run: withObject.run, target: { atLeast: 80 } },
+      { name: 'general library, names in a Map', run: withMap.run, target: { atLeast: 80 } },
+    ],
+    { units: SAMPLES, rounds: 5, warmUps: 1 },
+  );
   return [
     formatTimings('One stage, 8 inputs, 39 cells: one evaluation', 'sheet', evaluated),
     formatTimings('The same beside a general library', 'sheet', general),
+    formatTimings('The same in columns of many samples', 'sample', columnar),
+    formatTimings('Columns beside a general library', 'sample', generalColumns),
   ];
 }

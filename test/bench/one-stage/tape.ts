@@ -8,7 +8,8 @@ import type { Builder, KernelTable, Segment } from '../../../src/program/index.t
 import { CELLS, FIXED, INPUT_NAMES, POINT_INPUTS, POINT_OUTPUTS, STEPS, SUMMED } from './inputs.ts';
 import type { InputName } from './inputs.ts';
 
-const KERNELS: KernelTable = [
+/** The kernels of the bench's program. */
+export const KERNELS: KernelTable = [
   {
     name: 'line-point',
     run: (s, a, p) => {
@@ -63,7 +64,7 @@ export function createTape(columns: Readonly<Record<InputName, Float64Array>>) {
     evaluate(i);
     cells.forEach((slot, k) => (row[k] = slots[slot]));
   };
-  return { row, runOne, run };
+  return { row, runOne, run, program, slots, cells };
 }
 
 const BINARY = { '+': 'add', '-': 'sub', '*': 'mul', '/': 'div' } as const;
