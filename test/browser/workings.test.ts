@@ -58,7 +58,7 @@ test('a part has its numbers and its other forms in tables', async ({ page, addr
 test('what a cell uses and what uses it are ways to go there', async ({ page, address }) => {
   const pane = await openSheet(page, address);
   await cell(page, 'cell:G_chain', 'name').click();
-  await pane.getByRole('button', { name: 'gain holds, 2.09 dB to spare' }).click();
+  await pane.getByRole('button', { name: 'gain holds, 3.09 dB to spare' }).click();
   await expect.poll(() => focusedRow(page)).toBe('cell:gain name');
   await pane.getByRole('heading', { level: 2, name: 'gain' }).waitFor();
 });
