@@ -2,10 +2,11 @@
 
 import { worstDifference } from '../agreement.ts';
 import { compare, formatTimings } from '../compare.ts';
+import { createHandColumns, createHandSums } from './hand-columns.ts';
 import { createExpressions, mapScope, objectScope } from './expressions.ts';
 import { createHandLoop } from './hand.ts';
-import { drawInputs } from './inputs.ts';
-import { createTape } from './tape.ts';
+import { CELLS, MIXED, SUMMED, drawInputs } from './inputs.ts';
+import { createColumnar, createTape } from './tape.ts';
 
 const SAMPLES = 1024;
 
@@ -43,5 +44,37 @@ export function benchOneStage(): string[] {
   return [
     formatTimings('One stage, 8 inputs, 39 cells: one evaluation', 'sheet', evaluated),
     formatTimings('The same beside a general library', 'sheet', general),
+    ...benchColumns(),
   ];
+}
+
+/** Times many samples as columns, the FET saturated in all of them or in about half. Throws where the variants disagree. */
+function benchColumns(): string[] {
+  const everything = CELLS.map((_, k) => k);
+  return (
+    [
+      ['all saturated', drawInputs(SAMPLES), 1.3],
+      ['saturated and ohmic', drawInputs(SAMPLES, MIXED), 1.9],
+    ] as const
+  ).flatMap(([regions, columns, atMost]) =>
+    (
+      [
+        ['39 cells', createHandColumns(columns), createColumnar(columns, everything)],
+        ['6 cells', createHandSums(columns), createColumnar(columns, SUMMED)],
+      ] as const
+    ).map(([cells, hand, columnar]) => {
+      hand.run();
+      columnar.run();
+      const worst = Math.max(...hand.outputs.map((column, k) => worstDifference(column, columnar.outputs[k])));
+      if (!(worst < 1e-11)) throw new Error(`The columns differ by ${worst} from the loop by hand.`);
+      const timings = compare(
+        [
+          { name: 'loop by hand', run: hand.run },
+          { name: 'columns', run: columnar.run, target: { atMost } },
+        ],
+        { units: SAMPLES },
+      );
+      return formatTimings(`One stage as columns, ${cells}, ${regions}`, 'sample', timings);
+    }),
+  );
 }
