@@ -8,4 +8,9 @@ export interface Kernel {
   readonly outputs: readonly string[];
   /** Reads the input slots, writes the output slots, allocates nothing. */
   readonly run: (s: Float64Array, a: Int32Array, p: number) => void;
+  /**
+   * The same for many samples at once, to the last bit: place `at + n` is where the column of the n-th argument begins in
+   * `all`. Columns of results overlap no column of an input.
+   */
+  readonly columns?: (all: Float64Array, places: Int32Array, at: number, count: number) => void;
 }

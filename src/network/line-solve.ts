@@ -30,7 +30,7 @@ export const REGION = 4;
  * The problem on its way to the function of its region. As arguments, numbers are boxed wherever a call is not inlined,
  * and those functions are too long for that: a solve took a third longer.
  */
-const given = new Float64Array(6);
+export const givenLine = new Float64Array(6);
 
 /** Steps after which the bracket is as narrow as it can get; the fixed sets of tests need at most 16. */
 const STEP_CAP = 200;
@@ -48,30 +48,32 @@ const NOISE = 2 ** -51;
  */
 export function solveLine(beta: number, lambda: number, A: number, r: number, b: number, R: number): number {
   if (!(A > 0)) return leave(0, A, b, A, 0, 0);
-  given[0] = beta;
-  given[1] = lambda;
-  given[2] = A;
-  given[3] = r;
-  given[4] = b;
-  given[5] = R;
-  if (isOhmic(beta, lambda, A, r, b, R)) return R > 0 ? solveOhmic() : ohmicAt(beta, lambda, A, b);
+  givenLine[0] = beta;
+  givenLine[1] = lambda;
+  givenLine[2] = A;
+  givenLine[3] = r;
+  givenLine[4] = b;
+  givenLine[5] = R;
+  if (isOhmic(beta, lambda, A, r, b, R)) return solveOhmicLine();
   return solveSaturated();
 }
 
-function isOhmic(beta: number, lambda: number, A: number, r: number, b: number, R: number): boolean {
+/** Whether the root lies in the ohmic region, for `A` above 0. */
+export function isOhmic(beta: number, lambda: number, A: number, r: number, b: number, R: number): boolean {
   if (b < A) return true;
   const crossing = (b - A) / (R - r);
   const overdrive = A - r * crossing;
   return overdrive > 0 && crossing < beta * overdrive * overdrive * (1 + lambda * overdrive);
 }
 
-function solveSaturated(): number {
-  const beta = given[0];
-  const lambda = given[1];
-  const A = given[2];
-  const r = given[3];
-  const b = given[4];
-  const R = given[5];
+/** The root of what stands in `givenLine`, its region being saturation. */
+export function solveSaturated(): number {
+  const beta = givenLine[0];
+  const lambda = givenLine[1];
+  const A = givenLine[2];
+  const r = givenLine[3];
+  const b = givenLine[4];
+  const R = givenLine[5];
   if (2 * r > R && lambda > 0) return solveFedBack();
   const u = beta * (1 + lambda * b);
   const ru = r * u;
@@ -110,12 +112,12 @@ function leaveSaturated(I: number, vov: number, b: number, R: number, steps: num
 
 /** Saturation where most of the load line is also bias line (a diode connection has r = R): there b - R I has no digits left. */
 function solveFedBack(): number {
-  const beta = given[0];
-  const lambda = given[1];
-  const A = given[2];
-  const r = given[3];
-  const b = given[4];
-  const R = given[5];
+  const beta = givenLine[0];
+  const lambda = givenLine[1];
+  const A = givenLine[2];
+  const r = givenLine[3];
+  const b = givenLine[4];
+  const R = givenLine[5];
   const k = r / R;
   const d = b - A - (A * (R - r)) / r; // V_DS = d + x / k
   const rb = r * beta;
@@ -146,13 +148,15 @@ function solveFedBack(): number {
   return leave(beta * x * x * (1 + lambda * vds), x, vds, vds - x, 2, steps);
 }
 
-function solveOhmic(): number {
-  const beta = given[0];
-  const lambda = given[1];
-  const A = given[2];
-  const r = given[3];
-  const b = given[4];
-  const R = given[5];
+/** The root of what stands in `givenLine`, its region being the ohmic one. */
+export function solveOhmicLine(): number {
+  const beta = givenLine[0];
+  const lambda = givenLine[1];
+  const A = givenLine[2];
+  const r = givenLine[3];
+  const b = givenLine[4];
+  const R = givenLine[5];
+  if (!(R > 0)) return ohmicAt(beta, lambda, A, b);
   const k = r / R;
   const j = (R - r) / R; // 1 - k without its rounding
   const m = 2 * k - 1;

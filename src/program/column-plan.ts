@@ -173,14 +173,19 @@ function allocate(
   const args: number[] = [];
   steps.forEach((step, i) => {
     const from = step.inputs.map(place);
+    const release = (released: readonly number[]): void => {
+      for (const value of new Set(released)) {
+        if (lastRead.get(value) === i && values[value] === null && !kept.has(value)) free.push(columnOf.get(value)!);
+      }
+    };
+    // An operation may write where it reads; what a kernel writes first it might still read.
+    if (step.code !== OP.call) release(step.inputs);
     const to = step.outputs.map(place);
     if (step.code === OP.call) {
       ops.push(OP.call, step.kernel, args.length, from.length + to.length);
       args.push(...from, ...to);
     } else ops.push(step.code, to[0], from[0], from[from.length - 1]);
-    for (const value of new Set([...step.inputs, ...step.outputs])) {
-      if (lastRead.get(value) === i && values[value] === null && !kept.has(value)) free.push(columnOf.get(value)!);
-    }
+    release(step.code === OP.call ? [...step.inputs, ...step.outputs] : step.outputs);
   });
   const outputColumns = outputs.map(place);
   return {

@@ -17,5 +17,10 @@ export interface Segment {
 
 /** A multi-result operation: `args[at]`, `args[at + 1]`, .. are slots, inputs first, then outputs. */
 export type Kernel = (slots: Float64Array, args: Int32Array, at: number) => void;
-/** The kernels a program may call, by name; a program refers to them by their position. */
-export type KernelTable = readonly { readonly name: string; readonly run: Kernel }[];
+/** A kernel down columns: place `at + n` is where the column of its n-th argument begins in `all`; results overlap no input. */
+type ColumnKernel = (all: Float64Array, places: Int32Array, at: number, count: number) => void;
+/**
+ * The kernels a program may call, by name; a program refers to them by their position. What `columns` leaves is to the
+ * last bit what `run` leaves sample by sample.
+ */
+export type KernelTable = readonly { readonly name: string; readonly run: Kernel; readonly columns?: ColumnKernel }[];

@@ -13,6 +13,9 @@ export const INPUTS = {
   lambda: [0.01, 0.5],
 } as const;
 
+/** What stands otherwise for samples of which two in five are saturated and the others ohmic, the worst mix for a branch. */
+export const MIXED = { R_D: [6100, 0.2] } as const;
+
 /** What has no tolerance, in SI units. */
 export const FIXED = { R_L: 1e5, C_1: 1e-7, C_2: 1e-6, C_S: 4.7e-5, pi: Math.PI } as const;
 
@@ -77,14 +80,17 @@ export type InputName = keyof typeof INPUTS;
 export const INPUT_NAMES = Object.keys(INPUTS) as InputName[];
 
 /** One column per input, `count` values each, evenly spread over its tolerance; the same at every call. */
-export function drawInputs(count: number): Record<InputName, Float64Array> {
+export function drawInputs(
+  count: number,
+  otherwise: Partial<Record<InputName, readonly [nominal: number, tolerance: number]>> = {},
+): Record<InputName, Float64Array> {
   let state = 1;
   const even = () => {
     state = (Math.imul(state, 1664525) + 1013904223) | 0;
     return (state >>> 0) / 2 ** 31 - 1;
   };
   const columns = INPUT_NAMES.map((name) => {
-    const [nominal, tolerance] = INPUTS[name];
+    const [nominal, tolerance] = otherwise[name] ?? INPUTS[name];
     // Columns an exact power of two apart would share cache lines.
     const column = new Float64Array(count + 24).subarray(0, count);
     for (let i = 0; i < count; i++) column[i] = nominal * (1 + tolerance * even());

@@ -1,0 +1,73 @@
+// Kernels down columns against the same kernels sample by sample, to the last bit.
+
+import { expect, test } from 'vitest';
+import { KERNELS } from '../../src/network/index.ts';
+import type { Kernel } from '../../src/network/index.ts';
+import { createDraw } from '../support/counter-random.ts';
+
+const SPECIAL = [0, -0, 1, -1, NaN, Infinity, -Infinity, 1e-300, -1e300];
+
+/** What a kernel is given: the usual size of each input, by name, and its sign. */
+const USUAL: Readonly<Record<string, readonly [low: number, high: number]>> = {
+  beta: [1e-4, 1e-1],
+  lambda: [0, 0.1],
+  V_TO: [-4, 4],
+  V_GG: [-10, 10],
+  V_L: [-20, 20],
+  R_m: [0, 1e4],
+  R_L: [0, 1e4],
+  r_s: [0, 50],
+  r_d: [0, 50],
+  beta_exponent: [-2, 0],
+  tempco: [-3e-3, 0],
+  T_nom: [297, 299],
+  T: [220, 420],
+  doubling: [8, 12],
+  C_GS: [1e-12, 1e-9],
+  C_GD: [1e-12, 1e-9],
+  PB: [0.5, 1],
+  M: [0.3, 0.5],
+  V_GS: [-5, 1],
+  V_DS: [-5, 20],
+};
+
+function compareColumns(kernel: Kernel, seed: number): number {
+  const draw = createDraw(seed);
+  const width = kernel.inputs.length + kernel.outputs.length;
+  const count = 700;
+  const stride = count + 24;
+  const all = new Float64Array(width * stride);
+  kernel.inputs.forEach((name, k) => {
+    const [low, high] = USUAL[name] ?? [-2, 2];
+    const same = draw() < 0.2 ? low + (high - low) * draw() : NaN;
+    for (let i = 0; i < count; i++) {
+      const usual = name === 'channel' ? (draw() < 0.5 ? 1 : -1) : same === same ? same : low + (high - low) * draw();
+      all[k * stride + i] = draw() < 0.01 ? SPECIAL[Math.floor(draw() * SPECIAL.length)]! : usual;
+    }
+  });
+  const places = Int32Array.from({ length: width + 2 }, (_, n) => (n - 2) * stride);
+  kernel.columns!(all, places, 2, count);
+  const slots = new Float64Array(width);
+  const args = Int32Array.from({ length: width }, (_, n) => n);
+  for (let i = 0; i < count; i++) {
+    for (let k = 0; k < width; k++) slots[k] = k < kernel.inputs.length ? all[k * stride + i]! : 0;
+    kernel.run(slots, args, 0);
+    kernel.outputs.forEach((name, n) => {
+      const k = kernel.inputs.length + n;
+      if (!Object.is(all[k * stride + i], slots[k])) {
+        throw new Error(`${name} of sample ${i} is ${all[k * stride + i]}, not ${slots[k]} (seed ${seed})`);
+      }
+    });
+  }
+  return count;
+}
+
+const inColumns = Object.entries<Kernel>(KERNELS).filter(([, { columns }]) => columns !== undefined);
+
+test('there are kernels with a form for columns', () => {
+  expect(inColumns.map(([name]) => name)).toContain('line-point');
+});
+
+test.each(inColumns)('%s down columns leaves what it leaves sample by sample', (_, kernel) => {
+  for (let seed = 0; seed < 60; seed++) expect(compareColumns(kernel, seed)).toBeGreaterThan(0);
+});
