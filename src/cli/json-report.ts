@@ -64,6 +64,8 @@ export interface JsonReport {
   readonly cells: Readonly<Record<string, JsonCell>>;
   /** null where a check is not computed; `reserve` also where it has no number or is infinite. */
   readonly checks: Readonly<Record<string, JsonCheck>>;
+  /** Parts with further limits: the share of specimens left, and whether the nominal one is among them; where the sheet has spread. */
+  readonly declared?: Readonly<Record<string, { readonly share: number | null; readonly holds_nominal: boolean }>>;
   /** All checks together; where the sheet has spread. */
   readonly yield?: JsonYield | null;
   readonly cautions: readonly { readonly cell: string; readonly line: number; readonly text: string }[];
@@ -122,7 +124,7 @@ export function jsonReport(sheet: Sheet, workings: string | null, judged: Judged
     digest: sha256Hex(new TextEncoder().encode(tree.text)),
     cells: Object.fromEntries(cells),
     checks: Object.fromEntries(checks),
-    ...(spread ? { yield: spread.report.all } : {}),
+    ...(spread ? { declared: declaredParts(spread), yield: spread.report.all } : {}),
     cautions: sheet.cautions().map(({ cell, line, text }) => ({ cell, line: line + 1, text })),
     ...(workings === null ? {} : { workings: jsonWorkings(sheet, workings) }),
   };
@@ -188,6 +190,15 @@ function checkSpread(name: string, spread: SheetSpread | null): Partial<JsonChec
     fails_at: found.failsAt && place(found.failsAt, spread),
     yield: found.yield,
   };
+}
+
+function declaredParts({ report }: SheetSpread): NonNullable<JsonReport['declared']> {
+  return Object.fromEntries(
+    report.parts.map(({ cell, share, holdsNominal }) => [
+      cell,
+      { share: report.isEmpty ? 0 : share, holds_nominal: holdsNominal },
+    ]),
+  );
 }
 
 function place(where: readonly StandingDraw[], { model }: SheetSpread): Record<string, number> {

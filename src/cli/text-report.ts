@@ -5,6 +5,7 @@ import { lineColumn } from '../language/index.ts';
 import type { FieldTree, Line, Note, Source } from '../language/index.ts';
 import {
   checkText,
+  declaredSentences,
   endsText,
   failingText,
   failsCheck,
@@ -57,6 +58,7 @@ export function textReport(sheet: Sheet, width: number, judged: JudgedSpread | n
     [sheet.tree.title?.text ?? 'Sheet without a title', ...wrapText(verdict.sentence, width)],
     failing.length === 0 ? [] : ['Failing checks', ...table(failing, width)],
     ...sections(table(sheetItems(sheet, judged), width)),
+    listed('Declared set', judged ? declaredSentences(judged.spread) : [], width),
     listed(
       'Cautions',
       sheet.cautions().map(({ cell, line, text }) => `${cell}, line ${line + 1}: ${text}`),

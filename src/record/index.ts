@@ -24,3 +24,4 @@ export { printStep, stepSides, stepText, workingsOf } from './workings.ts';
 export type { PrintedStep } from './workings.ts';
 export { whereText } from './where-text.ts';
 export { stageEnds } from './stage-ends.ts';
+export { declaredSentences } from './declared-text.ts';

@@ -4,6 +4,7 @@
 import type { CellReading, Sheet } from '../sheet/index.ts';
 import type { SheetSpread } from '../spread/index.ts';
 import { checkText, checkUnit, reserveText } from './check-text.ts';
+import { declaredSentences } from './declared-text.ts';
 import { whereText } from './where-text.ts';
 import { countText, shareText, yieldText } from './yield-text.ts';
 
@@ -55,6 +56,7 @@ export function verdictOf(sheet: Sheet, judged: JudgedSpread | null = null): Ver
       `${waiting.length === 1 ? '1 cell has' : `${waiting.length} cells have`} no value: ${list(waiting)}.`,
     );
   }
+  if (judged?.spread.report.isEmpty) sentences.push(...declaredSentences(judged.spread));
   sentences.push(...checkSentences(checks, failing, judged));
   const incomplete = broken.length + waiting.length > 0;
   const state = failing.length > 0 ? 'fails' : checks.length === 0 ? 'nothing required' : 'holds';
@@ -120,7 +122,16 @@ export function failingText(cell: CellReading, judged: JudgedSpread | null): str
       : `is ${reserveText(reserve.value, cell.check.reserveType, checkUnit(cell))}`;
   const place = whereText(judged!.spread, spread.failsAt ?? []);
   const reached = spread.yield?.share === 1 ? `, which none of ${countText(spread.yield.n)} builds reached` : '';
-  return `holds nominally but ${short} at an extreme${place === '' ? '' : ` (${place})`}${reached}`;
+  const needed = spread.trackingNeeded;
+  const tracking = needed
+    ? `; with a tracking of ${needed.part} of ${trackingText(needed.tracking)} it would hold`
+    : '';
+  return `holds nominally but ${short} at an extreme${place === '' ? '' : ` (${place})`}${reached}${tracking}`;
+}
+
+function trackingText(tracking: number): string {
+  const text = Math.abs(tracking).toFixed(2).replace(/0$/, '');
+  return tracking < 0 ? `−${text} or below` : `${text} or more`;
 }
 
 function openText(open: readonly string[]): string {

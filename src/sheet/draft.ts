@@ -65,7 +65,8 @@ interface TieDraft {
   /** The row that says how much there is. */
   readonly gain: string;
   readonly gainFalls: boolean;
-  readonly tracking: Handle;
+  /** null where nothing is declared. */
+  readonly tracking: Handle | null;
 }
 
 export interface SpreadDraft {

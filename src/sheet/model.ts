@@ -261,6 +261,8 @@ export interface SpreadModel {
   readonly drawn: readonly Drawn[];
   readonly cuts: readonly Cut[];
   readonly ties: readonly Tie[];
+  /** Every pair of draws that could go together, tied or not; `tracking` is 0 where nothing is declared. */
+  readonly pairs: readonly Tie[];
   /** Every number, region and condition of the sheet that has a value. */
   readonly values: readonly Wanted[];
   readonly checks: readonly WantedCheck[];

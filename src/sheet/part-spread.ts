@@ -103,7 +103,7 @@ function tieOf(family: Family, channel: 1 | -1, used: ReadonlySet<string>, given
   const tracking = given.get('tracking')?.[0];
   const threshold = THRESHOLD_ROWS.find((name) => used.has(name));
   const gain = [...GAIN_ROWS.keys()].find((name) => used.has(name));
-  if (!tracking || !threshold || !gain) return null;
+  if (!threshold || !gain) return null;
   const cardOfJfet = family === 'JFET' && threshold === 'V_TO';
   const sense = cardOfJfet ? 1 : channel;
   return {
@@ -112,6 +112,6 @@ function tieOf(family: Family, channel: 1 | -1, used: ReadonlySet<string>, given
     thresholdFalls: family === 'JFET' ? sense === 1 : sense === -1,
     gain,
     gainFalls: GAIN_ROWS.get(gain) === 'falls',
-    tracking: tracking.handle,
+    tracking: tracking?.handle ?? null,
   };
 }

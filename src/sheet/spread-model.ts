@@ -16,6 +16,7 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
   const drawn: Drawn[] = [];
   const cuts: Cut[] = [];
   const ties: Tie[] = [];
+  const pairs: Tie[] = [];
   const values: Wanted[] = [];
   const checks: WantedCheck[] = [];
   const tunable: SpreadModel['tunable'][number][] = [];
@@ -56,7 +57,10 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
       const [threshold, gain] = [place(tie.threshold), place(tie.gain)];
       if (threshold >= 0 && gain >= 0) {
         const { thresholdFalls, gainFalls } = tie;
-        ties.push({ cell, threshold, gain, thresholdFalls, gainFalls, tracking: read(tie.tracking) });
+        const tracking = tie.tracking === null ? 0 : read(tie.tracking);
+        const pair: Tie = { cell, threshold, gain, thresholdFalls, gainFalls, tracking };
+        pairs.push(pair);
+        if (tie.tracking !== null) ties.push(pair);
       }
     }
     if (draft.type !== null && draft.value !== null) {
@@ -84,5 +88,5 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
       if (offer.slot >= 0) values.push({ path: path(name), cell, slot: offer.slot, type: offer.type });
     }
   }
-  return { program, slots, drawn, cuts, ties, values, checks, tunable, stages };
+  return { program, slots, drawn, cuts, ties, pairs, values, checks, tunable, stages };
 }

@@ -36,6 +36,7 @@ export function analyse(model: SpreadModel, { samples, seed }: { samples: number
   for (let first = 0; first < samples; first += PORTION) {
     analysis.take(builds.count(first, Math.min(PORTION, samples - first)));
   }
+  analysis.lookForTracking();
   return readSpread(model, analysis.report());
 }
 

@@ -22,6 +22,8 @@ import type {
 } from './report.ts';
 import { BINS, addTally, emptyTally } from './tally.ts';
 import type { Tally } from './tally.ts';
+import { trackingNeeded } from './tracking-needed.ts';
+import type { NeededTracking } from './tracking-needed.ts';
 import { whereIs } from './where.ts';
 
 interface Analysis {
@@ -29,6 +31,8 @@ interface Analysis {
   ranges(): { low: Float64Array; high: Float64Array };
   /** Takes a tally of the builds that follow those taken so far. */
   take(tally: Tally): void;
+  /** Works out for each failing check from which tracking on it would hold. */
+  lookForTracking(): void;
   report(): SpreadReport;
 }
 
@@ -66,6 +70,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
   const builds = createBuilds(model, seed, first);
   const sum = emptyTally(builds.shape);
   const devices = stageDevices(model, effort, set);
+  const needed = new Map<string, NeededTracking | null>();
   let repaired = 0;
 
   function take(tally: Tally): void {
@@ -141,6 +146,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
       failsAt: fails ? place(verdictAt(c), failing) : null,
       yield: ends.any.length > 0 || sum.builds === 0 ? null : share(sum.passes[c]!, sum.builds),
       open: ends.any,
+      trackingNeeded: fails ? (needed.get(checks[c]!.name) ?? null) : null,
       causes: causes(c),
     };
   }
@@ -163,6 +169,11 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
   return {
     ranges: () => first,
     take,
+    lookForTracking() {
+      checks.forEach(({ name }, c) => {
+        if (search.of(verdictAt(c)).low.value === 0) needed.set(name, trackingNeeded(model, name));
+      });
+    },
     report: () => ({
       builds: sum.builds,
       isEmpty: search.isEmpty,

@@ -75,6 +75,7 @@ export function* createSpreadJob({ id, model, samples, seed, effort }: SpreadQue
     first += count;
     portions++;
     const isLast = first >= samples;
+    if (isLast && effort === 'full') analysis.lookForTracking();
     if (isLast || portions === 1 || portions % PORTIONS_PER_ANSWER === 0)
       yield { kind: 'spread', id, report: analysis.report(), isLast };
   }

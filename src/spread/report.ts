@@ -2,6 +2,7 @@
 // each check whether it holds everywhere and in what share of builds. Plain data.
 
 import type { StageDevices } from './devices.ts';
+import type { NeededTracking } from './tracking-needed.ts';
 import type { StandingDraw } from './where.ts';
 
 /** One end of a value. */
@@ -67,6 +68,8 @@ export interface CheckSpread {
   readonly yield: Share | null;
   /** Draws with an open end on which it depends. */
   readonly open: readonly string[];
+  /** The tracking of one part from which it would hold; null where none would, where it holds, and before that was looked for. */
+  readonly trackingNeeded: NeededTracking | null;
   /** What the failing builds have in common, the most telling draw first. */
   readonly causes: readonly Cause[];
 }

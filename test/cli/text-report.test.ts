@@ -113,3 +113,19 @@ describe('the printed workings', () => {
     expect(out).toMatch(/^Workings of x_1\n {2}line 1, column 7: 1 V is a voltage and 2 mA is a current/);
   });
 });
+
+describe('the declared set in the plain report', () => {
+  const part = 'Q1 = n-JFET\n  I_DSS: 4 mA in 2 mA .. 6 mA\n  V_P: -2 V in -3 V .. -1 V\n';
+
+  it('says which share of the specimens further limits leave', () => {
+    const { out } = runSheet(`${part}  g_fs0: 3 mS .. 5 mS\n`, '--samples', '2000');
+    expect(out).toMatch(/^Declared set\n {2}g_fs0 of Q1 cuts the declared set: [3-6]\d(\.\d)? % of the specimens/m);
+  });
+
+  it('says that limits contradict each other, and gives no ends', () => {
+    const { out, status } = runSheet(`${part}  g_fs0: 20 mS .. 30 mS\nx = Q1.I_DSS * 1\na = check x > 0 A\n`);
+    expect(out).toContain('The limits of Q1 (g_fs0) contradict each other');
+    expect(out).toContain('– .. –');
+    expect(status).toBe(1);
+  });
+});

@@ -203,3 +203,21 @@ describe('draws', () => {
 test('a sheet without spread has nothing to analyse', () => {
   expect(analyse(createSheet('R = 1 kohm').spreadModel(), { samples: 10, seed: 1 })).toBeNull();
 });
+
+describe('tracking that would do', () => {
+  const part =
+    'Q1 = n-JFET\n  I_DSS: 5 mA in 1 mA .. 9 mA\n  V_P: -2.5 V in -4 V .. -1 V\nx = Q1.I_DSS / abs(Q1.V_P)\n';
+
+  test('a check that fails for independent rows says from which tracking on it would hold', () => {
+    // At |u - v| <= w the ratio reaches 1 + 8 w at u = 0 and 9 / (4 - 3 w) at v = 1: below 3 mS up to w = 0.25.
+    const { trackingNeeded } = spreadOf(`${part}a = check x <= 3 mS`, 500).check('a')!;
+    expect(trackingNeeded!.part).toBe('Q1');
+    expect(trackingNeeded!.tracking).toBeGreaterThanOrEqual(0.75);
+    expect(trackingNeeded!.tracking).toBeLessThanOrEqual(0.77);
+  });
+
+  test('none is named where none would do, and where the check holds', () => {
+    const { check } = spreadOf(`${part}a = check x <= 1.5 mS\nb = check x <= 10 mS`, 500);
+    expect([check('a')!.trackingNeeded, check('b')!.trackingNeeded]).toEqual([null, null]);
+  });
+});

@@ -102,6 +102,47 @@ A1 = stage of Q1
   });
 });
 
+describe('published examples with a least and a largest device', () => {
+  // A. Malvino and D. Bates, Electronic Principles, Ex. 13-7 (FOSSEE companion notebook): the bias line of 270 ohm through the
+  // transfer curves of a 2N5486 of 8 mA, -2 V and one of 20 mA, -6 V; the graph reads 2.8 mA and 8.0 mA.
+  test('self bias: the two crossings of the bias line are the ends of I_D and of V_GS', () => {
+    const { of } = extremesOf(
+      `Q1 = n-JFET
+  I_DSS: 8 mA .. 20 mA
+  V_P: -6 V .. -2 V
+A1 = stage of Q1
+  gate: to 0 V
+  drain: to 30 V
+  source: 270 ohm to 0 V`,
+      ['A1.I_D', 'A1.V_GS'],
+    );
+    expect(off(of('A1.I_D').low.value, 2.926912e-3)).toBeLessThan(1e-6);
+    expect(off(of('A1.I_D').high.value, 8.08937e-3)).toBeLessThan(1e-6);
+    expect(off(of('A1.V_GS').high.value, -0.7902662)).toBeLessThan(1e-6);
+    expect(off(of('A1.V_GS').low.value, -2.18413)).toBeLessThan(1e-6);
+  });
+
+  // Y. N. Bapat, Electronics Circuits and Systems, Examples 4.9 and 4.10: two devices in a four-resistor stage. With V_T and K
+  // going up together the ends of the current are those two devices.
+  test('four resistors: two devices that go up together', () => {
+    const { of } = extremesOf(
+      `Q1 = n-MOSFET
+  V_TO: 2 V .. 3 V
+  K: 0.25 mA/V^2 .. 0.375 mA/V^2
+  tracking: 1
+A1 = stage of Q1
+  gate: 12 Mohm to 24 V, 8.57 Mohm to 0 V
+  drain: 12 kohm to 24 V
+  source: 6 kohm to 0 V`,
+      ['A1.I_D', 'A1.V_GS'],
+    );
+    expect(off(of('A1.I_D').high.value, 0.9998611e-3)).toBeLessThan(1e-6);
+    expect(off(of('A1.I_D').low.value, 0.9072656e-3)).toBeLessThan(1e-6);
+    expect(off(of('A1.V_GS').low.value, 3.999861)).toBeLessThan(1e-6);
+    expect(off(of('A1.V_GS').high.value, 4.555434)).toBeLessThan(1e-6);
+  });
+});
+
 /** A sheet, the draws that are turned on the grid, and which specimens belong to it. */
 interface Forced {
   readonly name: string;

@@ -1,6 +1,7 @@
 // The foot of the page: what is selected, the keys that serve there, what was just done, and whether it is kept.
 
 import { For, Show } from 'solid-js';
+import { countText } from '../../record/index.ts';
 import type { Desk } from '../desk/index.ts';
 
 const HINTS: readonly (readonly [key: string, what: string])[] = [
@@ -45,6 +46,16 @@ export function StatusLine(props: { readonly desk: Desk; readonly kept: string }
                 </button>
               )}
             </Show>
+          </span>
+        )}
+      </Show>
+      <Show when={desk.spread.progress()}>
+        {(progress) => (
+          <span class="status-progress">
+            {countText(progress().builds)} of {countText(progress().of)} builds counted{' '}
+            <button type="button" onClick={() => desk.spread.stop()}>
+              Stop
+            </button>
           </span>
         )}
       </Show>

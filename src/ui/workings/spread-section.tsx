@@ -1,6 +1,7 @@
 // What the workings say of spread: the ends of a value and where they are, how the builds lie, and what moves it most.
 
 import { For, Show, createMemo } from 'solid-js';
+import { declaredSentences } from '../../record/index.ts';
 import type { CellReading, OfferedReading } from '../../sheet/index.ts';
 import { moversOf } from '../../spread/index.ts';
 import type { Desk } from '../desk/index.ts';
@@ -29,6 +30,9 @@ export function SpreadSection(props: {
   });
   const said = createMemo(() => {
     const judged = desk.spread.judged();
+    if (judged && props.cell.kind === 'part') {
+      return declaredSentences(judged.spread).filter((sentence) => sentence.includes(props.cell.name));
+    }
     return judged && props.cell.kind === 'check' ? checkSentences(props.cell, judged) : [];
   });
   const rested = createRested(desk.spread.now, PACE);
