@@ -118,7 +118,9 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     if (n < sum.builds || !(low > -Infinity && high < Infinity)) return null;
     const bins = sum.bins.slice(w * BINS, (w + 1) * BINS);
     const histogram = { counts: bins, low: first.low[w]!, high: first.high[w]!, least: low, largest: high };
-    const at = (p: number): number => quantileOf(histogram, p);
+    // Where the ends were one number when counting began, nothing was put into bins.
+    const isCounted = first.low[w]! < first.high[w]!;
+    const at = (p: number): number => (isCounted ? quantileOf(histogram, p) : sum.moments.mean[w]!);
     return {
       n,
       mean: sum.moments.mean[w]!,

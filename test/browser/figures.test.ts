@@ -209,11 +209,11 @@ test('a followed plane is kept as a plot cell, once', async ({ page, address }) 
   const keep = plane.getByRole('button', { name: 'keep in the sheet' });
   await keep.click();
   await expect
-    .poll(() => page.locator('[data-key="cell:F4"] [data-column="entry"]').textContent())
+    .poll(() => page.locator('[data-key="cell:F5"] [data-column="entry"]').textContent())
     .toBe('plot transfer of A2');
-  await pane.locator('summary', { hasText: 'F4 transfer of A2' }).waitFor();
+  await pane.locator('summary', { hasText: 'F5 transfer of A2' }).waitFor();
   await expect(keep.count()).resolves.toBe(0);
   await page.keyboard.press('Control+z');
   await keep.waitFor();
-  await expect.poll(() => page.locator('[data-key="cell:F4"]').count()).toBe(0);
+  await expect.poll(() => page.locator('[data-key="cell:F5"]').count()).toBe(0);
 });

@@ -22,6 +22,9 @@ export interface SpreadFeed {
   stop(): void;
 }
 
+/** One frame, ms. */
+const FRAME = 17;
+
 /** Follows a document; to be called inside a component or root. */
 export function createSpreadFeed(document: SheetDocument): SpreadFeed {
   const [now, setNow] = createSignal<SheetSpread | null>(null);
@@ -35,8 +38,19 @@ export function createSpreadFeed(document: SheetDocument): SpreadFeed {
   const [progress, onProgress] = createSignal<Progress | null>(null);
   const sampling = createMemo(() => samplingOf(document.tree()));
   const follower = createFollower(startWorker, { onKnown, onStale, onProgress });
-  createEffect(on([document.version, sampling], () => follower.follow(document.sheet.spreadModel(), sampling())));
-  onCleanup(() => follower.end());
+  // The edited row is painted first; what spreads is collected behind it.
+  let behind: ReturnType<typeof setTimeout> | undefined;
+  createEffect(
+    on([document.version, sampling], () => {
+      setStale(true);
+      clearTimeout(behind);
+      behind = setTimeout(() => follower.follow(document.sheet.spreadModel(), sampling()), FRAME);
+    }),
+  );
+  onCleanup(() => {
+    clearTimeout(behind);
+    follower.end();
+  });
   const judged = createMemo<JudgedSpread | null>(() => {
     const spread = now();
     return spread && { spread, leastYield: sampling().leastYield };
