@@ -46,4 +46,4 @@ export { digitsToTell, formatReserve, formatRow, formatWindow } from './format-e
 export type { SeriesName } from './e-series.ts';
 export { SERIES, SERIES_NAMES } from './e-series.ts';
 export type { PreferredDirection } from './preferred.ts';
-export { nextPreferred, preferredValue, seriesForTolerance } from './preferred.ts';
+export { nextPreferred, preferredValue } from './preferred.ts';

@@ -8,28 +8,10 @@ export type PreferredDirection = 'nearest' | 'up' | 'down';
 /** Digits to which a wanted value is read: closer to a preferred value than 5e-13 of it counts as that value. */
 const READ_DIGITS = 13;
 
-/** The tolerance that goes with each series as IEC 60063 pairs them, from the tightest; all tighter ones share E96. */
-const SERIES_BY_TOLERANCE: readonly (readonly [tolerance: number, series: SeriesName])[] = [
-  [0.01, 'E96'],
-  [0.02, 'E48'],
-  [0.05, 'E24'],
-  [0.1, 'E12'],
-];
-/** Share of a tolerance that is float noise. */
-const NOISE = 1e-9;
-
 /** Where a value stands in its series: index in the decade, and the decade's power of ten. */
 interface Place {
   readonly index: number;
   readonly decade: number;
-}
-
-/**
- * The coarsest series whose steps suit a relative tolerance (0.05 for ± 5 %): E96 up to 1 %, E48 up to 2 %, E24 up to
- * 5 %, E12 up to 10 %, E6 beyond. Source: IEC 60063, the pairing of series and tolerances, from memory.
- */
-export function seriesForTolerance(tolerance: number): SeriesName {
-  return SERIES_BY_TOLERANCE.find(([most]) => tolerance <= most * (1 + NOISE))?.[1] ?? 'E6';
 }
 
 /**

@@ -104,15 +104,7 @@ describe('turning a number', () => {
   };
 
   test.each([
-    ['R_S = 1.2 kohm', 'up', 'R_S = 1.3 kohm'],
-    ['R_S = 10 kohm ± 0.1 %', 'up', 'R_S = 10.2 kohm ± 0.1 %'],
-    ['R_S = 10 kohm ± 1 %', 'up', 'R_S = 10.2 kohm ± 1 %'],
-    ['R_S = 10 kohm ± 100 ohm', 'up', 'R_S = 10.2 kohm ± 100 ohm'],
-    ['R_S = 10 kohm ± 2 %', 'up', 'R_S = 10.5 kohm ± 2 %'],
-    ['R_S = 10 kohm ± 5 %', 'up', 'R_S = 11 kohm ± 5 %'],
-    ['C_S = 10 uF ± 10 %', 'up', 'C_S = 12 uF ± 10 %'],
-    ['C_S = 10 uF ± 20 %', 'down', 'C_S = 6.8 uF ± 20 %'],
-    ['R_S = 1.2 kohm ± 1 %', 'up', 'R_S = 1.21 kohm ± 1 %'],
+    ['R_S = 1.2 kohm ± 1 %', 'up', 'R_S = 1.3 kohm ± 1 %'],
     ['R_S = 910 ohm', 'up', 'R_S = 1 kohm'],
     ['R_S = 910Ω ± 5 %', 'up', 'R_S = 1kΩ ± 5 %'],
     ['R_S = 9k1', 'up', 'R_S = 10k'],
@@ -135,7 +127,5 @@ describe('turning a number', () => {
   test('a dragged tick snaps to the series', () => {
     const turned = turnedNumber(createSheet('R_1 = 1 kohm').tree, 0, 'nominal')!;
     expect([1490, 1560].map((value) => snapped(turned, value))).toEqual([1500, 1600]);
-    const tight = turnedNumber(createSheet('R_1 = 1 kohm ± 1 %').tree, 0, 'nominal')!;
-    expect([1490, 1560].map((value) => snapped(tight, value))).toEqual([1500, 1580]);
   });
 });

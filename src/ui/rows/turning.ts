@@ -1,6 +1,6 @@
 // Turning a number: the literal of a row that can be stepped, its neighbours, and the text of another value in the
-// author's own spelling. Resistances, capacitances and inductances go along the preferred series that fits their
-// tolerance; other numbers go by 1, 2 or 5 in their third digit.
+// author's own spelling. Resistances, capacitances and inductances go along a preferred series; other numbers go
+// by 1, 2 or 5 in their third digit.
 
 import { literalOf } from '../../language/index.ts';
 import type { Line, Literal, QuantityEntry, SheetTree, Splice } from '../../language/index.ts';
@@ -14,13 +14,11 @@ import {
   RESISTANCE,
   sameKind,
   scaleToSI,
-  seriesForTolerance,
   typesetUnit,
 } from '../../quantity/index.ts';
 import type { SeriesName } from '../../quantity/index.ts';
 import type { Column } from '../desk/index.ts';
 
-/** The series of a number without a tolerance. */
 const SERIES: SeriesName = 'E24';
 const STEPPED_DIGIT = 3;
 /** Share of a step that is float noise. */
@@ -30,8 +28,6 @@ const NOISE = 1e-6;
 interface Turned {
   readonly line: Line;
   readonly literal: Literal;
-  /** The preferred series it goes along, if its kind has any. */
-  readonly series: SeriesName;
 }
 
 /** The number that a column of a line turns: an end where an end has the focus, else the nominal value; null where there is none. */
@@ -45,15 +41,15 @@ export function turnedNumber(tree: SheetTree, lineIndex: number, column: Column)
     const [least, most] = first.value <= last.value ? [first, last] : [last, first];
     // Of negative quantities the ends stand by magnitude.
     const isLeast = (column === 'low') !== (least.value < 0 && most.value < 0);
-    return { line, literal: isLeast ? least : most, series: SERIES };
+    return { line, literal: isLeast ? least : most };
   }
-  return nominal ? { line, literal: nominal, series: seriesOf(nominal, entry.spread?.tolerance ?? null) } : null;
+  return nominal ? { line, literal: nominal } : null;
 }
 
 /** The next value in one direction; null where there is none. */
-export function nextValue({ literal, series }: Turned, way: 'up' | 'down'): number | null {
+export function nextValue({ literal }: Turned, way: 'up' | 'down'): number | null {
   const { value, kind } = literal;
-  if (isPreferred(literal)) return nextPreferred(series, value, way);
+  if (isPreferred(literal)) return nextPreferred(SERIES, value, way);
   const { amount, toSI } = inUnit(literal);
   const step = stepOf(amount);
   // What stands between two steps goes to the nearer of them in that direction first.
@@ -64,8 +60,8 @@ export function nextValue({ literal, series }: Turned, way: 'up' | 'down'): numb
 }
 
 /** The nearest value that stepping could reach. */
-export function snapped({ literal, series }: Turned, value: number): number {
-  if (isPreferred(literal)) return preferredValue(series, Math.max(value, Number.MIN_VALUE), 'nearest');
+export function snapped({ literal }: Turned, value: number): number {
+  if (isPreferred(literal)) return preferredValue(SERIES, Math.max(value, Number.MIN_VALUE), 'nearest');
   const { unit } = literal;
   const amount = unit ? fromSI(value, unit) : value;
   const step = stepOf(amount);
@@ -82,12 +78,6 @@ export function setTurned({ line, literal }: Turned, value: number): Splice[] {
 function quantityOf({ tree }: Line): QuantityEntry | null {
   if (tree.type === 'cell') return tree.entry.type === 'quantity' ? tree.entry : null;
   return tree.type === 'field' && tree.body.type === 'quantity' ? tree.body : null;
-}
-
-/** A tolerance in the unit of the value is taken as the share of it that it is now. */
-function seriesOf({ value, kind }: Literal, tolerance: Literal | null): SeriesName {
-  if (tolerance === null) return SERIES;
-  return seriesForTolerance(sameKind(tolerance.kind, kind) ? tolerance.value / Math.abs(value) : tolerance.value);
 }
 
 function isPreferred({ kind, value }: Literal): boolean {
