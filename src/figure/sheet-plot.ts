@@ -16,8 +16,11 @@ const PLOT_POINTS = 161;
 /** The charts of a plot cell, or the sentence that says why there are none. */
 type SheetPlot = { readonly charts: readonly Chart[] } | { readonly message: string };
 
+/** What is known of the spread of a sheet: nothing yet, or that nothing spreads (null). */
+type KnownSpread = SheetSpread | 'not counted' | null;
+
 /** What a plot cell shows. */
-export function sheetPlot(sheet: SheetView, name: string, spread: SheetSpread | null = null): SheetPlot {
+export function sheetPlot(sheet: SheetView, name: string, spread: KnownSpread = null): SheetPlot {
   const cell = sheet.cell(name);
   if (cell === null || cell.tree.entry.type !== 'plot') return { message: `${name} is no figure.` };
   if (cell.fault !== null) return { message: cell.waitsFor ? `${name} waits for ${cell.waitsFor}.` : cell.fault.text };
@@ -51,7 +54,7 @@ export function sheetPlot(sheet: SheetView, name: string, spread: SheetSpread | 
 }
 
 /** The histogram of a value of the sheet. */
-function spreadPlot(sheet: SheetView, tree: CellReading['tree'], spread: SheetSpread | null): SheetPlot {
+function spreadPlot(sheet: SheetView, tree: CellReading['tree'], spread: KnownSpread): SheetPlot {
   if (tree.entry.type !== 'plot') throw new Error('A plot is drawn of a plot cell.');
   const [value] = tree.entry.values;
   const path = value?.type === 'path' ? value.names.map((part) => part.name).join('.') : null;
@@ -61,17 +64,16 @@ function spreadPlot(sheet: SheetView, tree: CellReading['tree'], spread: SheetSp
   const reading = rest.length === 0 ? cell?.reading : cell?.values.find((each) => each.name === rest.join('.'));
   if (!reading || !isKind(reading.type) || typeof reading.value !== 'number')
     return { message: `${path} has no number.` };
+  const uncounted: SheetPlot = { message: `The builds of ${path} are not counted yet.` };
+  if (spread === 'not counted') return uncounted;
   const found = spread?.value(path) ?? null;
   if (found === null || !found.moves) return { message: `Nothing that spreads moves ${path}.` };
   const { distribution, low, high } = found;
   if (distribution === null || low.value === null || high.value === null) {
     const open = [...new Set([...low.open, ...high.open])];
-    return {
-      message:
-        open.length > 0
-          ? `${path} has no spread to draw: ${open.join(', ')} has an open end.`
-          : `The builds of ${path} are not counted yet.`,
-    };
+    return open.length === 0
+      ? uncounted
+      : { message: `${path} has no spread to draw: ${open.join(', ')} has an open end.` };
   }
   const counts = Float64Array.from({ length: HISTOGRAM_BINS }, (_, bin) => {
     const size = distribution.bins.length / HISTOGRAM_BINS;

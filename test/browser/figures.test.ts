@@ -101,11 +101,11 @@ test('plots of the sheet stand below in its order and fold', async ({ page, addr
   const plots = pane.locator('details.plot-figure');
   await expect
     .poll(() => plots.locator('> summary').allTextContents())
-    .toEqual(['F1 transfer of A1', 'F2 output of A1', 'F3 ID, A1 against RS2']);
+    .toEqual(['F1 transfer of A1', 'F2 output of A1', 'F3 ID, A1 against RS2', 'F4 spread of ID, A1']);
   // Planes of the stage that is followed stand above; below they are folded.
   await expect
     .poll(() => plots.evaluateAll((all) => all.map((each) => (each as HTMLDetailsElement).open)))
-    .toEqual([false, false, true]);
+    .toEqual([false, false, true, true]);
   await plots.nth(2).locator('> summary').click();
   await expect.poll(() => plots.nth(2).locator('canvas').count()).toBe(0);
   await plots.nth(2).locator('> summary').click();
@@ -119,8 +119,9 @@ test('plots of the sheet stand below in its order and fold', async ({ page, addr
 test('in print charts are lines, not pixels', async ({ page, address }) => {
   const pane = await openFigures(page, address);
   await pane.locator('summary', { hasText: 'F1 transfer of A1' }).click();
-  const charts = 4;
-  await expect.poll(() => pane.locator('canvas').count()).toBe(charts);
+  const charts = 5;
+  // One of them is the histogram, which is drawn once builds are counted.
+  await expect.poll(() => pane.locator('canvas').count(), { timeout: 10_000 }).toBe(charts);
   await page.evaluate(() => window.dispatchEvent(new Event('beforeprint')));
   await expect(pane.locator('.chart-place svg').count()).resolves.toBe(charts);
   await expect(pane.locator('canvas').count()).resolves.toBe(0);

@@ -24,7 +24,9 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
   const version = createRested(document.version, PACE);
   const plot = createMemo(() => {
     version();
-    return open() ? sheetPlot(props.desk.view(), props.name, props.desk.spread.now()) : null;
+    const { spread } = props.desk;
+    const known = spread.now() ?? (spread.isStale() ? 'not counted' : null);
+    return open() ? sheetPlot(props.desk.view(), props.name, known) : null;
   });
   const charts = createMemo(() => {
     const shown = plot();
