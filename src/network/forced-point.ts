@@ -14,7 +14,7 @@ import { CANNOT_CARRY, LEFT_OPEN, NOT_A_NUMBER, RUNAWAY, SOLVED } from './point-
 import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 import { balanceHeat, thermalRoots } from './thermal-balance.ts';
 
-const unknownPower = (): number => Infinity;
+const unknownPower = (): boolean => false;
 
 /** Drain to source voltage in V up to which a forced current is tried; no discrete FET of this trade stands more. */
 const FORCED_CEILING = 1000;

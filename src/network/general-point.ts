@@ -8,7 +8,7 @@ import { betaAt, leakageAt, thresholdAt } from '../fet/index.ts';
 import { solveWithBody } from './body-solve.ts';
 import type { Kernel } from './kernel.ts';
 import { POINT_OUTPUTS, refuse } from './line-point.ts';
-import { CURRENT, DRAIN_SOURCE, MARGIN, OVERDRIVE, REGION, line } from './line-solve.ts';
+import { CURRENT, DRAIN_SOURCE, MARGIN, OVERDRIVE, REGION, givenLine, line, solveGivenLine } from './line-solve.ts';
 import { NOT_A_NUMBER, RUNAWAY, SOLVED } from './point-status.ts';
 import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
 import { balanceHeat, thermalRoots } from './thermal-balance.ts';
@@ -58,7 +58,7 @@ const [BETA, VTO, LAMBDA, VGG, RM, VL, RL, VSB, RB, RS, RD, GAMMA, PHI] = [1, 2,
 const [IGSS, DOUBLING, QGS, QDS, QSB, EXPONENT, TEMPCO, TNOM, TA, RTH] = [14, 15, 16, 17, 18, 19, 20, 21, 22, 23];
 
 /** What `solveAt` leaves beside `line`. */
-const at = { reversed: false, beta: 0, vto: 0, leakage: 0, vsb: 0, slope: 0, current: 0, vds: 0 };
+const at = { temperature: NaN, reversed: false, beta: 0, vto: 0, leakage: 0, vsb: 0, slope: 0, current: 0, vds: 0 };
 
 /**
  * The operating point on V_GS = V_GG - R_m I + q_gs I_G, V_DS = V_L - R_L I + q_ds I_G, V_SB = V_SB0 + R_b I + q_sb I_G
@@ -96,7 +96,8 @@ export const generalPoint: Kernel = {
     given[RM] = Math.max(0, Math.min(given[RM], given[RL]));
     given[RB] = Math.max(0, Math.min(given[RB], given[RL]));
     thermalRoots[0] = 1;
-    const T = given[RTH] > 0 ? balanceHeat(given[TA], given[RTH], powerAt, mostPowerBelow) : given[TA];
+    at.temperature = NaN;
+    const T = given[RTH] > 0 ? balanceHeat(given[TA], given[RTH], powerAt, staysBelow) : given[TA];
     if (T !== T) {
       refuse(s, a, o, RUNAWAY, GENERAL_OUTPUTS.length);
       return;
@@ -131,11 +132,20 @@ function powerAt(T: number): number {
   return at.vds * at.current;
 }
 
-/** A power that the FET does not exceed up to T: a network of R_L delivers V² / (4 R_L) at most, and leakage grows with T. */
-function mostPowerBelow(T: number): number {
-  const leakage = given[IGSS] === 0 ? 0 : leakageAt(given[IGSS], given[DOUBLING], T, given[TNOM]);
+/**
+ * Whether the FET is known to dissipate less than this up to T: a network of R_L delivers V² / (4 R_L) at most, and leakage
+ * grows with T. A leakage rounded up to a power of two mostly tells, and costs next to nothing.
+ */
+function staysBelow(T: number, watts: number): boolean {
+  if (given[IGSS] === 0) return deliveredBelow(0, watts);
+  const doublings = Math.max(0, Math.ceil((T - given[TNOM]) / given[DOUBLING]));
+  if (doublings < 31 && deliveredBelow(given[IGSS] * (1 << doublings), watts)) return true;
+  return deliveredBelow(leakageAt(given[IGSS], given[DOUBLING], T, given[TNOM]), watts);
+}
+
+function deliveredBelow(leakage: number, watts: number): boolean {
   const volts = Math.abs(given[VL]) + Math.abs(given[QDS] * leakage);
-  return (ROUNDING * volts * volts) / (4 * given[RL]);
+  return ROUNDING * volts * volts < 4 * given[RL] * watts;
 }
 
 /** Above 1 by more than rounding. */
@@ -143,6 +153,8 @@ const ROUNDING = 1 + 1e-9;
 
 /** The point at junction temperature T: `line` in the conducting sense, `at` in the n-channel frame. */
 function solveAt(T: number): void {
+  if (T === at.temperature) return;
+  at.temperature = T;
   const lambda = given[LAMBDA];
   const rs = given[RS];
   const rd = given[RD];
@@ -159,9 +171,19 @@ function solveAt(T: number): void {
   const phi = given[PHI];
   const Rm = given[RM];
   const Rb = given[RB];
-  at.slope = reversed
-    ? solveWithBody(beta, lambda, vto, gamma, phi, vgs - vds, load - Rm + rd, -vds, R, vsb + vds, load - Rb + rd)
-    : solveWithBody(beta, lambda, vto, gamma, phi, vgs, Rm + rs, vds, R, vsb, Rb + rs);
+  if (gamma === 0) {
+    at.slope = 0;
+    givenLine[0] = beta;
+    givenLine[1] = lambda;
+    givenLine[2] = reversed ? vgs - vds - vto : vgs - vto;
+    givenLine[3] = reversed ? load - Rm + rd : Rm + rs;
+    givenLine[4] = reversed ? -vds : vds;
+    givenLine[5] = R;
+    solveGivenLine();
+  } else
+    at.slope = reversed
+      ? solveWithBody(beta, lambda, vto, gamma, phi, vgs - vds, load - Rm + rd, -vds, R, vsb + vds, load - Rb + rd)
+      : solveWithBody(beta, lambda, vto, gamma, phi, vgs, Rm + rs, vds, R, vsb, Rb + rs);
   at.reversed = reversed;
   at.beta = beta;
   at.vto = vto;

@@ -27,7 +27,7 @@ export const MARGIN = 3;
 export const REGION = 4;
 
 /**
- * The problem on its way to the function of its region. As arguments, numbers are boxed wherever a call is not inlined,
+ * The problem on its way to the function of its region: beta, lambda, A, r, b, R. As arguments, numbers are boxed wherever a call is not inlined,
  * and those functions are too long for that: a solve took a third longer.
  */
 export const givenLine = new Float64Array(6);
@@ -47,14 +47,21 @@ const NOISE = 2 ** -51;
  * Source: bracket and unknowns derived from the maximum principle of resistive networks, see the head.
  */
 export function solveLine(beta: number, lambda: number, A: number, r: number, b: number, R: number): number {
-  if (!(A > 0)) return leave(0, A, b, A, 0, 0);
   givenLine[0] = beta;
   givenLine[1] = lambda;
   givenLine[2] = A;
   givenLine[3] = r;
   givenLine[4] = b;
   givenLine[5] = R;
-  if (isOhmic(beta, lambda, A, r, b, R)) return solveOhmicLine();
+  return solveGivenLine();
+}
+
+/** As `solveLine`, of what stands in `givenLine`. */
+export function solveGivenLine(): number {
+  const A = givenLine[2];
+  const b = givenLine[4];
+  if (!(A > 0)) return leave(0, A, b, A, 0, 0);
+  if (isOhmic(givenLine[0], givenLine[1], A, givenLine[3], b, givenLine[5])) return solveOhmicLine();
   return solveSaturated();
 }
 

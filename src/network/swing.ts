@@ -170,17 +170,11 @@ function searchLoadLine(vov: number): void {
   const beta = given[BETA];
   const lambda = given[LAMBDA];
   const twist = ads * rgs - ags * rds;
-  const boundary = (y: number): void => {
-    const w = beta * y * y * (1 + lambda * y) - current;
-    meetLine(onsetDrive(y, w, vov), w, OHMIC);
-  };
-  eachPositiveRoot(
-    ads * vov - ags * given[VDS] + twist * current,
-    ags - ads,
-    -twist * beta,
-    -twist * beta * lambda,
-    boundary,
-  );
+  onset[0] = ads * vov - ags * given[VDS] + twist * current;
+  onset[1] = ags - ads;
+  onset[2] = -twist * beta;
+  onset[3] = -twist * beta * lambda;
+  meetOnsets(vov);
 
   const open = given[LIMIT] - (given[VGS] - vov);
   if (open > 0 && open < Infinity && ags !== 0) {
@@ -203,8 +197,8 @@ function searchFixedCurrent(vov: number): void {
   const { 1: beta, 3: lambda, 8: current } = given;
   const square = current / beta;
   const high = Math.sqrt(square);
-  const onset = solveBracketed((y) => y * y * (1 + lambda * y) - square, 0, high).value;
-  reach(onset - vov, onset - given[VDS], OHMIC);
+  const root = solveBracketed((y) => y * y * (1 + lambda * y) - square, 0, high).value;
+  reach(root - vov, root - given[VDS], OHMIC);
   const open = given[LIMIT] - (given[VGS] - vov);
   if (open > 0 && open < Infinity && lambda > 0) {
     const vds = (square / (open * open) - 1) / lambda;
@@ -220,33 +214,52 @@ function reach(dvgs: number, dvds: number, limit: number): void {
   meetLine(vs, w, limit);
 }
 
-/** Calls `visit` with every root y > 0 of c0 + c1 y + c2 y^2 + c3 y^3. */
-function eachPositiveRoot(c0: number, c1: number, c2: number, c3: number, visit: (y: number) => void): void {
-  const f = (y: number): number => c0 + y * (c1 + y * (c2 + y * c3));
+/** The cubic of the onset of the ohmic region, by rising powers of y. */
+const onset = new Float64Array(4);
+
+function onsetAt(y: number): number {
+  return onset[0] + y * (onset[1] + y * (onset[2] + y * onset[3]));
+}
+
+/** Meets the limit at every root y > 0 of the cubic. */
+function meetOnsets(vov: number): void {
+  const [c0, c1, c2, c3] = [onset[0], onset[1], onset[2], onset[3]];
   // Beyond Cauchy's bound there is no root; between the turning points there is one where the signs differ.
   const lead = c3 !== 0 ? c3 : c2 !== 0 ? c2 : c1;
   if (lead === 0) return;
   const bound = 1 + Math.max(Math.abs(c0), Math.abs(c1), Math.abs(c2)) / Math.abs(lead);
   if (!(bound < Infinity)) return;
-  const turns = turningPoints(c1, 2 * c2, 3 * c3).filter((y) => y > 0 && y < bound);
+  findTurns(c1, 2 * c2, 3 * c3);
   let low = 0;
-  for (const high of [...turns, bound]) {
-    const [before, after] = [f(low), f(high)];
+  for (let n = 0; n <= turns.length; n++) {
+    const high = n < turns.length ? turns[n] : bound;
+    if (n < turns.length && !(high > 0 && high < bound)) continue;
+    const before = onsetAt(low);
+    const after = onsetAt(high);
     if (before === 0 ? low > 0 : after !== 0 && before > 0 !== after > 0) {
-      visit(before === 0 ? low : solveBracketed(f, low, high).value);
+      const y = before === 0 ? low : solveBracketed(onsetAt, low, high).value;
+      const w = given[BETA] * y * y * (1 + given[LAMBDA] * y) - given[I];
+      meetLine(onsetDrive(y, w, vov), w, OHMIC);
     }
     low = high;
   }
 }
 
-/** Real roots of c + b y + a y^2, ascending. */
-function turningPoints(c: number, b: number, a: number): number[] {
-  if (a === 0) return b === 0 ? [] : [-c / b];
+/** The real roots of the quadratic that `findTurns` saw last, ascending; NaN where there are fewer. */
+const turns = new Float64Array(2);
+
+function findTurns(c: number, b: number, a: number): void {
+  turns.fill(NaN);
+  if (a === 0) {
+    if (b !== 0) turns[0] = -c / b;
+    return;
+  }
   const inside = b * b - 4 * a * c;
-  if (!(inside > 0)) return [];
+  if (!(inside > 0)) return;
   const q = -0.5 * (b + (b < 0 ? -1 : 1) * Math.sqrt(inside));
-  const roots = q === 0 ? [0] : [q / a, c / q];
-  return roots.toSorted((x, y) => x - y);
+  if (q === 0) return;
+  turns[0] = Math.min(q / a, c / q);
+  turns[1] = Math.max(q / a, c / q);
 }
 
 /** Follows the source in one direction to the first limit, solving the whole point at each step. */

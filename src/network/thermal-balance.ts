@@ -20,38 +20,57 @@ const CHUNK = 8;
 
 /**
  * The cold-start junction temperature in K for a dissipation `power(T)` in W; NaN where the FET runs away or power is NaN.
- * `most(T)` is a power in W that is not exceeded at T or below; Infinity where nothing is known.
+ * `staysBelow(T, watts)` says whether the power is known to stay below `watts` at T and below it.
  */
 export function balanceHeat(
   ambient: number,
   rth: number,
   power: (T: number) => number,
-  most: (T: number) => number,
+  staysBelow: (T: number, watts: number) => boolean,
 ): number {
-  const excess = (T: number): number => T - ambient - rth * power(T);
+  balance[AMBIENT] = ambient;
+  balance[RTH] = rth;
+  powerAt = power;
   thermalRoots[0] = 1;
-  let before = excess(ambient);
+  let before = ambient - ambient - rth * power(ambient);
   if (before === 0) return ambient;
   thermalRoots[0] = 0;
   if (!(ambient < THERMAL_CEILING)) return NaN;
   const step = (THERMAL_CEILING - ambient) / SCAN_STEPS;
   let first = NaN;
+  balance[FROM] = ambient;
   for (let n = 1; n <= SCAN_STEPS; n++) {
     if (before > 0) {
       // H is above 0 at every step up to the end of the chunk: none of them has to be looked at.
       const last = n + CHUNK - 1 - ((n - 1) % CHUNK);
-      if (n * step > rth * most(ambient + last * step)) {
+      if (staysBelow(ambient + last * step, (n * step) / rth)) {
         n = last;
+        balance[FROM] = NaN;
         continue;
       }
     }
     const T = ambient + n * step;
-    const here = excess(T);
+    const here = T - ambient - rth * power(T);
+    balance[TO] = T;
+    balance[EXCESS_FROM] = before;
+    balance[EXCESS_TO] = here;
     if (here > 0 !== before > 0) {
       thermalRoots[0]++;
       if (thermalRoots[0] === 1) first = solveBracketed(excess, T - step, T).value;
     }
     before = here;
+    balance[FROM] = T;
   }
   return first;
+}
+
+/** The balance in hand, and the ends of its step with the excess there, with which the search for a root begins. */
+const balance = new Float64Array(6);
+const [AMBIENT, RTH, FROM, TO, EXCESS_FROM, EXCESS_TO] = [0, 1, 2, 3, 4, 5];
+let powerAt: (T: number) => number;
+
+function excess(T: number): number {
+  if (T === balance[FROM]) return balance[EXCESS_FROM];
+  if (T === balance[TO]) return balance[EXCESS_TO];
+  return T - balance[AMBIENT] - balance[RTH] * powerAt(T);
 }
