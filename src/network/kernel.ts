@@ -13,4 +13,6 @@ export interface Kernel {
    * `all`. Columns of results overlap no column of an input.
    */
   readonly columns?: (all: Float64Array, places: Int32Array, at: number, count: number) => void;
+  /** The same in the language of lanes, from the names of the inputs to those of the outputs. */
+  readonly lanes?: string;
 }

@@ -4,6 +4,7 @@
 
 import type { Kernel } from './kernel.ts';
 import { BLOCK, solveLines } from './line-columns.ts';
+import { POINT_LANES } from './line-lanes.ts';
 import { CURRENT, DRAIN_SOURCE, MARGIN, OVERDRIVE, REGION, line, solveLine } from './line-solve.ts';
 import { NOT_A_NUMBER, SOLVED } from './point-status.ts';
 import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
@@ -75,6 +76,7 @@ export const linePoint: Kernel = {
       leavePoints(all, places, at, from, size);
     }
   },
+  lanes: POINT_LANES,
 };
 
 /** A block of lines and their solutions, as `solveLines` takes them; whether each was refused or mirrored at the drain. */

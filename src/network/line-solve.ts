@@ -33,13 +33,13 @@ export const REGION = 4;
 export const givenLine = new Float64Array(6);
 
 /** Steps after which the bracket is as narrow as it can get; the fixed sets of tests need at most 16. */
-const STEP_CAP = 200;
+export const STEP_CAP = 200;
 
 /** A step of Newton's below this share is the last one: the error squares, so what remains is below rounding. */
-const SETTLED = 2e-9;
+export const SETTLED = 2e-9;
 
 /** |H| below this share of its largest term is rounding. */
-const NOISE = 2 ** -51;
+export const NOISE = 2 ** -51;
 
 /**
  * Solves the operating point for `beta` > 0 (A/V²), `lambda` >= 0 (1/V), `A` and `b` >= 0 in volts and

@@ -12,4 +12,5 @@ export const ratio: Kernel = {
     const y = s[a[p + 1]];
     s[a[p + 2]] = y === 0 ? (x === 0 ? 0 : x * Infinity) : x / y;
   },
+  lanes: 'quotient = select(y == 0, select(x == 0, 0, x * Infinity), x / y)',
 };

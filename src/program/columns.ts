@@ -3,6 +3,7 @@
 // All columns stand in one array, a little apart from multiples of the page so that they do not fall on each other in the
 // cache. A kernel with a form for columns runs in that; the others run sample by sample.
 
+import { createLaneMemory } from './accelerator.ts';
 import { COLUMN_OPERATIONS } from './column-operations.ts';
 import type { ColumnPlan } from './column-plan.ts';
 import { OP, STRIDE } from './operations.ts';
@@ -26,12 +27,23 @@ const ROOM = 1 << 20;
 /** Numbers between two columns: 192 bytes. */
 const GAP = 24;
 
+interface ColumnOptions {
+  /** Whether loops go two numbers at a time where the machine can; the results are the same. */
+  readonly lanes: boolean;
+}
+
+const DEFAULTS: ColumnOptions = { lanes: true };
+
 /** Columns for a plan, run with the kernels of the program that was planned. */
-export function createColumns(plan: ColumnPlan, kernels: KernelTable): Columns {
+export function createColumns(plan: ColumnPlan, kernels: KernelTable, options: Partial<ColumnOptions> = {}): Columns {
   const width = plan.columnCount * WIDTH * 8 > ROOM ? NARROW : WIDTH;
   const stride = width + GAP;
-  const all = new Float64Array(plan.columnCount * stride);
-  const columns = Array.from({ length: plan.columnCount }, (_, k) => all.subarray(k * stride, k * stride + width));
+  const numbers = plan.columnCount * stride;
+  const memory = { ...DEFAULTS, ...options }.lanes ? createLaneMemory(kernels, numbers) : null;
+  const all = memory?.all ?? new Float64Array(numbers);
+  const first = memory?.free ?? 0;
+  const place = (column: number): number => first + column * stride;
+  const columns = Array.from({ length: plan.columnCount }, (_, k) => all.subarray(place(k), place(k) + width));
   plan.constantColumns.forEach((column, i) => columns[column].fill(plan.constantValues[i]));
   const { ops, args } = plan;
   const places = new Int32Array(args.length);
@@ -41,15 +53,19 @@ export function createColumns(plan: ColumnPlan, kernels: KernelTable): Columns {
     output: (k) => columns[plan.outputColumns[k]],
     run(count) {
       for (let i = 0; i < ops.length; i += STRIDE) {
-        if (ops[i] !== OP.call) {
-          COLUMN_OPERATIONS[ops[i]](columns[ops[i + 1]], columns[ops[i + 2]], columns[ops[i + 3]], count);
+        const [code, target, at, length] = [ops[i], ops[i + 1], ops[i + 2], ops[i + 3]];
+        if (code !== OP.call) {
+          const loop = memory?.operations[code];
+          if (loop === undefined) COLUMN_OPERATIONS[code](columns[target], columns[at], columns[length], count);
+          else loop(8 * place(at), 8 * place(length), 8 * place(target), count);
           continue;
         }
-        const [at, length] = [ops[i + 2], ops[i + 3]];
-        const kernel = kernels[ops[i + 1]];
-        for (let n = at; n < at + length; n++) places[n] = args[n] * stride;
-        if (kernel.columns === undefined) call(kernel.run, all, places, at, length, count);
-        else kernel.columns(all, places, at, count);
+        const { run, columns: runColumns } = kernels[target];
+        const loop = memory?.kernels[target];
+        for (let n = at; n < at + length; n++) places[n] = place(args[n]);
+        if (loop !== undefined) loop(...Array.from(places.subarray(at, at + length), (each) => 8 * each), count);
+        else if (runColumns !== undefined) runColumns(all, places, at, count);
+        else call(run, all, places, at, length, count);
       }
     },
   };

@@ -19,6 +19,12 @@ const select: Kernel = (s, a, p) => {
   s[a[p + 3]!] = condition === 1 ? s[a[p + 1]!]! : condition === 0 ? s[a[p + 2]!]! : NaN;
 };
 
+const SELECT_LANES = {
+  inputs: ['condition', 'a', 'b'],
+  outputs: ['chosen'],
+  text: 'chosen = select(condition == 1, a, select(condition == 0, b, NaN))',
+};
+
 /** Inputs: x, digits. Output: x rounded to so many significant digits, as the shortest decimal reads. */
 const round: Kernel = (s, a, p) => {
   const x = s[a[p]!]!;
@@ -45,7 +51,7 @@ const nominal: Kernel = (s, a, p) => {
 /** Every kernel of a sheet's program; a program refers to them by position. */
 export const KERNELS: KernelTable = [
   ...PROGRAM_KERNELS,
-  { name: 'select', run: select },
+  { name: 'select', run: select, lanes: SELECT_LANES },
   { name: 'round', run: round },
   { name: 'zero-bias capacitance', run: zeroBias },
   ...choices(),

@@ -3,6 +3,8 @@
 import { expect, test } from 'vitest';
 import { KERNELS } from '../../src/network/index.ts';
 import type { Kernel } from '../../src/network/index.ts';
+import { createLaneMemory } from '../../src/program/accelerator.ts';
+import { PROGRAM_KERNELS } from '../../src/program/index.ts';
 import { createDraw } from '../support/counter-random.ts';
 
 const SPECIAL = [0, -0, 1, -1, NaN, Infinity, -Infinity, 1e-300, -1e300];
@@ -31,7 +33,10 @@ const USUAL: Readonly<Record<string, readonly [low: number, high: number]>> = {
   V_DS: [-5, 20],
 };
 
-function compareColumns(kernel: Kernel, seed: number): number {
+type Form = (all: Float64Array, places: Int32Array, at: number, count: number) => void;
+
+/** Gives a kernel many samples in one of its forms, and compares what it leaves. */
+function compareForm(kernel: Kernel, form: Form, seed: number): number {
   const draw = createDraw(seed);
   const width = kernel.inputs.length + kernel.outputs.length;
   const count = 700;
@@ -46,7 +51,7 @@ function compareColumns(kernel: Kernel, seed: number): number {
     }
   });
   const places = Int32Array.from({ length: width + 2 }, (_, n) => (n - 2) * stride);
-  kernel.columns!(all, places, 2, count);
+  form(all, places, 2, count);
   const slots = new Float64Array(width);
   const args = Int32Array.from({ length: width }, (_, n) => n);
   for (let i = 0; i < count; i++) {
@@ -62,12 +67,34 @@ function compareColumns(kernel: Kernel, seed: number): number {
   return count;
 }
 
-const inColumns = Object.entries<Kernel>(KERNELS).filter(([, { columns }]) => columns !== undefined);
+/** Runs the lanes of a kernel on columns of their own memory. */
+function lanesOf(name: string, width: number): Form {
+  const index = PROGRAM_KERNELS.findIndex((kernel) => kernel.name === name);
+  const memory = createLaneMemory(PROGRAM_KERNELS, width * 724)!;
+  return (all, places, at, count) => {
+    memory.all.set(all, memory.free);
+    const addresses = Array.from({ length: width }, (_, n) => 8 * (memory.free + places[at + n]!));
+    memory.kernels[index]!(...addresses, count);
+    all.set(memory.all.subarray(memory.free, memory.free + all.length));
+  };
+}
 
-test('there are kernels with a form for columns', () => {
-  expect(inColumns.map(([name]) => name)).toContain('line-point');
+const kernels = Object.entries<Kernel>(KERNELS);
+const forms = [
+  ...kernels.flatMap(([name, kernel]) =>
+    kernel.columns ? [[name, 'down columns', kernel, kernel.columns] as const] : [],
+  ),
+  ...kernels.flatMap(([name, kernel]) =>
+    kernel.lanes
+      ? [[name, 'in lanes', kernel, lanesOf(name, kernel.inputs.length + kernel.outputs.length)] as const]
+      : [],
+  ),
+];
+
+test('the operating point on its lines has both forms', () => {
+  expect(forms.filter(([name]) => name === 'line-point').length).toBe(2);
 });
 
-test.each(inColumns)('%s down columns leaves what it leaves sample by sample', (_, kernel) => {
-  for (let seed = 0; seed < 60; seed++) expect(compareColumns(kernel, seed)).toBeGreaterThan(0);
+test.each(forms)('%s %s leaves what it leaves sample by sample', (_name, _form, kernel, form) => {
+  for (let seed = 0; seed < 60; seed++) expect(compareForm(kernel, form, seed)).toBeGreaterThan(0);
 });

@@ -51,30 +51,59 @@ export function benchOneStage(): string[] {
 /** Times many samples as columns, the FET saturated in all of them or in about half. Throws where the variants disagree. */
 function benchColumns(): string[] {
   const everything = CELLS.map((_, k) => k);
-  return (
+  const saturated = drawInputs(SAMPLES);
+  const mixed = drawInputs(SAMPLES, MIXED);
+  return [
+    compareColumns('39 cells, all saturated', saturated, everything, createHandColumns(saturated), 1.3, 0.75),
+    compareColumns('6 cells, all saturated', saturated, SUMMED, createHandSums(saturated), 1.3, 0.85),
+    compareColumns('39 cells, saturated and ohmic', mixed, everything, createHandColumns(mixed), 1.9, 0.75),
+    compareColumns('6 cells, saturated and ohmic', mixed, SUMMED, createHandSums(mixed), 1.9, 0.85),
+    compareWithLibrary(saturated, everything),
+  ];
+}
+
+type Inputs = ReturnType<typeof drawInputs>;
+
+function compareColumns(
+  what: string,
+  inputs: Inputs,
+  kept: readonly number[],
+  hand: ReturnType<typeof createHandColumns>,
+  columnsAtMost: number,
+  lanesAtMost: number,
+): string {
+  const columns = createColumnar(inputs, kept, { lanes: false });
+  const lanes = createColumnar(inputs, kept, { lanes: true });
+  for (const variant of [hand, columns, lanes]) variant.run();
+  for (const { outputs } of [columns, lanes]) {
+    const worst = Math.max(...hand.outputs.map((column, k) => worstDifference(column, outputs[k])));
+    if (!(worst < 1e-11)) throw new Error(`The columns differ by ${worst} from the loop by hand.`);
+  }
+  const timings = compare(
     [
-      ['all saturated', drawInputs(SAMPLES), 1.3],
-      ['saturated and ohmic', drawInputs(SAMPLES, MIXED), 1.9],
-    ] as const
-  ).flatMap(([regions, columns, atMost]) =>
-    (
-      [
-        ['39 cells', createHandColumns(columns), createColumnar(columns, everything)],
-        ['6 cells', createHandSums(columns), createColumnar(columns, SUMMED)],
-      ] as const
-    ).map(([cells, hand, columnar]) => {
-      hand.run();
-      columnar.run();
-      const worst = Math.max(...hand.outputs.map((column, k) => worstDifference(column, columnar.outputs[k])));
-      if (!(worst < 1e-11)) throw new Error(`The columns differ by ${worst} from the loop by hand.`);
-      const timings = compare(
-        [
-          { name: 'loop by hand', run: hand.run },
-          { name: 'columns', run: columnar.run, target: { atMost } },
-        ],
-        { units: SAMPLES },
-      );
-      return formatTimings(`One stage as columns, ${cells}, ${regions}`, 'sample', timings);
-    }),
+      { name: 'loop by hand', run: hand.run },
+      { name: 'columns', run: columns.run, target: { atMost: columnsAtMost } },
+      { name: 'columns, two lanes', run: lanes.run, target: { atMost: lanesAtMost } },
+    ],
+    { units: SAMPLES },
   );
+  return formatTimings(`One stage as columns, ${what}`, 'sample', timings);
+}
+
+function compareWithLibrary(inputs: Inputs, kept: readonly number[]): string {
+  const lanes = createColumnar(inputs, kept, { lanes: true });
+  const columns = createColumnar(inputs, kept, { lanes: false });
+  const library = createExpressions(inputs, objectScope());
+  const beside = (name: string, run: () => number, atLeast: number) =>
+    compare(
+      [
+        { name, run },
+        { name: 'general library', run: library.run, target: { atLeast } },
+      ],
+      { units: SAMPLES, rounds: 5, warmUps: 1 },
+    );
+  return formatTimings('One stage as columns beside a general library', 'sample', [
+    ...beside('columns', columns.run, 80),
+    ...beside('columns, two lanes', lanes.run, 140),
+  ]);
 }

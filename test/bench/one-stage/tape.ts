@@ -3,6 +3,7 @@
 import { isConstantNode, isFunctionNode, isOperatorNode, isParenthesisNode, isSymbolNode, parse } from 'mathjs';
 import type { MathNode } from 'mathjs';
 import { solveLines } from '../../../src/network/line-columns.ts';
+import { LINE_LANES } from '../../../src/network/line-lanes.ts';
 import { line, solveLine } from '../../../src/network/line-solve.ts';
 import {
   assemble,
@@ -29,6 +30,11 @@ const KERNELS: KernelTable = [
       s[a[p + 10]] = line[4];
     },
     columns: solveLines,
+    lanes: {
+      inputs: ['beta', 'lambda', 'A', 'r', 'b', 'R'],
+      outputs: ['I', 'vov', 'vds', 'margin', 'region'],
+      text: LINE_LANES,
+    },
   },
 ];
 
@@ -101,7 +107,7 @@ function givenSegment(): Segment {
 }
 
 /** As `createHandColumns`, on a program: the cells by their places among `CELLS`. */
-export function createColumnar(columns: Inputs, kept: readonly number[]) {
+export function createColumnar(columns: Inputs, kept: readonly number[], options: { lanes: boolean }) {
   const { program, slots, cells } = compile();
   const inputs = INPUT_NAMES.map((name) => columns[name]);
   inputs.forEach((column, k) => (slots[k] = column[0]));
@@ -113,7 +119,7 @@ export function createColumnar(columns: Inputs, kept: readonly number[]) {
     frozen: [],
     outputs: kept.map((k) => cells[k]),
   });
-  const working = createColumns(plan, KERNELS);
+  const working = createColumns(plan, KERNELS, options);
   const outputs = kept.map((_, k) => working.output(k));
   inputs.forEach((column, k) => working.input(k).set(column));
   const summed = SUMMED.map((k) => outputs[kept.indexOf(k)]);

@@ -1,0 +1,179 @@
+// The small language in which loops over lanes are written, and its way to instructions.
+//
+//   x = (a + b) / 2            arithmetic as in the scalar code: + - * / and unary -, left to right
+//   m = x > 0 & !(b < a)       comparisons give masks; & | ! join them
+//   y = select(m, x, -x)       lane by lane; sqrt, abs, min, max, floor take numbers
+//   while m .. end             as long as a lane of the mask is set: what is assigned inside is selected by hand
+//   if m .. end                left out where no lane of the mask is set
+//
+// exponent(x), mantissa(x) of x > 0 and twoTo(k) are those of the bits; lookUp(T, j) is number j of the table T. 1/3 without
+// blanks is one number. Both lanes compute everything: what one of them does not want it must not select. A stack machine
+// takes each expression as it is read.
+
+import { constant, firstVector, get, lane, set, unsigned } from './lane-module.ts';
+
+/** A kernel in this language. */
+export interface LaneText {
+  readonly inputs: readonly string[];
+  readonly outputs: readonly string[];
+  readonly text: string;
+}
+
+const CONSTANTS: Readonly<Record<string, number>> = { NaN, Infinity };
+const UNARY: Readonly<Record<string, number>> = { sqrt: 0xef, abs: 0xec, floor: 0x75 };
+const BINARY: Readonly<Record<string, number>> = { min: 0xf4, max: 0xf5 };
+
+/** Operators from the loosest to the tightest, with their instructions. */
+const LEVELS: readonly Readonly<Record<string, number>>[] = [
+  { '|': 0x50 },
+  { '&': 0x4e },
+  { '==': 0x47, '!=': 0x48, '<=': 0x4b, '>=': 0x4c, '<': 0x49, '>': 0x4a },
+  { '+': 0xf0, '-': 0xf1 },
+  { '*': 0xf2, '/': 0xf3 },
+];
+
+const TOKEN = /\s*(\d[\d.]*(?:e[-+]?\d+)?(?:\/\d+)?|\w+|[<>=!]=|[-+*/()<>&|!,])/y;
+
+/** A loop over lanes as instructions, `tables` telling where each begins in bytes; throws where the text cannot be read. */
+export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readonly<Record<string, number>>) {
+  const first = firstVector(inputs.length + outputs.length);
+  const locals = new Map([...inputs, ...outputs].map((name, k) => [name, first + k]));
+  const known = new Set(inputs);
+  let next = first + inputs.length + outputs.length;
+  const body: number[] = [];
+  const blocks: string[] = [];
+  const emit = (...bytes: number[]): void => void body.push(...bytes);
+  const fault = (what: string): Error => new Error(`Lanes of ${outputs.join(', ')}: ${what}.`);
+
+  function localOf(name: string): number {
+    let local = locals.get(name);
+    if (local === undefined) locals.set(name, (local = next++));
+    return local;
+  }
+
+  function expression(source: string): void {
+    let token = '';
+    let at = 0;
+    const advance = (): void => {
+      TOKEN.lastIndex = at;
+      const match = TOKEN.exec(source);
+      token = match === null ? '' : match[1];
+      at += match === null ? 0 : match[0].length;
+    };
+    const expect = (wanted: string): void => {
+      if (token !== wanted) throw fault(`expected ${wanted}, found ${token} in ${source}`);
+      advance();
+    };
+    const level = (depth: number): void => {
+      if (depth === LEVELS.length) return operand();
+      level(depth + 1);
+      while (token in LEVELS[depth]) {
+        const code = LEVELS[depth][token];
+        advance();
+        level(depth + 1);
+        emit(...lane(code));
+      }
+    };
+    const operand = (): void => {
+      const word = token;
+      advance();
+      if (word === '(') {
+        level(0);
+        expect(')');
+      } else if (word === '-' || word === '!') {
+        operand();
+        emit(...lane(word === '-' ? 0xed : 0x4d));
+      } else if (/^\d/.test(word)) {
+        const [over, under = 1] = word.split('/').map(Number);
+        emit(...constant(over / under));
+      } else if (token === '(') call(word);
+      else if (word in CONSTANTS) emit(...constant(CONSTANTS[word]));
+      else if (known.has(word)) emit(...get(localOf(word)));
+      else throw fault(`nothing is called ${word} in ${source}`);
+    };
+    const call = (name: string): void => {
+      expect('(');
+      if (name === 'lookUp') {
+        const table = tables[token];
+        if (table === undefined) throw fault(`no table is called ${token}`);
+        advance();
+        expect(',');
+        level(0);
+        lookUp(table);
+      } else if (name === 'select') {
+        const mask = next++;
+        level(0);
+        emit(...set(mask));
+        expect(',');
+        level(0);
+        expect(',');
+        level(0);
+        emit(...get(mask), ...lane(0x52));
+      } else {
+        level(0);
+        if (name in BINARY) {
+          expect(',');
+          level(0);
+          emit(...lane(BINARY[name]));
+        } else if (name in UNARY) emit(...lane(UNARY[name]));
+        else if (name in BITS) emit(...BITS[name]);
+        else throw fault(`no function is called ${name}`);
+      }
+      expect(')');
+    };
+    advance();
+    level(0);
+    if (token !== '' || at !== source.length) throw fault(`${source} does not end where it should`);
+  }
+
+  /** Numbers of a table by whole numbers in both lanes. */
+  function lookUp(table: number): void {
+    const index = next++;
+    emit(...set(index));
+    for (const k of [0, 1]) {
+      // The lane as a whole number, times eight, loaded.
+      emit(...get(index), ...lane(0x21), k, 0xfc, 2, 0x41, 3, 0x74, 0x2b, 3, ...unsigned(table));
+      emit(...lane(k === 0 ? 0x14 : 0x22), ...(k === 0 ? [] : [1]));
+    }
+  }
+
+  for (const line of text.split('\n').map((each) => each.trim())) {
+    const assignment = /^(\w+) = (.*)$/.exec(line);
+    const block = /^(while|if) (.*)$/.exec(line);
+    if (line === '' || line.startsWith('//')) continue;
+    if (assignment !== null) {
+      expression(assignment[2]);
+      known.add(assignment[1]);
+      emit(...set(localOf(assignment[1])));
+    } else if (block !== null) {
+      const [, word, condition] = block;
+      // block; loop: leave where no lane is set. A loop ends with a branch to its begin, an `if` with one out.
+      emit(0x02, 0x40, 0x03, 0x40);
+      expression(condition);
+      emit(...lane(0x53), 0x45, 0x0d, 1);
+      blocks.push(word);
+    } else if (line === 'end') {
+      if (blocks.length === 0) throw fault('end without if or while');
+      emit(0x0c, blocks.pop() === 'while' ? 0 : 1, 0x0b, 0x0b);
+    } else throw fault(`${line} is no statement`);
+  }
+  if (blocks.length > 0) throw fault(`${blocks[0]} has no end`);
+  for (const name of outputs) if (!known.has(name)) throw fault(`${name} is never computed`);
+  return { inputs: inputs.length, outputs: outputs.length, locals: next - first, body };
+}
+
+/** Both lanes hold these bits, and 32 zeros below them. */
+function bits(high: number): number[] {
+  const half = [0, 0, 0, 0, high & 255, (high >> 8) & 255, (high >> 16) & 255, (high >> 24) & 255];
+  return [...lane(0x0c), ...half, ...half];
+}
+
+const shift = (code: number): number[] => [0x41, 52, ...lane(code)];
+const FRACTION = [...lane(0x0c), ...[0, 0].flatMap(() => [255, 255, 255, 255, 255, 255, 0x0f, 0])];
+
+/** In 2^52 + n the last bits are those of n. */
+const BITS: Readonly<Record<string, readonly number[]>> = {
+  exponent: [...shift(0xcd), ...bits(0x43300000), ...lane(0x50), ...constant(2 ** 52 + 1023), ...lane(0xf1)],
+  mantissa: [...FRACTION, ...lane(0x4e), ...bits(0x3ff00000), ...lane(0x50)],
+  twoTo: [...constant(2 ** 52 + 1023), ...lane(0xf0), ...shift(0xcb)],
+};

@@ -1,0 +1,109 @@
+// A WebAssembly module of loops over columns, two numbers at a time, put together from bytes.
+//
+// Each function takes the addresses of its columns in bytes, inputs first, and then how many numbers they hold. It may
+// write one number beyond an odd count. The memory is the caller's.
+
+/** Codes of instructions that stand alone; those of the lanes follow the byte `LANES`. */
+const LANES = 0xfd;
+const I32 = 0x7f;
+const V128 = 0x7b;
+
+/** A loop over columns: what is done with two numbers of each. */
+interface LaneFunction {
+  readonly name: string;
+  readonly inputs: number;
+  readonly outputs: number;
+  /** Locals of the type v128 beyond one for each column. */
+  readonly locals: number;
+  /** Instructions from the locals of the inputs to those of the outputs. */
+  readonly body: readonly number[];
+}
+
+/** Where the locals of vectors begin in a function of so many columns: behind the addresses, the count and the offset. */
+export function firstVector(columns: number): number {
+  return columns + 2;
+}
+
+/** The module as bytes; it exports each function by its name and takes the memory `lanes.memory`. */
+export function assembleLanes(functions: readonly LaneFunction[]): Uint8Array<ArrayBuffer> {
+  const widths = [...new Set(functions.map(({ inputs, outputs }) => inputs + outputs))];
+  const types = widths.map((width) => [0x60, ...vector(Array.from({ length: width + 1 }, () => [I32])), 0]);
+  const memory = [...text('lanes'), ...text('memory'), 2, 0, 1];
+  const exported = functions.map(({ name }, k) => [...text(name), 0, ...unsigned(k)]);
+  return Uint8Array.from([
+    ...[0, 0x61, 0x73, 0x6d, 1, 0, 0, 0],
+    ...section(1, vector(types)),
+    ...section(2, vector([memory])),
+    ...section(3, vector(functions.map(({ inputs, outputs }) => unsigned(widths.indexOf(inputs + outputs))))),
+    ...section(7, vector(exported)),
+    ...section(10, vector(functions.map(codeOf))),
+  ]);
+}
+
+function codeOf({ inputs, outputs, locals, body }: LaneFunction): number[] {
+  const columns = inputs + outputs;
+  const count = columns;
+  const offset = columns + 1;
+  const first = firstVector(columns);
+  const address = (k: number): number[] => [...get(k), ...get(offset), 0x6a];
+  const loads = Array.from({ length: inputs }, (_, k) => [...address(k), ...lane(0x00), 3, 0, ...set(first + k)]);
+  const stores = Array.from({ length: outputs }, (_, k) => [
+    ...address(inputs + k),
+    ...get(first + inputs + k),
+    ...lane(0x0b),
+    ...[3, 0],
+  ]);
+  const code = [
+    ...vector([
+      [1, I32],
+      [...unsigned(columns + locals), V128],
+    ]),
+    // count <<= 3, then: loop while offset < count.
+    ...[...get(count), 0x41, 3, 0x74, ...set(count), 0x02, 0x40, 0x03, 0x40],
+    ...[...get(offset), ...get(count), 0x4e, 0x0d, 1],
+    ...loads.flat(),
+    ...body,
+    ...stores.flat(),
+    ...[...get(offset), 0x41, 16, 0x6a, ...set(offset), 0x0c, 0, 0x0b, 0x0b, 0x0b],
+  ];
+  return [...unsigned(code.length), ...code];
+}
+
+/** An instruction of the lanes. */
+export function lane(code: number): number[] {
+  return [LANES, ...unsigned(code)];
+}
+
+export function get(local: number): number[] {
+  return [0x20, ...unsigned(local)];
+}
+
+export function set(local: number): number[] {
+  return [0x21, ...unsigned(local)];
+}
+
+/** Both lanes hold x. */
+export function constant(x: number): number[] {
+  const view = new DataView(new ArrayBuffer(16));
+  view.setFloat64(0, x, true);
+  view.setFloat64(8, x, true);
+  return [...lane(0x0c), ...new Uint8Array(view.buffer)];
+}
+
+function section(id: number, content: readonly number[]): number[] {
+  return [id, ...unsigned(content.length), ...content];
+}
+
+function vector(items: readonly (readonly number[])[]): number[] {
+  return [...unsigned(items.length), ...items.flat()];
+}
+
+function text(name: string): number[] {
+  const bytes = Array.from(name, (letter) => letter.charCodeAt(0));
+  return [...unsigned(bytes.length), ...bytes];
+}
+
+/** LEB128. */
+export function unsigned(x: number): number[] {
+  return x < 0x80 ? [x] : [(x & 0x7f) | 0x80, ...unsigned(x >>> 7)];
+}
