@@ -8,6 +8,13 @@ const LANES = 0xfd;
 const I32 = 0x7f;
 const V128 = 0x7b;
 
+const MAGIC = [0, 0x61, 0x73, 0x6d, 1, 0, 0, 0];
+const EIGHTFOLD = [0x41, 3, 0x74];
+const BLOCK_AND_LOOP = [0x02, 0x40, 0x03, 0x40];
+const LEAVE_UNLESS_LESS = [0x4e, 0x0d, 1];
+const SIXTEEN_MORE = [0x41, 16, 0x6a];
+const REPEAT_AND_END = [0x0c, 0, 0x0b, 0x0b, 0x0b];
+
 /** A loop over columns: what is done with two numbers of each. */
 interface LaneFunction {
   readonly name: string;
@@ -31,7 +38,7 @@ export function assembleLanes(functions: readonly LaneFunction[]): Uint8Array<Ar
   const memory = [...text('lanes'), ...text('memory'), 2, 0, 1];
   const exported = functions.map(({ name }, k) => [...text(name), 0, ...unsigned(k)]);
   return Uint8Array.from([
-    ...[0, 0x61, 0x73, 0x6d, 1, 0, 0, 0],
+    ...MAGIC,
     ...section(1, vector(types)),
     ...section(2, vector([memory])),
     ...section(3, vector(functions.map(({ inputs, outputs }) => unsigned(widths.indexOf(inputs + outputs))))),
@@ -47,24 +54,29 @@ function codeOf({ inputs, outputs, locals, body }: LaneFunction): number[] {
   const first = firstVector(columns);
   const address = (k: number): number[] => [...get(k), ...get(offset), 0x6a];
   const loads = Array.from({ length: inputs }, (_, k) => [...address(k), ...lane(0x00), 3, 0, ...set(first + k)]);
-  const stores = Array.from({ length: outputs }, (_, k) => [
-    ...address(inputs + k),
-    ...get(first + inputs + k),
-    ...lane(0x0b),
-    ...[3, 0],
-  ]);
+  const stores = Array.from({ length: outputs }, (_, k) => {
+    return [...address(inputs + k), ...get(first + inputs + k), ...lane(0x0b), 3, 0];
+  });
+  const types = [
+    [1, I32],
+    [...unsigned(columns + locals), V128],
+  ];
   const code = [
-    ...vector([
-      [1, I32],
-      [...unsigned(columns + locals), V128],
-    ]),
-    // count <<= 3, then: loop while offset < count.
-    ...[...get(count), 0x41, 3, 0x74, ...set(count), 0x02, 0x40, 0x03, 0x40],
-    ...[...get(offset), ...get(count), 0x4e, 0x0d, 1],
+    ...vector(types),
+    ...get(count),
+    ...EIGHTFOLD,
+    ...set(count),
+    ...BLOCK_AND_LOOP,
+    ...get(offset),
+    ...get(count),
+    ...LEAVE_UNLESS_LESS,
     ...loads.flat(),
     ...body,
     ...stores.flat(),
-    ...[...get(offset), 0x41, 16, 0x6a, ...set(offset), 0x0c, 0, 0x0b, 0x0b, 0x0b],
+    ...get(offset),
+    ...SIXTEEN_MORE,
+    ...set(offset),
+    ...REPEAT_AND_END,
   ];
   return [...unsigned(code.length), ...code];
 }

@@ -55,10 +55,8 @@ describe('lanes', () => {
       COLUMN_OPERATIONS[OP[name]]!(expected, a, b, COUNT);
       operations[OP[name]]!(8 * free, 8 * (free + COUNT), 8 * (free + 2 * COUNT), COUNT);
       const found = all.subarray(free + 2 * COUNT, free + 3 * COUNT);
-      for (let i = 0; i < COUNT; i++) {
-        if (!Object.is(found[i], expected[i]))
-          throw new Error(`${name}(${a[i]}, ${b[i]}) is ${found[i]}, not ${expected[i]}`);
-      }
+      const other = expected.findIndex((x, i) => !Object.is(found[i], x));
+      expect(other, `${name}(${a[other]}, ${b[other]}) is ${found[other]}, not ${expected[other]}`).toBe(-1);
     }
   });
 
