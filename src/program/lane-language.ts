@@ -10,7 +10,7 @@
 // blanks is one number. Both lanes compute everything: what one of them does not want it must not select. A stack machine
 // takes each expression as it is read.
 
-import { constant, firstVector, get, lane, set, unsigned } from './lane-module.ts';
+import { PAIRS, constant, firstVector, get, lane, set, unsigned } from './lane-module.ts';
 
 /** A kernel in this language. */
 export interface LaneText {
@@ -37,21 +37,22 @@ const TOKEN = /\s*(\d[\d.]*(?:e[-+]?\d+)?(?:\/\d+)?|\w+|[<>=!]=|[-+*/()<>&|!,])/
 /** A loop over lanes as instructions, `tables` telling where each begins in bytes; throws where the text cannot be read. */
 export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readonly<Record<string, number>>) {
   const first = firstVector(inputs.length + outputs.length);
-  const locals = new Map([...inputs, ...outputs].map((name, k) => [name, first + k]));
+  const names = new Map([...inputs, ...outputs].map((name, k) => [name, k]));
   const known = new Set(inputs);
-  let next = first + inputs.length + outputs.length;
   const body: number[] = [];
   const blocks: string[] = [];
   const emit = (...bytes: number[]): void => void body.push(...bytes);
   const fault = (what: string): Error => new Error(`Lanes of ${outputs.join(', ')}: ${what}.`);
 
-  function localOf(name: string): number {
-    let local = locals.get(name);
-    if (local === undefined) locals.set(name, (local = next++));
-    return local;
+  /** A variable has a local for each pair. */
+  function localOf(name: string, pair: number): number {
+    let k = names.get(name);
+    if (k === undefined) names.set(name, (k = names.size));
+    return first + PAIRS * k + pair;
   }
 
-  function expression(source: string): void {
+  function expression(source: string, pair: number): void {
+    const scratch = (): number => localOf(`scratch ${names.size}`, pair);
     let token = '';
     let at = 0;
     const advance = (): void => {
@@ -88,7 +89,7 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
         emit(...constant(over / under));
       } else if (token === '(') call(word);
       else if (word in CONSTANTS) emit(...constant(CONSTANTS[word]));
-      else if (known.has(word)) emit(...get(localOf(word)));
+      else if (known.has(word)) emit(...get(localOf(word, pair)));
       else throw fault(`nothing is called ${word} in ${source}`);
     };
     const call = (name: string): void => {
@@ -99,9 +100,9 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
         advance();
         expect(',');
         level(0);
-        lookUp(table);
+        lookUp(table, scratch());
       } else if (name === 'select') {
-        const mask = next++;
+        const mask = scratch();
         level(0);
         emit(...set(mask));
         expect(',');
@@ -127,8 +128,7 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
   }
 
   /** Numbers of a table by whole numbers in both lanes. */
-  function lookUp(table: number): void {
-    const index = next++;
+  function lookUp(table: number, index: number): void {
     emit(...set(index));
     for (const k of [0, 1]) {
       // The lane as a whole number, times eight, loaded.
@@ -142,14 +142,20 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
     const block = /^(while|if) (.*)$/.exec(line);
     if (line === '' || line.startsWith('//')) continue;
     if (assignment !== null) {
-      expression(assignment[2]);
-      known.add(assignment[1]);
-      emit(...set(localOf(assignment[1])));
+      const [, name, source] = assignment;
+      for (let pair = 0; pair < PAIRS; pair++) {
+        expression(source, pair);
+        emit(...set(localOf(name, pair)));
+      }
+      known.add(name);
     } else if (block !== null) {
       const [, word, condition] = block;
       // block; loop: leave where no lane is set. A loop ends with a branch to its begin, an `if` with one out.
       emit(0x02, 0x40, 0x03, 0x40);
-      expression(condition);
+      for (let pair = 0; pair < PAIRS; pair++) {
+        expression(condition, pair);
+        if (pair > 0) emit(...lane(0x50));
+      }
       emit(...lane(0x53), 0x45, 0x0d, 1);
       blocks.push(word);
     } else if (line === 'end') {
@@ -159,7 +165,7 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
   }
   if (blocks.length > 0) throw fault(`${blocks[0]} has no end`);
   for (const name of outputs) if (!known.has(name)) throw fault(`${name} is never computed`);
-  return { inputs: inputs.length, outputs: outputs.length, locals: next - first, body };
+  return { inputs: inputs.length, outputs: outputs.length, locals: PAIRS * names.size, body };
 }
 
 /** Both lanes hold these bits, and 32 zeros below them. */
