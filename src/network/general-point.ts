@@ -6,12 +6,13 @@
 
 import { betaAt, leakageAt, thresholdAt } from '../fet/index.ts';
 import { solveWithBody } from './body-solve.ts';
+import { GENERAL_LANES } from './general-lanes.ts';
 import type { Kernel } from './kernel.ts';
 import { POINT_OUTPUTS, refuse } from './line-point.ts';
 import { CURRENT, DRAIN_SOURCE, MARGIN, OVERDRIVE, REGION, givenLine, line, solveGivenLine } from './line-solve.ts';
 import { NOT_A_NUMBER, RUNAWAY, SOLVED } from './point-status.ts';
 import { deriveAt, onsetAt, slopes } from './small-signal-at.ts';
-import { balanceHeat, thermalRoots } from './thermal-balance.ts';
+import { ROUNDING, balanceHeat, thermalRoots } from './thermal-balance.ts';
 
 /** Results of the kernels for body effect and heat; V_SB in the true frame, V_TO at T_J in the n-channel frame. */
 export const GENERAL_OUTPUTS = [
@@ -125,6 +126,8 @@ export const generalPoint: Kernel = {
     s[a[o + 15]] = at.vto;
     s[a[o + 16]] = thermalRoots[0];
   },
+  lanes: GENERAL_LANES,
+  zeroInLanes: 'gamma',
 };
 
 function powerAt(T: number): number {
@@ -147,9 +150,6 @@ function deliveredBelow(leakage: number, watts: number): boolean {
   const volts = Math.abs(given[VL]) + Math.abs(given[QDS] * leakage);
   return ROUNDING * volts * volts < 4 * given[RL] * watts;
 }
-
-/** Above 1 by more than rounding. */
-const ROUNDING = 1 + 1e-9;
 
 /** The point at junction temperature T: `line` in the conducting sense, `at` in the n-channel frame. */
 function solveAt(T: number): void {

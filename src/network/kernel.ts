@@ -13,6 +13,11 @@ export interface Kernel {
    * `all`. Columns of results overlap no column of an input.
    */
   readonly columns?: (all: Float64Array, places: Int32Array, at: number, count: number) => void;
-  /** The same in the language of lanes, from the names of the inputs to those of the outputs. */
+  /**
+   * The same in the language of lanes, from the names of the inputs to those of the outputs. An output that bears the name
+   * of an input has `_out` behind it.
+   */
   readonly lanes?: string;
+  /** An input that must be 0 for the lanes. */
+  readonly zeroInLanes?: string;
 }

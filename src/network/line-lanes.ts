@@ -120,6 +120,17 @@ export const LINE_LANES = `
   ${FED_BACK}
   ${OHMIC}`;
 
+/** From vov, vds of the line and `reversed` to gm, gds, gmb over q, without body effect, as `deriveAt` leaves them. */
+export const DERIVE_LANES = `
+  w = min(vds, vov)
+  f1 = select(vov <= 0, 0, 2 * beta * w * (1 + lambda * vds))
+  f2 = select(vov <= 0, 0, beta * (2 * (vov - w) * (1 + lambda * vds) + w * (2 * vov - w) * lambda))
+  body = f1 * 0
+  gm = select(reversed, 0 - f1, f1)
+  gds = select(reversed, f1 + body + f2, f2)
+  gmb = select(reversed, 0 - body, body)
+  q = 1 + (gm + gmb) * r_s + gds * (r_s + r_d)`;
+
 /** The kernel of the operating point on its lines. */
 export const POINT_LANES = `
   vgg = channel * V_GG
@@ -134,14 +145,7 @@ export const POINT_LANES = `
   b = select(reversed, -vl, vl)
   ${LINE_LANES}
   I = select(reversed, 0 - I, I)
-  w = min(vds, vov)
-  f1 = select(vov <= 0, 0, 2 * beta * w * (1 + lambda * vds))
-  f2 = select(vov <= 0, 0, beta * (2 * (vov - w) * (1 + lambda * vds) + w * (2 * vov - w) * lambda))
-  body = f1 * 0
-  gm = select(reversed, 0 - f1, f1)
-  gds = select(reversed, f1 + body + f2, f2)
-  gmb = select(reversed, 0 - body, body)
-  q = 1 + (gm + gmb) * r_s + gds * (r_s + r_d)
+  ${DERIVE_LANES}
   status = select(sound, ${SOLVED}, ${NOT_A_NUMBER})
   I_D = select(sound, I, NaN)
   V_GS = select(sound, channel * (vgg - Rm * I) + 0, NaN)

@@ -10,13 +10,16 @@ import { solveBracketed } from '../numeric/index.ts';
 export const THERMAL_CEILING = 600;
 
 /** Steps of the scan: 4.7 K each from 25 °C. */
-const SCAN_STEPS = 64;
+export const SCAN_STEPS = 64;
 
 /** How many thermal roots the last balance found below the ceiling. */
 export const thermalRoots = new Int32Array(1);
 
 /** Steps that are skipped at once where the power is known to be too small for a root in them. */
-const CHUNK = 8;
+export const CHUNK = 8;
+
+/** Above 1 by more than rounding. */
+export const ROUNDING = 1 + 1e-9;
 
 /**
  * The cold-start junction temperature in K for a dissipation `power(T)` in W; NaN where the FET runs away or power is NaN.

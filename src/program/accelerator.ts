@@ -4,7 +4,7 @@
 
 import { compileLanes } from './lane-language.ts';
 import { assembleLanes } from './lane-module.ts';
-import { LANE_OPERATIONS } from './lane-operations.ts';
+import { LANE_LIBRARY, LANE_OPERATIONS } from './lane-operations.ts';
 import { laneTables } from './lane-tables.ts';
 import { OP } from './operations.ts';
 import type { KernelTable } from './segment.ts';
@@ -60,7 +60,7 @@ function compile(kernels: KernelTable): WebAssembly.Module | null {
     ...LANE_OPERATIONS,
     ...kernels.flatMap(({ name, lanes }) => (lanes === undefined ? [] : [[`kernel ${name}`, lanes] as const])),
   ];
-  const bytes = assembleLanes(texts.map(([name, lanes]) => ({ name, ...compileLanes(lanes, places) })));
+  const bytes = assembleLanes(texts.map(([name, lanes]) => ({ name, ...compileLanes(lanes, places, LANE_LIBRARY) })));
   try {
     return new WebAssembly.Module(bytes);
   } catch {

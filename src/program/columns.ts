@@ -60,9 +60,10 @@ export function createColumns(plan: ColumnPlan, kernels: KernelTable, options: P
           else loop(8 * place(at), 8 * place(length), 8 * place(target), count);
           continue;
         }
-        const { run, columns: runColumns } = kernels[target];
-        const loop = memory?.kernels[target];
+        const { run, columns: runColumns, lanes } = kernels[target];
         for (let n = at; n < at + length; n++) places[n] = place(args[n]);
+        const zero = lanes?.zero === undefined ? -1 : at + lanes.inputs.indexOf(lanes.zero);
+        const loop = zero < 0 || isZero(columns[args[zero]], count) ? memory?.kernels[target] : undefined;
         if (loop !== undefined) loop(...Array.from(places.subarray(at, at + length), (each) => 8 * each), count);
         else if (runColumns !== undefined) runColumns(all, places, at, count);
         else call(run, all, places, at, length, count);
@@ -78,4 +79,9 @@ function call(run: Kernel, all: Float64Array, places: Int32Array, at: number, le
     run(all, places, at);
     for (let n = at; n < end; n++) places[n]++;
   }
+}
+
+function isZero(column: Float64Array, count: number): boolean {
+  for (let i = 0; i < count; i++) if (column[i] !== 0) return false;
+  return true;
 }

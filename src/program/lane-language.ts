@@ -5,6 +5,7 @@
 //   y = select(m, x, -x)       lane by lane; sqrt, abs, min, max, floor take numbers
 //   while m .. end             as long as a lane of the mask is set: what is assigned inside is selected by hand
 //   if m .. end                left out where no lane of the mask is set
+//   y = power(a, b)            a text of the library, set in with variables of its own; it stands alone in its line
 //
 // exponent(x), mantissa(x) of x > 0 and twoTo(k) are those of the bits; lookUp(T, j) is number j of the table T. 1/3 without
 // blanks is one number. Both lanes compute everything: what one of them does not want it must not select. A stack machine
@@ -17,6 +18,8 @@ export interface LaneText {
   readonly inputs: readonly string[];
   readonly outputs: readonly string[];
   readonly text: string;
+  /** An input that must be 0 in every sample, or the text does not hold. */
+  readonly zero?: string;
 }
 
 const CONSTANTS: Readonly<Record<string, number>> = { NaN, Infinity };
@@ -35,12 +38,19 @@ const LEVELS: readonly Readonly<Record<string, number>>[] = [
 const TOKEN = /\s*(\d[\d.]*(?:e[-+]?\d+)?(?:\/\d+)?|\w+|[<>=!]=|[-+*/()<>&|!,])/y;
 
 /** A loop over lanes as instructions, `tables` telling where each begins in bytes; throws where the text cannot be read. */
-export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readonly<Record<string, number>>) {
+export function compileLanes(
+  { inputs, outputs, text }: LaneText,
+  tables: Readonly<Record<string, number>>,
+  library: Readonly<Record<string, LaneText>> = {},
+) {
   const first = firstVector(inputs.length + outputs.length);
   const names = new Map([...inputs, ...outputs].map((name, k) => [name, k]));
   const known = new Set(inputs);
   const body: number[] = [];
   const blocks: string[] = [];
+  /** Before the names of variables: empty, or that of the text which is being set in. */
+  let owner = '';
+  let insertions = 0;
   const emit = (...bytes: number[]): void => void body.push(...bytes);
   const fault = (what: string): Error => new Error(`Lanes of ${outputs.join(', ')}: ${what}.`);
 
@@ -89,7 +99,7 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
         emit(...constant(over / under));
       } else if (token === '(') call(word);
       else if (word in CONSTANTS) emit(...constant(CONSTANTS[word]));
-      else if (known.has(word)) emit(...get(localOf(word, pair)));
+      else if (known.has(owner + word)) emit(...get(localOf(owner + word, pair)));
       else throw fault(`nothing is called ${word} in ${source}`);
     };
     const call = (name: string): void => {
@@ -137,32 +147,56 @@ export function compileLanes({ inputs, outputs, text }: LaneText, tables: Readon
     }
   }
 
-  for (const line of text.split('\n').map((each) => each.trim())) {
-    const assignment = /^(\w+) = (.*)$/.exec(line);
-    const block = /^(while|if) (.*)$/.exec(line);
-    if (line === '' || line.startsWith('//')) continue;
-    if (assignment !== null) {
-      const [, name, source] = assignment;
-      for (let pair = 0; pair < PAIRS; pair++) {
-        expression(source, pair);
-        emit(...set(localOf(name, pair)));
-      }
-      known.add(name);
-    } else if (block !== null) {
-      const [, word, condition] = block;
-      // block; loop: leave where no lane is set. A loop ends with a branch to its begin, an `if` with one out.
-      emit(0x02, 0x40, 0x03, 0x40);
-      for (let pair = 0; pair < PAIRS; pair++) {
-        expression(condition, pair);
-        if (pair > 0) emit(...lane(0x50));
-      }
-      emit(...lane(0x53), 0x45, 0x0d, 1);
-      blocks.push(word);
-    } else if (line === 'end') {
-      if (blocks.length === 0) throw fault('end without if or while');
-      emit(0x0c, blocks.pop() === 'while' ? 0 : 1, 0x0b, 0x0b);
-    } else throw fault(`${line} is no statement`);
+  function assign(name: string, source: string): void {
+    for (let pair = 0; pair < PAIRS; pair++) {
+      expression(source, pair);
+      emit(...set(localOf(name, pair)));
+    }
+    known.add(name);
   }
+
+  function insert(name: string, { inputs, outputs, text }: LaneText, operands: readonly string[]): void {
+    const before = owner;
+    const inner = `${owner}${insertions++} `;
+    inputs.forEach((input, k) => assign(inner + input, operands[k] ?? ''));
+    owner = inner;
+    statements(text);
+    owner = before;
+    for (let pair = 0; pair < PAIRS; pair++) {
+      emit(...get(localOf(inner + outputs[0], pair)), ...set(localOf(owner + name, pair)));
+    }
+    known.add(owner + name);
+  }
+
+  function statements(text: string): void {
+    for (const line of text.split('\n').map((each) => each.trim())) {
+      const assignment = /^(\w+) = (.*)$/.exec(line);
+      const insertion = /^(\w+) = (\w+)\((.*)\)$/.exec(line);
+      const block = /^(while|if) (.*)$/.exec(line);
+      if (line === '' || line.startsWith('//')) continue;
+      if (insertion !== null && insertion[2] in library) {
+        insert(insertion[1], library[insertion[2]], insertion[3].split(','));
+      } else if (assignment !== null) assign(owner + assignment[1], assignment[2]);
+      else if (block !== null) begin(block[1], block[2]);
+      else if (line === 'end') {
+        if (blocks.length === 0) throw fault('end without if or while');
+        emit(0x0c, blocks.pop() === 'while' ? 0 : 1, 0x0b, 0x0b);
+      } else throw fault(`${line} is no statement`);
+    }
+  }
+
+  /** block; loop: leave where no lane is set. A loop ends with a branch to its begin, an `if` with one out. */
+  function begin(word: string, condition: string): void {
+    emit(0x02, 0x40, 0x03, 0x40);
+    for (let pair = 0; pair < PAIRS; pair++) {
+      expression(condition, pair);
+      if (pair > 0) emit(...lane(0x50));
+    }
+    emit(...lane(0x53), 0x45, 0x0d, 1);
+    blocks.push(word);
+  }
+
+  statements(text);
   if (blocks.length > 0) throw fault(`${blocks[0]} has no end`);
   for (const name of outputs) if (!known.has(name)) throw fault(`${name} is never computed`);
   return { inputs: inputs.length, outputs: outputs.length, locals: PAIRS * names.size, body };

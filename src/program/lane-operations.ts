@@ -65,9 +65,10 @@ const LOG10 = `${REDUCE}
   end
   ${SPECIAL}`;
 
-const EXP = `
+/** e^(a + rest). */
+const EXP_OF_SUM = `
   step = a * 46.16624130844683 + ${1.5 * 2 ** 52} - ${1.5 * 2 ** 52}
-  r = a - step * 0.021660849392446835 - step * 5.145609244655338e-14 + 0
+  r = a - step * 0.021660849392446835 - step * 5.145609244655338e-14 + rest
   k = floor(step / 32)
   row = 2 * (step - 32 * k)
   short = r + r * r * (1/2 + r * (1/6 + r * (1/24 + r * (1/120 + r * 1/720))))
@@ -78,6 +79,64 @@ const EXP = `
   t = t * twoTo(select(up, k - 2, select(down, k + 200, k))) * select(up, 4, select(down, ${2 ** -200}, 1))
   t = select(a > 709.79, Infinity, select(a < -745.2, 0, t))
   t = select(a == a, t, NaN)`;
+
+const EXP = `
+  rest = 0
+  ${EXP_OF_SUM}`;
+
+/** product = u v without its rounding: what is left of it in `lost`. */
+const LOST = `
+  wide = u * ${SPLITTER}
+  uHigh = wide - (wide - u)
+  uLow = u - uHigh
+  wide = v * ${SPLITTER}
+  vHigh = wide - (wide - v)
+  vLow = v - vHigh
+  lost = uLow * vLow - (product - uHigh * vHigh - uLow * vHigh - uHigh * vLow)`;
+
+const POWER = `
+  size = abs(base)
+  a = size
+  ${REDUCE}
+  e = select(tiny, e - 54, e)
+  c = j / 64
+  d = m - c
+  q = m + c
+  s = d / q
+  product = s * q
+  u = s
+  v = q
+  ${LOST}
+  rounded = q - m
+  sLow = (d - product - lost - s * (m - (q - rounded) + (c - rounded))) / q
+  z = s * s
+  tail = z * (1/3 + z * (1/5 + z * (1/7 + z * 1/9)))
+  sum = e * ${LN2_HIGH} + lookUp(LN, row)
+  leading = sum + 2 * s
+  trailing = sum - leading + 2 * s + (e * ${LN2_LOW} + lookUp(LN, row + 1) + 2 * (sLow + s * tail))
+  log = leading + trailing
+  logLow = leading - log + trailing
+  a = y * log
+  product = a
+  u = y
+  v = log
+  ${LOST}
+  rest = lost + y * logLow
+  ${EXP_OF_SUM}
+  t = select(a > 710, Infinity, select(a < -746, 0, select(abs(a) < ${2 ** -60}, 1, t)))
+  t = select(y == 1, size, t)
+  t = select(size == 0 | size == Infinity, select(size == 0 & y > 0 | size != 0 & !(y > 0), 0, Infinity), t)
+  t = select(size == 1, select(abs(y) == Infinity, NaN, 1), t)
+  odd = floor(y) == y & floor(y / 2) * 2 != y
+  t = select((base < 0 | 1 / base < 0) & odd, -t, t)
+  t = select(base < 0 & size != Infinity & floor(y) != y, NaN, t)
+  t = select(base == base & y == y, t, NaN)
+  t = select(y == 0, 1, t)`;
+
+/** Texts that others may set in: power(base, y) is base^y, see `pow`. */
+export const LANE_LIBRARY: Readonly<Record<string, LaneText>> = {
+  power: { inputs: ['base', 'y'], outputs: ['t'], text: POWER },
+};
 
 const BY_NAME: Readonly<Partial<Record<OperationName, string>>> = {
   add: 't = a + b',
@@ -96,6 +155,7 @@ const BY_NAME: Readonly<Partial<Record<OperationName, string>>> = {
   exp: EXP,
   ln: LN,
   log10: LOG10,
+  pow: 't = power(a, b)',
   less: 't = select(a < b, 1, 0)',
   lessOrEqual: 't = select(a <= b, 1, 0)',
   equal: 't = select(a == b, 1, 0)',

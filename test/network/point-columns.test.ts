@@ -29,6 +29,15 @@ const USUAL: Readonly<Record<string, readonly [low: number, high: number]>> = {
   C_GD: [1e-12, 1e-9],
   PB: [0.5, 1],
   M: [0.3, 0.5],
+  V_SB0: [0, 2],
+  R_b: [0, 1e4],
+  phi: [0.6, 0.9],
+  I_GSS: [0, 1e-8],
+  q_gs: [-1e6, 1e6],
+  q_ds: [-1e4, 1e4],
+  q_sb: [-1e4, 1e4],
+  T_A: [230, 380],
+  R_thJA: [0, 600],
   V_GS: [-5, 1],
   V_DS: [-5, 20],
 };
@@ -44,10 +53,12 @@ function compareForm(kernel: Kernel, form: Form, seed: number): number {
   const all = new Float64Array(width * stride);
   kernel.inputs.forEach((name, k) => {
     const [low, high] = USUAL[name] ?? [-2, 2];
-    const same = draw() < 0.2 ? low + (high - low) * draw() : NaN;
+    const isZero = name === kernel.zeroInLanes || draw() < 0.05;
+    const same = isZero ? 0 : draw() < 0.2 ? low + (high - low) * draw() : NaN;
     for (let i = 0; i < count; i++) {
       const usual = name === 'channel' ? (draw() < 0.5 ? 1 : -1) : same === same ? same : low + (high - low) * draw();
-      all[k * stride + i] = draw() < 0.01 ? SPECIAL[Math.floor(draw() * SPECIAL.length)]! : usual;
+      all[k * stride + i] =
+        name !== kernel.zeroInLanes && draw() < 0.01 ? SPECIAL[Math.floor(draw() * SPECIAL.length)]! : usual;
     }
   });
   const places = Int32Array.from({ length: width + 2 }, (_, n) => (n - 2) * stride);
