@@ -22,6 +22,9 @@ export interface LaneText {
   readonly zero?: string;
 }
 
+const BLOCK_AND_LOOP = [0x02, 0x40, 0x03, 0x40];
+const LEAVE_UNLESS_TRUE = [0x45, 0x0d, 1];
+
 const CONSTANTS: Readonly<Record<string, number>> = { NaN, Infinity };
 const UNARY: Readonly<Record<string, number>> = { sqrt: 0xef, abs: 0xec, floor: 0x75 };
 const BINARY: Readonly<Record<string, number>> = { min: 0xf4, max: 0xf5 };
@@ -34,6 +37,9 @@ const LEVELS: readonly Readonly<Record<string, number>>[] = [
   { '+': 0xf0, '-': 0xf1 },
   { '*': 0xf2, '/': 0xf3 },
 ];
+const OPERATORS = new Map(
+  LEVELS.flatMap((level, depth) => Object.entries(level).map(([sign, code]) => [sign, { depth, code }] as const)),
+);
 
 const TOKEN = /\s*(\d[\d.]*(?:e[-+]?\d+)?(?:\/\d+)?|\w+|[<>=!]=|[-+*/()<>&|!,])/y;
 
@@ -51,18 +57,40 @@ export function compileLanes(
   /** Before the names of variables: empty, or that of the text which is being set in. */
   let owner = '';
   let insertions = 0;
-  const emit = (...bytes: number[]): void => void body.push(...bytes);
+  const emit = (...pieces: (readonly number[])[]): void => {
+    for (const piece of pieces) for (let i = 0; i < piece.length; i++) body.push(piece[i]);
+  };
   const fault = (what: string): Error => new Error(`Lanes of ${outputs.join(', ')}: ${what}.`);
 
-  /** A variable has a local for each pair. */
-  function localOf(name: string, pair: number): number {
+  /** Where in the body the numbers of locals begin: the code of another pair differs in nothing else. */
+  const mentions: number[] = [];
+  const mention = (instruction: readonly number[]): void => {
+    mentions.push(body.length + 1);
+    emit(instruction);
+  };
+
+  /** The local of a variable for the first pair; that of another pair is as much further on. */
+  function localOf(name: string): number {
     let k = names.get(name);
     if (k === undefined) names.set(name, (k = names.size));
-    return first + PAIRS * k + pair;
+    return first + PAIRS * k;
   }
 
-  function expression(source: string, pair: number): void {
-    const scratch = (): number => localOf(`scratch ${names.size}`, pair);
+  /** What `write` writes, for each pair. */
+  function forEachPair(write: () => void): void {
+    const begin = body.length;
+    mentions.length = 0;
+    write();
+    const end = body.length;
+    for (let pair = 1; pair < PAIRS; pair++) {
+      for (let i = begin; i < end; i++) body.push(body[i]);
+      // Locals of a variable begin at a multiple of their count: the addition carries into no further byte.
+      for (const at of mentions) body[at + pair * (end - begin)] += pair;
+    }
+  }
+
+  function expression(source: string): void {
+    const scratch = (): number => localOf(`scratch ${names.size}`);
     let token = '';
     let at = 0;
     const advance = (): void => {
@@ -76,13 +104,15 @@ export function compileLanes(
       advance();
     };
     const level = (depth: number): void => {
-      if (depth === LEVELS.length) return operand();
-      level(depth + 1);
-      while (token in LEVELS[depth]) {
-        const code = LEVELS[depth][token];
+      operand();
+      for (
+        let found = OPERATORS.get(token);
+        found !== undefined && found.depth >= depth;
+        found = OPERATORS.get(token)
+      ) {
         advance();
-        level(depth + 1);
-        emit(...lane(code));
+        level(found.depth + 1);
+        emit(lane(found.code));
       }
     };
     const operand = (): void => {
@@ -93,13 +123,13 @@ export function compileLanes(
         expect(')');
       } else if (word === '-' || word === '!') {
         operand();
-        emit(...lane(word === '-' ? 0xed : 0x4d));
+        emit(lane(word === '-' ? 0xed : 0x4d));
       } else if (/^\d/.test(word)) {
         const [over, under = 1] = word.split('/').map(Number);
-        emit(...constant(over / under));
+        emit(constant(over / under));
       } else if (token === '(') call(word);
-      else if (word in CONSTANTS) emit(...constant(CONSTANTS[word]));
-      else if (known.has(owner + word)) emit(...get(localOf(owner + word, pair)));
+      else if (word in CONSTANTS) emit(constant(CONSTANTS[word]));
+      else if (known.has(owner + word)) mention(get(localOf(owner + word)));
       else throw fault(`nothing is called ${word} in ${source}`);
     };
     const call = (name: string): void => {
@@ -114,20 +144,21 @@ export function compileLanes(
       } else if (name === 'select') {
         const mask = scratch();
         level(0);
-        emit(...set(mask));
+        mention(set(mask));
         expect(',');
         level(0);
         expect(',');
         level(0);
-        emit(...get(mask), ...lane(0x52));
+        mention(get(mask));
+        emit(lane(0x52));
       } else {
         level(0);
         if (name in BINARY) {
           expect(',');
           level(0);
-          emit(...lane(BINARY[name]));
-        } else if (name in UNARY) emit(...lane(UNARY[name]));
-        else if (name in BITS) emit(...BITS[name]);
+          emit(lane(BINARY[name]));
+        } else if (name in UNARY) emit(lane(UNARY[name]));
+        else if (name in BITS) emit(BITS[name]);
         else throw fault(`no function is called ${name}`);
       }
       expect(')');
@@ -139,19 +170,20 @@ export function compileLanes(
 
   /** Numbers of a table by whole numbers in both lanes. */
   function lookUp(table: number, index: number): void {
-    emit(...set(index));
+    mention(set(index));
     for (const k of [0, 1]) {
       // The lane as a whole number, times eight, loaded.
-      emit(...get(index), ...lane(0x21), k, 0xfc, 2, 0x41, 3, 0x74, 0x2b, 3, ...unsigned(table));
-      emit(...lane(k === 0 ? 0x14 : 0x22), ...(k === 0 ? [] : [1]));
+      mention(get(index));
+      emit(lane(0x21), [k, 0xfc, 2, 0x41, 3, 0x74, 0x2b, 3], unsigned(table));
+      emit(lane(k === 0 ? 0x14 : 0x22), k === 0 ? [] : [1]);
     }
   }
 
   function assign(name: string, source: string): void {
-    for (let pair = 0; pair < PAIRS; pair++) {
-      expression(source, pair);
-      emit(...set(localOf(name, pair)));
-    }
+    forEachPair(() => {
+      expression(source);
+      mention(set(localOf(name)));
+    });
     known.add(name);
   }
 
@@ -162,9 +194,10 @@ export function compileLanes(
     owner = inner;
     statements(text);
     owner = before;
-    for (let pair = 0; pair < PAIRS; pair++) {
-      emit(...get(localOf(inner + outputs[0], pair)), ...set(localOf(owner + name, pair)));
-    }
+    forEachPair(() => {
+      mention(get(localOf(inner + outputs[0])));
+      mention(set(localOf(owner + name)));
+    });
     known.add(owner + name);
   }
 
@@ -180,19 +213,17 @@ export function compileLanes(
       else if (block !== null) begin(block[1], block[2]);
       else if (line === 'end') {
         if (blocks.length === 0) throw fault('end without if or while');
-        emit(0x0c, blocks.pop() === 'while' ? 0 : 1, 0x0b, 0x0b);
+        emit([0x0c, blocks.pop() === 'while' ? 0 : 1, 0x0b, 0x0b]);
       } else throw fault(`${line} is no statement`);
     }
   }
 
   /** block; loop: leave where no lane is set. A loop ends with a branch to its begin, an `if` with one out. */
   function begin(word: string, condition: string): void {
-    emit(0x02, 0x40, 0x03, 0x40);
-    for (let pair = 0; pair < PAIRS; pair++) {
-      expression(condition, pair);
-      if (pair > 0) emit(...lane(0x50));
-    }
-    emit(...lane(0x53), 0x45, 0x0d, 1);
+    emit(BLOCK_AND_LOOP);
+    forEachPair(() => expression(condition));
+    for (let pair = 1; pair < PAIRS; pair++) emit(lane(0x50));
+    emit(lane(0x53), LEAVE_UNLESS_TRUE);
     blocks.push(word);
   }
 

@@ -29,9 +29,12 @@ interface LaneFunction {
   readonly body: readonly number[];
 }
 
-/** Where the locals of vectors begin in a function of so many columns: behind the addresses, the count and the offset. */
+/**
+ * Where the locals of vectors begin in a function of so many columns: behind the addresses, the count and the offset, at a
+ * multiple of the pairs.
+ */
 export function firstVector(columns: number): number {
-  return columns + 2;
+  return PAIRS * Math.ceil((columns + 2) / PAIRS);
 }
 
 /** The module as bytes; it exports each function by its name and takes the memory `lanes.memory`. */
@@ -40,23 +43,23 @@ export function assembleLanes(functions: readonly LaneFunction[]): Uint8Array<Ar
   const types = widths.map((width) => [0x60, ...vector(Array.from({ length: width + 1 }, () => [I32])), 0]);
   const memory = [...text('lanes'), ...text('memory'), 2, 0, 1];
   const exported = functions.map(({ name }, k) => [...text(name), 0, ...unsigned(k)]);
-  return Uint8Array.from([
-    ...MAGIC,
-    ...section(1, vector(types)),
-    ...section(2, vector([memory])),
-    ...section(3, vector(functions.map(({ inputs, outputs }) => unsigned(widths.indexOf(inputs + outputs))))),
-    ...section(7, vector(exported)),
-    ...section(10, vector(functions.map(codeOf))),
+  return joined([
+    MAGIC,
+    section(1, vector(types)),
+    section(2, vector([memory])),
+    section(3, vector(functions.map(({ inputs, outputs }) => unsigned(widths.indexOf(inputs + outputs))))),
+    section(7, vector(exported)),
+    section(10, vector(functions.map(codeOf))),
   ]);
 }
 
-function codeOf({ inputs, outputs, locals, body }: LaneFunction): number[] {
+function codeOf({ inputs, outputs, locals, body }: LaneFunction): Uint8Array {
   const columns = inputs + outputs;
   const count = columns;
   const offset = columns + 1;
   const first = firstVector(columns);
-  const address = (k: number): number[] => [...get(k), ...get(offset), 0x6a];
   const pairs = Array.from({ length: PAIRS }, (_, pair) => pair);
+  const address = (k: number): number[] => [...get(k), ...get(offset), 0x6a];
   const loads = Array.from({ length: inputs }, (_, k) =>
     pairs.map((pair) => [...address(k), ...lane(0x00), 3, 16 * pair, ...set(first + PAIRS * k + pair)]),
   );
@@ -65,56 +68,74 @@ function codeOf({ inputs, outputs, locals, body }: LaneFunction): number[] {
     return pairs.map((pair) => [...address(k), ...get(first + PAIRS * k + pair), ...lane(0x0b), 3, 16 * pair]);
   });
   const types = [
-    [1, I32],
+    [first - columns - 1, I32],
     [...unsigned(locals), V128],
   ];
-  const code = [
-    ...vector(types),
-    ...get(count),
-    ...EIGHTFOLD,
-    ...set(count),
-    ...BLOCK_AND_LOOP,
-    ...get(offset),
-    ...get(count),
-    ...LEAVE_UNLESS_LESS,
-    ...loads.flat(2),
-    ...body,
-    ...stores.flat(2),
-    ...get(offset),
-    ...NEXT_PAIRS,
-    ...set(offset),
-    ...REPEAT_AND_END,
-  ];
-  return [...unsigned(code.length), ...code];
+  const code = joined([
+    vector(types),
+    [...get(count), ...EIGHTFOLD, ...set(count)],
+    BLOCK_AND_LOOP,
+    [...get(offset), ...get(count), ...LEAVE_UNLESS_LESS],
+    ...loads.flat(),
+    body,
+    ...stores.flat(),
+    [...get(offset), ...NEXT_PAIRS, ...set(offset)],
+    REPEAT_AND_END,
+  ]);
+  return joined([unsigned(code.length), code]);
+}
+
+type Bytes = readonly number[] | Uint8Array;
+
+/** Bodies are long: they are copied as blocks. */
+function joined(pieces: readonly Bytes[]): Uint8Array<ArrayBuffer> {
+  const all = new Uint8Array(pieces.reduce((length, piece) => length + piece.length, 0));
+  let at = 0;
+  for (const piece of pieces) {
+    all.set(piece, at);
+    at += piece.length;
+  }
+  return all;
 }
 
 /** An instruction of the lanes. */
-export function lane(code: number): number[] {
-  return [LANES, ...unsigned(code)];
+export function lane(code: number): readonly number[] {
+  return (INSTRUCTIONS[code] ??= [LANES, ...unsigned(code)]);
 }
 
-export function get(local: number): number[] {
-  return [0x20, ...unsigned(local)];
+const INSTRUCTIONS: number[][] = [];
+
+export function get(local: number): readonly number[] {
+  return (GETS[local] ??= [0x20, ...unsigned(local)]);
 }
 
-export function set(local: number): number[] {
-  return [0x21, ...unsigned(local)];
+export function set(local: number): readonly number[] {
+  return (SETS[local] ??= [0x21, ...unsigned(local)]);
 }
+
+const GETS: number[][] = [];
+const SETS: number[][] = [];
 
 /** Both lanes hold x. */
-export function constant(x: number): number[] {
+export function constant(x: number): readonly number[] {
+  const found = VALUES.get(x);
+  if (found !== undefined && x !== 0) return found;
   const view = new DataView(new ArrayBuffer(16));
   view.setFloat64(0, x, true);
   view.setFloat64(8, x, true);
-  return [...lane(0x0c), ...new Uint8Array(view.buffer)];
+  const instruction = [...lane(0x0c), ...new Uint8Array(view.buffer)];
+  VALUES.set(x, instruction);
+  return instruction;
 }
 
-function section(id: number, content: readonly number[]): number[] {
-  return [id, ...unsigned(content.length), ...content];
+const VALUES = new Map<number, number[]>();
+
+function section(id: number, content: Bytes): Uint8Array {
+  return joined([[id], unsigned(content.length), content]);
 }
 
-function vector(items: readonly (readonly number[])[]): number[] {
-  return [...unsigned(items.length), ...items.flat()];
+function vector(items: readonly Bytes[]): Uint8Array {
+  return joined([unsigned(items.length), ...items]);
 }
 
 function text(name: string): number[] {
