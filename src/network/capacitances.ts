@@ -21,5 +21,19 @@ function capacitancesOf(family: 'JFET' | 'MOSFET'): Kernel {
       s[a[p + 7]] = moves.C_GS ? junctionCapacitance(s[a[p + 1]], vgs, pb, m) : s[a[p + 1]];
       s[a[p + 8]] = moves.C_GD ? junctionCapacitance(s[a[p + 2]], vgd, pb, m) : s[a[p + 2]];
     },
+    lanes: `
+      vgs = channel * V_GS
+      vgd = vgs - channel * V_DS
+      ${moves.C_GS ? junctionLanes('C_gs', 'C_GS', 'vgs') : 'C_gs = C_GS'}
+      ${moves.C_GD ? junctionLanes('C_gd', 'C_GD', 'vgd') : 'C_gd = C_GD'}`,
   };
+}
+
+/** `junctionCapacitance` of the capacitance at 0 V and the forward voltage by their names. */
+function junctionLanes(result: string, zeroBias: string, v: string): string {
+  return `
+      depletion = power(1 - ${v} / PB, -M)
+      tangent = power(2, M)
+      tangent = tangent * (1 + M * (2 * ${v} / PB - 1))
+      ${result} = ${zeroBias} * select(${v} <= 0.5 * PB, depletion, tangent)`;
 }

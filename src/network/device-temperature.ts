@@ -13,6 +13,10 @@ export const deviceAtTemperature: Kernel = {
     s[a[p + 6]] = T === nominal ? s[a[p]] : betaAt(s[a[p]], s[a[p + 1]], T, nominal);
     s[a[p + 7]] = thresholdAt(s[a[p + 2]], s[a[p + 3]], T, nominal);
   },
+  lanes: `
+    mobility = power(T / T_nom, beta_exponent)
+    beta_out = select(T == T_nom, beta, beta * mobility)
+    V_TO_out = V_TO + tempco * (T - T_nom)`,
 };
 
 /** Gate leakage (A) at the temperature T. */
@@ -24,4 +28,7 @@ export const gateLeakage: Kernel = {
     const T = s[a[p + 3]];
     s[a[p + 4]] = T === nominal ? s[a[p]] : leakageAt(s[a[p]], s[a[p + 1]], T, nominal);
   },
+  lanes: `
+    growth = power(2, (T - T_nom) / doubling)
+    I_G = select(T == T_nom, I_GSS, I_GSS * growth)`,
 };

@@ -1,7 +1,7 @@
 // Kernels down columns against the same kernels sample by sample, to the last bit.
 
 import { expect, test } from 'vitest';
-import { KERNELS } from '../../src/network/index.ts';
+import { KERNELS, POINT_STATUS } from '../../src/network/index.ts';
 import type { Kernel } from '../../src/network/index.ts';
 import { createLaneMemory } from '../../src/program/accelerator.ts';
 import { PROGRAM_KERNELS } from '../../src/program/index.ts';
@@ -44,8 +44,8 @@ const USUAL: Readonly<Record<string, readonly [low: number, high: number]>> = {
 
 type Form = (all: Float64Array, places: Int32Array, at: number, count: number) => void;
 
-/** Gives a kernel many samples in one of its forms, and compares what it leaves. */
-function compareForm(kernel: Kernel, form: Form, seed: number): number {
+/** Gives a kernel many samples in one of its forms, compares what it leaves with that of single samples, and answers with it. */
+function compareForm(kernel: Kernel, form: Form, seed: number): Float64Array[] {
   const draw = createDraw(seed);
   const width = kernel.inputs.length + kernel.outputs.length;
   const count = 700;
@@ -75,7 +75,7 @@ function compareForm(kernel: Kernel, form: Form, seed: number): number {
       }
     });
   }
-  return count;
+  return kernel.outputs.map((_, n) => all.slice((kernel.inputs.length + n) * stride).subarray(0, count));
 }
 
 /** Runs the lanes of a kernel on columns of their own memory. */
@@ -107,5 +107,22 @@ test('the operating point on its lines has both forms', () => {
 });
 
 test.each(forms)('%s %s leaves what it leaves sample by sample', (_name, _form, kernel, form) => {
-  for (let seed = 0; seed < 60; seed++) expect(compareForm(kernel, form, seed)).toBeGreaterThan(0);
+  for (let seed = 0; seed < 60; seed++) expect(compareForm(kernel, form, seed).length).toBe(kernel.outputs.length);
+});
+
+test('lanes meet every way in which heat can end: one root, several, none, and what is no number', () => {
+  const kernel: Kernel = KERNELS['general-point'];
+  const form = lanesOf('general-point', kernel.inputs.length + kernel.outputs.length);
+  const [status, roots] = ['status', 'thermal_roots'].map((name) => kernel.outputs.indexOf(name));
+  const ends = new Map<string, number>();
+  for (let seed = 0; seed < 60; seed++) {
+    const results = compareForm(kernel, form, seed);
+    results[status!]!.forEach((code, i) => {
+      const end = `${POINT_STATUS[code]} ${results[roots!]![i]}`;
+      ends.set(end, (ends.get(end) ?? 0) + 1);
+    });
+  }
+  for (const end of ['solved 1', 'solved 2', 'solved 3', 'thermal runaway NaN', 'not a number NaN']) {
+    expect(ends.get(end), end).toBeGreaterThan(10);
+  }
 });
