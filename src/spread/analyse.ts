@@ -4,8 +4,8 @@ import type { Analyses, SpreadModel } from '../sheet/index.ts';
 import { createAnalysis } from './analysis.ts';
 import { createBuilds } from './builds.ts';
 import { searchExtremes } from './extremes.ts';
-import { PORTION } from './portion.ts';
 import { openEnds } from './open-ends.ts';
+import { portionsOf } from './portion.ts';
 import type { CheckSpread, SpreadReport, ValueSpread } from './report.ts';
 
 /** What is known of the spread of a sheet, with the model it speaks of. */
@@ -33,9 +33,7 @@ export function analyse(model: SpreadModel, { samples, seed }: { samples: number
   if (model.drawn.length === 0) return null;
   const analysis = createAnalysis(model, seed, 'full');
   const builds = createBuilds(model, seed, analysis.ranges());
-  for (let first = 0; first < samples; first += PORTION) {
-    analysis.take(builds.count(first, Math.min(PORTION, samples - first)));
-  }
+  for (const { first, count } of portionsOf(samples)) analysis.take(builds.count(first, count));
   analysis.lookForTracking();
   return readSpread(model, analysis.report());
 }

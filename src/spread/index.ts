@@ -3,7 +3,7 @@
 export { ANALYSES, analyse, readSpread } from './analyse.ts';
 export { createMendJob, createSpreadJob } from './job.ts';
 export type { Answer, MendAnswer, MendQuestion, Question, SpreadAnswer, SpreadQuestion } from './job.ts';
-export { PORTION } from './portion.ts';
+export { portionsOf } from './portion.ts';
 export type { SheetSpread } from './analyse.ts';
 export { searchExtremes } from './extremes.ts';
 export type { Extremes } from './extremes.ts';

@@ -2,11 +2,11 @@
 
 import type { SpreadModel } from '../sheet/index.ts';
 import { createAnalysis } from './analysis.ts';
-import { PORTION } from './portion.ts';
 import { createBuilds } from './builds.ts';
 import type { SearchEffort } from './extremes.ts';
 import { mendWith, reservesWith } from './mending.ts';
 import type { CheckStanding, Mending } from './mending.ts';
+import { portionsOf } from './portion.ts';
 import type { SpreadReport } from './report.ts';
 
 /** What is asked of the worker: how far values move, or what would mend the checks. */
@@ -59,8 +59,6 @@ export function* createMendJob({ id, model, inputs }: MendQuestion): Generator<M
   }
 }
 
-/** Builds after which the first counts are shown. */
-const FIRST_PORTION = 512;
 /** Portions between two answers. */
 const PORTIONS_PER_ANSWER = 4;
 
@@ -68,15 +66,11 @@ const PORTIONS_PER_ANSWER = 4;
 export function* createSpreadJob({ id, model, samples, seed, effort }: SpreadQuestion): Generator<SpreadAnswer> {
   const analysis = createAnalysis(model, seed, effort);
   const builds = createBuilds(model, seed, analysis.ranges());
-  let portions = 0;
-  for (let first = 0; first < samples;) {
-    const count = Math.min(first === 0 ? FIRST_PORTION : PORTION - (first % PORTION), samples - first);
+  for (const [n, { first, count }] of portionsOf(samples).entries()) {
     analysis.take(builds.count(first, count));
-    first += count;
-    portions++;
-    const isLast = first >= samples;
+    const isLast = first + count >= samples;
     if (isLast && effort === 'full') analysis.lookForTracking();
-    if (isLast || portions === 1 || portions % PORTIONS_PER_ANSWER === 0)
+    if (isLast || n === 0 || (n + 1) % PORTIONS_PER_ANSWER === 0)
       yield { kind: 'spread', id, report: analysis.report(), isLast };
   }
 }

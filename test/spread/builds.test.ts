@@ -3,7 +3,7 @@
 import { jStat } from 'jstat';
 import { describe, expect, test } from 'vitest';
 import { createSheet } from '../../src/sheet/index.ts';
-import { PORTION, analyse, createAnalysis, createBuilds } from '../../src/spread/index.ts';
+import { analyse, createAnalysis, createBuilds, createSpreadJob, portionsOf } from '../../src/spread/index.ts';
 import type { SheetSpread } from '../../src/spread/index.ts';
 
 const spreadOf = (text: string, samples = 10_000, seed = 1): SheetSpread =>
@@ -175,16 +175,40 @@ describe('draws', () => {
     expect(distribution!.sd).toBeCloseTo((100 / Math.sqrt(12)) * Math.SQRT2, 0);
   });
 
-  test('portions counted in any order, merged in the order of their builds, give the same bits', () => {
+  test('portions counted in any order, each by another counter, give the same bits when merged in the order of their builds', () => {
     const model = createSheet(text).spreadModel();
-    const whole = analyse(model, { samples: 3 * PORTION, seed: 4 })!.report;
+    const whole = analyse(model, { samples: 20_000, seed: 4 })!.report;
     const analysis = createAnalysis(model, 4, 'full');
-    const firsts = [2 * PORTION, 0, PORTION];
+    const portions = portionsOf(20_000);
     const tallies = new Map(
-      firsts.map((first) => [first, createBuilds(model, 4, analysis.ranges()).count(first, PORTION)]),
+      portions
+        .toReversed()
+        .map(({ first, count }) => [first, createBuilds(model, 4, analysis.ranges()).count(first, count)]),
     );
-    for (const first of firsts.toSorted((a, b) => a - b)) analysis.take(tallies.get(first)!);
+    for (const { first } of portions) analysis.take(tallies.get(first)!);
     expect(analysis.report()).toEqual(whole);
+  });
+
+  test.each([300, 2000, 20_000])(
+    'the page, which counts step by step, shows the bits of the terminal: %d builds',
+    (samples) => {
+      const model = createSheet(text).spreadModel();
+      const answers = [...createSpreadJob({ kind: 'spread', id: 1, model, samples, seed: 4, effort: 'full' })];
+      expect(answers.map(({ isLast }) => isLast)).toEqual(answers.map((_, n) => n === answers.length - 1));
+      expect(answers.at(-1)!.report).toEqual(analyse(model, { samples, seed: 4 })!.report);
+    },
+  );
+
+  test('portions hold every build once', () => {
+    for (const samples of [0, 1, 511, 512, 513, 8192, 8193, 50_000]) {
+      let next = 0;
+      for (const { first, count } of portionsOf(samples)) {
+        expect(first).toBe(next);
+        expect(count).toBeGreaterThan(0);
+        next = first + count;
+      }
+      expect(next).toBe(samples);
+    }
   });
 
   test('no build beats an extreme', () => {
