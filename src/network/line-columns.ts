@@ -48,34 +48,42 @@ function solveBlock(all: Float64Array, places: Int32Array, at: number, from: num
     } else if (isOhmic(all[beta + i], all[lambda + i], A, all[r + i], all[b + i], all[R + i])) ohmic[ohmicCount++] = i;
     else saturated[saturatedCount++] = i;
   }
-  for (let n = 0; n < saturatedCount; n++) {
-    const i = saturated[n];
+  solveListed(all, places, at, saturated, saturatedCount, solveSaturated);
+  solveListed(all, places, at, ohmic, ohmicCount, solveOhmicLine);
+}
+
+function solveListed(
+  all: Float64Array,
+  places: Int32Array,
+  at: number,
+  list: Int32Array,
+  length: number,
+  solve: () => number,
+): void {
+  const beta = places[at];
+  const lambda = places[at + 1];
+  const drive = places[at + 2];
+  const r = places[at + 3];
+  const b = places[at + 4];
+  const R = places[at + 5];
+  const currents = places[at + 6];
+  const overdrives = places[at + 7];
+  const drains = places[at + 8];
+  const margins = places[at + 9];
+  const regions = places[at + 10];
+  for (let n = 0; n < length; n++) {
+    const i = list[n];
     givenLine[0] = all[beta + i];
     givenLine[1] = all[lambda + i];
     givenLine[2] = all[drive + i];
     givenLine[3] = all[r + i];
     givenLine[4] = all[b + i];
     givenLine[5] = all[R + i];
-    solveSaturated();
-    all[places[at + 6] + i] = line[CURRENT];
-    all[places[at + 7] + i] = line[OVERDRIVE];
-    all[places[at + 8] + i] = line[DRAIN_SOURCE];
-    all[places[at + 9] + i] = line[MARGIN];
-    all[places[at + 10] + i] = line[REGION];
-  }
-  for (let n = 0; n < ohmicCount; n++) {
-    const i = ohmic[n];
-    givenLine[0] = all[beta + i];
-    givenLine[1] = all[lambda + i];
-    givenLine[2] = all[drive + i];
-    givenLine[3] = all[r + i];
-    givenLine[4] = all[b + i];
-    givenLine[5] = all[R + i];
-    solveOhmicLine();
-    all[places[at + 6] + i] = line[CURRENT];
-    all[places[at + 7] + i] = line[OVERDRIVE];
-    all[places[at + 8] + i] = line[DRAIN_SOURCE];
-    all[places[at + 9] + i] = line[MARGIN];
-    all[places[at + 10] + i] = line[REGION];
+    solve();
+    all[currents + i] = line[CURRENT];
+    all[overdrives + i] = line[OVERDRIVE];
+    all[drains + i] = line[DRAIN_SOURCE];
+    all[margins + i] = line[MARGIN];
+    all[regions + i] = line[REGION];
   }
 }
