@@ -53,7 +53,7 @@ export function CellInput(props: { readonly grid: Grid; readonly label: string }
       onPaste={(event) => {
         if (pasteLinesWhileEditing(grid, event.clipboardData?.getData('text/plain') ?? '')) event.preventDefault();
       }}
-      onBlur={() => grid.commit('leave')}
+      onBlur={() => grid.moving.rows || grid.commit('leave')}
     />
   );
 }

@@ -1,9 +1,11 @@
 // What stands in the cells of a row: names, entries, numbers, sources.
 
 import { Show } from 'solid-js';
-import type { Figure, Row, RowFault, RowName, RowSource } from '../rows/index.ts';
+import type { Figure, Row, RowName, RowSource } from '../rows/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
+import { LongText } from './long-text.tsx';
 import { markedText } from './marked-text.ts';
+import type { RowState } from './row-state.ts';
 
 /** A name as it is set, with what readers say in its place. */
 export function NameText(props: { readonly name: RowName }) {
@@ -20,13 +22,23 @@ export function NameText(props: { readonly name: RowName }) {
 }
 
 /** An entry; the part that a message speaks of is underlined. */
-export function EntryText(props: { readonly row: Row; readonly fault: RowFault | null }) {
-  const text = () => props.row.entry?.text ?? '';
-  const parts = () => markedText(text(), props.fault?.at?.column === 'entry' ? props.fault.at : null);
+export function EntryText(props: { readonly state: RowState }) {
+  const { state } = props;
+  const text = () => state.row().entry?.text ?? '';
+  const parts = () => {
+    const at = state.fault()?.at;
+    return markedText(text(), at?.column === 'entry' ? at : null);
+  };
   return (
-    <span class="entry-text">
+    <LongText
+      class="entry-text"
+      length={text().length}
+      what={`entry of ${saidOf(state.row())}`}
+      open={state.isWhole('entry')}
+      toggle={() => state.toggleWhole('entry')}
+    >
       <Show
-        when={props.row.entry?.look === 'words'}
+        when={state.row().entry?.look === 'words'}
         fallback={
           <>
             {parts().before}
@@ -39,8 +51,12 @@ export function EntryText(props: { readonly row: Row; readonly fault: RowFault |
       >
         <Prose text={text()} />
       </Show>
-    </span>
+    </LongText>
   );
+}
+
+function saidOf(row: Row): string {
+  return row.name?.said ?? 'this line';
 }
 
 /** A number; its unit where asked for or where it is another than its neighbours'. */
@@ -60,9 +76,16 @@ export function NumberText(props: { readonly figure: Figure | null; readonly wit
 }
 
 /** Source and note, or what is said in their place. */
-export function SourceText(props: { readonly source: RowSource }) {
+export function SourceText(props: { readonly state: RowState; readonly source: RowSource }) {
+  const { state } = props;
   return (
-    <span class={`source-text source-${props.source.look}`}>
+    <LongText
+      class={`source-text source-${props.source.look}`}
+      length={props.source.text.length + props.source.note.length}
+      what={`source and note of ${saidOf(state.row())}`}
+      open={state.isWhole('source')}
+      toggle={() => state.toggleWhole('source')}
+    >
       <Prose text={props.source.text} />
       <Show when={props.source.note !== ''}>
         <span class="note-text">
@@ -70,6 +93,6 @@ export function SourceText(props: { readonly source: RowSource }) {
           <Prose text={props.source.note} />
         </span>
       </Show>
-    </span>
+    </LongText>
   );
 }

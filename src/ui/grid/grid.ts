@@ -15,6 +15,8 @@ import type { Editor } from './editor.ts';
 import type { Folds } from '../session/index.ts';
 import { heldCells } from './held.ts';
 import { reveal } from './reveal.ts';
+import { createWholeTexts } from './whole-texts.ts';
+import type { WholeTexts } from './whole-texts.ts';
 
 interface Dragged {
   readonly key: string;
@@ -26,6 +28,8 @@ export interface Grid {
   readonly desk: Desk;
   readonly editor: Editor;
   readonly folds: Folds;
+  /** Which long texts are open. */
+  readonly whole: WholeTexts;
   model(): SheetRows;
   /** Keys of the rows shown, in order. */
   keys(): readonly string[];
@@ -67,6 +71,8 @@ export interface Grid {
   /** Whether the menu of what can be inserted is open. */
   inserting(): boolean;
   setInserting(open: boolean): void;
+  /** Set while rows are put among others: the focus that is lost by it comes back. */
+  readonly moving: { rows: boolean };
   /** The text field of the cell that is edited. */
   field(): HTMLInputElement | null;
   setField(field: HTMLInputElement | null): void;
@@ -299,6 +305,7 @@ export function createGrid(desk: Desk): Grid {
     desk,
     editor,
     folds,
+    whole: createWholeTexts(),
     model,
     keys,
     row,
@@ -393,6 +400,7 @@ export function createGrid(desk: Desk): Grid {
     completing,
     inserting,
     setInserting,
+    moving: { rows: false },
     field,
     setField,
     followText: (asked) => completing.follow(field()?.selectionStart ?? editor.text().length, asked),

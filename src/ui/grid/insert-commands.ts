@@ -1,8 +1,8 @@
 // Inserting ready lines below the selected row.
 
 import { blockOf, insertLines } from '../../language/index.ts';
-import { insertionLines } from '../rows/index.ts';
-import type { InsertionChoice } from '../rows/index.ts';
+import { insertionLines, plotAgainst } from '../rows/index.ts';
+import type { InsertionChoice, PlotInput } from '../rows/index.ts';
 import { DRAFT } from './draft.ts';
 import type { Grid } from './grid.ts';
 
@@ -14,6 +14,14 @@ export function insertChoice(grid: Grid, { insertion, title }: InsertionChoice):
   document.edit(insertLines(document.tree(), before, lines.join('\n')), `insert ${title}`);
   if (insertion.type === 'part') grid.focusLine(before + 1, 'low');
   else grid.focusLine(before + lines.findLastIndex((line) => !line.startsWith(' ')), 'entry');
+}
+
+/** Writes the plot of a value against an input and goes to it. */
+export function insertPlot(grid: Grid, path: string, input: PlotInput): void {
+  const { document } = grid.desk;
+  const { splices, line } = plotAgainst(path, input, document.sheet);
+  document.edit(splices, `plot ${path} against ${input.path}`);
+  grid.focusLine(line, 'entry');
 }
 
 /** The line before which a new cell goes: behind the selected row's block, else at the end. */

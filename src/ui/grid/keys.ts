@@ -43,6 +43,7 @@ export function navigate(grid: Grid, event: KeyboardEvent): boolean {
       return true;
     case ' ':
       if (selection?.column === 'name') grid.toggle(selection.row);
+      else if (selection) pressMore(event);
       return true;
     case 'Enter':
     case 'F2': {
@@ -95,6 +96,11 @@ export function whileEditing(grid: Grid, event: KeyboardEvent): boolean {
     default:
       return false;
   }
+}
+
+/** Opens or closes the rest of a long text in the cell that has the focus. */
+function pressMore({ target }: KeyboardEvent): void {
+  if (target instanceof Element) target.querySelector<HTMLElement>('.more-text')?.click();
 }
 
 function done(_effect: void): true {

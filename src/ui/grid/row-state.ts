@@ -24,6 +24,9 @@ export interface RowState {
   shift(): number;
   /** Its number among the rows of the grid, the head being the first. */
   index(): number;
+  /** Whether a column shows all lines of a long text. */
+  isWhole(column: Column): boolean;
+  toggleWhole(column: Column): void;
   /** Id of the element that says it. */
   readonly messageId: string;
 }
@@ -59,6 +62,11 @@ export function createRowState(grid: Grid, key: string): RowState {
       return dragged?.key === key && row().bar?.scale === 'shared' ? shiftOf(dragged.to, dragged.from) : 0;
     },
     index: () => grid.indexOf(key) + 2,
+    isWhole: (column) => grid.whole.has(key, column),
+    toggleWhole(column) {
+      grid.whole.toggle(key, column);
+      grid.focus(key, column);
+    },
     messageId: `about-${key.replace(/[^\w-]/g, '_')}`,
   };
 }

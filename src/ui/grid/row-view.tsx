@@ -52,7 +52,7 @@ export function RowView(props: RowProps) {
         </Show>
         <Show when={has('entry')}>
           <Cell state={state} column="entry" class={`entry-${row().entry?.look ?? 'none'}`}>
-            <EntryText row={row()} fault={state.fault()} />
+            <EntryText state={state} />
           </Cell>
         </Show>
         <Show when={has('nominal')}>
@@ -142,9 +142,9 @@ function Numbers(props: { readonly state: RowState }) {
       <Cell state={state} column="source">
         <Show
           when={state.editing()}
-          fallback={<Show when={row().source}>{(source) => <SourceText source={source()} />}</Show>}
+          fallback={<Show when={row().source}>{(source) => <SourceText state={state} source={source()} />}</Show>}
         >
-          {(present) => <span class="source-text">was {present().was === '' ? 'empty' : present().was}</span>}
+          {(present) => <span class="long-text source-text">was {present().was === '' ? 'empty' : present().was}</span>}
         </Show>
       </Cell>
     </>

@@ -28,11 +28,13 @@ export function SheetGrid(props: { readonly desk: Desk }) {
   let heldFocus: Element | null = null;
   const items = createMemo(() => {
     heldFocus = table?.contains(document.activeElement) ? document.activeElement : null;
+    grid.moving.rows = true;
     return windowItems(grid.keys(), seen()(), grid.stop()).map(itemText);
   });
   // A row that is moved among others loses the focus, though it stays.
   createEffect(
     on(items, () => {
+      grid.moving.rows = false;
       if (heldFocus instanceof HTMLElement && heldFocus.isConnected && document.activeElement === document.body)
         heldFocus.focus({ preventScroll: true });
     }),

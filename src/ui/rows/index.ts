@@ -14,3 +14,5 @@ export { INSERTIONS, insertionLines } from './insertions.ts';
 export type { InsertionChoice } from './insertions.ts';
 export { setNumbers } from './part-numbers.ts';
 export type { RowSpread } from './row-spread.ts';
+export type { PlotInput } from './plot-against.ts';
+export { inputsBehind, plotAgainst, plottedPath, writePlot } from './plot-against.ts';
