@@ -3,6 +3,7 @@
 // is as wide or narrower.
 
 import type { Box, Run, TextItem } from './geometry.ts';
+import { greekLetter, symbolName } from './symbol-name.ts';
 
 /** Size of all words and numbers in a schematic. */
 export const LABEL_SIZE = 12;
@@ -11,26 +12,10 @@ const BOLD = 1.14;
 const ASCENT = 0.8;
 const DESCENT = 0.25;
 
-const GREEK: ReadonlyMap<string, string> = new Map(
-  Object.entries({
-    alpha: 'α',
-    beta: 'β',
-    gamma: 'γ',
-    delta: 'δ',
-    epsilon: 'ε',
-    zeta: 'ζ',
-    eta: 'η',
-    theta: 'θ',
-    lambda: 'λ',
-    mu: 'μ',
-    phi: 'φ',
-    psi: 'ψ',
-    rho: 'ρ',
-    sigma: 'σ',
-    tau: 'τ',
-    omega: 'ω',
-  }),
-);
+/** Between subscripts. */
+const NEXT = ',\u2009';
+/** Above the character before it. */
+const HAT = '\u0302';
 
 /** Widths in em by character; what is not listed takes that of its class. */
 const WIDTHS: Readonly<Record<string, number>> = {
@@ -75,15 +60,10 @@ export function typeset(path: string): Run[] {
   const names = path.split('.');
   const name = names[names.length - 1]!;
   const owner = names.slice(0, -1).join('.');
-  const [head = '', ...rest] = name.split('_').filter((part) => part !== '');
-  const letter = GREEK.get(head);
-  const isQuantity = name.includes('_') || letter !== undefined;
-  const runs: Run[] = [{ text: letter ?? head, style: isQuantity ? 'italic' : 'upright' }];
-  const subscript = [
-    ...(rest.length > 0 ? [rest.map((part) => GREEK.get(part) ?? part).join(',')] : []),
-    ...(owner === '' ? [] : [owner]),
-  ];
-  if (subscript.length > 0) runs.push({ text: subscript.join(', '), style: 'subscript' });
+  const { head, letter, hat, style, subscripts } = symbolName(name);
+  const runs: Run[] = [{ text: (letter ?? head) + (hat ? HAT : ''), style }];
+  const below = [...subscripts.map((part) => greekLetter(part) ?? part), ...(owner === '' ? [] : [owner])];
+  if (below.length > 0) runs.push({ text: below.join(NEXT), style: 'subscript' });
   return runs;
 }
 

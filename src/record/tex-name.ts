@@ -1,46 +1,7 @@
 // Names and paths in TeX: a name with `_` is a quantity, set italic with an upright subscript; one
 // without is a designator or a word, set upright and whole; a Greek letter's name is the letter.
 
-/** Letters that TeX knows by these names. */
-const GREEK = new Set(
-  (
-    'alpha beta gamma delta epsilon zeta eta theta iota kappa lambda mu nu xi pi rho sigma tau upsilon phi chi psi omega ' +
-    'Gamma Delta Theta Lambda Xi Pi Sigma Upsilon Phi Psi Omega'
-  ).split(' '),
-);
-
-/** Greek letters that look like a Latin one and have no name in TeX. */
-const GREEK_AS_LATIN: ReadonlyMap<string, string> = new Map(
-  Object.entries({
-    omicron: 'o',
-    Alpha: 'A',
-    Beta: 'B',
-    Epsilon: 'E',
-    Zeta: 'Z',
-    Eta: 'H',
-    Iota: 'I',
-    Kappa: 'K',
-    Mu: 'M',
-    Nu: 'N',
-    Omicron: 'O',
-    Rho: 'P',
-    Tau: 'T',
-    Chi: 'X',
-  }),
-);
-
-/** Quantities whose usual symbol is another than their name read by the rule. */
-const SYMBOLS: ReadonlyMap<string, { readonly base: string; readonly subscript: string }> = new Map(
-  Object.entries({
-    swing_up: { base: '\\hat{v}', subscript: 'up' },
-    swing_down: { base: '\\hat{v}', subscript: 'down' },
-  }),
-);
-
-/** Subscripts that the trade writes with parentheses. */
-const SUBSCRIPTS: ReadonlyMap<string, string> = new Map(
-  Object.entries({ GSoff: 'GS(off)', GSth: 'GS(th)', DSon: 'DS(on)' }),
-);
+import { greekLetter, symbolName } from '../figure/index.ts';
 
 /** `I_D` as I_{\mathrm{D}}, `Q1` as \mathrm{Q1}, `beta` as \beta; `name` is canonical (ASCII letters, digits, `_`). */
 export function texOfName(name: string): string {
@@ -58,25 +19,20 @@ export function texOfPath(names: readonly string[], subject: string | null): str
 }
 
 function symbolOf(name: string, owners: readonly string[]): string {
-  const known = SYMBOLS.get(name);
-  if (known !== undefined) return `${known.base}_{${[known.subscript, ...owners].map(word).join(',\\,')}}`;
-  const [head, ...rest] = name.split('_').filter((part) => part !== '');
-  const isQuantity = name.includes('_');
-  const subscripts = [...rest.map((part) => word(SUBSCRIPTS.get(part) ?? part)), ...owners.map(word)];
-  const base = greek(head!) ?? (isQuantity ? italic(head!) : word(head!));
-  return subscripts.length === 0 ? base : `${base}_{${subscripts.join(',\\,')}}`;
+  const { head, letter, hat, style, subscripts } = symbolName(name);
+  const below = [...subscripts, ...owners].map(word);
+  const base = letter !== null ? word(head) : style === 'italic' ? italic(head) : word(head);
+  const whole = hat ? `\\hat{${base}}` : base;
+  return below.length === 0 ? whole : `${whole}_{${below.join(',\\,')}}`;
 }
 
 function italic(text: string): string {
   return text.length === 1 ? text : `\\mathit{${text}}`;
 }
 
+/** A word upright, a Greek letter by its name in TeX; those that look like a Latin one have none there. */
 function word(text: string): string {
-  return greek(text) ?? `\\mathrm{${text}}`;
-}
-
-function greek(text: string): string | null {
-  if (GREEK.has(text)) return `\\${text}`;
-  const latin = GREEK_AS_LATIN.get(text);
-  return latin === undefined ? null : `\\mathrm{${latin}}`;
+  const letter = greekLetter(text);
+  if (letter === null) return `\\mathrm{${text}}`;
+  return letter < '\u0080' ? `\\mathrm{${letter}}` : `\\${text}`;
 }

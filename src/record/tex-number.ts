@@ -69,8 +69,9 @@ export function texOfUnit(symbol: string): string {
 
 const UNIT_TOKEN = /√[A-Za-zΩµ]+|\^\([^)]*\)|\^[-−]?[\d.]+|⁻?[⁰¹²³⁴-⁹]+|°C|[A-Za-zΩµ]+|\d+|[^]/g;
 
+/** KaTeX has no upright µ in mathematics: as text it comes upright from the face behind its own. */
 function letters(text: string): string {
-  return `\\mathrm{${text.replace(/Ω/g, '\\Omega{}').replace(/µ/g, '\\mu{}')}}`;
+  return `\\mathrm{${text.replace(/Ω/g, '\\Omega{}').replace(/µ/g, '\\text{\\char"B5}')}}`;
 }
 
 function number(digits: string, exponent: string | null, unit: string | null): NumberTex {

@@ -4,6 +4,8 @@ import { describe, expect, it } from 'vitest';
 import { parseExpression } from '../../src/language/index.ts';
 import { OFFERED_VALUES } from '../../src/network/index.ts';
 import { texOfExpression, texOfName, texOfPath, texOfUnit } from '../../src/record/index.ts';
+import { typeset } from '../../src/figure/index.ts';
+import { strictTex } from './strict-tex.ts';
 import { anyArithmetic, anyExpression, ARITHMETIC_SYMBOLS } from './random-expression.ts';
 import { texValue } from './tex-value.ts';
 
@@ -16,7 +18,7 @@ function texOf(text: string, subject: string | null = null): string {
 }
 
 function rendered(tex: string): string {
-  return katex.renderToString(tex, { throwOnError: true, strict: 'error', output: 'html', trust: false });
+  return katex.renderToString(tex, { throwOnError: true, strict: strictTex, output: 'html', trust: false });
 }
 
 describe('names', () => {
@@ -62,6 +64,19 @@ describe('offered values', () => {
   );
 });
 
+describe('names in running text', () => {
+  it.each([
+    ...['V_GSoff', 'V_GSth', 'R_DSon_2', 'V_DD', 'Q1', 'beta', 'V_beta', 'Gamma_1', 'Alpha', 'omicron_x', 'headroom'],
+    ...['A1.I_D', 'A1.Qa.I_D', 'Q1.V_GSoff', 'Q1.lambda', 'I_D_max', 'theta_JA', 'mu_n'],
+  ])('%s reads on the page as in a formula', (path) => {
+    const html = rendered(texOfPath(path.split('.'), null));
+    const [head, ...below] = typeset(path);
+    const bare = (text: string): string => text.replace(/[\s\u200b]/g, '');
+    expect(bare([head!, ...below].map(({ text }) => text).join(''))).toBe(bare(html.replace(/<[^>]*>/g, '')));
+    expect(head!.style === 'italic').toBe(/mathnormal|mathit/.test(html.split('msupsub')[0]!));
+  });
+});
+
 describe('units', () => {
   it.each([
     ['kΩ', '\\mathrm{k\\Omega{}}'],
@@ -69,13 +84,13 @@ describe('units', () => {
     ['nV/√Hz', '\\mathrm{nV}/\\sqrt{\\mathrm{Hz}}'],
     ['°C', '{}^{\\circ}\\mathrm{C}'],
     ['%', '\\%'],
-    ['µA', '\\mathrm{\\mu{}A}'],
+    ['µA', '\\mathrm{\\text{\\char"B5}A}'],
     ['/V', '/\\mathrm{V}'],
     ['V·s', '\\mathrm{V}{\\cdot}\\mathrm{s}'],
     ['V⁻¹', '\\mathrm{V}^{-1}'],
   ])('%s is set as %s', (unit, tex) => {
     expect(texOfUnit(unit)).toBe(tex);
-    rendered(tex);
+    expect(rendered(tex)).not.toMatch(/mathnormal|mathit/);
   });
 });
 

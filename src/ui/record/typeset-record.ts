@@ -1,21 +1,16 @@
 // The record as elements, its formulas set by KaTeX. In print there is no time to wait: what is to be typeset then is
 // loaded beforehand, with the faces, and until it has come formulas stand as text.
 
-import type katex from 'katex';
-import 'katex/dist/katex.min.css';
 import { recordHtml } from '../../record/index.ts';
 import type { RecordTree } from '../../record/index.ts';
-import '../typeset/index.ts';
+import { isTexReady, loadTex, setTex } from '../typeset/index.ts';
 import './record.css';
-
-type Katex = typeof katex;
 
 /** The faces that formulas of a sheet use. */
 const FACES = ['10pt KaTeX_Main', 'bold 10pt KaTeX_Main', 'italic 10pt KaTeX_Math'].concat(
   ['KaTeX_Size1', 'KaTeX_Size2', 'KaTeX_Size3', 'KaTeX_Size4'].map((face) => `10pt ${face}`),
 );
 
-let loaded: Katex | null = null;
 let loading: Promise<void> | null = null;
 
 /** Loads what typesetting takes, once. */
@@ -27,7 +22,7 @@ export function loadTypesetter(): Promise<void> {
 async function load(): Promise<void> {
   // A face that cannot be had leaves the browser's own; the record prints all the same.
   const faces = FACES.map((face) => document.fonts.load(face).catch(() => []));
-  loaded = (await import('katex')).default;
+  await loadTex();
   await Promise.all(faces);
 }
 
@@ -41,12 +36,8 @@ export function recordElement(tree: RecordTree): HTMLElement {
 
 /** Typesets the formulas of a record at once and finds room for those that are too long; nothing where KaTeX has not come. */
 export function typesetFormulas(record: HTMLElement): void {
-  if (loaded === null) return;
-  for (const place of record.querySelectorAll<HTMLElement>('[data-tex]')) {
-    // Fractions at full size: numbers in place are to be read.
-    const tex = `\\displaystyle ${place.dataset.tex}`;
-    loaded.render(tex, place, { throwOnError: false, output: 'html', strict: false });
-  }
+  if (!isTexReady()) return;
+  for (const place of record.querySelectorAll<HTMLElement>('[data-tex]')) setTex(place.dataset.tex!, place, 'html');
   // First the whole width below the sentence; what is too long for that stands as text, which breaks anywhere.
   const lines = [...record.querySelectorAll<HTMLElement>('.record-equation, .record-table-checks td')];
   const long = lines.filter(isTooLong);

@@ -2,3 +2,4 @@
 
 export { Formula } from './formula.tsx';
 export { Name, Prose } from './runs.tsx';
+export { isTexReady, loadTex, setTex } from './tex-setter.ts';
