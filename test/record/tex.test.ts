@@ -66,8 +66,24 @@ describe('offered values', () => {
 
 describe('names in running text', () => {
   it.each([
-    ...['V_GSoff', 'V_GSth', 'R_DSon_2', 'V_DD', 'Q1', 'beta', 'V_beta', 'Gamma_1', 'Alpha', 'omicron_x', 'headroom'],
-    ...['A1.I_D', 'A1.Qa.I_D', 'Q1.V_GSoff', 'Q1.lambda', 'I_D_max', 'theta_JA', 'mu_n'],
+    'V_GSoff',
+    'V_GSth',
+    'R_DSon_2',
+    'V_DD',
+    'Q1',
+    'beta',
+    'V_beta',
+    'Gamma_1',
+    'Alpha',
+    'omicron_x',
+    'headroom',
+    'A1.I_D',
+    'A1.Qa.I_D',
+    'Q1.V_GSoff',
+    'Q1.lambda',
+    'I_D_max',
+    'theta_JA',
+    'mu_n',
   ])('%s reads on the page as in a formula', (path) => {
     const html = rendered(texOfPath(path.split('.'), null));
     const [head, ...below] = typeset(path);
