@@ -31,15 +31,17 @@ export function placeLabels(lines: readonly LabelledLine[], frame: Box, taken: r
   lines.forEach((line, index) => {
     const own = traces[index]!;
     if (line.label === '' || own.length === 0) return;
+    const runs = proseRuns(line.label);
     let best: { item: TextItem; box: Box; cost: number } | null = null;
     for (let step = 0; step <= PLACES; step++) {
       const [x, y] = own[Math.round(((own.length - 1) * step) / PLACES)]!;
+      const away = AWAY_COST * Math.abs(step / PLACES - line.at);
+      if (best !== null && away >= best.cost) continue;
       for (const [dx, dy, anchor] of OFFSETS) {
-        const item = textAt(line, x + dx, y + dy, anchor);
+        const item = textAt(line.role, runs, x + dx, y + dy, anchor);
         const box = textBox(item);
         if (!inside(box, frame) || occupied.some((other) => boxesOverlap(box, other))) continue;
-        const covered = traces.reduce((sum, each) => sum + each.filter((point) => within(point, box)).length, 0);
-        const cost = COVER_COST * covered + AWAY_COST * Math.abs(step / PLACES - line.at);
+        const cost: number = costAt(traces, box, away, best?.cost ?? Infinity);
         if (best === null || cost < best.cost) best = { item, box, cost };
       }
     }
@@ -60,8 +62,24 @@ const OFFSETS: readonly (readonly [number, number, TextItem['anchor']])[] = [
   [-LIFT - 2, 4, 'end'],
 ];
 
-function textAt({ role, label }: LabelledLine, x: number, y: number, anchor: TextItem['anchor']): TextItem {
-  return { kind: 'text', role, x, y, anchor, size: LABEL_SIZE - 0.5, runs: proseRuns(label), halo: true };
+function textAt(role: Role, runs: TextItem['runs'], x: number, y: number, anchor: TextItem['anchor']): TextItem {
+  return { kind: 'text', role, x, y, anchor, size: LABEL_SIZE - 0.5, runs, halo: true };
+}
+
+/** Cost of a label that stands away from its best place, with the curves under it; counted only until it is no less than `most`. */
+function costAt(
+  traces: readonly (readonly (readonly [number, number])[])[],
+  box: Box,
+  away: number,
+  most: number,
+): number {
+  let covered = 0;
+  for (const points of traces) {
+    for (let at = 0; at < points.length && COVER_COST * covered + away < most; at++) {
+      if (within(points[at]!, box)) covered++;
+    }
+  }
+  return COVER_COST * covered + away;
 }
 
 /** Points of a curve inside the frame, a few units apart. */
@@ -89,8 +107,8 @@ function thinned(points: readonly (readonly [number, number])[]): (readonly [num
   return kept;
 }
 
-function within([x, y]: readonly [number, number], { x0, y0, x1, y1 }: Box): boolean {
-  return x >= x0 && x <= x1 && y >= y0 && y <= y1;
+function within(point: readonly [number, number], box: Box): boolean {
+  return point[0] >= box.x0 && point[0] <= box.x1 && point[1] >= box.y0 && point[1] <= box.y1;
 }
 
 function inside(box: Box, frame: Box): boolean {

@@ -66,10 +66,7 @@ function paintText(context: CanvasRenderingContext2D, item: TextItem, palette: P
   const { x, y, anchor, size, runs, role, halo } = item;
   const { color, weight } = ROLE_STYLES[role];
   const fonts = runs.map((run) => fontOf(run, size, weight ?? 400, palette));
-  const widths = runs.map((run, at) => {
-    context.font = fonts[at]!;
-    return context.measureText(run.text).width;
-  });
+  const widths = runs.map((run, at) => widthOf(context, run.text, fonts[at]!, palette));
   const total = widths.reduce((sum, width) => sum + width, 0);
   const start = anchor === 'start' ? x : anchor === 'end' ? x - total : x - total / 2;
   const each = (draw: (text: string, at: number, base: number) => void): void => {
@@ -90,6 +87,23 @@ function paintText(context: CanvasRenderingContext2D, item: TextItem, palette: P
   }
   context.fillStyle = palette.color(color);
   each((text, at, base) => context.fillText(text, at, base));
+}
+
+/** Widths by font and text. Measuring costs more than drawing; faces that come later come with another palette. */
+const WIDTHS = new WeakMap<Palette, Map<string, number>>();
+/** Texts that are remembered at most: those of some dozen charts. */
+const MOST_WIDTHS = 2000;
+
+function widthOf(context: CanvasRenderingContext2D, text: string, font: string, palette: Palette): number {
+  let known = WIDTHS.get(palette);
+  if (!known || known.size >= MOST_WIDTHS) WIDTHS.set(palette, (known = new Map()));
+  const key = `${font} ${text}`;
+  let width = known.get(key);
+  if (width === undefined) {
+    context.font = font;
+    known.set(key, (width = context.measureText(text).width));
+  }
+  return width;
 }
 
 function fontOf({ style }: Run, size: number, weight: number, { sans, serif }: Palette): string {

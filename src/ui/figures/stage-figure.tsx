@@ -1,8 +1,10 @@
 // The stage that the figures speak of: its schematic, its values beside it, its two planes.
 
-import { For, Show, createMemo } from 'solid-js';
+import { For, Show, createMemo, untrack } from 'solid-js';
 import { deviceStages, drawSchematic, planesOf, schematicOf } from '../../figure/index.ts';
+import type { SheetView } from '../../sheet/index.ts';
 import type { Desk } from '../desk/index.ts';
+import { createBehindPaint } from '../pace/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
 import { DrawingView } from './drawing-view.tsx';
@@ -15,8 +17,20 @@ import { createQHandle } from './turn-q.ts';
 /** Everything drawn of one stage; where it is not solved, its schematic without numbers and why. */
 export function StageFigure(props: { readonly desk: Desk; readonly stage: string }) {
   const { document } = props.desk;
-  const cell = createMemo(() => props.desk.view().cell(props.stage));
-  const reading = createMemo(() => props.desk.view().stage(props.stage));
+  /** Everything that is drawn follows the sheet one frame behind its rows. */
+  const shown = createBehindPaint(() => {
+    const { desk } = props;
+    const { spread } = desk;
+    const version = document.version();
+    return { version, view: desk.view(), corner: desk.corner(), spread: spread.now(), isStale: spread.isStale() };
+  });
+  const sheet = createMemo(shown, undefined, { equals: (a, b) => a.version === b.version && a.view === b.view });
+  const behind = <T,>(read: (view: SheetView) => T): T => {
+    const { view } = sheet();
+    return untrack(() => read(view));
+  };
+  const cell = createMemo(() => behind((view) => view.cell(props.stage)));
+  const reading = createMemo(() => behind((view) => view.stage(props.stage)));
   const message = (): string | null => {
     const fault = cell()?.fault;
     if (!fault) return null;
@@ -24,16 +38,21 @@ export function StageFigure(props: { readonly desk: Desk; readonly stage: string
   };
   const schematic = createMemo(() => {
     const stage = reading();
-    return stage ? drawSchematic(schematicOf(stage, props.desk.view())) : null;
+    return stage ? behind((view) => drawSchematic(schematicOf(stage, view))) : null;
   });
   /** The low and the high device beside the nominal one; none at a corner, which is a device of its own. */
-  const devices = createMemo(() => {
-    if (props.desk.corner() !== null || props.desk.spread.isStale()) return [];
-    return deviceStages(document.sheet, props.stage, props.desk.spread.now());
-  });
+  const devices = createMemo<ReturnType<typeof deviceStages>>(
+    () => {
+      const { corner, isStale, spread } = shown();
+      return corner !== null || isStale ? [] : untrack(() => deviceStages(document.sheet, props.stage, spread));
+    },
+    [],
+    { equals: (a, b) => a === b || (a.length === 0 && b.length === 0) },
+  );
   const planes = createMemo(() => {
     const stage = reading();
-    return stage ? planesOf(stage, props.desk.view(), devices()) : null;
+    const lines = devices();
+    return stage ? behind((view) => planesOf(stage, view, lines)) : null;
   });
   const handle = createQHandle(props.desk, reading);
   const values = createMemo(() => {

@@ -2,3 +2,4 @@
 
 export { createRested } from './rested.ts';
 export type { Pace } from './rested.ts';
+export { createBehindPaint } from './behind-paint.ts';
