@@ -13,7 +13,7 @@ const ASCENT = 0.8;
 const DESCENT = 0.25;
 
 /** Between subscripts. */
-const NEXT = ',\u2009';
+const NEXT = ', ';
 /** Above the character before it. */
 const HAT = '\u0302';
 
