@@ -31,7 +31,6 @@ export { plotCharts } from './plot.ts';
 export { drawSchematic } from './schematic.ts';
 export type { LegEnd, LegKind, SchematicInput, StageLeg } from './stage-input.ts';
 export { typeset } from './labels.ts';
-export type { SymbolName } from './symbol-name.ts';
 export { greekLetter, symbolName } from './symbol-name.ts';
 export { deviceStages, planesOf } from './sheet-planes.ts';
 export { sheetPlot } from './sheet-plot.ts';

@@ -68,7 +68,7 @@ const PEAKS: ReadonlyMap<string, { readonly head: string; readonly subscript: st
   }),
 );
 
-export interface SymbolName {
+interface SymbolName {
   /** As it is spelled: `V`, `beta`, `headroom`. */
   readonly head: string;
   /** The character of a Greek head; null for another. */
