@@ -15,7 +15,7 @@ const HALVINGS = 200;
 const FRACTION_CAP = 100_000;
 const TINY = 1e-300;
 
-/** Lowest and highest probability at which k of n is not too unlikely, at a confidence of 0.95 unless given; 0 <= k <= n, n >= 1; off by less than 1e-15. */
+/** Lowest and highest probability at which k of n is not too unlikely, at a confidence of 0.95 unless given; 0 <= k <= n, n >= 1; off by less than 2e-15. */
 export function binomialInterval(k: number, n: number, confidence = 0.95): { low: number; high: number } {
   const tail = (1 - confidence) / 2;
   return {

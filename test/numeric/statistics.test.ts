@@ -86,9 +86,66 @@ describe('draws', () => {
     }
     expect(Math.abs(flips / looked - 0.5)).toBeLessThan(0.002);
   });
+
+  test('one bit of a letter, or one letter more, changes half of the bits of a draw', () => {
+    const bits = (name: string, n: number): number => (uniformAt(drawKey(1, name), n, 0) * 2 ** 32) >>> 0;
+    let flips = 0;
+    let looked = 0;
+    for (let n = 0; n < 2000; n++) {
+      const name = `Q${n}.I_DSS`;
+      const others = [`${name}2`, `${name}\u0000`, `R${n}.I_DSS`];
+      for (let bit = 0; bit < 16; bit++) {
+        others.push(`${name.slice(0, -1)}${String.fromCharCode(name.charCodeAt(name.length - 1) ^ (1 << bit))}`);
+      }
+      for (const other of others) {
+        for (let x = bits(name, n) ^ bits(other, n); x !== 0; x &= x - 1) flips++;
+        looked += 32;
+      }
+    }
+    // Four standard deviations of so many tosses are 0.0018.
+    expect(Math.abs(flips / looked - 0.5)).toBeLessThan(0.002);
+  });
+
+  test('no two of a thousand names have a draw in common', () => {
+    const names = Array.from({ length: 1000 }, (_, i) => `R_${i}`);
+    // Among 1000 draws of 32 bits a pair is alike once in 8600 times.
+    for (const sample of [0, 1, 2 ** 31, 2 ** 32 - 1]) {
+      expect(new Set(names.map((name) => uniformAt(drawKey(1, name), sample, 0))).size).toBe(1000);
+    }
+  });
 });
 
 describe('the normal law', () => {
+  // The values printed with the algorithm to try an implementation by: M. J. Wichura, Applied Statistics 37 (1988).
+  test.each([
+    [0.25, '-0.6744897501960817'],
+    [0.001, '-3.090232306167814'],
+    [1e-20, '-9.262340089798408'],
+  ])('its quantile at %d is the printed %s', (p, printed) => {
+    expect(Math.abs(normalQuantile(p) / Number(printed) - 1)).toBeLessThan(4e-16);
+  });
+
+  test('quantile and share undo each other over all that is drawn', () => {
+    // An error of the share is one of the quantile divided by the density, which is least at the ends: 4.4e-3.
+    for (let i = 0; i <= 4000; i++) {
+      const x = -3 + (6 * i) / 4000;
+      expect(Math.abs(normalQuantile(normalShare(x)) - x)).toBeLessThan(
+        1e-15 / (0.3989 * Math.exp((-x * x) / 2)) + 1e-15,
+      );
+    }
+  });
+
+  test('the quantile never falls, across the seams of its formulas too', () => {
+    for (const seam of [0.075, 0.925, Math.exp(-25), 0.5]) {
+      let before = -Infinity;
+      for (let i = -200; i <= 200; i++) {
+        const z = normalQuantile(seam * (1 + i * 1e-13));
+        expect(z).toBeGreaterThanOrEqual(before);
+        before = z;
+      }
+    }
+  });
+
   // Percentage points of the normal distribution as printed in Abramowitz and Stegun, table 26.5 (from memory).
   test.each([
     [0.9, 1.28155],
@@ -162,6 +219,23 @@ test('quantiles from bins are those of the sample to a bin', () => {
   expect(quantileOf({ ...histogram, counts: new Float64Array(4) }, 0.5)).toBeNaN();
 });
 
+/** Digits behind the point: (1 - p) ** 1000 has to keep twenty of them at every p below. */
+const DIGITS = 4000n;
+
+/** The chance of from .. to successes of n at p each, in whole numbers. */
+function tail(n: number, p: number, from: number, to: number): number {
+  const whole = BigInt(Math.round(p * 2 ** 52));
+  const one = 1n << 52n;
+  let term = 10n ** DIGITS;
+  for (let i = 0; i < n; i++) term = (term * (one - whole)) / one;
+  let sum = 0n;
+  for (let k = 0; k <= n; k++) {
+    if (k >= from && k <= to) sum += term;
+    term = (term * BigInt(n - k) * whole) / (BigInt(k + 1) * (one - whole));
+  }
+  return Number(sum / 10n ** (DIGITS - 20n)) / 1e20;
+}
+
 describe('the exact interval of a share', () => {
   // Exact confidence limits for proportions, N = 10, 95 %: Documenta Geigy, Scientific Tables, 7th ed. (from memory), in %.
   test.each([
@@ -178,25 +252,25 @@ describe('the exact interval of a share', () => {
     expect(Math.abs(100 * interval.high - high)).toBeLessThan(0.00501);
   });
 
+  // NIST/SEMATECH e-Handbook of Statistical Methods, 7.2.4.1: 4 defectives of 20, 90 %. Its lower limit is met as printed. Its upper one, 0.401029,
+  // comes from a search that stopped at 0.4010294; the equation that it states there is met by 0.4010281.
+  test('4 of 20 at 90 %: as printed below, and above by the equation that is printed with it', () => {
+    const { low, high } = binomialInterval(4, 20, 0.9);
+    expect(Math.abs(low - 0.071354)).toBeLessThan(0.5e-6);
+    expect(Math.abs(tail(20, high, 0, 4) - 0.05)).toBeLessThan(1e-14);
+    // Even the least number that rounds to the printed one lies beyond the root.
+    expect(tail(20, 0.4010285, 0, 4)).toBeLessThan(0.05);
+    expect(high).toBeCloseTo(0.401029, 5);
+  });
+
   test('at its ends the tails hold 2.5 % each, in whole-number arithmetic', () => {
-    const SCALE = 10n ** 1000n;
-    const tail = (n: number, p: number, from: number, to: number): number => {
-      const whole = BigInt(Math.round(p * 2 ** 52));
-      const one = 1n << 52n;
-      let term = SCALE;
-      for (let i = 0; i < n; i++) term = (term * (one - whole)) / one;
-      let sum = 0n;
-      for (let k = 0; k <= n; k++) {
-        if (k >= from && k <= to) sum += term;
-        term = (term * BigInt(n - k) * whole) / (BigInt(k + 1) * (one - whole));
-      }
-      return Number(sum / 10n ** 980n) / 1e20;
-    };
     for (const [k, n] of [
       [1, 10],
       [3, 47],
       [50, 100],
       [199, 200],
+      [180, 1000],
+      [997, 1000],
     ] as const) {
       const { low, high } = binomialInterval(k, n);
       expect(Math.abs(tail(n, low, k, n) - 0.025)).toBeLessThan(1e-12);
