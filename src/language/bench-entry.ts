@@ -1,14 +1,17 @@
-// bench = "bench" ;   its one field names the columns, and rows of numbers and names follow.
+// bench = "bench" ;   its fields say what the columns are and what is asked of the rows of numbers and names below.
 //
 // columns = column { "," column } ;   column = name [ "[" unit "]" ] ;
 
 import { skipBlanks } from './characters.ts';
 import { beginsWith } from './entry-kind.ts';
 import type { EntryKind } from './entry-kind.ts';
+import { readExponent, readFitting, readKeep, readMatch } from './bench-fields.ts';
 import { halt } from './messages.ts';
+import { nearestNames } from './nearest.ts';
+import { readQuantityField } from './quantity-entry.ts';
 import type { Reader } from './reader.ts';
 import { spanOf } from './reader.ts';
-import type { BenchEntry, FieldBody, NameRef } from './syntax.ts';
+import type { BenchEntry, ColumnsBody, FieldBody, NameRef } from './syntax.ts';
 import type { Unit } from '../quantity/index.ts';
 import { unitAt } from './unit-text.ts';
 
@@ -22,6 +25,17 @@ export const BENCH: EntryKind = {
   fields: { read: readBenchField, rows: true },
 };
 
+const FIELDS: Readonly<Record<string, (reader: Reader, label: readonly NameRef[]) => FieldBody>> = {
+  [COLUMNS]: readColumns,
+  V_DS: readQuantityField,
+  lambda: readQuantityField,
+  R_thJA: readQuantityField,
+  exponent: readExponent,
+  keep: readKeep,
+  match: readMatch,
+  fitting: readFitting,
+};
+
 function readBench(reader: Reader): BenchEntry {
   const { start } = reader.take();
   reader.expectNothing();
@@ -29,9 +43,14 @@ function readBench(reader: Reader): BenchEntry {
 }
 
 function readBenchField(reader: Reader, label: readonly NameRef[]): FieldBody {
+  const { name } = label[0];
+  if (label.length === 1 && Object.hasOwn(FIELDS, name)) return FIELDS[name](reader, label);
+  const span = { start: label[0].span.start, end: label.at(-1)!.span.end };
+  return halt('bench-field', span, reader.textOf(span), nearestNames(name, Object.keys(FIELDS)));
+}
+
+function readColumns(reader: Reader): ColumnsBody {
   const { start } = reader.ahead;
-  if (label.length !== 1 || label[0].name !== COLUMNS)
-    halt('bench-field', { start: label[0].span.start, end: label.at(-1)!.span.end }, reader.textOf(label[0].span));
   const columns: { name: NameRef; unit: Unit | null; span: { start: number; end: number } }[] = [];
   do {
     const { ahead } = reader;

@@ -76,6 +76,7 @@ function readRow(reader: Reader): RowValues {
     if (atLiteral(reader)) values.push(readLiteral(reader));
     else if (ahead.type === 'name') values.push({ name: ahead.name, span: spanOf(reader.take()) });
     else if (ahead.type === 'end') halt('operand-missing', spanOf(ahead), 'The place behind the comma');
+    else if (reader.atSign(',')) halt('row-gap', spanOf(ahead), values.length + 1);
     else halt('row-form', spanOf(ahead), reader.textOf(ahead));
   } while (reader.takeSign(','));
   reader.expectListEnd();

@@ -45,6 +45,7 @@ export { lineColumn } from './position.ts';
 export { printExpr } from './print.ts';
 export { isCellName, RESERVED } from './reserved.ts';
 export { renameCell } from './rename.ts';
+export { pastedBench, readPastedRows } from './pasted-rows.ts';
 export { parseSheet } from './sheet.ts';
 export { pathsOf, walkExpr } from './walk.ts';
 export { applySplices, invertSplices } from './splice.ts';

@@ -124,8 +124,17 @@ const TEXTS = {
   'output-form': () => 'The output is a place or a difference of two, as in output: drain or output: out_a - out_b.',
   'driven-form': () => 'driven names the resistor of the source, as in driven: through R_G.',
   'columns-form': () => 'Columns are names with their units, as in columns: V_GS [V], I_D [mA].',
-  'bench-field': (found: string) =>
-    `${found} is no field of a bench, which has columns alone, with rows of numbers below.`,
+  'bench-field': (found: string, hints: readonly string[]) =>
+    `${found} is no field of a bench.${meant(hints)} They are columns, V_DS, lambda, exponent, R_thJA, keep, match and fitting.`,
+  'exponent-form': () => 'exponent is the word free, or 2 for the square law.',
+  'keep-form': () =>
+    'keep names a quantity and the range to stay in, as in keep: V_P in -2.2 V .. -1.8 V or keep: V_GS in -1.2 V .. -0.9 V at I_D = 1 mA.',
+  'match-form': () =>
+    'match asks for pairs or quads at a current, with a second one behind and where it matters, as in match: pairs at I_D = 1 mA and 3 mA, V_DS = 5 V.',
+  'fitting-form': () =>
+    'fitting names the current that each specimen is to carry and its V_DS, as in fitting: I_D = 1 mA, V_DS = 10 V.',
+  'row-gap': (place: number) =>
+    `Place ${place} of this row is empty: two commas follow one another. Write what was measured there, or take the row out.`,
   'row-form': (found: string) =>
     `${found} is neither a number nor a name: a row of a bench holds these with commas between them, as in -0.5, 2.1, 15.`,
 

@@ -14,7 +14,7 @@ import { readAs } from './unit-text.ts';
 export const QUANTITY: EntryKind = { type: 'quantity', starts: () => true, read: readQuantity, fields: null };
 
 /** Reads a whole quantity, to the end of the body. */
-function readQuantity(reader: Reader): QuantityEntry {
+export function readQuantity(reader: Reader): QuantityEntry {
   const { start } = reader.ahead;
   return finishQuantity(reader, start, reader.atSign('..') ? null : readState(reader));
 }
@@ -83,7 +83,8 @@ function readLaw(reader: Reader, start: number, tolerance: Literal | null, bound
 }
 
 // cond = name "=" literal ;
-function readConditions(reader: Reader): Condition[] {
+/** Reads conditions with commas between them, to the last one that stands there or is wanted. */
+export function readConditions(reader: Reader, { most = Infinity } = {}): Condition[] {
   const conditions: Condition[] = [];
   do {
     const { ahead } = reader;
@@ -91,7 +92,7 @@ function readConditions(reader: Reader): Condition[] {
     reader.take();
     if (!reader.takeSign('=')) halt('condition-form', spanOf(reader.ahead));
     conditions.push({ name: { name: ahead.name, span: spanOf(ahead) }, literal: readLiteral(reader) });
-  } while (reader.takeSign(','));
+  } while (conditions.length < most && reader.takeSign(','));
   return conditions;
 }
 

@@ -99,7 +99,7 @@ function assemble(lines: readonly Line[]): Assembled {
       const doubled = fields === sheet.title?.fields ? doubledField(field, fields) : null;
       if (doubled) sheet.loose.push(doubled);
       else fields.push(field);
-    } else if (tree.type === 'row') rows.push({ values: tree.values, line });
+    } else if (tree.type === 'row') rows.push({ values: tree.values, source: tree.source, note: tree.note, line });
   }
   return sheet;
 }

@@ -222,18 +222,54 @@ export interface Leg {
   readonly span: Span;
 }
 
+/** `columns: unit, V_GS [V], I_D [mA]` of a bench. */
+export interface ColumnsBody {
+  readonly type: 'columns';
+  readonly columns: readonly { readonly name: NameRef; readonly unit: Unit | null; readonly span: Span }[];
+  readonly span: Span;
+}
+/** `exponent: free`, or `exponent: 2`. */
+interface ExponentBody {
+  readonly type: 'exponent';
+  readonly isFree: boolean;
+  readonly span: Span;
+}
+/** `keep: V_GS in -1.2 V .. -0.9 V at I_D = 1 mA`: the specimens that a part is made of. */
+export interface KeepBody {
+  readonly type: 'keep';
+  readonly quantity: NameRef;
+  readonly bounds: Bounds;
+  readonly conditions: readonly Condition[];
+  readonly span: Span;
+}
+/** `match: pairs at I_D = 1 mA and 3 mA, V_DS = 5 V`. */
+export interface MatchBody {
+  readonly type: 'match';
+  readonly size: 2 | 4;
+  readonly conditions: readonly Condition[];
+  /** The second current, behind `and`. */
+  readonly second: Literal | null;
+  readonly span: Span;
+}
+/** `fitting: I_D = 1 mA, V_DS = 10 V`: the current for which each specimen is to get its resistor. */
+export interface FittingBody {
+  readonly type: 'fitting';
+  readonly conditions: readonly Condition[];
+  readonly span: Span;
+}
+
 export type FieldBody =
   | { readonly type: 'text'; readonly text: string; readonly span: Span } // fields of the title
-  | QuantityEntry // fields of parts and points
+  | QuantityEntry // fields of parts and points, and the numbers of a bench
   | { readonly type: 'legs'; readonly legs: readonly Leg[]; readonly span: Span }
   | { readonly type: 'output'; readonly plus: PathExpr; readonly minus: PathExpr | null; readonly span: Span }
   | { readonly type: 'driven'; readonly through: Expr; readonly span: Span }
   | { readonly type: 'midband'; readonly frequency: Expr; readonly span: Span }
-  | {
-      readonly type: 'columns';
-      readonly columns: readonly { readonly name: NameRef; readonly unit: Unit | null; readonly span: Span }[];
-      readonly span: Span;
-    }
+  | ColumnsBody
+  | ExponentBody
+  | KeepBody
+  | MatchBody
+  | FittingBody
   | BrokenEntry;
 
 // ---------------------------------------------------------------- lines
@@ -311,6 +347,8 @@ export interface FieldTree {
 }
 export interface RowTree {
   readonly values: readonly (Literal | NameRef)[];
+  readonly source: Source | null;
+  readonly note: Note | null;
   readonly line: Line;
 }
 

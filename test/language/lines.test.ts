@@ -2,7 +2,7 @@
 
 import { expect, test } from 'vitest';
 import { lineColumn, parseSheet } from '../../src/language/index.ts';
-import type { SheetTree } from '../../src/language/index.ts';
+import type { Condition, SheetTree } from '../../src/language/index.ts';
 
 /** One word for each line: its kind, and for cells and fields what is inside. */
 function kinds(sheet: SheetTree): string[] {
@@ -191,6 +191,52 @@ test('a bench has columns with units, and rows of numbers and names', () => {
     [2, -1, 3.5],
   ]);
   expect(sheet.lines[2].tree).toMatchObject({ source: { text: 'page 4' } });
+});
+
+test('a bench says what is asked of its rows: the exponent, what is kept, groups that match, a current to fit for', () => {
+  const fields = [
+    'exponent: free',
+    'exponent: 2',
+    'V_DS: 10 V',
+    'keep: V_GS in -1.2 V .. at I_D = 1 mA, V_DS = 5 V  [agreed]',
+    'match: quads at V_DS = 5 V, I_D = 1 mA and 3 mA',
+    'fitting: I_D = 1 mA, V_DS = 10 V',
+  ];
+  const [cell] = parseSheet(`M1 = bench\n${fields.map((field) => `  ${field}\n`).join('')}`).cells;
+  const conditions = (body: object): unknown =>
+    'conditions' in body ? (body.conditions as Condition[]).map(({ name, literal }) => [name.name, literal.value]) : [];
+  expect(cell.fields.map(({ body }) => [body.type, conditions(body)])).toEqual([
+    ['exponent', []],
+    ['exponent', []],
+    ['quantity', []],
+    [
+      'keep',
+      [
+        ['I_D', 1e-3],
+        ['V_DS', 5],
+      ],
+    ],
+    [
+      'match',
+      [
+        ['V_DS', 5],
+        ['I_D', 1e-3],
+      ],
+    ],
+    [
+      'fitting',
+      [
+        ['I_D', 1e-3],
+        ['V_DS', 10],
+      ],
+    ],
+  ]);
+  expect(cell.fields.slice(0, 2).map(({ body }) => body)).toMatchObject([{ isFree: true }, { isFree: false }]);
+  expect(cell.fields[3].body).toMatchObject({
+    quantity: { name: 'V_GS' },
+    bounds: { first: { value: -1.2 }, last: null },
+  });
+  expect(cell.fields[4].body).toMatchObject({ size: 4, second: { value: 3e-3 } });
 });
 
 test('a source, then a note, may stand behind an entry', () => {
