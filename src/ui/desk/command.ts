@@ -10,6 +10,8 @@ export interface Command {
   /** null when it can be run, else why not, as a sentence. */
   readonly unavailable?: () => string | null;
   readonly run: () => void;
+  /** Where it stands in the menu of what can be inserted: its words there and what the lines it writes are. */
+  readonly insert?: { readonly words: string; readonly group: 'part' | 'stage' | 'quantity' };
 }
 
 /** The key of an event in the spelling of `Command.keys`. */

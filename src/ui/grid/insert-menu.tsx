@@ -83,6 +83,21 @@ export function InsertMenu(props: { readonly grid: Grid; readonly onClose: () =>
                 />
               )}
             </For>
+            <For each={grid.desk.commands().filter(({ insert }) => insert !== undefined)}>
+              {(command, index) => (
+                <Item
+                  mark={MARKS[command.insert!.group]}
+                  group={command.insert!.group}
+                  title={command.title}
+                  words={command.insert!.words}
+                  first={index() === 0}
+                  run={() => {
+                    props.onClose();
+                    command.run();
+                  }}
+                />
+              )}
+            </For>
             <Show when={plotted()}>
               {(value) => (
                 <Item

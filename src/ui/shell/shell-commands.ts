@@ -2,7 +2,7 @@
 
 import type { Command } from '../desk/index.ts';
 
-export type DialogName = 'shelf' | 'share' | 'help' | 'record';
+export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows';
 
 interface ShellActions {
   readonly show: (dialog: DialogName) => void;
@@ -35,6 +35,13 @@ export function shellCommands(actions: ShellActions): Command[] {
       },
       keys: [],
       run: actions.turnTheme,
+    },
+    {
+      id: 'rows-from-spreadsheet',
+      title: 'bench',
+      keys: [],
+      run: () => actions.show('rows'),
+      insert: { words: 'measured points, pasted from a spreadsheet', group: 'part' },
     },
     { id: 'help', title: 'Help', keys: ['F1'], run: () => actions.show('help') },
   ];
