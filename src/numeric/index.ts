@@ -7,6 +7,8 @@ export { hypot } from './hypotenuse.ts';
 export { ln, log10, log1p } from './logarithm.ts';
 export { pow } from './power.ts';
 export { solveBracketed } from './root.ts';
+export { SCAN_STEPS, scanPlaces, scanRoots } from './scan-roots.ts';
+export type { ScannedRoots } from './scan-roots.ts';
 export { sha256Hex } from './sha256.ts';
 export { cos, sin, tan } from './trigonometry.ts';
 export { binomialInterval } from './binomial-interval.ts';

@@ -7,7 +7,7 @@ import type { Segment } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
 import { DEFAULT_AMBIENT } from './ambient.ts';
 import { CELL_KINDS } from './cell-kinds.ts';
-import type { CellContext, Draft, Placed } from './draft.ts';
+import type { AskDraft, CellContext, Draft, Placed } from './draft.ts';
 import { EMPTY_DRAFT } from './draft.ts';
 import type { Interface, Offer } from './interface.ts';
 import { KERNELS } from './kernels.ts';
@@ -39,6 +39,9 @@ interface WantedEnd {
   readonly into: number;
 }
 
+/** What an inverse cell asks, by slots. */
+type AskedSlots = Pick<AskDraft, 'cell' | 'input' | 'residual' | 'low' | 'high' | 'held' | 'answer' | 'each'>;
+
 export interface CompiledCell {
   readonly draft: Draft;
   readonly segment: Segment;
@@ -56,6 +59,8 @@ export interface CompiledCell {
   readonly proposedFrom: readonly string[] | null;
   /** Ends of values that are put into slots before the cell runs for good. */
   readonly ends: readonly WantedEnd[];
+  /** Slots of what an inverse cell asks; null for another cell. */
+  readonly asks: AskedSlots | null;
   /** Every cell whose text was taken over. */
   readonly copied: ReadonlyMap<string, CellTree | null>;
   /** The names of all inputs, likewise. */
@@ -183,6 +188,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     presence,
     copied,
     ends: failed ? [] : ends.map(({ which, of, into }) => ({ which, of: slot(of), into: slot(into) })),
+    asks: failed || draft.asks === null ? null : askedSlots(draft.asks, slot),
     restsOnValues,
     shape: draft.shape?.() ?? null,
   };
@@ -214,6 +220,14 @@ function emptySegment(): { segment: Segment; slot: (handle: Handle) => number } 
     constantValues: new Float64Array(0),
   };
   return { segment, slot: (handle) => handle };
+}
+
+function askedSlots(asks: AskDraft, slot: (handle: Handle) => number): AskedSlots {
+  const { cell, each } = asks;
+  const [input, residual, low, high, held, answer] = (
+    ['input', 'residual', 'low', 'high', 'held', 'answer'] as const
+  ).map((name) => slot(asks[name]));
+  return { cell, each, input: input!, residual: residual!, low: low!, high: high!, held: held!, answer: answer! };
 }
 
 function relocate(extra: NonNullable<Interface['extra']>, slot: (handle: Handle) => number): Interface['extra'] {

@@ -8,6 +8,7 @@ import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueTyp
 import type { Scope } from './scope.ts';
 import type { Expr } from '../language/index.ts';
 import type { Interface } from './interface.ts';
+import type { Answers } from './turned.ts';
 
 /** Reads a handle after the cell has run. */
 export type Read = (handle: Handle) => number;
@@ -75,6 +76,24 @@ export interface SpreadDraft {
   readonly tie: TieDraft | null;
 }
 
+/** What an inverse cell asks: the value of an input at which a residual is 0, within a range. */
+export interface AskDraft {
+  /** The cell whose value or field is turned, and its slot. */
+  readonly cell: string;
+  readonly input: Handle;
+  readonly residual: Handle;
+  readonly low: Handle;
+  readonly high: Handle;
+  /** Takes the answer before the cell runs for good. */
+  readonly held: Handle;
+  /** The answer of a build; others read what was chosen from it. */
+  readonly answer: Handle;
+  /** Answered again in every build. */
+  readonly each: boolean;
+  /** What was found for the sheet as it stands; `atAnswer` reads the sheet turned to the answer. */
+  readonly take: (found: Answers, atAnswer: Read | null) => void;
+}
+
 export interface Draft {
   readonly type: ValueType | null;
   readonly value: Handle | null;
@@ -92,6 +111,8 @@ export interface Draft {
   /** By how much a check holds; null where that has no meaning. */
   readonly reserve: Handle | null;
   readonly isInput: boolean;
+  /** Only of an inverse cell. */
+  readonly asks: AskDraft | null;
   /** A stage for figures. */
   readonly stage: ((read: Read, solved: boolean) => StageReading) | null;
   /** Something that decides the shape of the code, worked out again before each run; where it has changed, the cell is compiled anew. */
@@ -141,6 +162,7 @@ export const EMPTY_DRAFT: Draft = {
   drawn: NO_SPREAD,
   reserve: null,
   isInput: false,
+  asks: null,
   stage: null,
   shape: null,
   extra: null,

@@ -48,12 +48,18 @@ const nominal: Kernel = (s, a, p) => {
   s[a[p + 1]!] = s[a[p]!]!;
 };
 
+/** Inputs: what an answer rests on (residual, both ends of the range), the answer as it was put in. Output: that answer. */
+const answer: Kernel = (s, a, p) => {
+  s[a[p + 4]!] = s[a[p + 3]!]!;
+};
+
 /** Every kernel of a sheet's program; a program refers to them by position. */
 export const KERNELS: KernelTable = [
   ...PROGRAM_KERNELS,
   { name: 'select', run: select, lanes: SELECT_LANES },
   { name: 'round', run: round },
   { name: 'zero-bias capacitance', run: zeroBias },
+  { name: 'answer', run: answer },
   ...choices(),
 ];
 

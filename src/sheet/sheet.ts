@@ -8,7 +8,7 @@
 
 import { applySplices, parseSheet } from '../language/index.ts';
 import type { CellTree, Expr, Line, SheetTree } from '../language/index.ts';
-import { assemble, createBuilder, runOperations } from '../program/index.ts';
+import { createBuilder, runOperations } from '../program/index.ts';
 import type { Program } from '../program/index.ts';
 import { compileCell } from './compile-cell.ts';
 import type { CompiledCell } from './compile-cell.ts';
@@ -22,9 +22,12 @@ import { inputNames } from './input-of.ts';
 import { KERNELS } from './kernels.ts';
 import type { Analyses, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
+import { coneOf, programOf } from './put-ends.ts';
 import { waitingText } from './readings.ts';
 import { createScope } from './resolve.ts';
 import { spreadModel } from './spread-model.ts';
+import { runCell } from './turned.ts';
+import type { Course } from './turned.ts';
 import { createView, stateAt, waiting } from './view.ts';
 import type { SheetState } from './view.ts';
 
@@ -143,8 +146,10 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
         node.fault = wasFault?.message.text === outside.message.text ? wasFault : outside;
         node.waitsFor = null;
       } else {
-        const hasEnds = (node.compiled as CompiledCell | undefined)?.ends.length;
-        const reached = (hasEnds ? coneOf(k) : node.uses).some((u) => nodes[u]!.changedAt === pass);
+        const present = node.compiled as CompiledCell | undefined;
+        const looksFar = present !== undefined && (present.ends.length > 0 || present.asks !== null);
+        const seen = looksFar ? [...coneOf(k, nodes)] : node.uses;
+        const reached = seen.some((u) => nodes[u]!.changedAt === pass);
         if (!node.compiled || needsCompiling(node, cellTree) || (reached && isReshaped(node.compiled))) {
           compile(node, cellTree);
           fresh = true;
@@ -170,56 +175,18 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
     return changed;
   }
 
+  const course = (): Course => ({ nodes, byName, order, analyses });
+
   /** Runs a node's segment; says whether any of its slots came out otherwise. */
   function run(node: Node, fresh: boolean): boolean {
-    const { segment } = node.compiled;
+    const { segment, draft, slot } = node.compiled;
     const before = fresh ? null : slots.slice(segment.base, segment.base + segment.size);
-    runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
-    if (node.compiled.ends.length > 0) {
-      putEnds(node);
-      runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
+    const found = runCell(node, slots, course());
+    if (found) {
+      const { atAnswer } = found;
+      draft.asks!.take(found, atAnswer && ((handle) => atAnswer[slot(handle)]!));
     }
     return before === null || before.some((value, i) => !Object.is(value, slots[segment.base + i]!));
-  }
-
-  /** Every node that a node rests on. */
-  function coneOf(k: number): number[] {
-    const found = new Set<number>();
-    const open = [...nodes[k]!.uses];
-    for (let u = open.pop(); u !== undefined; u = open.pop()) {
-      if (found.has(u)) continue;
-      found.add(u);
-      open.push(...nodes[u]!.uses);
-    }
-    return [...found];
-  }
-
-  /** Computes the ends that a cell wants, over all that it rests on, and puts them into its slots. */
-  function putEnds(node: Node): void {
-    const { ends } = node.compiled;
-    const k = nodes.indexOf(node);
-    const cone = new Set([...coneOf(k), k]);
-    const parts = order.filter((u) => cone.has(u));
-    const program = programOf(parts);
-    const model = spreadModel(
-      parts.map((u) => nodes[u]!),
-      program,
-      slots,
-    );
-    const found = analyses!.ends(
-      model,
-      ends.map(({ of }) => of),
-    );
-    ends.forEach(({ which, into }, i) => (slots[into] = found[i]![which]));
-  }
-
-  /** The program of some nodes, given in topological order. */
-  function programOf(live: readonly number[]): Program {
-    const position = new Map(live.map((k, i) => [k, i]));
-    return assemble(
-      live.map((k) => nodes[k]!.compiled.segment),
-      live.map((k) => nodes[k]!.usedBy.map((d) => position.get(d)).filter((d) => d !== undefined)),
-    );
   }
 
   function update(newText: string): Set<string> {
@@ -280,7 +247,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
 
   update(text);
 
-  const state = (): SheetState => ({ tree, nodes, byName, order, slots, now });
+  const state = (): SheetState => ({ tree, slots, now, ...course() });
   const view = createView(state);
   const sheet: Sheet & { compiled(): CompiledSheet } = {
     ...view,
@@ -299,7 +266,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
     },
     compiled() {
       const live = order.filter((k) => !nodes[k]!.fault && !nodes[k]!.waitsFor);
-      const program = programOf(live);
+      const program = programOf(live, nodes);
       return { program, slots: slots.slice(0, program.slotCount), cells: live.map((k) => nodes[k]!.key) };
     },
   };

@@ -9,11 +9,10 @@ import { KERNELS } from './kernels.ts';
 import type { Sweep, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { createScope } from './resolve.ts';
+import { turn } from './turned.ts';
+import type { Course } from './turned.ts';
 
-interface Surroundings {
-  readonly nodes: readonly Node[];
-  readonly byName: ReadonlyMap<string, Node>;
-  readonly order: readonly number[];
+interface Surroundings extends Course {
   readonly slots: Float64Array;
   now(expr: Expr, line: Line): { type: ValueType; value: number };
 }
@@ -37,16 +36,16 @@ export function sweepPlot(plot: Node, points: number, sheet: Surroundings): Swee
     entry.over.log,
   );
 
-  const path = affected(inputNode, plot, sheet);
   const top = sheet.slots.length;
   const builder = createBuilder(KERNELS);
   const look = (name: string) => sheet.byName.get(name)?.compiled.interface ?? null;
   const scope = createScope(builder, line, { look, names: () => [], later: () => {} });
   const outputs = entry.values.map((expr) => ({ expr, ...compileExpression(expr, scope) }));
   const { segment, slot } = builder.finish(top);
-  const slots = new Float64Array(top + segment.size);
-  slots.set(sheet.slots);
-  install(segment, slots);
+  const room = new Float64Array(top + segment.size);
+  room.set(sheet.slots);
+  install(segment, room);
+  const turned = turn({ node: inputNode, slot: input }, plot, room, sheet);
 
   const series = outputs.map(({ expr, type }) => ({
     label: label(expr),
@@ -56,11 +55,10 @@ export function sweepPlot(plot: Node, points: number, sheet: Surroundings): Swee
   }));
   const present = sheet.slots[input]!;
   for (let i = 0; i < points; i++) {
-    slots[input] = values[i]!;
-    const sound = runPath(path, slots);
-    runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, slots, KERNELS);
+    const sound = turned.at(values[i]!);
+    runOperations(segment.ops, 0, segment.ops.length, segment.args, 0, turned.slots, KERNELS);
     outputs.forEach(({ handle }, k) => {
-      series[k]!.values[i] = sound ? slots[slot(handle)]! : NaN;
+      series[k]!.values[i] = sound ? turned.slots[slot(handle)]! : NaN;
     });
   }
   return {
@@ -81,35 +79,6 @@ function plotType(node: Node, entry: PlotEntry): ValueType {
     .map((name) => name.name)
     .join('.');
   return field === '' ? node.compiled.interface.type! : node.compiled.interface.offers.get(field)!.type;
-}
-
-/** The cells between an input and a plot, in order; a part whose field is turned is run, too. */
-function affected(input: Node, plot: Node, { nodes, order }: Surroundings): Node[] {
-  const wanted = new Set<Node>([plot]);
-  for (const k of order.toReversed()) if (wanted.has(nodes[k]!)) for (const u of nodes[k]!.uses) wanted.add(nodes[u]!);
-  const reached = new Set<Node>([input]);
-  const found: Node[] = [];
-  for (const k of order) {
-    const node = nodes[k]!;
-    if (node !== input && !node.uses.some((u) => reached.has(nodes[u]!))) continue;
-    reached.add(node);
-    if (node !== input || node.tree.entry.type !== 'quantity') found.push(node);
-  }
-  return found.filter((node) => node !== plot && wanted.has(node));
-}
-
-/** Runs the cells in order; says whether all of them have values. */
-function runPath(path: readonly Node[], slots: Float64Array): boolean {
-  for (const { compiled } of path) {
-    const { ops, args } = compiled.segment;
-    runOperations(ops, 0, ops.length, args, 0, slots, KERNELS);
-  }
-  return path.every((node) => isSound(node, slots));
-}
-
-function isSound({ compiled }: Node, slots: Float64Array): boolean {
-  const { verify } = compiled.draft;
-  return !verify || verify((handle) => slots[compiled.slot(handle)]!) === null;
 }
 
 /** Points from low to high, evenly or evenly in the logarithm; the ends are exact. */

@@ -8,13 +8,12 @@ import type { CellReading, SheetView, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { faultAt, readCell } from './readings.ts';
 import { sweepPlot } from './sweep.ts';
+import { answerAgain } from './turned.ts';
+import type { Course } from './turned.ts';
 
 /** All that is read of a sheet. */
-export interface SheetState {
+export interface SheetState extends Course {
   readonly tree: SheetTree;
-  readonly nodes: readonly Node[];
-  readonly byName: ReadonlyMap<string, Node>;
-  readonly order: readonly number[];
   readonly slots: Float64Array;
   now(expr: Expr, line: Line): { type: ValueType; value: number };
   /** Readings at the nominal values, of a sheet that stands elsewhere. */
@@ -102,6 +101,7 @@ export function stateAt(state: SheetState, at: ReadonlyMap<number, number>): She
     if (node.waitsFor) continue;
     const { ops, args } = compiled.segment;
     runOperations(ops, 0, ops.length, args, 0, slots, BUILD_KERNELS);
+    if (compiled.asks?.each) answerAgain(node, slots, { ...state, nodes, byName }, BUILD_KERNELS);
     node.fault = compiled.draft.verify?.((handle) => slots[compiled.slot(handle)]!) ?? null;
   }
   const nominals = new Map(state.nodes.map((node) => [node.key, node]));
