@@ -18,7 +18,7 @@ export interface ScannedRoots {
 }
 
 /** Steps of a scan. */
-export const SCAN_STEPS = 64;
+const SCAN_STEPS = 64;
 /** A range above 0 whose ends are this far apart is walked through in equal ratios. */
 const DECADE = 10;
 /** Halvings by which the border of what is defined is found. */
@@ -39,6 +39,12 @@ export function scanPlaces(first: number, last: number): Float64Array {
   return places;
 }
 
+/** Whether what is left at the end of a narrowing, begun where the function was fa and fb, is that of a root and not of a jump. */
+export function isRoot(residual: number, fa: number, fb: number): boolean {
+  const finite = (height: number): number => (Math.abs(height) < Infinity ? Math.abs(height) : 0);
+  return Math.abs(residual) <= JUMP_SHARE * Math.max(finite(fa), finite(fb));
+}
+
 /** Scans f from `first` to `last`, both finite; f may be NaN where it is not defined. */
 export function scanRoots(f: (x: number) => number, first: number, last: number): ScannedRoots {
   const places = scanPlaces(first, last);
@@ -47,10 +53,9 @@ export function scanRoots(f: (x: number) => number, first: number, last: number)
   const jumps: number[] = [];
   const narrow = (a: number, fa: number, b: number, fb: number): void => {
     const { value, residual, status } = solveBracketed(f, a, b);
-    const heights = [fa, fb].map(Math.abs).filter((height) => height < Infinity);
-    const isRoot = status !== 'left domain' && Math.abs(residual) <= JUMP_SHARE * Math.max(...heights, 0);
-    if (isRoot) roots.push(value);
-    else if (status !== 'left domain') jumps.push(value);
+    if (status === 'left domain') return;
+    if (isRoot(residual, fa, fb)) roots.push(value);
+    else jumps.push(value);
   };
   for (let i = 0; i < SCAN_STEPS; i++) {
     let [a, b] = [places[i]!, places[i + 1]!];

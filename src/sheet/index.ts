@@ -4,6 +4,7 @@
 export { evaluateExpression } from './evaluate-expression.ts';
 export { FUNCTIONS } from './functions.ts';
 export type {
+  Asked,
   Analyses,
   CellKind,
   CellReading,

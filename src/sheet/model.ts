@@ -242,6 +242,26 @@ export interface Wanted {
   readonly cell: string;
   readonly slot: number;
   readonly type: ValueType;
+  /** It is what an inverse cell answers in a build, which may have none; the sheet goes on with what was chosen from it. */
+  readonly isAnswer: boolean;
+}
+
+/** What an inverse cell asks, by the slots of the program. */
+export interface Asked {
+  readonly cell: string;
+  /** The slot that is turned, and its range. */
+  readonly input: number;
+  readonly low: number;
+  readonly high: number;
+  /** The slot that is to be 0. */
+  readonly residual: number;
+  /** The slot of the answer of a build, and the one from which it is taken. */
+  readonly answer: number;
+  readonly held: number;
+  /** It asks for ends of values over the whole declared set: the same answer in every build. */
+  readonly isSame: boolean;
+  /** Other inverse cells are answered anew while it looks for its answer. */
+  readonly isNested: boolean;
 }
 
 /** A check as the draws see it. */
@@ -266,6 +286,8 @@ export interface SpreadModel {
   /** Every number, region and condition of the sheet that has a value. */
   readonly values: readonly Wanted[];
   readonly checks: readonly WantedCheck[];
+  /** Inverse cells, each behind those that it rests on. */
+  readonly asked: readonly Asked[];
   /** Inputs that are the author's to choose: components, supplies and currents, not rows of a part. */
   readonly tunable: readonly { readonly name: string; readonly slot: number; readonly type: ValueKind }[];
   /** Stages of one FET, with its part and the slot of its drain current. */

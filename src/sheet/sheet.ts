@@ -10,8 +10,11 @@ import { applySplices, parseSheet } from '../language/index.ts';
 import type { CellTree, Expr, Line, SheetTree } from '../language/index.ts';
 import { createBuilder, runOperations } from '../program/index.ts';
 import type { Program } from '../program/index.ts';
+import { askedAmong } from './asked.ts';
 import { compileCell } from './compile-cell.ts';
 import type { CompiledCell } from './compile-cell.ts';
+import { coneOf, programOf } from './course.ts';
+import type { Course } from './course.ts';
 import { namesUsed } from './dependencies.ts';
 import type { Placed } from './draft.ts';
 import { compileExpression } from './expression.ts';
@@ -22,12 +25,10 @@ import { inputNames } from './input-of.ts';
 import { KERNELS } from './kernels.ts';
 import type { Analyses, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
-import { coneOf, programOf } from './put-ends.ts';
 import { waitingText } from './readings.ts';
 import { createScope } from './resolve.ts';
 import { spreadModel } from './spread-model.ts';
 import { runCell } from './turned.ts';
-import type { Course } from './turned.ts';
 import { createView, stateAt, waiting } from './view.ts';
 import type { SheetState } from './view.ts';
 
@@ -262,7 +263,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
     },
     spreadModel() {
       const { program, slots: values } = sheet.compiled();
-      return spreadModel(nodes, program, values);
+      return spreadModel(nodes, askedAmong(new Set(order), values, course()), program, values);
     },
     compiled() {
       const live = order.filter((k) => !nodes[k]!.fault && !nodes[k]!.waitsFor);

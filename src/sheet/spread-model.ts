@@ -4,15 +4,20 @@ import { CAPACITANCE, CURRENT, INDUCTANCE, RESISTANCE, VOLTAGE, sameKind } from 
 import type { ValueKind } from '../quantity/index.ts';
 import { isQuantity } from './value-type.ts';
 import type { Program } from '../program/index.ts';
-import type { Cut, Drawn, SpreadModel, Tie, Wanted, WantedCheck } from './model.ts';
+import type { Asked, Cut, Drawn, SpreadModel, Tie, Wanted, WantedCheck } from './model.ts';
 import type { Node } from './node.ts';
 import { lineNow } from './readings.ts';
 
 /** Kinds of input that one buys or sets. */
 const CHOOSABLE = [RESISTANCE, CAPACITANCE, INDUCTANCE, VOLTAGE, CURRENT];
 
-/** Collects the spread of the cells that have values; `nodes` in the order of the sheet. */
-export function spreadModel(nodes: readonly Node[], program: Program, slots: Float64Array): SpreadModel {
+/** Collects the spread of the cells that have values, in the order of the sheet, and what is asked among them. */
+export function spreadModel(
+  nodes: readonly Node[],
+  asked: readonly Asked[],
+  program: Program,
+  slots: Float64Array,
+): SpreadModel {
   const drawn: Drawn[] = [];
   const cuts: Cut[] = [];
   const ties: Tie[] = [];
@@ -64,7 +69,10 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
       }
     }
     if (draft.type !== null && draft.value !== null) {
-      values.push({ path: cell, cell, slot: node.compiled.interface.slot, type: draft.type });
+      // What builds want of an answer that is the same in all of them, or costs a search within a search, is not asked.
+      const wanted = asked.find((each) => each.cell === cell && !each.isSame && !each.isNested);
+      const slot = wanted?.answer ?? node.compiled.interface.slot;
+      values.push({ path: cell, cell, slot, type: draft.type, isAnswer: wanted !== undefined });
     }
     if (draft.check) {
       checks.push({
@@ -85,8 +93,8 @@ export function spreadModel(nodes: readonly Node[], program: Program, slots: Flo
       stages.push({ stage: cell, part: entry.fets[0]!.part.name, current });
     }
     for (const [name, offer] of node.compiled.interface.offers) {
-      if (offer.slot >= 0) values.push({ path: path(name), cell, slot: offer.slot, type: offer.type });
+      if (offer.slot >= 0) values.push({ path: path(name), cell, slot: offer.slot, type: offer.type, isAnswer: false });
     }
   }
-  return { program, slots, drawn, cuts, ties, pairs, values, checks, tunable, stages };
+  return { program, slots, drawn, cuts, ties, pairs, values, checks, asked, tunable, stages };
 }

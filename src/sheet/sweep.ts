@@ -10,7 +10,7 @@ import type { Sweep, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { createScope } from './resolve.ts';
 import { turn } from './turned.ts';
-import type { Course } from './turned.ts';
+import type { Course } from './course.ts';
 
 interface Surroundings extends Course {
   readonly slots: Float64Array;

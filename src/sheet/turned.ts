@@ -7,19 +7,11 @@ import { scanRoots } from '../numeric/index.ts';
 import type { ScannedRoots } from '../numeric/index.ts';
 import { runOperations } from '../program/index.ts';
 import type { KernelTable } from '../program/index.ts';
+import { wayBetween } from './course.ts';
+import type { Course } from './course.ts';
 import { KERNELS } from './kernels.ts';
-import type { Analyses } from './model.ts';
 import type { Node } from './node.ts';
 import { putEnds } from './put-ends.ts';
-
-/** The compiled cells and how they hang together. */
-export interface Course {
-  readonly nodes: readonly Node[];
-  readonly byName: ReadonlyMap<string, Node>;
-  /** Indices of nodes, each behind those that it uses. */
-  readonly order: readonly number[];
-  readonly analyses: Analyses | null;
-}
 
 /** What a search for the answers of an inverse cell has found. */
 export interface Answers extends ScannedRoots {
@@ -117,26 +109,6 @@ export function turn(input: TurnedInput, goal: Node, slots: Float64Array, course
       return way.every((node) => isSound(node, own));
     },
   };
-}
-
-/** The cells between some inputs and a goal, in order, the goal not among them; a part or point of which a field is turned is. */
-export function wayBetween(
-  inputs: readonly Node[],
-  goal: Node,
-  { nodes, order }: Pick<Course, 'nodes' | 'order'>,
-): Node[] {
-  const wanted = new Set<Node>([goal]);
-  for (const k of order.toReversed()) if (wanted.has(nodes[k]!)) for (const u of nodes[k]!.uses) wanted.add(nodes[u]!);
-  const reached = new Set<Node>(inputs);
-  const found: Node[] = [];
-  for (const k of order) {
-    const node = nodes[k]!;
-    const isInput = inputs.includes(node);
-    if (!isInput && !node.uses.some((u) => reached.has(nodes[u]!))) continue;
-    reached.add(node);
-    if (!isInput || node.tree.entry.type !== 'quantity') found.push(node);
-  }
-  return found.filter((node) => node !== goal && wanted.has(node));
 }
 
 function isSound({ compiled }: Node, slots: Float64Array): boolean {

@@ -9,7 +9,7 @@ import type { Node } from './node.ts';
 import { faultAt, readCell } from './readings.ts';
 import { sweepPlot } from './sweep.ts';
 import { answerAgain } from './turned.ts';
-import type { Course } from './turned.ts';
+import type { Course } from './course.ts';
 
 /** All that is read of a sheet. */
 export interface SheetState extends Course {

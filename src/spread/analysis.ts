@@ -3,7 +3,7 @@
 import { binomialInterval, quantileOf } from '../numeric/index.ts';
 import { reachOf, reaches } from '../program/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
-import { choicesOf } from './batch.ts';
+import { choicesOf } from './state-columns.ts';
 import { createBuilds } from './builds.ts';
 import { declaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
@@ -89,7 +89,8 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
 
   function end(w: number, which: 'low' | 'high'): End {
     const { [which]: extreme, unsolved } = search.of(w);
-    const isKnown = unsolved === null && open[w]![which].length === 0 && !search.isEmpty;
+    const isKnown =
+      (unsolved === null || (values[w]?.isAnswer ?? false)) && open[w]![which].length === 0 && !search.isEmpty;
     return { value: isKnown ? extreme.value : null, where: place(w, extreme), open: open[w]![which] };
   }
 
@@ -99,23 +100,27 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
 
   function valueSpread(w: number): ValueSpread {
     const { unsolved, low, high } = search.of(w);
+    const { path, type, isAnswer } = values[w]!;
+    const isWord = typeof type === 'string';
+    const isKnown = (unsolved === null || isAnswer) && open[w]!.any.length === 0;
     return {
-      path: values[w]!.path,
-      isWord: typeof values[w]!.type === 'string',
+      path,
+      isWord,
       moves: drawn.some((_, k) => counting(w)(k)),
       low: end(w, 'low'),
       high: end(w, 'high'),
       unsolved: unsolved && whereIs(model, unsolved, counting(w)),
+      answered: isAnswer && sum.builds > 0 ? share(sum.moments.count[w]!, sum.builds) : null,
       distribution:
-        unsolved !== null || open[w]!.any.length > 0 || sum.builds === 0 || typeof values[w]!.type === 'string'
-          ? null
-          : distribution(w, Math.min(low.value, first.low[w]!), Math.max(high.value, first.high[w]!)),
+        isKnown && sum.builds > 0 && !isWord
+          ? distribution(w, Math.min(low.value, first.low[w]!), Math.max(high.value, first.high[w]!))
+          : null,
     };
   }
 
   function distribution(w: number, low: number, high: number): Distribution | null {
     const n = sum.moments.count[w]!;
-    if (n < sum.builds || !(low > -Infinity && high < Infinity)) return null;
+    if (n === 0 || (n < sum.builds && !values[w]!.isAnswer) || !(low > -Infinity && high < Infinity)) return null;
     const bins = sum.bins.slice(w * BINS, (w + 1) * BINS);
     const histogram = { counts: bins, low: first.low[w]!, high: first.high[w]!, least: low, largest: high };
     // Where the ends were one number when counting began, nothing was put into bins.

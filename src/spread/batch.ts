@@ -1,10 +1,9 @@
 // Some values of a sheet at many positions at once.
 
-import { createColumns, planColumns, resultsOf } from '../program/index.ts';
-import { KERNELS, isChoice } from '../sheet/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
 import { fillColumns } from './position.ts';
 import type { Position } from './position.ts';
+import { createStateColumns } from './state-columns.ts';
 
 export interface Batch {
   /** Computes the values at every position; `visit` is called after each pass with the range that `column(k)` holds. */
@@ -13,22 +12,14 @@ export interface Batch {
   column(k: number): Float64Array;
 }
 
-/** What was chosen at the nominal values: the same in every build. */
-export function choicesOf({ program }: SpreadModel): number[] {
-  return resultsOf(program, isChoice);
-}
-
 /** Prepares the evaluation of the values in these slots. */
 export function createBatch(model: SpreadModel, wanted: readonly number[]): Batch {
-  const { program, slots, drawn } = model;
-  const plan = planColumns({
-    program,
-    slots,
-    varying: drawn.map(({ slot }) => slot),
-    frozen: choicesOf(model),
-    outputs: wanted,
-  });
-  const columns = createColumns(plan, KERNELS);
+  const { drawn } = model;
+  const columns = createStateColumns(
+    model,
+    drawn.map(({ slot }) => slot),
+    wanted,
+  );
   return {
     run(positions, visit) {
       for (let from = 0; from < positions.length; from += columns.width) {

@@ -2,15 +2,13 @@
 // model, the seed and its first build, so it may be counted by anyone, in any order.
 
 import { addColumn } from '../numeric/index.ts';
-import { createColumns, planColumns } from '../program/index.ts';
-import { KERNELS } from '../sheet/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
-import { choicesOf } from './batch.ts';
 import { createDraws, positionOf } from './draws.ts';
 import { quantileAt } from './law.ts';
 import { fillValues, valueAt } from './position.ts';
 import type { Position } from './position.ts';
 import { serviceDraws, serviceStates } from './service.ts';
+import { createStateColumns } from './state-columns.ts';
 import { BINS, emptyTally } from './tally.ts';
 import type { Tally, TallyShape } from './tally.ts';
 
@@ -30,18 +28,13 @@ interface Builds {
 
 /** Prepares the builds of a model; values and checks are counted in the order of the model. */
 export function createBuilds(model: SpreadModel, seed: number, ranges: Ranges): Builds {
-  const { program, slots, drawn, values, checks, cuts } = model;
+  const { drawn, values, checks, cuts } = model;
   const service = serviceDraws(model);
   const states = serviceStates(model);
-  const columns = createColumns(
-    planColumns({
-      program,
-      slots,
-      varying: drawn.map(({ slot }) => slot),
-      frozen: choicesOf(model),
-      outputs: [...values, ...checks].map(({ slot }) => slot),
-    }),
-    KERNELS,
+  const columns = createStateColumns(
+    model,
+    drawn.map(({ slot }) => slot),
+    [...values, ...checks].map(({ slot }) => slot),
   );
   const { width } = columns;
   const draws = createDraws(model, seed, width);

@@ -5,13 +5,12 @@
 // all draws of that part together, until it belongs to the declared set.
 
 import { drawKey, fillUniform, uniformAt } from '../numeric/index.ts';
-import { createColumns, planColumns, reachOf, reaches } from '../program/index.ts';
-import { KERNELS } from '../sheet/index.ts';
+import { reachOf, reaches } from '../program/index.ts';
 import type { SpreadModel, Tie } from '../sheet/index.ts';
-import { choicesOf } from './batch.ts';
 import { placeAt } from './law.ts';
 import { valueAt } from './position.ts';
 import type { Position } from './position.ts';
+import { choicesOf, createStateColumns } from './state-columns.ts';
 import { follow } from './tracking.ts';
 
 /** A specimen that was drawn so often without belonging to the set is given up. */
@@ -101,24 +100,20 @@ interface CutPart {
 }
 
 function partsOf(model: SpreadModel): CutPart[] {
-  const { program, slots, drawn, cuts } = model;
-  const frozen = choicesOf(model);
+  const { program, drawn, cuts } = model;
   const reach = reachOf(
     program,
     drawn.map(({ slot }) => slot),
-    new Set(frozen),
+    new Set(choicesOf(model)),
   );
   return [...new Set(cuts.map(({ cell }) => cell))].map((cell) => {
     const own = cuts.filter((cut) => cut.cell === cell);
     const draws = drawn.flatMap((_, k) => (own.some(({ slot }) => reaches(reach, k, slot)) ? [k] : []));
-    const plan = planColumns({
-      program,
-      slots,
-      varying: draws.map((k) => drawn[k]!.slot),
-      frozen,
-      outputs: own.map(({ slot }) => slot),
-    });
-    const columns = createColumns(plan, KERNELS);
+    const columns = createStateColumns(
+      model,
+      draws.map((k) => drawn[k]!.slot),
+      own.map(({ slot }) => slot),
+    );
     return {
       cell,
       draws,

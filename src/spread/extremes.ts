@@ -8,7 +8,8 @@
 
 import { reachOf, reaches } from '../program/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
-import { choicesOf, createBatch } from './batch.ts';
+import { createBatch } from './batch.ts';
+import { choicesOf } from './state-columns.ts';
 import { declaredSet } from './declared-set.ts';
 import type { DeclaredSet, Plane } from './declared-set.ts';
 import type { Position } from './position.ts';

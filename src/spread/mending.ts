@@ -9,6 +9,7 @@ import { KERNELS } from '../sheet/index.ts';
 import type { Drawn, SpreadModel } from '../sheet/index.ts';
 import { declaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
+import { answerAnew } from './state-columns.ts';
 
 /** How far an input is turned to either side, as a factor, and in how many places on each. */
 const RANGE = 8;
@@ -127,6 +128,7 @@ function turnedModel(model: SpreadModel, slot: number, value: number): SpreadMod
   const factor = value / slots[slot]!;
   slots[slot] = value;
   runAll(model.program, slots, KERNELS);
+  answerAnew({ ...model, slots });
   const turned = (each: Drawn): Drawn => {
     if (each.slot !== slot) return each;
     const { low, high } = each.spread;

@@ -1,12 +1,12 @@
 // What moves a value most: each draw's effect from its low to its high end with all others at their nominal, and its first-order
 // share in the variance of the builds.
 
-import { createColumns, planColumns, reachOf, reaches } from '../program/index.ts';
-import { KERNELS } from '../sheet/index.ts';
+import { reachOf, reaches } from '../program/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
-import { choicesOf, createBatch } from './batch.ts';
+import { createBatch } from './batch.ts';
 import { createDraws } from './draws.ts';
 import { fillValues } from './position.ts';
+import { choicesOf, createStateColumns } from './state-columns.ts';
 
 export interface Mover {
   /** Index of the draw in the model. */
@@ -55,16 +55,11 @@ export function moversOf(model: SpreadModel, slot: number, seed: number): Mover[
 
 /** The share of each draw; null where some build has no value or nothing varies. */
 function variances(model: SpreadModel, slot: number, seed: number, moving: readonly number[]): Float64Array | null {
-  const { drawn, program, slots } = model;
-  const columns = createColumns(
-    planColumns({
-      program,
-      slots,
-      varying: drawn.map((each) => each.slot),
-      frozen: choicesOf(model),
-      outputs: [slot],
-    }),
-    KERNELS,
+  const { drawn } = model;
+  const columns = createStateColumns(
+    model,
+    drawn.map((each) => each.slot),
+    [slot],
   );
   const draws = createDraws(model, seed, columns.width);
   const values = new Float64Array(BUILDS);

@@ -3,7 +3,8 @@
 
 import { reachOf, reaches } from '../program/index.ts';
 import type { Drawn, SpreadModel } from '../sheet/index.ts';
-import { choicesOf, createBatch } from './batch.ts';
+import { createBatch } from './batch.ts';
+import { choicesOf } from './state-columns.ts';
 import type { ExtremeSearch } from './extremes.ts';
 
 /** How far beyond its nominal a draw with an open end is moved, as shares of the nominal. */

@@ -39,6 +39,8 @@ export interface ValueSpread {
   readonly high: End;
   /** Where in the declared set it could not be computed; null where it always was. */
   readonly unsolved: readonly StandingDraw[] | null;
+  /** Of an inverse cell: the share of builds that have just one answer; null of another value, and before any build was counted. */
+  readonly answered: Share | null;
   /** null where an end is open or a build could not be computed, and before any build was counted. */
   readonly distribution: Distribution | null;
 }
