@@ -12,6 +12,9 @@ import type { KernelTable, Segment } from './segment.ts';
 /** Local handles count from here; slots of other segments lie below. */
 const LOCAL = 0x40000000;
 
+/** The name of each operation by its code. */
+const NAMES = Object.keys(OP) as OperationName[];
+
 /** Operations whose result is the same number when the operands change places. */
 const SYMMETRIC: ReadonlySet<OperationName> = new Set(['add', 'mul', 'min', 'max', 'parallel', 'equal', 'and', 'or']);
 
@@ -27,6 +30,11 @@ export interface Builder extends Emitter {
   op(name: OperationName, a: Handle, b?: Handle): Handle;
   /** The same value in a slot of this segment: what a cell offers must change with its own segment. */
   own(handle: Handle): Handle;
+  /**
+   * Takes the code of another segment over: it reads what `placed` has in place of a slot, and puts its results there. What a
+   * kernel gives for which `keeps` says so stays where it is.
+   */
+  inline(segment: Segment, placed: Map<number, Handle>, keeps: (kernel: number) => boolean): void;
   /** How many slots the segment needs. */
   size(): number;
   /**
@@ -79,6 +87,10 @@ export function createBuilder(kernels: KernelTable): Builder {
   function call(kernel: string, inputs: readonly Handle[], outputs: number): Handle[] {
     const index = kernels.findIndex((k) => k.name === kernel);
     if (index < 0) throw new RangeError(`No kernel is called ${kernel}.`);
+    return callAt(index, inputs, outputs);
+  }
+
+  function callAt(index: number, inputs: readonly Handle[], outputs: number): Handle[] {
     const results = Array.from({ length: outputs }, local);
     ops.push(OP.call, index, args.length, inputs.length + outputs);
     args.push(...inputs, ...results);
@@ -116,6 +128,26 @@ export function createBuilder(kernels: KernelTable): Builder {
     max: (a, b) => op('max', a, b),
     abs: (a) => op('abs', a),
     sqrt: (a) => op('sqrt', a),
+    inline(segment, placed, keeps) {
+      const read = (slot: number): Handle => placed.get(slot) ?? slot;
+      const known = new Set(segment.constantSlots);
+      const isResult = (slot: number): boolean =>
+        slot >= segment.base && slot < segment.base + segment.size && !known.has(slot);
+      for (let i = 0; i < segment.ops.length; i += STRIDE) {
+        const [code, target, a, b] = segment.ops.subarray(i, i + STRIDE);
+        if (code !== OP.call) {
+          placed.set(target, op(NAMES[code], read(a), read(b)));
+          known.add(target);
+          continue;
+        }
+        const list = Array.from(segment.args.subarray(a, a + b));
+        const results = list.filter(isResult);
+        for (const slot of results) known.add(slot);
+        if (keeps(target)) continue;
+        const inputs = list.filter((slot) => !results.includes(slot)).map(read);
+        callAt(target, inputs, results.length).forEach((handle, n) => placed.set(results[n], handle));
+      }
+    },
     own: (handle) => (handle >= LOCAL ? handle : op('copy', handle)),
     size: () => count,
     finish(base, first = null, offered = null) {

@@ -7,12 +7,17 @@ import type { Segment } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
 import { DEFAULT_AMBIENT } from './ambient.ts';
 import { CELL_KINDS } from './cell-kinds.ts';
+import type { Course } from './course.ts';
 import type { AskDraft, CellContext, Draft, Placed } from './draft.ts';
 import { EMPTY_DRAFT } from './draft.ts';
 import type { Interface, Offer } from './interface.ts';
 import { KERNELS } from './kernels.ts';
+import { checkInput } from './input-of.ts';
 import type { ValueType } from './model.ts';
+import type { Node } from './node.ts';
 import { Waiting, createScope } from './resolve.ts';
+import { createRestating } from './restate.ts';
+import type { Restating } from './restate.ts';
 import type { EndName } from './scope.ts';
 import { Stop } from './stop.ts';
 
@@ -26,6 +31,8 @@ interface Surroundings {
   has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
   now(expr: Expr, line: Line): { type: ValueType; value: number };
+  /** The compiled cells, for values in another state. */
+  course(): Course;
   /** Whether ends of values can be computed. */
   readonly hasEnds: boolean;
   /** A block of slots for the cell: its present one where that is wide enough. */
@@ -67,6 +74,8 @@ export interface CompiledCell {
   readonly proposedInputs: readonly string[] | null;
   /** Names whose mere presence was asked for. */
   readonly presence: Map<string, boolean>;
+  /** The cells whose code was taken over, and that code. */
+  readonly taken: ReadonlyMap<Node, Segment>;
   /** What was compiled rests on values as they stood, not on kinds alone. */
   readonly restsOnValues: boolean;
   readonly shape: string | null;
@@ -97,6 +106,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     ends.push({ which, of: own, into });
     return into;
   };
+  const restating = createRestating(builder, surroundings.course);
   const note = (message: Message, line: Line): void => {
     later ??= { message, line };
   };
@@ -123,6 +133,8 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
         look,
         names,
         later: (message) => note(message, line),
+        restating,
+        checkInput: (path) => checkInput(path, context),
         ...(surroundings.hasEnds ? { end } : {}),
       }),
     later: (what, span, line) => note({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span }, line),
@@ -145,6 +157,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
       else throw thrown;
     }
   }
+  if (restating.taken().size > 0) draft = { ...draft, verify: inEveryState(draft.verify, restating, tree) };
   const failed = fault !== null || waitsFor !== null;
   const value = failed || draft.value === null ? null : builder.own(draft.value);
   const offers = draft.offers.map((offer) => ({
@@ -189,8 +202,19 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     copied,
     ends: failed ? [] : ends.map(({ which, of, into }) => ({ which, of: slot(of), into: slot(into) })),
     asks: failed || draft.asks === null ? null : askedSlots(draft.asks, slot),
+    taken: restating.taken(),
     restsOnValues,
     shape: draft.shape?.() ?? null,
+  };
+}
+
+/** What is wrong in another state of the sheet is said of the cell that looks there, before what comes of it. */
+function inEveryState(verify: Draft['verify'], restating: Restating, { line, entry }: CellTree): Draft['verify'] {
+  return (read) => {
+    const fault = restating.fault(read);
+    if (!fault) return verify?.(read) ?? null;
+    const { code, text } = fault.message;
+    return { line, message: { code, text: `In the state that is asked for: ${text}`, span: entry.span } };
   };
 }
 

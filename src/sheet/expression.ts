@@ -28,7 +28,6 @@ export function compileExpression(expr: Expr, scope: Scope): Typed {
     case 'within':
       return compileWithin(expr, scope);
     case 'with': {
-      const value = scope.compile(expr.value);
       const input = scope.resolve(expr.input);
       const setting = scope.compile(expr.setting);
       if (!sameType(input.type, setting.type)) {
@@ -39,8 +38,9 @@ export function compileExpression(expr: Expr, scope: Scope): Typed {
           expr.setting.span,
         );
       }
-      scope.later('A value with another setting of an input', expr.span);
-      return { type: value.type, handle: scope.builder.constant(NaN) };
+      if (scope.restated) return scope.restated(expr.input, setting.handle).compile(expr.value);
+      scope.later('A value in another state', expr.span);
+      return { type: scope.compile(expr.value).type, handle: scope.builder.constant(NaN) };
     }
     case 'binary':
       switch (expr.operator) {

@@ -78,6 +78,11 @@ export function isChoice(kernel: number): boolean {
   return CHOICES.has(KERNELS[kernel]!.name);
 }
 
+/** Whether what this kernel gave stays in another state of the same build: a choice, or an answer. */
+export function staysChosen(kernel: number): boolean {
+  return isChoice(kernel) || KERNELS[kernel]!.name === 'answer';
+}
+
 const keep: Kernel = () => {};
 
 /** The kernels of a build: what was chosen at the nominal values stays. */

@@ -9,6 +9,7 @@ import { DEFAULT_AMBIENT } from './ambient.ts';
 import type { Interface } from './interface.ts';
 import type { CellKind, ValueType } from './model.ts';
 import { compileExpression } from './expression.ts';
+import type { Restating, Setting } from './restate.ts';
 import type { Scope, Typed } from './scope.ts';
 import { stop } from './stop.ts';
 
@@ -24,6 +25,10 @@ interface Lookup {
   names(): readonly string[];
   later(message: Message): void;
   readonly end?: Scope['end'];
+  /** For values in another state. */
+  readonly restating?: Restating;
+  /** Stops where a path names no input. */
+  readonly checkInput?: (path: PathExpr) => void;
 }
 
 /** Constants of the language: exact SI values since 2019 (Boltzmann constant, elementary charge). */
@@ -37,11 +42,26 @@ const CONSTANTS: ReadonlyMap<string, { type: ValueType; value: number }> = new M
 export function createScope(builder: Builder, line: Pick<Line, 'text'>, lookup: Lookup): Scope {
   const later = (what: string, span: Span): void =>
     lookup.later({ code: 'not-computed-yet', text: `${what} is not computed yet.`, span });
-  return {
+  const { restating } = lookup;
+  const inState = (settings: readonly Setting[]): Scope => ({
+    ...plain,
+    resolve(path) {
+      const resolved = plain.resolve(path);
+      return settings.length === 0 ? resolved : restating!.restate(path, resolved, settings);
+    },
+    restated: restating
+      ? (path, handle) => {
+          const setting = restating.setting(path, handle);
+          if (setting === null) lookup.checkInput?.(path);
+          return setting === null ? inState(settings) : inState([...settings, setting]);
+        }
+      : null,
+  });
+  const plain: Omit<Scope, 'restated'> = {
     builder,
     text: line.text,
     compile(expr) {
-      return compileExpression(expr, this);
+      return compileExpression(expr, this as Scope);
     },
     later,
     end: lookup.end ?? null,
@@ -54,6 +74,7 @@ export function createScope(builder: Builder, line: Pick<Line, 'text'>, lookup: 
       return name;
     },
   };
+  return inState([]);
 }
 
 /** "a stage", "a quantity", with its article. */

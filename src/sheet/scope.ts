@@ -25,6 +25,8 @@ export interface Scope {
   later(what: string, span: Span): void;
   /** The least or largest of a value over the declared set, as a number that is put in before the cell runs; null where nothing computes it. */
   readonly end: ((which: EndName, of: Handle) => Handle) | null;
+  /** The scope of the same build with an input set otherwise; null where no cells can be taken over. Stops where the path names no input. */
+  readonly restated: ((input: PathExpr, setting: Handle) => Scope) | null;
   /** Name of the stage that a function such as gain(A1, f) takes; stops when it is none. */
   stageOf(path: PathExpr): string;
 }

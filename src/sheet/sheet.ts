@@ -27,6 +27,7 @@ import type { Analyses, Sheet, ValueType } from './model.ts';
 import type { Node } from './node.ts';
 import { waitingText } from './readings.ts';
 import { createScope } from './resolve.ts';
+import { createRestating } from './restate.ts';
 import { spreadModel } from './spread-model.ts';
 import { runCell } from './turned.ts';
 import { createView, stateAt, waiting } from './view.ts';
@@ -77,7 +78,8 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
 
   function now(expr: Expr, line: Line): { type: ValueType; value: number } {
     const builder = createBuilder(KERNELS);
-    const scope = createScope(builder, line, { look, names, later: () => {} });
+    const restating = createRestating(builder, course);
+    const scope = createScope(builder, line, { look, names, later: () => {}, restating });
     const { type, handle } = compileExpression(expr, scope);
     const { segment, slot } = builder.finish(top);
     reserve(top + segment.size);
@@ -95,6 +97,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
       has,
       treeOf,
       now,
+      course,
       hasEnds: analyses !== null,
       allocate(size) {
         if (size > node.capacity) {
@@ -118,6 +121,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
     const { seen, proposedFrom, proposedInputs, presence, copied } = node.compiled;
     for (const [name, then] of seen) if (look(name) !== then) return true;
     for (const [name, then] of presence) if (has(name) !== then) return true;
+    for (const [taken, then] of node.compiled.taken) if (taken.compiled?.segment !== then) return true;
     for (const [name, then] of copied) if (!isSameText(treeOf(name), then)) return true;
     if (proposedInputs !== null && proposedInputs !== inputs()) return true;
     return proposedFrom !== null && proposedFrom !== allNames;
@@ -365,6 +369,7 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
     inputs: nothing,
     has: nothing,
     now: nothing,
+    course: nothing,
     hasEnds: false,
     allocate: nothing,
   });

@@ -33,7 +33,7 @@ export interface PublishedCase {
 }
 
 /** What a quantity waits for until the sheet can compute it. */
-export type Waiting = 'several FETs' | 'frequency' | 'noise' | 'an inverse cell' | 'spread';
+export type Waiting = 'several FETs' | 'frequency' | 'noise';
 
 /** Where the quantities of a case stand in its sheet. */
 export interface Comparison {
