@@ -10,7 +10,7 @@ import type { Scope, Typed } from './scope.ts';
 import { readable } from './workings.ts';
 
 /** A value that a formula names. */
-export interface Named extends Typed {
+interface Named extends Typed {
   readonly name: string;
 }
 

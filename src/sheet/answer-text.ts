@@ -5,7 +5,7 @@ import { formatValue } from '../quantity/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { ValueKind } from '../quantity/index.ts';
 import type { ValueType } from './model.ts';
-import type { Answers } from './turned.ts';
+import type { Answers } from './answers.ts';
 import { isQuantity } from './value-type.ts';
 
 /** One side of what is asked, and the values that it names. */

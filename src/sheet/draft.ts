@@ -8,7 +8,7 @@ import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueTyp
 import type { Scope } from './scope.ts';
 import type { Expr } from '../language/index.ts';
 import type { Interface } from './interface.ts';
-import type { Answers } from './turned.ts';
+import type { Answers } from './answers.ts';
 
 /** Reads a handle after the cell has run. */
 export type Read = (handle: Handle) => number;

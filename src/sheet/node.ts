@@ -1,7 +1,7 @@
 // A cell as the engine keeps it between edits.
 
 import type { CellTree } from '../language/index.ts';
-import type { CompiledCell } from './compile-cell.ts';
+import type { CompiledCell } from './compiled-cell.ts';
 import type { Placed } from './draft.ts';
 import type { CellReading } from './model.ts';
 

@@ -12,7 +12,7 @@ import { createBuilder, runOperations } from '../program/index.ts';
 import type { Program } from '../program/index.ts';
 import { askedAmong } from './asked.ts';
 import { compileCell } from './compile-cell.ts';
-import type { CompiledCell } from './compile-cell.ts';
+import type { CompiledCell } from './compiled-cell.ts';
 import { coneOf, programOf } from './course.ts';
 import type { Course } from './course.ts';
 import { namesUsed } from './dependencies.ts';

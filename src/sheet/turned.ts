@@ -4,24 +4,14 @@
 // another.
 
 import { scanRoots } from '../numeric/index.ts';
-import type { ScannedRoots } from '../numeric/index.ts';
 import { runOperations } from '../program/index.ts';
 import type { KernelTable } from '../program/index.ts';
+import type { Answers } from './answers.ts';
 import { wayBetween } from './course.ts';
 import type { Course } from './course.ts';
 import { KERNELS } from './kernels.ts';
 import type { Node } from './node.ts';
 import { putEnds } from './put-ends.ts';
-
-/** What a search for the answers of an inverse cell has found. */
-export interface Answers extends ScannedRoots {
-  /** `range`: the range has no two different finite ends; `depth`: too many inverse cells stand in each other. */
-  readonly obstacle: 'range' | 'depth' | null;
-  readonly low: number;
-  readonly high: number;
-  /** The slots of the sheet turned to the one answer; null where there is none. */
-  readonly atAnswer: Float64Array | null;
-}
 
 /** Inverse cells may stand in each other so deep. */
 const DEEPEST = 3;

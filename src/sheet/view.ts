@@ -2,7 +2,7 @@
 
 import type { Expr, Line, SheetTree } from '../language/index.ts';
 import { runOperations } from '../program/index.ts';
-import type { CompiledCell } from './compile-cell.ts';
+import type { CompiledCell } from './compiled-cell.ts';
 import { BUILD_KERNELS } from './kernels.ts';
 import type { CellReading, SheetView, ValueType } from './model.ts';
 import type { Node } from './node.ts';

@@ -10,7 +10,7 @@ import { createColumns, planColumns, reachOf, reaches, resultsOf, runAll } from 
 import { KERNELS, isChoice } from '../sheet/index.ts';
 import type { Asked, SpreadModel } from '../sheet/index.ts';
 
-export interface StateColumns {
+interface StateColumns {
   /** Rows of one pass. */
   readonly width: number;
   /** The column of the k-th slot that varies: the caller fills it; it stays as it is. */

@@ -10,7 +10,7 @@ import { checkInput } from '../input-of.ts';
 import { compileQuantity } from '../operand.ts';
 import { operandText } from '../scope.ts';
 import { stop } from '../stop.ts';
-import type { Answers } from '../turned.ts';
+import type { Answers } from '../answers.ts';
 import { sameType, typeName } from '../value-type.ts';
 
 /** Compiles an inverse cell; its type is that of the input it asks for. */
