@@ -53,6 +53,8 @@ interface JsonCell extends JsonValue {
   /** As written, without name, source and note. */
   readonly entry: string;
   readonly error: JsonFault | null;
+  /** Of inverse cells, where the sheet has spread: the share of builds with just one answer. */
+  readonly answered?: JsonYield;
   /** Of parts, points and stages, by value name. */
   readonly values?: Readonly<Record<string, JsonValue>>;
 }
@@ -143,6 +145,7 @@ function jsonCell(sheet: Sheet, cell: CellReading, spread: SheetSpread | null): 
     unit: own?.unit ?? null,
     text,
     ...valueSpread(cell.name, spread),
+    ...answeredShare(cell.name, spread),
     error: cell.fault === null ? null : jsonFault(sheet.tree.lines, cell.fault),
     ...(offers
       ? {
@@ -179,6 +182,11 @@ function valueSpread(path: string, spread: SheetSpread | null): { spread?: JsonS
       open: [...new Set([...low.open, ...high.open])],
     },
   };
+}
+
+function answeredShare(name: string, spread: SheetSpread | null): { answered?: JsonYield } {
+  const answered = spread?.value(name)?.answered ?? null;
+  return answered === null ? {} : { answered };
 }
 
 function checkSpread(name: string, spread: SheetSpread | null): Partial<JsonCheck> {

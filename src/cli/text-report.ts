@@ -4,6 +4,7 @@
 import { lineColumn } from '../language/index.ts';
 import type { FieldTree, Line, Note, Source } from '../language/index.ts';
 import {
+  answeredSentences,
   checkText,
   declaredSentences,
   endsText,
@@ -59,6 +60,7 @@ export function textReport(sheet: Sheet, width: number, judged: JudgedSpread | n
     failing.length === 0 ? [] : ['Failing checks', ...table(failing, width)],
     ...sections(table(sheetItems(sheet, judged), width)),
     listed('Declared set', judged ? declaredSentences(judged.spread) : [], width),
+    listed('Wanted in each build', judged ? answeredSentences(judged.spread) : [], width),
     listed(
       'Cautions',
       sheet.cautions().map(({ cell, line, text }) => `${cell}, line ${line + 1}: ${text}`),

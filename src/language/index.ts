@@ -34,6 +34,7 @@ export type {
   Splice,
   StageEntry,
   UnaryExpr,
+  WithExpr,
   WithinExpr,
 } from './syntax.ts';
 export { entrySpan, setEntry, setLine, setNote, setSource } from './edits.ts';
@@ -47,5 +48,5 @@ export { isCellName, RESERVED } from './reserved.ts';
 export { renameCell } from './rename.ts';
 export { pastedBench, readPastedRows } from './pasted-rows.ts';
 export { parseSheet } from './sheet.ts';
-export { pathsOf, walkExpr } from './walk.ts';
+export { partsOf, pathsOf, walkExpr } from './walk.ts';
 export { applySplices, invertSplices } from './splice.ts';

@@ -82,7 +82,7 @@ export interface WithinExpr {
   readonly span: Span;
 }
 /** `A1.A_v with V_C = -8 V`. */
-interface WithExpr {
+export interface WithExpr {
   readonly type: 'with';
   readonly value: Expr;
   readonly input: PathExpr;

@@ -3,7 +3,7 @@
 import type { Entry, Expr, FieldBody, PathExpr, Place } from './syntax.ts';
 
 /** The expressions directly inside one, from left to right; the input of a `with` is among them. */
-function partsOf(expr: Expr): readonly Expr[] {
+export function partsOf(expr: Expr): readonly Expr[] {
   switch (expr.type) {
     case 'number':
     case 'path':

@@ -1,6 +1,7 @@
 // What the page, the record and the terminal print: TeX, workings, values, checks and the verdict.
 // All of it is text or plain trees; nothing is rendered here.
 
+export { answeredSentence, answeredSentences } from './answered-text.ts';
 export { checkText, reserveText } from './check-text.ts';
 export { endsText } from './ends-text.ts';
 export { recordHtml } from './html.ts';

@@ -15,6 +15,7 @@ import type { SheetSpread } from '../spread/index.ts';
 import { stageEnds } from './stage-ends.ts';
 import { inputCells, spreadCells, valueCell } from './value-cells.ts';
 import type { JudgedSpread } from './verdict.ts';
+import { shareText } from './yield-text.ts';
 
 const INPUT_COLUMNS = [
   { title: 'name', kind: 'text' },
@@ -114,11 +115,19 @@ class SheetWriter {
 
 function quantityRow(cell: CellReading, sheet: Sheet, spread: SheetSpread | null): TableRow {
   const { line, entry } = cell.tree;
+  const origin = originCell(line, sheet, cell.isInput);
+  const answered = spread?.value(cell.name)?.answered ?? null;
+  const remark = answered && `just one answer in ${shareText(answered.share)} of builds`;
   const cells: Cell[] = [
     { content: [name(cell.name)] },
     { content: [{ type: 'entry', text: typed(line, entry.span) }] },
     ...numbersOf(cell, spread),
-    originCell(line, sheet, cell.isInput),
+    {
+      content: [
+        ...origin.content,
+        ...(remark === null ? [] : plainText(origin.content.length > 0 ? `; ${remark}` : remark)),
+      ],
+    },
   ];
   return { mark: null, cells };
 }

@@ -62,7 +62,13 @@ export function printStep(step: WorkingStep, subject: string): PrintedStep {
   return {
     kind: 'step',
     isCondition: step.type === 'condition',
-    text: { left: step.name, formula: step.formula, substitution: shows ? substitution : null, result },
+    // An `=` of its own would be read as one of the step's.
+    text: {
+      left: step.name,
+      formula: tree.type === 'with' ? `(${step.formula})` : step.formula,
+      substitution: shows ? substitution : null,
+      result,
+    },
     tex: {
       left: step.name === null ? null : texOfPath(step.name.split('.'), subject),
       formula: texOfExpression(tree, texOptions),

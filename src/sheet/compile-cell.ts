@@ -18,7 +18,7 @@ import type { ValueType } from './model.ts';
 import { Waiting, createScope } from './resolve.ts';
 import { createRestating } from './restate.ts';
 import type { Restating } from './restate.ts';
-import type { EndName } from './scope.ts';
+import type { EndName, Typed } from './scope.ts';
 import { Stop } from './stop.ts';
 
 interface Surroundings {
@@ -30,7 +30,13 @@ interface Surroundings {
   inputs(): readonly string[];
   has(name: string): boolean;
   /** The present value of an expression, computed on the side. */
-  now(expr: Expr, line: Line): { type: ValueType; value: number };
+  now(
+    expr: Expr,
+    line: Line,
+    known: (expr: Expr) => { type: ValueType; value: number } | null,
+  ): { type: ValueType; value: number };
+  /** A slot as it stands. */
+  read(slot: number): number;
   /** The compiled cells, for values in another state. */
   course(): Course;
   /** Whether ends of values can be computed. */
@@ -64,6 +70,8 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     ends.push({ which, of: own, into });
     return into;
   };
+  const kept = new Map<Expr, Typed>();
+  let place: ((handle: Handle) => number) | null = null;
   const restating = createRestating(builder, surroundings.course);
   const note = (message: Message, line: Line): void => {
     later ??= { message, line };
@@ -84,7 +92,11 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
     },
     now(expr, line) {
       restsOnValues = true;
-      return surroundings.now(expr, line);
+      const known = (part: Expr): { type: ValueType; value: number } | null => {
+        const own = kept.get(part);
+        return own && place ? { type: own.type, value: surroundings.read(place(own.handle)) } : null;
+      };
+      return known(expr) ?? surroundings.now(expr, line, known);
     },
     scope: (line) =>
       createScope(builder, line, {
@@ -92,6 +104,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
         names,
         later: (message) => note(message, line),
         restating,
+        keep: (expr, typed) => kept.set(expr, typed),
         checkInput: (path) => checkInput(path, context),
         ...(surroundings.hasEnds ? { end } : {}),
       }),
@@ -125,6 +138,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
   const { segment, slot } = failed
     ? emptySegment()
     : builder.finish(surroundings.allocate(builder.size()), value, readByOthers(offers, draft.extra));
+  place = slot;
   const cellInterface: Interface = {
     kind: tree.entry.type,
     type: draft.type,

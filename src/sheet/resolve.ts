@@ -1,7 +1,7 @@
 // Finding what a path names: a constant, a region, a cell's value, a value that a cell offers.
 
 import { nearestNames } from '../language/index.ts';
-import type { Line, Message, PathExpr, Span } from '../language/index.ts';
+import type { Expr, Line, Message, PathExpr, Span } from '../language/index.ts';
 import { REGIONS } from '../network/index.ts';
 import type { Builder } from '../program/index.ts';
 import { PLAIN, TEMPERATURE_POINT, linearKind } from '../quantity/index.ts';
@@ -12,6 +12,7 @@ import { compileExpression } from './expression.ts';
 import type { Restating, Setting } from './restate.ts';
 import type { Scope, Typed } from './scope.ts';
 import { stop } from './stop.ts';
+import { isOwnState } from './workings.ts';
 
 /** Thrown while compiling when a cell that is used has no settled type; caught where the cell is compiled. */
 export class Waiting extends Error {
@@ -27,6 +28,10 @@ interface Lookup {
   readonly end?: Scope['end'];
   /** For values in another state. */
   readonly restating?: Restating;
+  /** What a part of the expression is known to be already. */
+  readonly known?: (expr: Expr) => Typed | null;
+  /** Told of each part that no other place can compute again: ends, choices, values in another state. */
+  readonly keep?: (expr: Expr, typed: Typed) => void;
   /** Stops where a path names no input. */
   readonly checkInput?: (path: PathExpr) => void;
 }
@@ -61,7 +66,11 @@ export function createScope(builder: Builder, line: Pick<Line, 'text'>, lookup: 
     builder,
     text: line.text,
     compile(expr) {
-      return compileExpression(expr, this as Scope);
+      const known = lookup.known?.(expr);
+      if (known) return known;
+      const compiled = compileExpression(expr, this as Scope);
+      if (isOwnState(expr)) lookup.keep?.(expr, compiled);
+      return compiled;
     },
     later,
     end: lookup.end ?? null,

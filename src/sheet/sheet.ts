@@ -28,6 +28,7 @@ import type { Node } from './node.ts';
 import { waitingText } from './readings.ts';
 import { createScope } from './resolve.ts';
 import { createRestating } from './restate.ts';
+import type { Typed } from './scope.ts';
 import { spreadModel } from './spread-model.ts';
 import { runCell } from './turned.ts';
 import { createView, stateAt, waiting } from './view.ts';
@@ -76,10 +77,18 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
   const treeOf = (name: string): CellTree | null => byName.get(name)?.tree ?? null;
   const look = (name: string): Interface | null => byName.get(name)?.compiled.interface ?? null;
 
-  function now(expr: Expr, line: Line): { type: ValueType; value: number } {
+  function now(
+    expr: Expr,
+    line: Line,
+    known: (part: Expr) => { type: ValueType; value: number } | null = () => null,
+  ): { type: ValueType; value: number } {
     const builder = createBuilder(KERNELS);
     const restating = createRestating(builder, course);
-    const scope = createScope(builder, line, { look, names, later: () => {}, restating });
+    const asConstant = (part: Expr): Typed | null => {
+      const found = known(part);
+      return found && { type: found.type, handle: builder.constant(found.value) };
+    };
+    const scope = createScope(builder, line, { look, names, later: () => {}, restating, known: asConstant });
     const { type, handle } = compileExpression(expr, scope);
     const { segment, slot } = builder.finish(top);
     reserve(top + segment.size);
@@ -97,6 +106,7 @@ export function createSheet(text: string, analyses: Analyses | null = null): She
       has,
       treeOf,
       now,
+      read: (slot) => slots[slot]!,
       course,
       hasEnds: analyses !== null,
       allocate(size) {
@@ -369,6 +379,7 @@ function unsettled(node: Node, tree: CellTree): CompiledCell {
     inputs: nothing,
     has: nothing,
     now: nothing,
+    read: nothing,
     course: nothing,
     hasEnds: false,
     allocate: nothing,

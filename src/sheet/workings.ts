@@ -1,7 +1,7 @@
 // Workings of an expression: the formula as the author wrote it and the values of its operands.
 
-import { pathsOf } from '../language/index.ts';
-import type { Expr, Line } from '../language/index.ts';
+import { partsOf, printExpr } from '../language/index.ts';
+import type { CallExpr, Expr, Line, PathExpr, WithExpr } from '../language/index.ts';
 import type { Unit } from '../quantity/index.ts';
 import type { CellContext } from './draft.ts';
 import type { ValueType, WorkingStep } from './model.ts';
@@ -17,22 +17,46 @@ export function expressionStep(
   as: Unit | null,
   context: CellContext,
 ): WorkingStep {
-  const operands = new Map<string, WorkingStep['operands'][number]>();
-  for (const path of pathsOf(expr)) {
-    const operandName = path.names.map((part) => part.name).join('.');
-    if (operands.has(operandName) || (REGIONS as readonly string[]).includes(operandName)) continue;
-    const now = context.now(path, line);
-    operands.set(operandName, { name: operandName, type: now.type, value: readable(now.type, now.value), as: null });
-  }
+  const operands = operandsOf(expr).map((operand) => {
+    const now = context.now(operand, line);
+    return { name: operandName(operand), type: now.type, value: readable(now.type, now.value), as: null };
+  });
   return {
     name,
     formula: line.text.slice(expr.span.start, expr.span.end),
-    operands: [...operands.values()],
+    operands,
     type,
     value: readable(type, value),
     as,
     sentence: '',
   };
+}
+
+/** What a formula takes as a number from elsewhere. */
+type Operand = PathExpr | CallExpr | WithExpr;
+
+/** Whether a part speaks of other builds or of another state than that in which the formula stands: its value is not that of its operands. */
+export function isOwnState(expr: Expr): expr is CallExpr | WithExpr {
+  return expr.type === 'with' || (expr.type === 'call' && OTHER_BUILDS.has(expr.name.name));
+}
+
+const OTHER_BUILDS: ReadonlySet<string> = new Set(['low', 'high', 'nominal']);
+
+/** The operands of a formula, each once, in the order written. */
+export function operandsOf(expr: Expr): readonly Operand[] {
+  const found = new Map<string, Operand>();
+  const visit = (part: Expr): void => {
+    if (part.type !== 'path' && !isOwnState(part)) return partsOf(part).forEach(visit);
+    const name = operandName(part);
+    if (!(REGIONS as readonly string[]).includes(name) && !found.has(name)) found.set(name, part);
+  };
+  visit(expr);
+  return [...found.values()];
+}
+
+/** How a formula's operand is known: a path as its names, anything else as it is printed. */
+export function operandName(operand: Operand): string {
+  return operand.type === 'path' ? operand.names.map(({ name }) => name).join('.') : printExpr(operand);
 }
 
 /** A slot's number as it is read: the word of a region, true or false of a condition. */

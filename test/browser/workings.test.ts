@@ -118,3 +118,25 @@ test('the verdict leads to the first failing check and is said once it has chang
   await verdict.click();
   await expect.poll(() => focusedRow(page)).toBe('cell:current name');
 });
+
+test('the answer of an inverse cell goes into its input by one edit that can be undone', async ({ page, address }) => {
+  const pane = await openSheet(page, address);
+  const entry = cell(page, 'cell:R_S2', 'entry');
+  await retype(page, 'R_Sbuy', 'R_S2 such that A1.I_D = 1 mA over 100 ohm .. 10 kohm');
+  await cell(page, 'cell:R_Sbuy', 'name').click();
+  const asShown = pane.getByRole('button', { name: /^put [\d.]+ k?Ω into R_?S2$/ });
+  const offered = (await asShown.textContent())!;
+  const value = /put ([\d.]+ k?)Ω/.exec(offered)![1]!;
+  // Every one of 10 000 builds was asked, too.
+  await pane.getByText(/R_?Sbuy has just one answer in (all|[\d.]+ %) of 10 000 builds/).waitFor({ timeout: 30_000 });
+  await asShown.click();
+  await expect.poll(() => entry.textContent()).toBe(`${value}ohm ± 1 %`);
+  // It answers as before: what its input is now has no say in it.
+  expect(await asShown.textContent()).toBe(offered);
+  await pane.getByRole('button', { name: /^put the nearest E24 value, [\d.]+ k?Ω into R_?S2$/ }).click();
+  await expect.poll(() => entry.textContent()).not.toBe(`${value}ohm ± 1 %`);
+  await page.keyboard.press('Control+z');
+  await expect.poll(() => entry.textContent()).toBe(`${value}ohm ± 1 %`);
+  await page.keyboard.press('Control+z');
+  await expect.poll(() => entry.textContent()).toBe('1.2 kohm ± 1 %');
+});

@@ -120,10 +120,14 @@ R_max = R_1 such that low(V_x) = 1 V over 100 ohm .. 22 kohm
   });
 
   it('shows both sides of its equation with the answer in place', () => {
-    const sheet = createSheet(`${follower(6, 1200)}x = R_S such that A1.I_D = 0.7 mA over 100 ohm .. 100 kohm\n`);
+    const sheet = createSheet(
+      `${follower(6, 1200)}I = 0.7 mA\nx = R_S such that A1.I_D = I over 100 ohm .. 100 kohm\ny = R_S such that A1.I_D = 0.7 mA over 100 ohm .. 100 kohm\n`,
+    );
     const [target, value] = sheet.workings('x');
     expect(target).toMatchObject({ formula: 'A1.I_D', operands: [{ name: 'A1.I_D' }] });
     expect(off(target!.value as number, 0.0007)).toBeLessThan(1e-12);
-    expect(value).toMatchObject({ formula: '0.7 mA', value: 0.0007 });
+    expect(value).toMatchObject({ formula: 'I', value: 0.0007 });
+    // A number that was typed needs no line of its own.
+    expect(sheet.workings('y')).toHaveLength(1);
   });
 });

@@ -3,6 +3,7 @@ import path from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { siUnitText } from '../../src/quantity/index.ts';
 import { stepText, workingsOf } from '../../src/record/index.ts';
+import { ANALYSES } from '../../src/spread/index.ts';
 import { createSheet, evaluateExpression } from '../../src/sheet/index.ts';
 import type { Sheet, WorkingStep } from '../../src/sheet/index.ts';
 import { createDraw } from '../support/counter-random.ts';
@@ -63,7 +64,7 @@ const EXAMPLES = readdirSync(folder).map((file): [string, string] => [
 
 describe('every step of the workings gives its value from its formula and its operands', () => {
   it.each(EXAMPLES)('in the example %s', (_, text) => {
-    const sheet = createSheet(text);
+    const sheet = createSheet(text, ANALYSES);
     expect(
       stepsOf(sheet)
         .map(wrong)

@@ -63,7 +63,7 @@ export function compileInverseCell(context: CellContext): Draft {
     type: input.type,
     value: chosen,
     verify: (read) => (Number.isNaN(read(chosen)) ? verify(read) : null),
-    workings: () => (atAnswer ? answerSteps(subject, atAnswer) : []),
+    workings: () => (found && atAnswer ? answerSteps(subject, found, atAnswer) : []),
     asks: {
       cell: entry.input.names[0]!.name,
       input: input.handle,

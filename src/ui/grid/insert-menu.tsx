@@ -17,6 +17,7 @@ const MARKS: Readonly<Record<InsertionChoice['group'], Mark>> = {
   stage: 'stage',
   point: 'part',
   check: 'holds',
+  inverse: 'inverse',
   figure: 'figure',
 };
 

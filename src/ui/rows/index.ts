@@ -7,7 +7,7 @@ export type { EditPlace } from './row-edits.ts';
 export { editLabel, editSplices, editText } from './row-edits.ts';
 export type { SheetRows } from './sheet-rows.ts';
 export { sheetRows } from './sheet-rows.ts';
-export { nextValue, setTurned, snapped, turnedNumber } from './turning.ts';
+export { nearestBuyable, nextValue, setTurned, shownDigits, snapped, turnedNumber } from './turning.ts';
 export { complete } from './completion.ts';
 export type { Completion } from './completion.ts';
 export { INSERTIONS, insertionLines } from './insertions.ts';

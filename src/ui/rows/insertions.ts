@@ -1,12 +1,14 @@
 // What Insert writes: ordinary lines, with names that are free and values that work with what the sheet has.
 
+import { CURRENT, plainText, RESISTANCE } from '../../quantity/index.ts';
+import { createSheet } from '../../sheet/index.ts';
 import type { SheetView } from '../../sheet/index.ts';
 import { stageLines } from './stage-shapes.ts';
 import type { StageShape } from './stage-shapes.ts';
-import { firstStage, freeName, partOf } from './sheet-stock.ts';
+import { firstStage, freeName, partOf, sourceResistor } from './sheet-stock.ts';
 
 type Insertion =
-  | { readonly type: 'quantity' | 'point' | 'check' | 'figure' }
+  | { readonly type: 'quantity' | 'point' | 'check' | 'inverse' | 'figure' }
   | { readonly type: 'part'; readonly kind: PartKind }
   | { readonly type: 'stage'; readonly shape: StageShape };
 
@@ -16,7 +18,7 @@ export interface InsertionChoice {
   readonly insertion: Insertion;
   /** The first of its group in the menu. */
   readonly first: boolean;
-  readonly group: 'quantity' | 'part' | 'stage' | 'point' | 'check' | 'figure';
+  readonly group: 'quantity' | 'part' | 'stage' | 'point' | 'check' | 'inverse' | 'figure';
   readonly title: string;
   readonly words: string;
 }
@@ -39,6 +41,7 @@ const CHOICES = [
   choice('stage', { type: 'stage', shape: 'switch' }, 'switch', 'fully on, with its load'),
   choice('point', { type: 'point' }, 'point', 'one specimen at a given current and voltage'),
   choice('check', { type: 'check' }, 'check', 'a value and the limit it must keep'),
+  choice('inverse', { type: 'inverse' }, 'inverse', 'what a resistor would have to be for a wanted current'),
   choice('figure', { type: 'figure' }, 'figure', 'curves of a stage with its operating point'),
 ];
 
@@ -59,6 +62,8 @@ export function insertionLines(insertion: Insertion, sheet: SheetView): string[]
       return pointLines(sheet);
     case 'check':
       return checkLines(sheet);
+    case 'inverse':
+      return inverseLines(sheet);
     case 'figure':
       return withStage(sheet, (stage) => [`${freeName(sheet, 'F')} = plot transfer of ${stage}`]);
     case 'stage':
@@ -102,6 +107,24 @@ function checkLines(sheet: SheetView): string[] {
     ? [`${freeName(sheet, 'check_')} = check ${quantity.name} >= ${quantity.name} / 2`]
     : [`${name} = check 1 >= 0`];
 }
+
+/** What the resistor in a source lead would have to be for the current that flows now, ready for another to be typed. */
+function inverseLines(sheet: SheetView): string[] {
+  const biased = sourceResistor(sheet);
+  if (biased === null) {
+    const written = insertionLines({ type: 'stage', shape: 'current sink' }, sheet);
+    return [...written, ...inverseLines(createSheet(`${sheet.tree.text}\n${written.join('\n')}\n`))];
+  }
+  const { stage, resistor, ohms, current } = biased;
+  const [low, high] = [ohms / INVERSE_RANGE, ohms * INVERSE_RANGE].map((end) =>
+    plainText(Number(end.toPrecision(2)), RESISTANCE),
+  );
+  const wanted = plainText(Number(current.toPrecision(2)), CURRENT);
+  return [`${freeName(sheet, 'R_x')} = ${resistor} such that ${stage}.I_D = ${wanted} over ${low} .. ${high}`];
+}
+
+/** How far a resistor is looked for, as a factor to either side. */
+const INVERSE_RANGE = 10;
 
 function withStage(sheet: SheetView, lines: (stage: string) => string[]): string[] {
   const stage = firstStage(sheet);

@@ -1,6 +1,6 @@
 // What a sheet has to build on: free names, its parts, a supply.
 
-import { dimensionName } from '../../quantity/index.ts';
+import { dimensionName, RESISTANCE, sameKind } from '../../quantity/index.ts';
 import type { CellReading, SheetView } from '../../sheet/index.ts';
 
 /** A part with the constants of its square law, in the frame of an n-channel FET. */
@@ -47,6 +47,25 @@ export function partOf(sheet: SheetView): StockPart | null {
 export function firstStage(sheet: SheetView): string | null {
   const stage = sheet.cells().find((cell) => cell.kind === 'stage' && cell.fault === null && cell.waitsFor === null);
   return stage ? `${stage.name}.margin` : null;
+}
+
+/** The first resistor of its own name between the source of a stage's FET and anything else, and the current it carries; null where there is none. */
+export function sourceResistor(
+  sheet: SheetView,
+): { readonly stage: string; readonly resistor: string; readonly ohms: number; readonly current: number } | null {
+  for (const stage of sheet.cells()) {
+    const current = stage.kind === 'stage' && stage.fault === null ? numberOf(stage, 'I_D') : null;
+    const line = stage.tree.fields.find(({ label }) => label.length === 1 && label[0]!.name === 'source');
+    if (current === null || !(current > 0) || line?.body.type !== 'legs') continue;
+    for (const { element } of line.body.legs) {
+      const cell = element?.type === 'path' && element.names.length === 1 ? sheet.cell(element.names[0]!.name) : null;
+      const { reading, isInput } = cell ?? {};
+      if (!isInput || !reading || typeof reading.type === 'string' || typeof reading.value !== 'number') continue;
+      if (!sameKind(reading.type, RESISTANCE)) continue;
+      return { stage: stage.name, resistor: cell!.name, ohms: reading.value, current };
+    }
+  }
+  return null;
 }
 
 /** A supply: an input in volts of a few volts at least, those called V_DD and the like first; null where there is none. */

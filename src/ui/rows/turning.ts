@@ -68,6 +68,19 @@ export function snapped({ literal }: Turned, value: number): number {
   return inUnit(literal).toSI(Math.round(amount / step) * step);
 }
 
+/** A value to three digits in the unit of the number it would replace, as it is shown. */
+export function shownDigits({ literal }: Turned, value: number): number {
+  const { unit } = literal;
+  const amount = unit ? fromSI(value, unit) : value;
+  return inUnit(literal).toSI(Number(amount.toPrecision(STEPPED_DIGIT)));
+}
+
+/** The nearest value of the series that stepping goes along; null where the number is no resistance, capacitance or inductance. */
+export function nearestBuyable({ literal }: Turned, value: number): { series: SeriesName; value: number } | null {
+  if (!isPreferred(literal) || !(value > 0)) return null;
+  return { series: SERIES, value: preferredValue(SERIES, value, 'nearest') };
+}
+
 /** The edit that puts another value in the number's place. */
 export function setTurned({ line, literal }: Turned, value: number): Splice[] {
   const { start, end } = literal.span;

@@ -1,6 +1,7 @@
 // The worked sheets that come with the program; the first opens at the first visit.
 
 import crevasse from '../../../public/examples/crevasse-listener.txt?raw';
+import weir from '../../../public/examples/weir-gauge.txt?raw';
 
 interface Example {
   readonly title: string;
@@ -8,7 +9,7 @@ interface Example {
 }
 
 /** In the order of the shelf. */
-export const EXAMPLES: readonly Example[] = [crevasse].map((text) => ({
+export const EXAMPLES: readonly Example[] = [crevasse, weir].map((text) => ({
   text,
   title: /^# (.*)$/m.exec(text)?.[1] ?? 'Example',
 }));

@@ -13,6 +13,11 @@ const LINES: readonly (readonly [line: string, what: string])[] = [
   ['  source: R_S to 0 V, 47 uF to 0 V', 'element to place, separated by commas'],
   ['P1 = point of Q1', 'a FET held at V_GS or I_D and V_DS'],
   ['headroom = check A1.margin >= 1 V', 'a requirement'],
+  [
+    'R_S0 = R_S such that A1.I_D = 1 mA over 100 ohm .. 10 kohm',
+    'what an input would have to be; each at the end: in every build',
+  ],
+  ['A_off = A1.A_v with V_C = -8 V', 'a value in another state of the same build'],
   ['R_buy = E24(R_S0)', 'the nearest preferred value'],
   ['F1 = plot A1.I_D against R_S over 100 ohm .. 10 kohm log', 'a curve'],
 ];

@@ -1,6 +1,6 @@
 // What the workings say of the spread of a value or check: plain data made from the report.
 
-import { countText, failingText, shareText, whereText, yieldText } from '../../record/index.ts';
+import { answeredSentence, countText, failingText, shareText, whereText, yieldText } from '../../record/index.ts';
 import type { JudgedSpread } from '../../record/index.ts';
 import { formatRow, formatValue } from '../../quantity/index.ts';
 import type { Unit, ValueKind } from '../../quantity/index.ts';
@@ -39,7 +39,8 @@ export function valueFacts(
     where: whereText(spread, at.where, 12),
     isPlace: at.where.length > 0,
   });
-  const builds: string[] = [];
+  const answered = answeredSentence(path, spread);
+  const builds = answered === null ? [] : [answered];
   const { distribution } = found;
   if (distribution) {
     const text = (x: number): string => formatValue(x, kind, { unit: as }).text;

@@ -8,6 +8,7 @@ import type { CellReading } from '../../sheet/index.ts';
 import { createRested } from '../pace/index.ts';
 import type { Pace } from '../pace/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
+import { AnswerSection } from './answer-section.tsx';
 import { CellLinks } from './cell-links.tsx';
 import { kindWords, valueWords } from './cell-words.ts';
 import { EndsTable } from './ends-table.tsx';
@@ -134,6 +135,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
         <AllSteps steps={steps().all} subject={name()} />
       </Show>
 
+      <AnswerSection desk={props.desk} cell={props.cell} />
       <MendSection desk={props.desk} cell={props.cell} />
       <SpreadSection desk={props.desk} cell={props.cell} value={offered()} />
 
