@@ -294,10 +294,22 @@ export interface SpreadModel {
   readonly stages: readonly { readonly stage: string; readonly part: string; readonly current: number }[];
 }
 
+interface ValueEnds {
+  readonly low: number;
+  readonly high: number;
+}
+
 /** What a sheet asks of the analyses that stand above it. */
 export interface Analyses {
-  /** The least and the largest of the values in these slots over the declared set; NaN where an end is not known. */
-  ends(model: SpreadModel, wanted: readonly number[]): readonly { readonly low: number; readonly high: number }[];
+  /** The least and the largest of the values in these slots over the declared set, as far as those ends are asked for; NaN where an end is not known. */
+  ends(model: SpreadModel, wanted: readonly number[], ends: readonly ('low' | 'high')[]): readonly ValueEnds[];
+  /** The same for models that differ only in the input of one slot and in what follows from it; none of them may rest on other ends or on answers. */
+  endsOver(
+    model: SpreadModel,
+    turned: number,
+    wanted: readonly number[],
+    ends: readonly ('low' | 'high')[],
+  ): (at: SpreadModel) => readonly ValueEnds[];
 }
 
 /** What is read of a sheet. */

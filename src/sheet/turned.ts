@@ -11,7 +11,7 @@ import { wayBetween } from './course.ts';
 import type { Course } from './course.ts';
 import { KERNELS } from './kernels.ts';
 import type { Node } from './node.ts';
-import { putEnds } from './put-ends.ts';
+import { createEndPutter, putEnds } from './put-ends.ts';
 
 /** Inverse cells may stand in each other so deep. */
 const DEEPEST = 3;
@@ -40,10 +40,15 @@ export function answerAgain(node: Node, slots: Float64Array, course: Course, ker
 }
 
 /** Runs a cell short of its own answer. */
-function runToAsking(node: Node, slots: Float64Array, course: Course): void {
+function runToAsking(
+  node: Node,
+  slots: Float64Array,
+  course: Course,
+  put = (on: Float64Array): void => putEnds(node, on, course),
+): void {
   runCode(node, slots);
   if (node.compiled.ends.length === 0) return;
-  putEnds(node, slots, course);
+  put(slots);
   runCode(node, slots);
 }
 
@@ -90,12 +95,13 @@ interface Turned {
 export function turn(input: TurnedInput, goal: Node, slots: Float64Array, course: Course): Turned {
   const way = wayBetween([input.node], goal, course);
   const own = slots.slice();
+  const put = goal.compiled.ends.length === 0 ? undefined : createEndPutter(goal, input.slot, course);
   return {
     slots: own,
     at(x) {
       own[input.slot] = x;
       for (const node of way) runCell(node, own, course);
-      runToAsking(goal, own, course);
+      runToAsking(goal, own, course, put);
       return way.every((node) => isSound(node, own));
     },
   };

@@ -1,11 +1,16 @@
 // The spread of a whole sheet at once, for those who can wait for it.
 
 import type { Analyses, SpreadModel } from '../sheet/index.ts';
+import { reachOf, reaches } from '../program/index.ts';
 import { createAnalysis } from './analysis.ts';
+import { createTurnedBatch } from './batch.ts';
 import { createBuilds } from './builds.ts';
+import { declaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
+import type { ExtremeSearch } from './extremes.ts';
 import { openEnds } from './open-ends.ts';
 import { portionsOf } from './portion.ts';
+import { choicesOf } from './state-columns.ts';
 import type { CheckSpread, SpreadReport, ValueSpread } from './report.ts';
 
 /** What is known of the spread of a sheet, with the model it speaks of. */
@@ -40,16 +45,35 @@ export function analyse(model: SpreadModel, { samples, seed }: { samples: number
 
 /** What low(x) and high(x) of a sheet are computed by. */
 export const ANALYSES: Analyses = {
-  ends(model, wanted) {
-    const search = searchExtremes(model, wanted);
-    const open = openEnds(model, wanted, search);
-    return wanted.map((_, k) => {
-      const { low, high, unsolved } = search.of(k);
-      const isKnown = unsolved === null && !search.isEmpty;
-      return {
-        low: isKnown && open[k]!.low.length === 0 ? low.value : NaN,
-        high: isKnown && open[k]!.high.length === 0 ? high.value : NaN,
-      };
-    });
+  ends: (model, wanted, ends) => endsOf(model, wanted, searchExtremes(model, wanted, { ends })),
+  endsOver(model, turned, wanted, ends) {
+    if (!standsAlone(turned, model)) return (at) => endsOf(at, wanted, searchExtremes(at, wanted, { ends }));
+    const set = declaredSet(model);
+    const batch = createTurnedBatch(model, turned, wanted);
+    return (at) => {
+      batch.take(at);
+      return endsOf(at, wanted, searchExtremes(at, wanted, { set, batch, ends }));
+    };
   },
 };
+
+function endsOf(model: SpreadModel, wanted: readonly number[], search: ExtremeSearch): ReturnType<Analyses['ends']> {
+  const open = openEnds(model, wanted, search);
+  return wanted.map((_, k) => {
+    const { low, high, unsolved } = search.of(k);
+    const isKnown = unsolved === null && !search.isEmpty;
+    return {
+      low: isKnown && open[k]!.low.length === 0 ? low.value : NaN,
+      high: isKnown && open[k]!.high.length === 0 ? high.value : NaN,
+    };
+  });
+}
+
+/** Whether neither the declared set nor anything chosen depends on an input. */
+function standsAlone(input: number, model: SpreadModel): boolean {
+  const { program, drawn, cuts, pairs } = model;
+  const reach = reachOf(program, [input], new Set());
+  const isTied = pairs.some(({ threshold, gain }) => [threshold, gain].some((draw) => drawn[draw]!.slot === input));
+  const inTheWay = [...choicesOf(model), ...cuts.map(({ slot }) => slot)];
+  return !isTied && !inTheWay.some((slot) => reaches(reach, 0, slot));
+}

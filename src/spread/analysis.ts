@@ -49,7 +49,7 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     return values.length + checks.length + before;
   };
   const set = declaredSet(model);
-  const search = searchExtremes(model, wanted, effort, set);
+  const search = searchExtremes(model, wanted, { effort, set });
   const reach = reachOf(
     model.program,
     drawn.map(({ slot }) => slot),

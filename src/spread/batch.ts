@@ -12,19 +12,34 @@ export interface Batch {
   column(k: number): Float64Array;
 }
 
+/** A batch for a sheet of which one input takes other values. */
+export interface TurnedBatch extends Batch {
+  /** The same sheet with that input at another value; what it rests on stands in the slots as before. */
+  take(model: SpreadModel): void;
+}
+
 /** Prepares the evaluation of the values in these slots. */
 export function createBatch(model: SpreadModel, wanted: readonly number[]): Batch {
-  const { drawn } = model;
-  const columns = createStateColumns(
-    model,
-    drawn.map(({ slot }) => slot),
-    wanted,
-  );
+  return batchOver(model, [], wanted);
+}
+
+/** The same, for sheets that differ in the input of this slot, in what rests on it, and in the limits of their draws. */
+export function createTurnedBatch(model: SpreadModel, turned: number, wanted: readonly number[]): TurnedBatch {
+  return batchOver(model, model.drawn.some(({ slot }) => slot === turned) ? [] : [turned], wanted);
+}
+
+function batchOver(model: SpreadModel, turned: readonly number[], wanted: readonly number[]): TurnedBatch {
+  let { drawn, slots } = model;
+  const columns = createStateColumns(model, [...drawn.map(({ slot }) => slot), ...turned], wanted);
   return {
+    take(other) {
+      ({ drawn, slots } = other);
+    },
     run(positions, visit) {
       for (let from = 0; from < positions.length; from += columns.width) {
         const count = Math.min(columns.width, positions.length - from);
         fillColumns(drawn, positions, from, count, columns.input);
+        turned.forEach((slot, n) => columns.input(drawn.length + n).fill(slots[slot]!, 0, count));
         columns.run(count);
         visit(from, count);
       }

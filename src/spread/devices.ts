@@ -29,7 +29,7 @@ export function stageDevices(model: SpreadModel, effort: SearchEffort, set: Decl
   return model.stages.flatMap(({ stage, part, current }) => {
     const isOfPart = (k: number): boolean => model.drawn[k]!.cell === part;
     if (!model.drawn.some((_, k) => isOfPart(k))) return [];
-    const search = searchExtremes(model, [current], effort, set, isOfPart);
+    const search = searchExtremes(model, [current], { effort, set, moving: isOfPart });
     const { low, high, unsolved } = search.of(0);
     if (search.isEmpty || unsolved !== null || low.value === high.value) return [];
     const wanted = model.values.filter(({ cell, type }) => cell === stage && typeof type !== 'string');

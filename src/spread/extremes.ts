@@ -9,6 +9,7 @@
 import { reachOf, reaches } from '../program/index.ts';
 import type { SpreadModel } from '../sheet/index.ts';
 import { createBatch } from './batch.ts';
+import type { Batch } from './batch.ts';
 import { choicesOf } from './state-columns.ts';
 import { declaredSet } from './declared-set.ts';
 import type { DeclaredSet, Plane } from './declared-set.ts';
@@ -52,16 +53,28 @@ const NARROWINGS = 14;
 /** How hard a search tries: `quick` is one round of moves around the nominal, for an answer within a frame. */
 export type SearchEffort = 'quick' | 'full';
 
+/** What a search is given beside the model and what is wanted of it. */
+interface SearchOptions {
+  readonly effort: SearchEffort;
+  readonly set: DeclaredSet;
+  /** Whether a draw may leave its nominal. */
+  readonly moving: (draw: number) => boolean;
+  /** Computes what is wanted. */
+  readonly batch: Batch;
+  /** Which ends are looked for; the others are left wherever that search comes by. */
+  readonly ends: readonly ('low' | 'high')[];
+}
+
 /** Searches for the extremes of the values in these slots. */
 export function searchExtremes(
   model: SpreadModel,
   wanted: readonly number[],
-  effort: SearchEffort = 'full',
-  set: DeclaredSet = declaredSet(model),
-  moving: (k: number) => boolean = () => true,
+  options: Partial<SearchOptions> = {},
 ): ExtremeSearch {
+  const { effort = 'full', moving = () => true, ends: sides = ['low', 'high'] } = options;
+  const set = options.set ?? declaredSet(model);
+  const batch = options.batch ?? createBatch(model, wanted);
   const { drawn, program } = model;
-  const batch = createBatch(model, wanted);
   const reach = reachOf(
     program,
     drawn.map(({ slot }) => slot),
@@ -80,8 +93,9 @@ export function searchExtremes(
   const isBetter = (e: number, value: number): boolean => (e % 2 === 0 ? value < best[e]! : value > best[e]!);
 
   /** Evaluates positions of the set; every value that is better somewhere moves there. */
-  function visit(positions: readonly Position[]): void {
+  function visit(positions: readonly Position[], look: (from: number, count: number) => void = () => {}): void {
     batch.run(positions, (from, count) => {
+      look(from, count);
       for (let k = 0; k < wanted.length; k++) {
         const values = batch.column(k);
         for (let i = 0; i < count; i++) {
@@ -104,7 +118,7 @@ export function searchExtremes(
   climb(allEnds());
 
   function allEnds(): number[] {
-    return Array.from(best.keys());
+    return [...best.keys()].filter((e) => sides.includes(e % 2 === 0 ? 'low' : 'high'));
   }
 
   /** The nominal position where it belongs to the set, else the place on a border that is nearest to it. */
@@ -193,10 +207,9 @@ export function searchExtremes(
     );
     const values = ends.map(() => new Float64Array(reachable.length));
     const before = ends.map((e) => best[e]!);
-    batch.run(reachable, (from, count) => {
+    visit(reachable, (from, count) => {
       ends.forEach((e, n) => values[n]!.set(batch.column(e >> 1).subarray(0, count), from));
     });
-    visit(reachable);
     ends.forEach((e, n) => {
       const groups = new Set(group.filter((_, i) => values[n]![i] !== before[n]));
       effective.set(e, new Set([...groups].map((g) => wantedDraws[g] ?? -1)));

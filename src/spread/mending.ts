@@ -7,7 +7,6 @@ import { exp, ln } from '../numeric/index.ts';
 import { reachOf, reaches, runAll } from '../program/index.ts';
 import { KERNELS } from '../sheet/index.ts';
 import type { Drawn, SpreadModel } from '../sheet/index.ts';
-import { declaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
 import { answerAnew } from './state-columns.ts';
 
@@ -94,7 +93,7 @@ export function reservesWith(model: SpreadModel, name: string, value: number): r
   const input = tunerOf(model, name);
   const turned = turnedModel(model, input.slot, value);
   const reserves = turned.checks.flatMap(({ reserve }) => (reserve === null ? [] : [reserve]));
-  const search = searchExtremes(turned, [...turned.checks.map(({ slot }) => slot), ...reserves], 'full');
+  const search = searchExtremes(turned, [...turned.checks.map(({ slot }) => slot), ...reserves]);
   let next = turned.checks.length;
   return turned.checks.map(({ name: check, reserve }, c) => {
     const { low, unsolved } = search.of(c);
@@ -113,7 +112,7 @@ function standingAt(model: SpreadModel, slot: number, value: number): Standing {
   const turned = turnedModel(model, slot, value);
   const reserves = turned.checks.flatMap(({ reserve }) => (reserve === null ? [] : [reserve]));
   const wanted = [...turned.checks.map((check) => check.slot), ...reserves];
-  const search = searchExtremes(turned, wanted, 'quick', declaredSet(turned));
+  const search = searchExtremes(turned, wanted, { effort: 'quick' });
   return {
     holds: turned.checks.map((_, c) => {
       const { low, unsolved } = search.of(c);

@@ -1,7 +1,6 @@
 // From which tracking on a check that fails would hold at every extreme.
 
 import type { SpreadModel, Tie } from '../sheet/index.ts';
-import { declaredSet } from './declared-set.ts';
 import { searchExtremes } from './extremes.ts';
 
 /** Halvings of 0..1: the answer is good to a hundredth. */
@@ -39,7 +38,7 @@ function tiedBy(model: SpreadModel, pair: Tie, tracking: number): SpreadModel {
 }
 
 function holdsWith(model: SpreadModel, slot: number, reserve: number | null): boolean {
-  const search = searchExtremes(model, reserve === null ? [slot] : [slot, reserve], 'full', declaredSet(model));
+  const search = searchExtremes(model, reserve === null ? [slot] : [slot, reserve]);
   const { low, unsolved } = search.of(0);
   return !search.isEmpty && unsolved === null && low.value === 1;
 }

@@ -11,6 +11,7 @@ import { applySplices, parseSheet } from '../../language/index.ts';
 import type { SheetTree, Splice } from '../../language/index.ts';
 import { createSheet } from '../../sheet/index.ts';
 import type { CellReading, Sheet } from '../../sheet/index.ts';
+import { ANALYSES } from '../../spread/index.ts';
 import { EMPTY_HISTORY, edit, redo, splicesBetween, undo } from '../../storage/index.ts';
 import type { Edited, History } from '../../storage/index.ts';
 
@@ -44,7 +45,7 @@ export interface SheetDocument {
 
 /** Creates the document around a first text. */
 export function createSheetDocument(initial: string, initialHistory: History = EMPTY_HISTORY): SheetDocument {
-  const sheet = createSheet(initial);
+  const sheet = createSheet(initial, ANALYSES);
   const [text, setText] = createSignal(initial);
   const [version, setVersion] = createSignal(1);
   const [held, setHeld] = createSignal(false);
