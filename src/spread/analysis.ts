@@ -55,10 +55,12 @@ export function createAnalysis(model: SpreadModel, seed: number, effort: SearchE
     drawn.map(({ slot }) => slot),
     new Set(choicesOf(model)),
   );
+  // An answer does not depend on what its own input happens to be.
+  const turnedBy = new Map(model.asked.map(({ answer, input }) => [answer, input]));
   const counting =
     (w: number) =>
     (k: number): boolean =>
-      reaches(reach, k, wanted[w]!);
+      reaches(reach, k, wanted[w]!) && drawn[k]!.slot !== turnedBy.get(wanted[w]!);
   let open = openEnds(model, wanted, search);
   const holdsNominal = set.membership([new Float64Array(drawn.length)])[0] === 1;
   const parts = [...new Set(model.cuts.map(({ cell }) => cell))];

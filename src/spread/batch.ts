@@ -13,7 +13,7 @@ export interface Batch {
 }
 
 /** A batch for a sheet of which one input takes other values. */
-export interface TurnedBatch extends Batch {
+interface TurnedBatch extends Batch {
   /** The same sheet with that input at another value; what it rests on stands in the slots as before. */
   take(model: SpreadModel): void;
 }

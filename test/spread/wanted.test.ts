@@ -39,6 +39,17 @@ describe('an inverse cell', () => {
     for (const path of ['buy', 'y']) expect(spread.value(path)).toMatchObject({ moves: false, answered: null });
   });
 
+  it('does not depend on what its own input is in a build', () => {
+    const spread = spreadOf(
+      `${FOLLOWER.replace(/^R_S = .*$/m, 'R_S = 2 kohm ± 20 %')}x = R_S such that A1.I_D = 0.7 mA over 100 ohm .. 100 kohm\n`,
+    );
+    const { low, high } = spread.value('x')!;
+    expect(off(low.value, wanted(0.0007, 3))).toBeLessThan(1e-12);
+    for (const { where } of [low, high]) {
+      expect(where.map(({ draw }) => spread.model.drawn[draw]!.name)).toEqual(['Q1.V_TO']);
+    }
+  });
+
   it('says in what share of builds there is no answer', () => {
     // R_S for 0.7 mA lies above 5.3 kohm where V_TO is below a certain threshold.
     const border = 6 - 0.0007 * 5300 - Math.sqrt(0.0007 / K);
