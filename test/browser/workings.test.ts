@@ -110,11 +110,14 @@ test('at a narrow page formulas break or scroll within their own line', async ({
 test('the verdict leads to the first failing check and is said once it has changed', async ({ page, address }) => {
   await openSheet(page, address);
   const status = page.getByRole('group', { name: 'Verdict' }).getByRole('status');
-  await expect.poll(() => status.textContent()).toBe('All 9 checks hold at the nominal values.');
+  // What is known first, or already what holds at the extremes.
+  await expect
+    .poll(() => status.textContent())
+    .toMatch(/^(All 9 checks hold at the nominal values\.|8 of 9 checks hold at every extreme\.)/);
   await retype(page, 'R_S2', '9.9 kohm ± 1 %');
-  const verdict = page.getByRole('button', { name: /^8 of 9 checks hold at the nominal values\. current fails, / });
+  const verdict = page.getByRole('button', { name: /^[78] of 9 checks hold [^.]+\. current fails, / });
   await verdict.waitFor();
-  await expect.poll(() => status.textContent()).toMatch(/^8 of 9 checks hold/);
+  await expect.poll(() => status.textContent()).toMatch(/^[78] of 9 checks hold/);
   await verdict.click();
   await expect.poll(() => focusedRow(page)).toBe('cell:current name');
 });
