@@ -15,35 +15,59 @@ const SILENT: ReadonlySet<Curve['role']> = new Set(['edge', 'limit']);
 const TABLE_DIGITS = 3;
 
 /** `V_GS −1.20 V: nominal 1.30 mA, bias line 1.00 mA`; families and curves that have no value there are left out. */
-export function readOut({ x, y, curves }: Chart, at: number): string {
+export function readOut({ x, y, curves, areas }: Chart, at: number): string {
   const lone = spoken(curves).filter(({ role }) => role !== 'family');
   const values = lone.flatMap((curve) => {
     const value = heightAt(curve, at);
     if (value === null) return [];
     const name = nameOf(curve, y);
-    return [`${name} ${formatValue(value, y.kind, { prefix: y.prefix }).text}`];
+    const text = (each: number): string => formatValue(each, y.kind, { prefix: y.prefix }).text;
+    const [low, high] = reachAt(areas, name, at);
+    return [
+      low === null || high === null
+        ? `${name} ${text(value)}`
+        : `${name} ${text(value)} (${text(low)} to ${text(high)})`,
+    ];
   });
   const place = `${x.symbol} ${formatValue(at, x.kind, { prefix: x.prefix }).text}`;
   return values.length === 0 ? `${place}: no curve here` : `${place}: ${values.join(', ')}`;
 }
 
 /** The curves at the ticks of the x axis and at its marked points. */
-export function chartTable({ x, y, curves, marks }: Chart): ChartTable {
+export function chartTable({ x, y, curves, marks, areas }: Chart): ChartTable {
   const shown = spoken(curves);
+  const reaching = [...new Set(areas.flatMap(({ said }) => said ?? []))];
   const places = [...new Set([...x.ticks, ...marks.map((mark) => mark.x)])].toSorted((a, b) => a - b);
   const heading = (symbol: string, { unit }: Axis): string => (unit === '' ? symbol : `${symbol} (${unit})`);
   const number = (value: number, { kind, prefix }: Axis): string =>
     formatValue(value, kind, { prefix, digits: TABLE_DIGITS, zeros: 'drop' }).number;
   return {
-    columns: [heading(x.symbol, x), ...shown.map((curve) => heading(nameOf(curve, y), y))],
+    columns: [
+      heading(x.symbol, x),
+      ...shown.map((curve) => heading(nameOf(curve, y), y)),
+      ...reaching.flatMap((said) => [heading(`low ${said}`, y), heading(`high ${said}`, y)]),
+    ],
     rows: places.map((place) => [
       number(place, x),
       ...shown.map((curve) => {
         const value = heightAt(curve, place);
         return value === null ? '–' : number(value, y);
       }),
+      ...reaching.flatMap((said) =>
+        reachAt(areas, said, place).map((value) => (value === null ? '–' : number(value, y))),
+      ),
     ]),
   };
+}
+
+/** The ends of what a value reaches at x; null where that is not known. */
+function reachAt(areas: Chart['areas'], said: string, at: number): [low: number | null, high: number | null] {
+  for (const area of areas) {
+    if (area.said !== said) continue;
+    const [low, high] = [area.low, area.high].map((y) => heightAt({ x: area.x, y }, at));
+    if (low !== null) return [low!, high!];
+  }
+  return [null, null];
 }
 
 /** Height of a curve at x, by straight lines between its points; null beyond its ends and in its gaps. */

@@ -26,6 +26,8 @@ export interface Area {
   readonly x: Float64Array;
   readonly low: Float64Array;
   readonly high: Float64Array;
+  /** What it is the reach of, where it is read: `A1.I_D`. */
+  readonly said?: string;
 }
 
 /** A point that says something: Q as a disc, the low device's point as ▽, the high one's as △. */

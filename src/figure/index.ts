@@ -34,6 +34,8 @@ export { typeset } from './labels.ts';
 export { greekLetter, symbolName } from './symbol-name.ts';
 export { deviceStages, planesOf } from './sheet-planes.ts';
 export { sheetPlot } from './sheet-plot.ts';
+export { plotBands, searchBands, wantedBands } from './plot-bands.ts';
+export type { PlotBands } from './plot-bands.ts';
 export { schematicOf } from './sheet-schematic.ts';
 export type { Token } from './style.ts';
 export { ROLE_STYLES, TOKENS } from './style.ts';

@@ -5,7 +5,7 @@ import { formatValue, sameKind } from '../quantity/index.ts';
 import type { ValueKind } from '../quantity/index.ts';
 import type { Axis } from './axis.ts';
 import { createAxis } from './axis.ts';
-import type { Chart, Curve, CurveRole, Mark, Post } from './chart.ts';
+import type { Area, Chart, Curve, CurveRole, Mark, Post } from './chart.ts';
 
 export interface PlotSeries {
   /** As the sheet calls it: `A1.I_D`, or a short formula. */
@@ -15,6 +15,8 @@ export interface PlotSeries {
   readonly values: Float64Array;
   /** The value at the input's own entry; null where that is not in range or unknown. */
   readonly present: number | null;
+  /** How far it reaches over the declared set, at some of the places; left out where that is not known. */
+  readonly band?: Pick<Area, 'x' | 'low' | 'high'>;
   /** What a check asks of it, in SI. */
   readonly limits: readonly { readonly value: number; readonly forbids: 'below' | 'above' }[];
 }
@@ -103,16 +105,33 @@ function panelOf(
     x,
     y,
     yAt: 'left',
-    areas: [],
+    areas: panel.flatMap(areasOf),
     curves,
     posts: shown,
     marks: marks.filter((mark) => mark.y >= y.low && mark.y <= y.high && mark.x >= x.low && mark.x <= x.high),
   };
 }
 
+/** The band of a series, in pieces where it is not known everywhere. */
+function areasOf({ label, band }: PlotSeries): Area[] {
+  if (!band) return [];
+  const areas: Area[] = [];
+  const isKnown = (i: number): boolean => Number.isFinite(band.low[i]!) && Number.isFinite(band.high[i]!);
+  for (let from = 0; from < band.x.length; from++) {
+    let to = from;
+    while (to < band.x.length && isKnown(to)) to++;
+    const [x, low, high] = [band.x, band.low, band.high].map((each) => each.slice(from, to));
+    if (to - from > 1) areas.push({ role: 'band', x: x!, low: low!, high: high!, said: label });
+    from = to;
+  }
+  return areas;
+}
+
 /** Around all finite values, to 0 where that is near; limits count where they are not far off. */
 function valueRange(panel: readonly PlotSeries[]): { low: number; high: number } {
-  const values = panel.flatMap((each) => Array.from(each.values).filter((value) => Number.isFinite(value)));
+  const values = panel
+    .flatMap(({ values: own, band }) => [...own, ...(band ? [...band.low, ...band.high] : [])])
+    .filter((value) => Number.isFinite(value));
   if (values.length === 0) return { low: 0, high: 1 };
   let low = values.reduce((least, value) => Math.min(least, value), Infinity);
   let high = values.reduce((most, value) => Math.max(most, value), -Infinity);
@@ -133,11 +152,11 @@ function valueRange(panel: readonly PlotSeries[]): { low: number; high: number }
 }
 
 function sentenceOf(name: string, input: PlotInput['input'], panel: readonly PlotSeries[]): string {
-  const parts = panel.map(({ label, kind, values }) => {
+  const parts = panel.map(({ label, kind, values, band }) => {
     const known = Array.from(values).filter((value) => Number.isFinite(value));
     if (known.length === 0) return `${label} has no value`;
     const [first, last] = [formatValue(known[0]!, kind).text, formatValue(known.at(-1)!, kind).text];
-    return `${label} goes from ${first} to ${last}`;
+    return `${label} goes from ${first} to ${last}${band ? ', with its band over the declared set' : ''}`;
   });
   const [from, to] = [input.values[0]!, input.values.at(-1)!].map((value) => formatValue(value, input.kind).text);
   return `Plot ${name} against ${input.label} from ${from} to ${to}: ${parts.join('; ')}.`;

@@ -5,6 +5,7 @@ import type { SheetSpread } from '../spread/index.ts';
 import { histogramChart } from './histogram.ts';
 import type { ValueKind } from '../quantity/index.ts';
 import type { Chart } from './chart.ts';
+import type { PlotBands } from './plot-bands.ts';
 import { planesOf } from './sheet-planes.ts';
 import { plotCharts } from './plot.ts';
 import type { PlotSeries } from './plot.ts';
@@ -20,7 +21,12 @@ type SheetPlot = { readonly charts: readonly Chart[] } | { readonly message: str
 type KnownSpread = SheetSpread | 'not counted' | null;
 
 /** What a plot cell shows. */
-export function sheetPlot(sheet: SheetView, name: string, spread: KnownSpread = null): SheetPlot {
+export function sheetPlot(
+  sheet: SheetView,
+  name: string,
+  spread: KnownSpread = null,
+  bands: PlotBands | null = null,
+): SheetPlot {
   const cell = sheet.cell(name);
   if (cell === null || cell.tree.entry.type !== 'plot') return { message: `${name} is no figure.` };
   if (cell.fault !== null) return { message: cell.waitsFor ? `${name} waits for ${cell.waitsFor}.` : cell.fault.text };
@@ -40,7 +46,9 @@ export function sheetPlot(sheet: SheetView, name: string, spread: KnownSpread = 
   const series = sweep.series.flatMap(({ label, type, values, present }): PlotSeries[] => {
     if (!isKind(type)) return [];
     const limits = requirements.filter(({ text }) => text === comparableText(label));
-    return [{ label, kind: type, values, present: finite(present), limits }];
+    const band = bands?.get(label);
+    const fits = band !== undefined && lieOn(band, input.values, values);
+    return [{ label, kind: type, values, present: finite(present), limits, ...(fits ? { band } : {}) }];
   });
   if (series.length === 0 || !isKind(input.type)) return { message: `${name} holds no number that could be drawn.` };
   return {
@@ -52,6 +60,22 @@ export function sheetPlot(sheet: SheetView, name: string, spread: KnownSpread = 
     }),
   };
 }
+
+/** Whether the nominal values of a band lie on a curve: a band of a sheet that has changed since, or that rests on ends that were not searched anew, is not shown. */
+function lieOn(
+  { x, nominal }: { x: Float64Array; nominal: Float64Array },
+  at: Float64Array,
+  curve: Float64Array,
+): boolean {
+  const step = (at.length - 1) / (x.length - 1);
+  return x.every((place, k) => {
+    const [there, value] = [at[k * step], curve[k * step]];
+    if (there === undefined || Math.abs(there - place) > LIE_ON * Math.abs(place)) return false;
+    return Number.isNaN(value) || Math.abs(value! - nominal[k]!) <= LIE_ON * Math.abs(value!);
+  });
+}
+
+const LIE_ON = 1e-9;
 
 /** The histogram of a value of the sheet. */
 function spreadPlot(sheet: SheetView, tree: CellReading['tree'], spread: KnownSpread): SheetPlot {

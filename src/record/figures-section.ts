@@ -1,6 +1,15 @@
 // The figures: the planes of every stage that is solved, then the plots that the sheet asks for.
 
-import { deviceStages, drawChart, planesOf, sheetPlot, stackCharts, svgText, TOKENS } from '../figure/index.ts';
+import {
+  deviceStages,
+  drawChart,
+  planesOf,
+  searchBands,
+  sheetPlot,
+  stackCharts,
+  svgText,
+  TOKENS,
+} from '../figure/index.ts';
 import type { Chart, Drawing } from '../figure/index.ts';
 import type { CellReading, Sheet } from '../sheet/index.ts';
 import type { SheetSpread } from '../spread/index.ts';
@@ -35,7 +44,7 @@ export function figuresBlocks(sheet: Sheet, spread: SheetSpread | null): readonl
     }
   }
   for (const cell of plots) {
-    const plot = sheetPlot(sheet, cell.name, spread);
+    const plot = sheetPlot(sheet, cell.name, spread, spread && searchBands(sheet, cell.name, spread));
     if ('message' in plot)
       messages.push(sentence(plot.message.startsWith(cell.name) ? plot.message : `${cell.name}: ${plot.message}`));
     else if (planeKey(cell) === null) add(stackCharts(plot.charts, sizeFor(plot.charts)), [cell.name]);

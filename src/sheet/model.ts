@@ -183,6 +183,7 @@ export interface Sweep {
     readonly values: Float64Array;
     readonly log: boolean;
     readonly present: number;
+    readonly slot: number;
   };
   /** NaN where a value is not known. */
   readonly series: readonly {

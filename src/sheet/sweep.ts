@@ -62,7 +62,14 @@ export function sweepPlot(plot: Node, points: number, sheet: Surroundings): Swee
     });
   }
   return {
-    input: { label: label(entry.against), type: plotType(inputNode, entry), values, log: entry.over.log, present },
+    input: {
+      label: label(entry.against),
+      type: plotType(inputNode, entry),
+      values,
+      log: entry.over.log,
+      present,
+      slot: input,
+    },
     series,
   };
 }

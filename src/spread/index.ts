@@ -1,8 +1,19 @@
 // How far the values of a sheet move over what its limits allow, and in what share of builds its checks hold.
 
 export { ANALYSES, analyse, readSpread } from './analyse.ts';
+export { bandsOver } from './band.ts';
+export type { Band } from './band.ts';
 export { createMendJob, createSpreadJob } from './job.ts';
-export type { Answer, MendAnswer, MendQuestion, Question, SpreadAnswer, SpreadQuestion } from './job.ts';
+export type {
+  Answer,
+  BandAnswer,
+  BandQuestion,
+  MendAnswer,
+  MendQuestion,
+  Question,
+  SpreadAnswer,
+  SpreadQuestion,
+} from './job.ts';
 export { portionsOf } from './portion.ts';
 export type { SheetSpread } from './analyse.ts';
 export { searchExtremes } from './extremes.ts';

@@ -2,6 +2,8 @@
 
 import type { SpreadModel } from '../sheet/index.ts';
 import { createAnalysis } from './analysis.ts';
+import { bandsOver } from './band.ts';
+import type { Band } from './band.ts';
 import { createBuilds } from './builds.ts';
 import type { SearchEffort } from './extremes.ts';
 import { mendWith, reservesWith } from './mending.ts';
@@ -9,9 +11,9 @@ import type { CheckStanding, Mending } from './mending.ts';
 import { portionsOf } from './portion.ts';
 import type { SpreadReport } from './report.ts';
 
-/** What is asked of the worker: how far values move, or what would mend the checks. */
-export type Question = SpreadQuestion | MendQuestion;
-export type Answer = SpreadAnswer | MendAnswer;
+/** What is asked of the worker: how far values move, what would mend the checks, or the bands of a plot. */
+export type Question = SpreadQuestion | MendQuestion | BandQuestion;
+export type Answer = SpreadAnswer | MendAnswer | BandAnswer;
 
 export interface SpreadQuestion {
   readonly kind: 'spread';
@@ -46,6 +48,30 @@ export interface MendAnswer {
   /** The first value to buy inside the window, with every check as it then stands at its worst extreme. */
   readonly choice: { readonly value: number; readonly checks: readonly CheckStanding[] } | null;
   readonly isLast: boolean;
+}
+
+export interface BandQuestion {
+  readonly kind: 'band';
+  readonly id: number;
+  readonly model: SpreadModel;
+  /** The slot of the input, and the values that it takes, SI. */
+  readonly input: number;
+  readonly places: Float64Array;
+  /** Slots of values. */
+  readonly wanted: readonly number[];
+}
+
+export interface BandAnswer {
+  readonly kind: 'band';
+  readonly id: number;
+  /** One for each wanted value. */
+  readonly bands: readonly Band[];
+  readonly isLast: true;
+}
+
+/** Answers at once. */
+export function* createBandJob({ id, model, input, places, wanted }: BandQuestion): Generator<BandAnswer> {
+  yield { kind: 'band', id, bands: bandsOver(model, input, places, wanted), isLast: true };
 }
 
 /** Answers for one input after the other. */

@@ -4,11 +4,10 @@
 // of all checks are searched quickly. The ends of the window around the nearest good place are then narrowed by halving.
 
 import { exp, ln } from '../numeric/index.ts';
-import { reachOf, reaches, runAll } from '../program/index.ts';
-import { KERNELS } from '../sheet/index.ts';
-import type { Drawn, SpreadModel } from '../sheet/index.ts';
+import { reachOf, reaches } from '../program/index.ts';
+import type { SpreadModel } from '../sheet/index.ts';
 import { searchExtremes } from './extremes.ts';
-import { answerAnew } from './state-columns.ts';
+import { turnedModel } from './turned-model.ts';
 
 /** How far an input is turned to either side, as a factor, and in how many places on each. */
 const RANGE = 8;
@@ -91,7 +90,7 @@ export function mendWith(model: SpreadModel, name: string): Mending {
 /** Every check with an input at another value. */
 export function reservesWith(model: SpreadModel, name: string, value: number): readonly CheckStanding[] {
   const input = tunerOf(model, name);
-  const turned = turnedModel(model, input.slot, value);
+  const turned = turnedModel(model, input.slot, value, 'scaled');
   const reserves = turned.checks.flatMap(({ reserve }) => (reserve === null ? [] : [reserve]));
   const search = searchExtremes(turned, [...turned.checks.map(({ slot }) => slot), ...reserves]);
   let next = turned.checks.length;
@@ -109,7 +108,7 @@ function tunerOf({ tunable }: SpreadModel, name: string): SpreadModel['tunable']
 }
 
 function standingAt(model: SpreadModel, slot: number, value: number): Standing {
-  const turned = turnedModel(model, slot, value);
+  const turned = turnedModel(model, slot, value, 'scaled');
   const reserves = turned.checks.flatMap(({ reserve }) => (reserve === null ? [] : [reserve]));
   const wanted = [...turned.checks.map((check) => check.slot), ...reserves];
   const search = searchExtremes(turned, wanted, { effort: 'quick' });
@@ -119,20 +118,4 @@ function standingAt(model: SpreadModel, slot: number, value: number): Standing {
       return !search.isEmpty && unsolved === null && low.value === 1;
     }),
   };
-}
-
-/** The model as if the input had another nominal value; what was chosen at the nominal values is chosen anew. */
-function turnedModel(model: SpreadModel, slot: number, value: number): SpreadModel {
-  const slots = model.slots.slice();
-  const factor = value / slots[slot]!;
-  slots[slot] = value;
-  runAll(model.program, slots, KERNELS);
-  answerAnew({ ...model, slots });
-  const turned = (each: Drawn): Drawn => {
-    if (each.slot !== slot) return each;
-    const { low, high } = each.spread;
-    const scaled = (end: number | null): number | null => (end === null ? null : end * factor);
-    return { ...each, spread: { ...each.spread, low: scaled(low), nominal: value, high: scaled(high) } };
-  };
-  return { ...model, slots, drawn: model.drawn.map(turned) };
 }

@@ -83,7 +83,10 @@ test('the whole record prints, and nothing else of the page', async ({ page, add
 test('print is the same from the screen view, and takes nothing away from the page', async ({ page, address }) => {
   await openPage(page, address);
   // A record of what was counted so far would be another one a moment later.
-  await page.getByText(/of 10 000 builds .* hold all of them/).first().waitFor();
+  await page
+    .getByText(/of 10 000 builds .* hold all of them/)
+    .first()
+    .waitFor();
   const direct = await print(page);
   const view = await openRecord(page);
   const fromView = await print(page);

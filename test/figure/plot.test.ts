@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { PlotInput } from '../../src/figure/index.ts';
-import { drawChart, histogramChart, plotCharts, stackCharts } from '../../src/figure/index.ts';
+import { chartTable, drawChart, histogramChart, plotCharts, readOut, stackCharts } from '../../src/figure/index.ts';
 import { CURRENT, RESISTANCE, VOLTAGE } from '../../src/quantity/index.ts';
 
 const X = Float64Array.of(100, 1000, 10_000);
@@ -97,5 +97,44 @@ describe('a histogram', () => {
 
   it('refuses borders that do not fit', () => {
     expect(() => histogramChart({ ...input, counts: [1] })).toThrow(RangeError);
+  });
+});
+
+describe('a band', () => {
+  const input = { label: 'R', kind: RESISTANCE, values: Float64Array.of(1, 2, 3, 4, 5), log: false };
+  const chart = (low: number[], high: number[]) =>
+    plotCharts({
+      name: 'F1',
+      input,
+      present: 2,
+      series: [
+        {
+          label: 'I',
+          kind: CURRENT,
+          values: Float64Array.of(5, 4, 3, 2, 1),
+          present: 4,
+          limits: [],
+          band: { x: Float64Array.of(1, 3, 5), low: Float64Array.from(low), high: Float64Array.from(high) },
+        },
+      ],
+    })[0]!;
+
+  it('is drawn around its curve, within the axes, and read in numbers', () => {
+    const drawn = chart([4, 2, 0.5], [7, 5, 2]);
+    expect(drawn.areas).toHaveLength(1);
+    expect(drawn.y.high).toBeGreaterThan(7);
+    expect(readOut(drawn, 3)).toBe('R 3.00 Ω: I 3.00 A (2.00 A to 5.00 A)');
+    expect(readOut(drawn, 2)).toBe('R 2.00 Ω: I 4.00 A (3.00 A to 6.00 A)');
+    const { columns, rows } = chartTable(drawn);
+    expect(columns).toEqual(['R (Ω)', 'I (A)', 'low I (A)', 'high I (A)']);
+    expect(rows.find(([place]) => place === '3')).toEqual(['3', '3', '2', '5']);
+    expect(drawn.sentence).toMatch(/with its band over the declared set/);
+  });
+
+  it('ends where it is not known', () => {
+    expect(chart([4, NaN, 0.5], [7, 5, 2]).areas).toEqual([]);
+    const drawn = chart([4, 2, NaN], [7, 5, 2]);
+    expect(drawn.areas.map(({ x }) => [...x])).toEqual([[1, 3]]);
+    expect(readOut(drawn, 4.5)).toBe('R 4.50 Ω: I 1.50 A');
   });
 });

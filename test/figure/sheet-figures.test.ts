@@ -3,9 +3,10 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import type { Chart, Curve } from '../../src/figure/index.ts';
-import { drawSchematic, planesOf, schematicOf, sheetPlot, sourceLeg } from '../../src/figure/index.ts';
+import { drawSchematic, planesOf, schematicOf, searchBands, sheetPlot, sourceLeg } from '../../src/figure/index.ts';
 import { requirementsOf } from '../../src/figure/requirements.ts';
 import { createSheet } from '../../src/sheet/index.ts';
+import { ANALYSES, analyse } from '../../src/spread/index.ts';
 
 const EXAMPLE = readFileSync('public/examples/crevasse-listener.txt', 'utf8');
 
@@ -255,5 +256,29 @@ describe('the resistor that Q turns', () => {
   it('is none where the resistance is computed', () => {
     const leg = legOf(FOLLOWER.replace('R_S = 1.2 kohm', 'R_0 = 2.4 kohm\nR_S = R_0 / 2'));
     expect('reason' in leg && leg.reason).toBe('Q of A1 cannot be dragged: R_S is computed, not entered.');
+  });
+});
+
+describe('the band of a plot', () => {
+  const sheet = createSheet(EXAMPLE, ANALYSES);
+  const spread = analyse(sheet.spreadModel(), { samples: 100, seed: 1 })!;
+  const bands = searchBands(sheet, 'F3', spread)!;
+  const areas = (plot: ReturnType<typeof sheetPlot>): number => ('charts' in plot ? plot.charts[0]!.areas.length : -1);
+
+  it('is drawn around the curve', () => {
+    expect(areas(sheetPlot(sheet, 'F3', spread, bands))).toBe(1);
+    expect(areas(sheetPlot(sheet, 'F3', spread))).toBe(0);
+  });
+
+  it('is not drawn once the sheet is another', () => {
+    const edited = createSheet(EXAMPLE.replace('V_DD = 18 V', 'V_DD = 17 V'), ANALYSES);
+    expect(areas(sheetPlot(edited, 'F3', spread, bands))).toBe(0);
+    const ranged = createSheet(EXAMPLE.replace('over 100 ohm ..', 'over 120 ohm ..'), ANALYSES);
+    expect(areas(sheetPlot(ranged, 'F3', spread, bands))).toBe(0);
+  });
+
+  it('is not looked for where nothing spreads, and for figures of another kind', () => {
+    expect(searchBands(sheet, 'F1', spread)).toBeNull();
+    expect(searchBands(sheet, 'F4', spread)).toBeNull();
   });
 });

@@ -6,6 +6,7 @@ import type { Desk } from '../desk/index.ts';
 import { createRested } from '../pace/index.ts';
 import type { Pace } from '../pace/index.ts';
 import { Prose } from '../typeset/index.ts';
+import { createBands } from './band-feed.ts';
 import { ChartView } from './chart-view.tsx';
 import { isFollowed, plotTitle } from './plot-title.ts';
 
@@ -22,11 +23,12 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
     if (isOpen !== open()) setChosen(isOpen);
   };
   const version = createRested(document.version, PACE);
+  const bands = createBands(props.desk, () => props.name, open);
   const plot = createMemo(() => {
     version();
     const { spread } = props.desk;
     const known = spread.now() ?? (spread.isStale() ? 'not counted' : null);
-    return open() ? sheetPlot(props.desk.view(), props.name, known) : null;
+    return open() ? sheetPlot(props.desk.view(), props.name, known, bands()) : null;
   });
   const charts = createMemo(() => {
     const shown = plot();
