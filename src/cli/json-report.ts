@@ -55,7 +55,7 @@ interface JsonCell extends JsonValue {
   readonly error: JsonFault | null;
   /** Of inverse cells, where the sheet has spread: the share of builds with just one answer. */
   readonly answered?: JsonYield;
-  /** Of parts, points and stages, by value name. */
+  /** Of parts, points, stages and benches, by value name. */
   readonly values?: Readonly<Record<string, JsonValue>>;
 }
 
@@ -134,7 +134,12 @@ export function jsonReport(sheet: Sheet, workings: string | null, judged: Judged
 
 function jsonCell(sheet: Sheet, cell: CellReading, spread: SheetSpread | null): JsonCell {
   const { line } = cell.tree;
-  const offers = cell.kind === 'part' || cell.kind === 'another' || cell.kind === 'point' || cell.kind === 'stage';
+  const offers =
+    cell.kind === 'part' ||
+    cell.kind === 'another' ||
+    cell.kind === 'point' ||
+    cell.kind === 'stage' ||
+    cell.kind === 'bench';
   const own = cell.reading === null ? null : jsonValue(cell.reading, shownCell(cell));
   const text = cell.check === null ? (own?.text ?? null) : checkText(cell);
   return {

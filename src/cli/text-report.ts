@@ -129,11 +129,12 @@ function cellItems(cell: CellReading, lines: readonly Line[], judged: JudgedSpre
   if (cell.fault !== null) return items;
   // A part offers what was written in it, too; that stands in the fields' own rows.
   const written = new Set(cell.fields.map((field) => field.name));
+  // Those of each specimen of a bench stand in the tables of its workings.
+  const isShown = ({ name }: OfferedReading): boolean =>
+    !written.has(name) && !(cell.kind === 'bench' && name.includes('.'));
   return [
     ...items,
-    ...cell.values
-      .filter((value) => !written.has(value.name))
-      .map((value) => offeredRow(value, cell.name, judged?.spread ?? null)),
+    ...cell.values.filter(isShown).map((value) => offeredRow(value, cell.name, judged?.spread ?? null)),
   ];
 }
 

@@ -1,7 +1,7 @@
 // The workings of one cell as text for a terminal.
 
-import { stepSides, stepText, workingsOf } from '../record/index.ts';
-import type { PrintedStep } from '../record/index.ts';
+import { benchTables, stepSides, stepText, workingsOf } from '../record/index.ts';
+import type { BenchTable, PrintedStep } from '../record/index.ts';
 import type { Sheet } from '../sheet/index.ts';
 import { faultText } from './text-report.ts';
 import { characterCount, wrapText } from './text-table.ts';
@@ -19,7 +19,25 @@ export function workingsReport(sheet: Sheet, name: string, width: number): strin
     if (step.sentence !== '') lines.push('', ...wrapText(step.sentence, width));
     lines.push(...stepLines(step, width));
   }
+  const bench = sheet.bench(name);
+  if (bench) lines.push(...benchTables(bench).flatMap((table) => ['', ...tableLines(table, width)]));
   return `${lines.join('\n')}\n`;
+}
+
+/** What the table shows, its heads, its rows; numbers stand to the right. What is too wide is not broken. */
+function tableLines({ caption, columns, rows }: BenchTable, width: number): string[] {
+  const heads = columns.map(({ title }) => title);
+  const widths = heads.map((head, i) => Math.max(...[head, ...rows.map((row) => row[i]!)].map(characterCount)));
+  const line = (cells: readonly string[]): string =>
+    INDENT +
+    cells
+      .map((cell, i) => {
+        const room = ' '.repeat(widths[i]! - characterCount(cell));
+        return columns[i]!.isNumber ? room + cell : cell + room;
+      })
+      .join(INDENT)
+      .trimEnd();
+  return [...wrapText(caption, width), line(heads), ...rows.map(line)];
 }
 
 /** The step in one line, or, where it is too long, each side of its equation in lines of its own. */

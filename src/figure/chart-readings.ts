@@ -37,7 +37,8 @@ export function readOut({ x, y, curves, areas }: Chart, at: number): string {
 export function chartTable({ x, y, curves, marks, areas }: Chart): ChartTable {
   const shown = spoken(curves);
   const reaching = [...new Set(areas.flatMap(({ said }) => said ?? []))];
-  const places = [...new Set([...x.ticks, ...marks.map((mark) => mark.x)])].toSorted((a, b) => a - b);
+  const measured = shown.filter(({ rings }) => rings === 'only').flatMap((curve) => [...curve.x]);
+  const places = [...new Set([...x.ticks, ...marks.map((mark) => mark.x), ...measured])].toSorted((a, b) => a - b);
   const heading = (symbol: string, { unit }: Axis): string => (unit === '' ? symbol : `${symbol} (${unit})`);
   const number = (value: number, { kind, prefix }: Axis): string =>
     formatValue(value, kind, { prefix, digits: TABLE_DIGITS, zeros: 'drop' }).number;
@@ -70,8 +71,12 @@ function reachAt(areas: Chart['areas'], said: string, at: number): [low: number 
   return [null, null];
 }
 
-/** Height of a curve at x, by straight lines between its points; null beyond its ends and in its gaps. */
-function heightAt({ x, y }: Pick<Curve, 'x' | 'y'>, at: number): number | null {
+/** Height of a curve at x, by straight lines between its points; null beyond its ends, in its gaps, and between points that were measured. */
+function heightAt({ x, y, rings }: Pick<Curve, 'x' | 'y' | 'rings'>, at: number): number | null {
+  if (rings === 'only') {
+    const found = x.indexOf(at);
+    return found < 0 ? null : y[found]!;
+  }
   for (let i = 1; i < x.length; i++) {
     const [x0, x1, y0, y1] = [x[i - 1]!, x[i]!, y[i - 1]!, y[i]!];
     if (at < Math.min(x0, x1) || at > Math.max(x0, x1) || x0 === x1) continue;

@@ -1,6 +1,7 @@
 // Figures as plain geometry, and geometry as SVG text. Charts are in SI with their axes, true node differences for voltages
 // and drain currents positive on both channels; drawings are in CSS pixels, y downwards.
 
+export { benchCharts } from './bench-plot.ts';
 export { createAxis, positionOn, valueOn } from './axis.ts';
 export type { SpreadBar, SpreadInput } from './bar.ts';
 export { spreadBar } from './bar.ts';

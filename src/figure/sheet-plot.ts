@@ -2,6 +2,7 @@
 
 import type { CellReading, SheetView, ValueType } from '../sheet/index.ts';
 import type { SheetSpread } from '../spread/index.ts';
+import { benchCharts } from './bench-plot.ts';
 import { histogramChart } from './histogram.ts';
 import type { ValueKind } from '../quantity/index.ts';
 import type { Chart } from './chart.ts';
@@ -37,6 +38,12 @@ export function sheetPlot(
     return planes === null
       ? { message: `${of?.name ?? 'The stage'} has no planes to draw.` }
       : { charts: [planes[figure]] };
+  }
+  if (figure === 'bench') {
+    const bench = of === null ? null : sheet.bench(of.name);
+    return bench === null
+      ? { message: `${of?.name ?? 'The bench'} has no points to draw.` }
+      : { charts: benchCharts(bench) };
   }
   if (figure === 'spread') return spreadPlot(sheet, cell.tree, spread);
   const sweep = sheet.sweep(name, PLOT_POINTS);

@@ -1,6 +1,7 @@
-// The figures: the planes of every stage that is solved, then the plots that the sheet asks for.
+// The figures: the planes of every stage that is solved, the readings of every bench, then the plots that the sheet asks for.
 
 import {
+  benchCharts,
   deviceStages,
   drawChart,
   planesOf,
@@ -32,7 +33,7 @@ export function figuresBlocks(sheet: Sheet, spread: SheetSpread | null): readonl
   };
   const plots = sheet.cells().filter(({ tree }) => tree.entry.type === 'plot');
   for (const cell of plots) {
-    const key = planeKey(cell);
+    const key = fixedKey(cell);
     if (key !== null) asked.set(key, [...(asked.get(key) ?? []), cell.name]);
   }
   for (const cell of sheet.cells().filter(({ kind, fault }) => kind === 'stage' && fault === null)) {
@@ -43,20 +44,28 @@ export function figuresBlocks(sheet: Sheet, spread: SheetSpread | null): readonl
       add(drawChart(planes[plane], CHART), asked.get(`${plane} of ${cell.name}`) ?? []);
     }
   }
+  for (const cell of sheet.cells().filter(({ kind }) => kind === 'bench')) {
+    const bench = sheet.bench(cell.name);
+    if (bench === null) continue;
+    const charts = benchCharts(bench);
+    add(stackCharts(charts, sizeFor(charts)), asked.get(`bench of ${cell.name}`) ?? []);
+  }
   for (const cell of plots) {
     const plot = sheetPlot(sheet, cell.name, spread, spread && searchBands(sheet, cell.name, spread));
     if ('message' in plot)
       messages.push(sentence(plot.message.startsWith(cell.name) ? plot.message : `${cell.name}: ${plot.message}`));
-    else if (planeKey(cell) === null) add(stackCharts(plot.charts, sizeFor(plot.charts)), [cell.name]);
+    else if (fixedKey(cell) === null) add(stackCharts(plot.charts, sizeFor(plot.charts)), [cell.name]);
   }
   const blocks: Block[] = figures.length > 0 ? [{ type: 'figures', figures }] : [];
   return [...blocks, ...messages.map((content): Block => ({ type: 'paragraph', tone: 'remark', content }))];
 }
 
-/** `transfer of A1`; null for plots that are no plane. */
-function planeKey({ tree }: CellReading): string | null {
+const FIXED = ['transfer', 'output', 'bench'];
+
+/** `transfer of A1`, `bench of M1`: what is drawn whether it is asked for or not; null for other plots. */
+function fixedKey({ tree }: CellReading): string | null {
   const { entry } = tree;
-  if (entry.type !== 'plot' || (entry.figure !== 'transfer' && entry.figure !== 'output')) return null;
+  if (entry.type !== 'plot' || !FIXED.includes(entry.figure)) return null;
   return `${entry.figure} of ${entry.of?.name ?? ''}`;
 }
 

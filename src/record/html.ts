@@ -102,10 +102,10 @@ function block(node: Block): string {
 // ---------------------------------------------------------------- tables
 
 function table({ name, columns, rows }: Extract<Block, { readonly type: 'table' }>): string {
-  const head = columns.map(({ title, kind }) => {
+  const head = columns.map(({ title, head: set, kind }) => {
     const span =
       kind === 'number' ? ' colspan="2" class="record-amount"' : kind === 'right' ? ' class="record-right"' : '';
-    return `<th scope="col"${span}>${text(title)}</th>`;
+    return `<th scope="col"${span}>${set ? inlines(set) : text(title)}</th>`;
   });
   const body = rows.map((row) => tableRow(row, columns));
   return `<table class="record-table record-table-${name}">${columnGroup(columns)}<thead><tr>${head.join('')}</tr></thead><tbody>${body.join('')}</tbody></table>`;

@@ -2,6 +2,8 @@
 // All of it is text or plain trees; nothing is rendered here.
 
 export { answeredSentence, answeredSentences } from './answered-text.ts';
+export { benchTables } from './bench-tables.ts';
+export type { BenchTable } from './bench-table.ts';
 export { checkText, reserveText } from './check-text.ts';
 export { endsText } from './ends-text.ts';
 export { recordHtml } from './html.ts';

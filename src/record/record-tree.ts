@@ -20,6 +20,13 @@ export type Inlines = readonly Inline[];
 /** How a column is aligned: `number` cells hold a number and its unit. */
 type ColumnKind = 'text' | 'number' | 'right';
 
+interface TableColumn {
+  readonly title: string;
+  /** The title with its names typeset, where it has some. */
+  readonly head?: Inlines;
+  readonly kind: ColumnKind;
+}
+
 export interface Cell {
   readonly content: Inlines;
   /** Of a `number` cell: what stands behind the number, in a line of its own from row to row. */
@@ -59,7 +66,7 @@ export type Block =
       readonly type: 'table';
       /** `checks`, `inputs`, `part`, `wiring`: the page gives each its widths. */
       readonly name: string;
-      readonly columns: readonly { readonly title: string; readonly kind: ColumnKind }[];
+      readonly columns: readonly TableColumn[];
       readonly rows: readonly TableRow[];
     }
   /** Names and values in columns, read downwards. */

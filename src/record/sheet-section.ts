@@ -3,6 +3,7 @@
 
 import { drawSchematic, schematicOf, svgText, TOKENS } from '../figure/index.ts';
 import type { CellReading, Sheet } from '../sheet/index.ts';
+import { benchBlocks } from './bench-blocks.ts';
 import { enteredTable } from './entered-table.ts';
 import { EMPTY_CELL, name, plainText, sentence, strong } from './inline.ts';
 import { leadProse } from './lead-prose.ts';
@@ -89,9 +90,12 @@ class SheetWriter {
       content: [strong(cell.name), ...plainText(', '), ...plainText(entry), ...remark],
     });
     if (cell.fault !== null) this.#blocks.push(faultBlock(cell, this.#sheet));
-    this.#blocks.push(
-      ...(cell.kind === 'stage' ? stageBlocks(cell, this.#sheet, this.#spread) : partBlocks(cell, this.#sheet)),
-    );
+    this.#blocks.push(...this.#blockOf(cell));
+  }
+
+  #blockOf(cell: CellReading): readonly Block[] {
+    if (cell.kind === 'stage') return stageBlocks(cell, this.#sheet, this.#spread);
+    return cell.kind === 'bench' ? benchBlocks(cell, this.#sheet) : partBlocks(cell, this.#sheet);
   }
 
   #heading(content: Inlines, remark: string): void {

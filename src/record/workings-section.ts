@@ -60,7 +60,7 @@ function kindWords({ kind, tree }: CellReading): string {
   if (entry.type === 'another') return `another ${entry.of.name}`;
   if (entry.type === 'point') return `point of ${entry.of.name}`;
   if (entry.type === 'stage') return `stage of ${entry.fets.map(({ part }) => part.name).join(', ')}`;
-  return kind;
+  return kind === 'bench' ? 'bench: the laws that fit its readings' : kind;
 }
 
 /** The heading above a cell; empty where there is none. */

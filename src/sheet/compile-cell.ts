@@ -155,6 +155,7 @@ export function compileCell(tree: CellTree, surroundings: Surroundings): Compile
       ]),
     ),
     extra: draft.extra && relocate(draft.extra, slot),
+    bench: draft.bench?.measured ?? null,
     isInput: draft.isInput,
     toleranced: draft.spread !== null,
     settled: !failed,

@@ -5,6 +5,8 @@ import type { Builder } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { Unit, ValueKind } from '../quantity/index.ts';
 import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueType, WorkingStep } from './model.ts';
+import type { BenchReading } from './bench/bench-reading.ts';
+import type { Measured } from './bench/measured.ts';
 import type { Scope } from './scope.ts';
 import type { Expr } from '../language/index.ts';
 import type { Interface } from './interface.ts';
@@ -119,6 +121,8 @@ export interface Draft {
   readonly shape: (() => string) | null;
   /** What a kind of cell tells those that are built on it (a part its device). */
   readonly extra: Interface['extra'];
+  /** What a bench has found. */
+  readonly bench: { readonly measured: Measured; readonly reading: BenchReading } | null;
 }
 
 export interface CellContext {
@@ -166,4 +170,5 @@ export const EMPTY_DRAFT: Draft = {
   stage: null,
   shape: null,
   extra: null,
+  bench: null,
 };

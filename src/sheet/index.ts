@@ -22,6 +22,7 @@ export type {
   ValueType,
   WorkingStep,
 } from './model.ts';
+export type { BenchReading } from './bench/bench-reading.ts';
 export { PART_FIELDS } from './part-fields.ts';
 export { KERNELS, isChoice } from './kernels.ts';
 export { createSheet } from './sheet.ts';

@@ -3,6 +3,7 @@
 
 import type { DeviceHandles, Handle } from '../network/index.ts';
 import type { Message } from '../language/index.ts';
+import type { Measured } from './bench/measured.ts';
 import type { CellKind, ValueType } from './model.ts';
 
 export interface Offer {
@@ -35,6 +36,8 @@ export interface Interface {
   readonly slot: number;
   readonly offers: ReadonlyMap<string, Offer>;
   readonly extra: PartInterface | null;
+  /** What a bench tells the parts that are fitted to it. */
+  readonly bench: Measured | null;
   /** Its entry is one number: its slot may be turned. */
   readonly isInput: boolean;
   /** Its value is declared with a spread. */
@@ -49,5 +52,5 @@ export function sameInterface(a: Interface, b: Interface): boolean {
 }
 
 function signature(x: Interface): string {
-  return JSON.stringify([x.kind, x.type, x.slot, x.settled, x.isInput, x.toleranced, [...x.offers], x.extra]);
+  return JSON.stringify([x.kind, x.type, x.slot, x.settled, x.isInput, x.toleranced, [...x.offers], x.extra, x.bench]);
 }

@@ -2,6 +2,7 @@
 // the terminal, the record and the page.
 
 import type { CellTree, SheetTree, Span, Splice } from '../language/index.ts';
+import type { BenchReading } from './bench/bench-reading.ts';
 import type { Program } from '../program/index.ts';
 import type { Unit, ValueKind } from '../quantity/index.ts';
 
@@ -331,6 +332,8 @@ export interface SheetView {
   workings(name: string): readonly WorkingStep[];
   /** The stage as figures want it; null where there is none of that name, or it cannot be read. */
   stage(name: string): StageReading | null;
+  /** What a bench has found; null where there is none of that name, or it cannot be read. */
+  bench(name: string): BenchReading | null;
   /** The curves of a plot cell over its range, at so many points; null where there is none. */
   sweep(plot: string, points: number): Sweep | null;
 }

@@ -15,6 +15,8 @@ export interface GivenField {
   /** By condition name: `V_DS`, `I_D`. */
   readonly conditions: ReadonlyMap<string, number>;
   readonly tree: FieldTree;
+  /** Where it comes from a bench: which of its values it is, as a formula, and its standard error. */
+  readonly measured?: { readonly formula: string; readonly error: number | null };
 }
 
 /** What a part was given, by field name; R_DSon and e_n may stand several times. */

@@ -46,14 +46,16 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, written: GivenFields,
     assumptions.push(`${tree.name.name}: lambda is 0 /V, since neither lambda nor g_os is given; r_o is infinite.`);
   const lambda = slope?.handle ?? builder.constant(0);
 
-  const complete = ROUTES.filter((route) => route.families.includes(entry.family) && isComplete(route, given));
-  if (complete.length === 0 && !entry.fittedTo) incomplete(entry, given, context);
+  const complete = ROUTES.filter(
+    (route) => route.families.includes(entry.family) && isComplete(route, settling(given)),
+  );
+  if (complete.length === 0) incomplete(entry, given, context);
   const results = complete.map((route): RouteResult => {
     const inputs = route.inputs.map((input) => inputHandle(input, { channel, given, lambda, defaults, context }));
     const [beta, vto, status, R_0 = null] = builder.call(route.id, inputs, route.outputs.length);
     return { route, inputs, beta: beta!, V_TO: vto!, status: status!, R_0 };
   });
-  const used = results[0] ?? unknownLaw(context);
+  const used = results[0]!;
   const others = results
     .slice(1)
     .filter(({ route }) => !hasLimitsAlone(route, used.route, given) && !complete.some((all) => isPartOf(route, all)));
@@ -71,6 +73,7 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, written: GivenFields,
   const slopes = given.has('lambda') ? [] : (given.get('g_os') ?? []);
   const compared = given.get('g_fs0') === given.get('g_fs') ? (given.get('g_fs') ?? []) : [];
   for (const field of new Set([...fieldsOf(used.route, given), ...slopes, ...compared])) {
+    if (field.measured) continue;
     const sentences = rowReadings(field, { hasSlope: slope !== null, hasLeads });
     readings.set(field, sentences);
     assumptions.push(...sentences.map((sentence) => `${tree.name.name}.${field.name}: ${sentence}`));
@@ -118,6 +121,12 @@ export function partLaw(entry: PartEntry, channel: 1 | -1, written: GivenFields,
       })),
     ],
   };
+}
+
+/** The rows that may settle the law: those of a bench, where there is one. */
+function settling(given: GivenFields): GivenFields {
+  const measured = [...given].filter(([, fields]) => fields[0]!.measured);
+  return measured.length > 0 ? new Map(measured) : given;
 }
 
 /** What was given with g_fs of a JFET that names no current as g_fs0, which is what a data sheet then means. */
@@ -272,16 +281,4 @@ function incomplete(entry: PartEntry, given: GivenFields, context: CellContext):
     `${context.tree.name.name} does not settle its square law. It wants ${wanted}.${hint}`,
     entry.span,
   );
-}
-
-function unknownLaw({ builder }: CellContext): RouteResult {
-  const none = builder.constant(NaN);
-  return {
-    route: { ...ROUTES[0]!, inputs: [], needs: [] },
-    inputs: [],
-    beta: none,
-    V_TO: none,
-    status: builder.constant(0),
-    R_0: null,
-  };
 }

@@ -25,6 +25,11 @@ const GAIN_ROWS: ReadonlyMap<string, 'rises' | 'falls'> = new Map([
   ['R_DSon', 'falls'],
 ] as const);
 
+/** Whether the law of a specimen settles what this row reads. */
+export function hasReading(name: string): boolean {
+  return LAW_ROWS.has(name);
+}
+
 /** The spread of a part. A row of limits that the law does not need is not drawn: it says which specimens there are. */
 export function partSpread(
   family: Family,
@@ -50,20 +55,28 @@ export function partSpread(
   };
 }
 
-/** `R_DSon_2` for the second of its name. */
+/** `R_DSon_2` for the second of its name; rows of a bench and of the part itself are counted apart. */
 export function fieldName(field: GivenField, given: GivenFields): string {
-  const nth = given.get(field.name)!.indexOf(field);
+  const alike = given
+    .get(field.name)!
+    .filter(({ measured }) => (measured === undefined) === (field.measured === undefined));
+  const nth = alike.indexOf(field);
   return nth === 0 ? field.name : `${field.name}_${nth + 1}`;
 }
 
 function isCut(field: GivenField, used: ReadonlySet<string>, given: GivenFields): boolean {
   if (!field.quantity.spread || !LAW_ROWS.has(field.name)) return false;
   if (field.name === 'g_os') return given.has('lambda');
-  return !used.has(field.name);
+  return !used.has(field.name) || isShadowed(field, given);
+}
+
+/** Whether a bench gives this row as well, which then is the law's own. */
+export function isShadowed(field: GivenField, given: GivenFields): boolean {
+  return !field.measured && given.get(field.name)![0]!.measured !== undefined;
 }
 
 /** What a row reads on the specimen. */
-function readingOf(
+export function readingOf(
   field: GivenField,
   family: Family,
   channel: 1 | -1,

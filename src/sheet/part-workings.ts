@@ -56,12 +56,26 @@ export function partWorkings(
     steps[0] = { ...steps[0], sentence: `${routeName(law.used.route)} settles the law.${frame}${reading}` };
   }
   return [
+    ...measuredSteps(constants),
     ...steps,
     ...slope(constants),
     ...fittedLead(law, constants, frame),
     ...rows(constants),
     ...comparisons(law, read, constants),
   ];
+}
+
+/** What is taken from a bench, with its standard error. */
+function measuredSteps(c: LawInHand): WorkingStep[] {
+  return [...c.given.values()].flat().flatMap(({ name, handle, kind, measured }): WorkingStep[] => {
+    if (!measured) return [];
+    const value = c.read(handle);
+    const { formula, error } = measured;
+    const path = formula.replace(/^-/, '');
+    const operands = [operand(path, formula === path ? value : -value, kind)];
+    const sentence = error === null ? '' : `Standard error ${formatValue(error, kind, { digits: 2 }).text}.`;
+    return [{ name, formula, operands, value, type: kind, as: null, sentence }];
+  });
 }
 
 /** beta and V_TO, each from the row that fixes it once the other is known. */
@@ -124,6 +138,7 @@ function fittedLead({ used }: PartLaw, c: LawInHand, frame: string): WorkingStep
 /** What the law gives for every row of data, beside what was written. */
 function rows(c: LawInHand): WorkingStep[] {
   return [...c.given.values()].flat().flatMap((field): WorkingStep[] => {
+    if (field.measured) return [];
     const shape = lawOf(field, c);
     if (!shape) return [];
     const step = { formula: shape.formula, operands: shape.operands };

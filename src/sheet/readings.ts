@@ -87,5 +87,7 @@ export function lineNow(node: Node, line: Line): Line {
   const { compiledTree, tree } = node;
   if (line === compiledTree.line) return tree.line;
   const field = compiledTree.fields.findIndex((candidate) => candidate.line === line);
-  return field >= 0 ? tree.fields[field]!.line : tree.line;
+  if (field >= 0) return tree.fields[field]!.line;
+  const row = compiledTree.rows.findIndex((candidate) => candidate.line === line);
+  return row >= 0 ? tree.rows[row]!.line : tree.line;
 }

@@ -74,6 +74,11 @@ export function createView(state: () => SheetState): SheetView {
       const { draft, slot } = node.compiled;
       return draft.stage!((handle) => slots[slot(handle)]!, node.fault === null);
     },
+    bench(name) {
+      const node = state().byName.get(name);
+      if (!node || node.fault || node.waitsFor) return null;
+      return node.compiled.draft.bench?.reading ?? null;
+    },
     sweep(plot, points) {
       const node = state().byName.get(plot);
       if (!node || node.fault || node.waitsFor) return null;

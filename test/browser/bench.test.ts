@@ -47,3 +47,66 @@ test('a pasted table is shown as it will stand, what was decided is said, and it
   await page.keyboard.press('Control+z');
   await expect.poll(() => cellOf(page, 'cell:M1', 'entry').count()).toBe(0);
 });
+
+const BATCH = [
+  ['s1', -2, 4],
+  ['s2', -1.9, 3.9],
+  ['s3', -2.1, 4.6],
+] as const;
+const GATES = [0, -0.5, -1, -1.5];
+
+/** A table as a spreadsheet of a country with decimal commas copies it. */
+const pastedBatch = [
+  'unit\tVGS (V)\tVDS (V)\tID (mA)',
+  ...BATCH.flatMap(([name, cutoff, current]) =>
+    GATES.map((vgs) => [name, vgs, 10, (current * (1 - vgs / cutoff) ** 2).toFixed(4)].join('\t').replace(/\./g, ',')),
+  ),
+].join('\n');
+
+/** Types lines at the end of the sheet, as its text. */
+async function append(page: Page, lines: string): Promise<void> {
+  await page.getByRole('button', { name: 'Text', exact: true }).click();
+  await page.getByRole('textbox', { name: 'Text of the sheet' }).focus();
+  await page.keyboard.press('Control+End');
+  await page.keyboard.insertText(lines);
+  await page.getByRole('button', { name: 'Sheet', exact: true }).click();
+}
+
+test('a pasted batch shows its fits, matches and resistors, and a stage computes with what it spreads over', async ({
+  page,
+  address,
+}) => {
+  const dialog = await openDialog(page, address);
+  await dialog.getByLabel('Table').fill(pastedBatch);
+  await expect.poll(() => dialog.getByText('12 rows, 3 specimens.').count()).toBe(1);
+  await dialog.getByRole('button', { name: 'Put in' }).click();
+  await append(
+    page,
+    '\n  lambda: 0 /V\n  match: pairs at I_D = 1 mA\n  fitting: I_D = 1 mA\nQ1 = n-JFET fitted to M1\nA1 = stage of Q1\n  gate: 1 Mohm to 0 V\n  drain: 1 kohm to 15 V\n  source: 1 kohm to 0 V\n',
+  );
+
+  await cellOf(page, 'cell:M1', 'name').click();
+  const workings = page.getByRole('region', { name: 'Workings' });
+  const rowsOf = (table: RegExp): Promise<string[]> =>
+    workings.getByRole('table', { name: table }).getByRole('row').allTextContents();
+  // s1: 4 mA at a cutoff of -2 V, so 1 mA at -1 V and 1 kohm.
+  await expect
+    .poll(() => rowsOf(/^R_S that sets each specimen to 1\.00 mA/))
+    .toContainEqual(expect.stringMatching(/^s1−1\.000 V1\.00 kΩ1 kΩ1\.00 mA$/));
+  expect((await rowsOf(/^The fitted square law/)).filter((row) => row.startsWith('s'))).toHaveLength(4);
+  expect(await rowsOf(/^Pairs by the difference/)).toHaveLength(2);
+  expect(await rowsOf(/^For the bench/)).toContainEqual(expect.stringMatching(/1 kΩ$/));
+  const figures = page.getByRole('region', { name: 'Figures' });
+  await figures.getByRole('img', { name: /^Bench M1: 12 readings and the fitted square law of 3 specimens/ }).waitFor();
+  await figures.getByRole('img', { name: /^What the readings of M1 differ from the law by/ }).waitFor();
+  await figures.getByRole('button', { name: 'keep in the sheet' }).first().click();
+  await expect.poll(() => cellOf(page, 'cell:F1', 'entry').textContent()).toBe('plot bench of M1');
+
+  // The median of the three cutoffs is -2 V, their least and largest are the ends.
+  const texts = (columns: readonly string[], key: string): Promise<(string | null)[]> =>
+    Promise.all(columns.map((column) => cellOf(page, key, column).textContent()));
+  await expect
+    .poll(() => texts(['low', 'nominal', 'high'], 'value:Q1.V_P'))
+    .toEqual([expect.stringMatching(/^−2\.1/), expect.stringMatching(/^−2/), expect.stringMatching(/^−1\.(9|89)/)]);
+  await expect.poll(() => cellOf(page, 'value:A1.I_D', 'nominal').textContent()).toMatch(/^1/);
+});

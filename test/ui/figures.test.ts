@@ -98,11 +98,18 @@ describe('the values beside a schematic', () => {
 });
 
 it('a plot is followed where it is a plane of the stage in hand', () => {
-  const followed = (stage: string): boolean[] => ['F1', 'F2', 'F3'].map((name) => isFollowed(sheet.cell(name), stage));
+  const followed = (stage: string): boolean[] =>
+    ['F1', 'F2', 'F3'].map((name) => isFollowed(sheet.cell(name), stage, null));
   expect([followed('A1'), followed('A2')]).toEqual([
     [true, true, false],
     [false, false, false],
   ]);
+});
+
+it('a plot of a bench is followed where that bench is selected', () => {
+  const measured = createSheet('F1 = plot bench of M1\nM1 = bench\n');
+  const followed = ['M1', 'M2', null].map((bench) => isFollowed(measured.cell('F1'), null, bench));
+  expect(followed).toEqual([true, false, false]);
 });
 
 describe('the title of a plot', () => {

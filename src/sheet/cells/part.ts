@@ -12,9 +12,11 @@ import { exampleAmount } from '../example-amount.ts';
 import type { LimitName } from '../interface.ts';
 import { PART_FIELDS } from '../part-fields.ts';
 import type { GivenField, GivenFields } from '../part-given.ts';
+import { comparedCautions, leadCautions, measuredComparisons } from '../measured-comparison.ts';
+import { measuredRows } from '../measured-rows.ts';
 import { partDevice } from '../part-device.ts';
 import { partLaw } from '../part-law.ts';
-import { fieldName, partSpread } from '../part-spread.ts';
+import { fieldName, isShadowed, partSpread } from '../part-spread.ts';
 import { partWorkings } from '../part-workings.ts';
 import { stop } from '../stop.ts';
 import { conditionsOf } from '../test-conditions.ts';
@@ -30,11 +32,10 @@ export function compilePartCell(context: CellContext): Draft {
   const { tree, builder } = context;
   const entry = tree.entry as PartEntry;
   const channel = entry.channel === 'n' ? 1 : -1;
-  const given = readFields(entry, context);
-  if (entry.fittedTo) {
-    context.look(entry.fittedTo.name);
-    context.later('A part that takes its numbers from a bench', entry.span, tree.line);
-  }
+  const written = readFields(entry, context);
+  const { given, assumptions: measured } = entry.fittedTo
+    ? measuredRows(entry, written, context)
+    : { given: written, assumptions: [] };
   const law = partLaw(entry, channel, given, context);
   const { device, statedTemperatureLaws, assumptions } = partDevice(entry.family, law, given, builder);
   const limits: Partial<Record<LimitName, Handle>> = {};
@@ -43,24 +44,31 @@ export function compilePartCell(context: CellContext): Draft {
     if (field) limits[name] = field.handle;
   }
   const fields = [...given.values()].flat();
+  const comparisons = entry.fittedTo ? measuredComparisons(entry, law, given, context) : [];
   return {
     ...EMPTY_DRAFT,
     offers: [
-      ...fields.map((field) => offerOf(field, fieldName(field, given))),
+      ...fields.filter((field) => !isShadowed(field, given)).map((field) => offerOf(field, fieldName(field, given))),
       ...law.forms.filter((form) => !given.has(form.name)),
     ],
     verify: (read) => verifyPart(entry, channel, fields, law.verify, read),
-    cautions: (read) => [...law.cautions(read), ...temperatureCautions(fields, device.T_nom, read)],
+    cautions: (read) => [
+      ...law.cautions(read),
+      ...temperatureCautions(fields, device.T_nom, read),
+      ...comparedCautions(comparisons, read),
+      ...(entry.fittedTo ? leadCautions(entry.fittedTo.name, written) : []),
+    ],
     assumptions: [
       ...fields.filter((field) => field.quantity.chosen).map((field) => chosenText(tree.name.name, field)),
       ...fields
         .filter((field) => field.quantity.fromZero)
         .map((field) => fromZeroText(`${tree.name.name}.${field.name}`)),
+      ...measured,
       ...law.assumptions,
       ...assumptions,
-    ].map((text) => text),
+    ],
     workings: (read) => partWorkings(tree.name.name, entry, given, law, read),
-    fields: (read) => fields.map((field) => fieldReading(field, read)),
+    fields: (read) => [...written.values()].flat().map((field) => fieldReading(field, read)),
     drawn: partSpread(entry.family, channel, law, given, builder),
     extra: { type: 'part', channel, family: entry.family, device, limits, statedTemperatureLaws },
   };

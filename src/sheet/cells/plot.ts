@@ -39,7 +39,6 @@ export function compilePlotCell(context: CellContext): Draft {
       if (!entry.over) stop('plot-range', `A ${figure} plot wants its range: over 10 Hz .. 1 MHz log.`, entry.span);
       context.later(`A ${figure} plot`, entry.span, tree.line);
     }
-    if (figure === 'bench') context.later('A plot of a bench', entry.span, tree.line);
     if (entry.over) range(entry, context);
     return EMPTY_DRAFT;
   }

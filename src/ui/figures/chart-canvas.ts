@@ -94,7 +94,8 @@ export function createChartCanvas(
     const path = new Path2D();
     // uPlot draws in a microtask: a plot that was replaced meanwhile may have lines that are no more.
     if (u !== plot) return path;
-    const { x, y } = picture.chart.curves[index - 1]!;
+    const { x, y, rings } = picture.chart.curves[index - 1]!;
+    if (rings === 'only') return path;
     let down = false;
     for (let at = 0; at < x.length; at++) {
       if (!Number.isFinite(y[at]!)) {

@@ -4,6 +4,7 @@ import { For, Show, createMemo } from 'solid-js';
 import type { Desk } from '../desk/index.ts';
 import { StandGroup } from '../corner/index.ts';
 import { Prose } from '../typeset/index.ts';
+import { BenchFigure, selectedBench } from './bench-figure.tsx';
 import { PlotFigure } from './plot-figure.tsx';
 import { StageFigure } from './stage-figure.tsx';
 import './figures.css';
@@ -39,8 +40,11 @@ export function FiguresPane(props: { readonly desk: Desk }) {
           <StandGroup desk={desk} />
         </Show>
       </header>
-      <Show when={desk.strayed() && desk.stage()}>
+      <Show when={desk.strayed() && selectedBench(desk) === null && desk.stage()}>
         {(stage) => <p class="figure-message">Still showing {stage()}: the selected line belongs to no stage.</p>}
+      </Show>
+      <Show when={selectedBench(desk)} keyed>
+        {(bench) => <BenchFigure desk={desk} bench={bench} />}
       </Show>
       <Show
         when={desk.stage()}

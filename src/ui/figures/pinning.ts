@@ -6,17 +6,20 @@ import { writePlot } from '../rows/index.ts';
 
 export type PlaneName = 'transfer' | 'output';
 
-/** Whether the sheet already has that plane of that stage as a plot cell. */
-export function isKept(cells: readonly CellReading[], plane: PlaneName, stage: string): boolean {
+/** Figures that stand on the page while their cell is selected. */
+type FollowedFigure = PlaneName | 'bench';
+
+/** Whether the sheet already has that figure of that cell as a plot cell. */
+export function isKept(cells: readonly CellReading[], figure: FollowedFigure, of: string): boolean {
   return cells.some(({ tree }) => {
-    return tree.entry.type === 'plot' && tree.entry.figure === plane && tree.entry.of?.name === stage;
+    return tree.entry.type === 'plot' && tree.entry.figure === figure && tree.entry.of?.name === of;
   });
 }
 
 /** Writes the plot cell behind the last one, else at the end of the sheet. */
-export function keepPlane(desk: Desk, plane: PlaneName, stage: string): void {
+export function keepFigure(desk: Desk, figure: FollowedFigure, of: string): void {
   const { document } = desk;
-  const { splices, name } = writePlot(`${plane} of ${stage}`, document.sheet);
-  document.edit(splices, `keep ${plane} of ${stage}`);
+  const { splices, name } = writePlot(`${figure} of ${of}`, document.sheet);
+  document.edit(splices, `keep ${figure} of ${of}`);
   desk.say(`${name} now stands in the sheet.`, { title: 'Undo', run: () => document.undo() });
 }

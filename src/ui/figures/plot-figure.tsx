@@ -7,6 +7,7 @@ import { createRested } from '../pace/index.ts';
 import type { Pace } from '../pace/index.ts';
 import { Prose } from '../typeset/index.ts';
 import { createBands } from './band-feed.ts';
+import { selectedBench } from './bench-figure.tsx';
 import { ChartView } from './chart-view.tsx';
 import { isFollowed, plotTitle } from './plot-title.ts';
 
@@ -18,7 +19,9 @@ export function PlotFigure(props: { readonly desk: Desk; readonly name: string }
   const { document } = props.desk;
   const [chosen, setChosen] = createSignal<boolean | null>(null);
   // What stands above already is folded until it is asked for.
-  const open = createMemo(() => chosen() ?? !isFollowed(document.cell(props.name), props.desk.stage()));
+  const open = createMemo(
+    () => chosen() ?? !isFollowed(document.cell(props.name), props.desk.stage(), selectedBench(props.desk)),
+  );
   const onToggle = (isOpen: boolean): void => {
     if (isOpen !== open()) setChosen(isOpen);
   };

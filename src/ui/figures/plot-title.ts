@@ -15,8 +15,11 @@ export function plotTitle(cell: CellReading | null): string {
   return `${entry.figure} of ${entry.of?.name ?? ''}`;
 }
 
-/** Whether a plot cell is a plane of the stage that the figures speak of. */
-export function isFollowed(cell: CellReading | null, stage: string | null): boolean {
+/** Whether a plot cell is a plane of the stage that the figures speak of, or shows the bench that is selected. */
+export function isFollowed(cell: CellReading | null, stage: string | null, bench: string | null): boolean {
   const entry = cell?.tree.entry;
-  return entry?.type === 'plot' && ['transfer', 'output'].includes(entry.figure) && entry.of?.name === stage;
+  if (entry?.type !== 'plot' || !entry.of) return false;
+  return entry.figure === 'bench'
+    ? entry.of.name === bench
+    : ['transfer', 'output'].includes(entry.figure) && entry.of.name === stage;
 }

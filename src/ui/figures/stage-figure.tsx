@@ -8,7 +8,7 @@ import { createBehindPaint } from '../pace/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { ChartView } from './chart-view.tsx';
 import { DrawingView } from './drawing-view.tsx';
-import { isKept, keepPlane } from './pinning.ts';
+import { isKept, keepFigure } from './pinning.ts';
 import type { PlaneName } from './pinning.ts';
 import { NO_VALUES, stageValues } from './stage-values.ts';
 import type { StageValue } from './stage-values.ts';
@@ -158,7 +158,7 @@ function PlaneHead(props: {
           type="button"
           class="quiet-button"
           title="Writes a plot cell, which the link and the record hold, too"
-          onClick={() => keepPlane(props.desk, props.plane, props.stage)}
+          onClick={() => keepFigure(props.desk, props.plane, props.stage)}
         >
           keep in the sheet
         </button>

@@ -31,6 +31,9 @@ export interface Folding {
 const TABLE: readonly Column[] = ['name', 'low', 'nominal', 'high', 'entry', 'source'];
 const PLAIN: readonly Column[] = ['name', 'entry', 'source'];
 
+/** A bench of more readings than these folds them. */
+const MOST_READINGS = 8;
+
 /** All rows of a block below its own line. */
 export function blockRows(
   cell: CellReading,
@@ -40,22 +43,62 @@ export function blockRows(
 ): PlacedRow[] {
   const { tree } = cell;
   const fields = fieldRows(cell);
-  const benchRows = tree.rows.map(({ line }, k): PlacedRow => {
-    const text = line.text.trim();
-    const row = emptyRow(`row:${cell.name}.${k + 1}`, 'bench-row');
-    const entry: RowEntry = { text, look: 'input' };
-    return {
-      line: line.index,
-      row: { ...row, cell: cell.name, inside: true, name: wordName(`${k + 1}`), entry, editable: ['entry'] },
-    };
-  });
-  if (cell.kind !== 'stage') return [...fields, ...benchRows, ...valueRows(cell, used, isFolded, spread)];
+  if (cell.kind !== 'stage')
+    return [...fields, ...benchRows(cell, isFolded), ...valueRows(cell, used, isFolded, spread)];
   const solved = cell.values.length > 0 && cell.fault === null && cell.waitsFor === null;
   const faulty = fields.some(({ row }) => row.fault !== null);
   const key = `wiring:${cell.name}`;
   const folded = !faulty && fields.length > 0 && isFolded(key, solved);
   const wiring = fields.length === 0 || faulty ? [] : [{ line: null, row: wiringRow(key, tree, !folded) }];
   return [...wiring, ...(folded ? [] : fields), ...valueRows(cell, used, isFolded, spread)];
+}
+
+/** The readings of a bench; a long table folds as long as nothing is wrong with it. */
+function benchRows(cell: CellReading, isFolded: Folding): PlacedRow[] {
+  const rows = cell.tree.rows.map(({ line }, k): PlacedRow => {
+    const row = emptyRow(`row:${cell.name}.${k + 1}`, 'bench-row');
+    const fault = isFaultHere(cell, line.index) ? cell.fault : null;
+    return {
+      line: line.index,
+      row: {
+        ...row,
+        cell: cell.name,
+        inside: true,
+        mark: fault ? 'broken' : row.mark,
+        markText: fault ? MARK_TEXT.broken : row.markText,
+        name: wordName(`${k + 1}`),
+        entry: { text: line.text.trim(), look: 'input' },
+        fault: fault ? rowFault(fault, line) : null,
+        cautions: cautionsAt(cell, line.index),
+        editable: ['entry'],
+      },
+    };
+  });
+  if (rows.length <= MOST_READINGS) return rows;
+  const key = `readings:${cell.name}`;
+  const closed = isFolded(key, cell.fault === null) && !rows.some(({ row }) => row.fault !== null);
+  return [{ line: null, row: readingsRow(key, cell, !closed) }, ...(closed ? [] : rows)];
+}
+
+function readingsRow(key: string, cell: CellReading, open: boolean): Row {
+  const count = cell.tree.rows.length;
+  return {
+    ...emptyRow(key, 'wiring'),
+    cell: cell.name,
+    inside: true,
+    markText: 'readings',
+    name: wordName('readings', `readings of ${cell.name}`),
+    entry: { text: `${count} rows`, look: 'words' },
+    source: { text: `${open ? 'fold' : 'unfold'} ${count} lines`, note: '', look: 'words' },
+    cautions: open ? [] : cell.tree.rows.flatMap(({ line }) => cautionsAt(cell, line.index)),
+    fold: { key, open },
+  };
+}
+
+/** What is said of a line below the cell's own. */
+function cautionsAt(cell: CellReading, line: number): string[] {
+  if (line === cell.tree.line.index) return [];
+  return cell.cautions.filter((caution) => caution.line === line).map((caution) => caution.text);
 }
 
 function fieldRows(cell: CellReading): PlacedRow[] {
@@ -92,9 +135,7 @@ function fieldRow(key: string, field: FieldTree, cell: CellReading): Row {
     turns: isInput && table?.value !== undefined && table?.value !== null,
     source: shownSource(field.source, field.note, isInput),
     fault: message ? rowFault(message, line) : null,
-    cautions: cell.cautions
-      .filter((caution) => caution.line === line.index && line.index !== cell.tree.line.index)
-      .map((caution) => caution.text),
+    cautions: cautionsAt(cell, line.index),
     editable: table !== null && message === null ? TABLE : PLAIN,
   };
 }

@@ -6,6 +6,9 @@ import type { Entry, Expr, FieldBody, LineTree, SheetTree } from '../../language
 import type { CellReading, OfferedReading } from '../../sheet/index.ts';
 
 const BIAS: ReadonlySet<string> = new Set(['I_D', 'V_GS', 'V_DS', 'margin', 'region']);
+const MEASURED: ReadonlySet<string> = new Set(['beta', 'V_TO', 'I_DSS', 'lambda']);
+/** What a part takes from a bench beside these. */
+const SUMMED_UP: ReadonlySet<string> = new Set(['I_DSS', 'tracking']);
 const LAW: ReadonlySet<string> = new Set(['beta', 'K', 'V_P', 'V_TO']);
 
 /** The paths that a line reads; a line that stays keeps its tree. */
@@ -49,10 +52,18 @@ export function splitValues(
     cell.kind === 'part' || cell.kind === 'point'
       ? cell.values.filter((value) => !isField(value.name, given))
       : cell.values;
-  const own = cell.kind === 'part' || cell.kind === 'another' ? LAW : BIAS;
+  const { entry } = cell.tree;
+  const isFitted = entry.type === 'part' && entry.fittedTo !== null;
   const isPinned = ({ name }: OfferedReading): boolean =>
-    own.has(name.slice(name.lastIndexOf('.') + 1)) || used.has(name);
+    (isFitted && SUMMED_UP.has(name)) || settles(cell.kind, name) || used.has(name);
   return { pinned: offered.filter(isPinned), folded: offered.filter((value) => !isPinned(value)) };
+}
+
+/** Of a FET in a stage by its own name; of a bench only what all its specimens come to. */
+function settles(kind: CellReading['kind'], name: string): boolean {
+  if (kind === 'bench') return MEASURED.has(name);
+  const own = kind === 'part' || kind === 'another' ? LAW : BIAS;
+  return own.has(name.slice(name.lastIndexOf('.') + 1));
 }
 
 /** Offered fields that repeat bear a number: `R_DSon_2`. */

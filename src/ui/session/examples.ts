@@ -1,6 +1,7 @@
 // The worked sheets that come with the program; the first opens at the first visit.
 
 import crevasse from '../../../public/examples/crevasse-listener.txt?raw';
+import pickups from '../../../public/examples/lute-pickups.txt?raw';
 import weir from '../../../public/examples/weir-gauge.txt?raw';
 
 interface Example {
@@ -9,7 +10,7 @@ interface Example {
 }
 
 /** In the order of the shelf. */
-export const EXAMPLES: readonly Example[] = [crevasse, weir].map((text) => ({
+export const EXAMPLES: readonly Example[] = [crevasse, weir, pickups].map((text) => ({
   text,
   title: /^# (.*)$/m.exec(text)?.[1] ?? 'Example',
 }));

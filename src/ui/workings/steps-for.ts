@@ -12,8 +12,13 @@ interface Steps {
 /** The workings of a cell; with a `value` first the steps that it rests on. */
 export function stepsFor(sheet: SheetView, cell: string, value: string | null): Steps {
   const steps = sheet.workings(cell);
-  const chain = value === null ? steps : chainTo(steps, value);
+  const chain = value === null ? wholeOf(steps, sheet.bench(cell)) : chainTo(steps, value);
   return chain.length === 0 || chain.length === steps.length ? { first: steps, all: [] } : { first: chain, all: steps };
+}
+
+/** Of a bench of several specimens what they come to together; the law of each is in a table, too. */
+function wholeOf(steps: readonly WorkingStep[], bench: ReturnType<SheetView['bench']>): readonly WorkingStep[] {
+  return bench && bench.specimens.length > 1 ? steps.filter(({ name }) => name !== 'I_D') : steps;
 }
 
 /** The last step of that name with all steps before it whose results it uses, directly or not. */

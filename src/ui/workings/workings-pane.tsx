@@ -9,6 +9,7 @@ import { createRested } from '../pace/index.ts';
 import type { Pace } from '../pace/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
 import { AnswerSection } from './answer-section.tsx';
+import { BenchSection } from './bench-section.tsx';
 import { CellLinks } from './cell-links.tsx';
 import { kindWords, valueWords } from './cell-words.ts';
 import { EndsTable } from './ends-table.tsx';
@@ -135,6 +136,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
         <AllSteps steps={steps().all} subject={name()} />
       </Show>
 
+      <BenchSection desk={props.desk} cell={props.cell} />
       <AnswerSection desk={props.desk} cell={props.cell} />
       <MendSection desk={props.desk} cell={props.cell} />
       <SpreadSection desk={props.desk} cell={props.cell} value={offered()} />
