@@ -50,3 +50,5 @@ export { pastedBench, readPastedRows } from './pasted-rows.ts';
 export { parseSheet } from './sheet.ts';
 export { partsOf, pathsOf, walkExpr } from './walk.ts';
 export { applySplices, invertSplices } from './splice.ts';
+export { cardLines, nameOfCard, readModelCards } from './model-card.ts';
+export { readCardNumeral } from './card-numeral.ts';

@@ -2,7 +2,7 @@
 
 import type { Command } from '../desk/index.ts';
 
-export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows';
+export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card';
 
 interface ShellActions {
   readonly show: (dialog: DialogName) => void;
@@ -42,6 +42,13 @@ export function shellCommands(actions: ShellActions): Command[] {
       keys: [],
       run: () => actions.show('rows'),
       insert: { words: 'measured points, pasted from a spreadsheet', group: 'part' },
+    },
+    {
+      id: 'model-card',
+      title: 'model card',
+      keys: [],
+      run: () => actions.show('card'),
+      insert: { words: 'a part from a pasted card of level 1', group: 'part' },
     },
     { id: 'help', title: 'Help', keys: ['F1'], run: () => actions.show('help') },
   ];
