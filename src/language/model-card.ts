@@ -196,7 +196,8 @@ function pairsOf(words: readonly Word[], faults: CardFault[]): { key: Word; valu
 function traps(parameter: string, written: string, suffix: string, field: string): string[] {
   if (suffix === 'm' && (field === 'r_s' || field === 'r_d'))
     return [`${parameter}=${written} is in milliohms: on a card M is milli, and MEG is mega.`];
-  if (suffix === 'f' && field.startsWith('C_')) return [`${parameter}=${written} is in femtofarads: on a card F is femto.`];
+  if (suffix === 'f' && field.startsWith('C_'))
+    return [`${parameter}=${written} is in femtofarads: on a card F is femto.`];
   if (suffix === 'm' && (field === 'W' || field === 'L'))
     return [`${parameter}=${written} is in millimetres: on a card M is milli, not the metre.`];
   return [];

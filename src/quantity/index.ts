@@ -47,3 +47,5 @@ export type { SeriesName } from './e-series.ts';
 export { SERIES, SERIES_NAMES } from './e-series.ts';
 export type { PreferredDirection } from './preferred.ts';
 export { nextPreferred, preferredValue } from './preferred.ts';
+export { dividerPairs } from './divider.ts';
+export type { DividerPair } from './divider.ts';

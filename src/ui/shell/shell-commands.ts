@@ -2,7 +2,7 @@
 
 import type { Command } from '../desk/index.ts';
 
-export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card';
+export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card' | 'divider';
 
 interface ShellActions {
   readonly show: (dialog: DialogName) => void;
@@ -49,6 +49,13 @@ export function shellCommands(actions: ShellActions): Command[] {
       keys: [],
       run: () => actions.show('card'),
       insert: { words: 'a part from a pasted card of level 1', group: 'part' },
+    },
+    {
+      id: 'divider-pair',
+      title: 'divider pair',
+      keys: [],
+      run: () => actions.show('divider'),
+      insert: { words: 'two preferred resistors for a voltage', group: 'quantity' },
     },
     { id: 'help', title: 'Help', keys: ['F1'], run: () => actions.show('help') },
   ];

@@ -21,6 +21,7 @@ import { HelpDialog } from './help-dialog.tsx';
 import { keepWords } from './keep-words.ts';
 import { cyclePane, focusPane, paneOf } from './panes.ts';
 import { CardDialog } from './card-dialog.tsx';
+import { DividerDialog } from './divider-dialog.tsx';
 import { RowsDialog } from './rows-dialog.tsx';
 import { ShareDialog } from './share-dialog.tsx';
 import { shellCommands } from './shell-commands.ts';
@@ -186,6 +187,9 @@ export function Shell(props: { readonly session: Session }) {
       </Show>
       <Show when={dialog() === 'card'}>
         <CardDialog desk={desk} onClose={() => setDialog(null)} />
+      </Show>
+      <Show when={dialog() === 'divider'}>
+        <DividerDialog desk={desk} onClose={() => setDialog(null)} />
       </Show>
       <Show when={dialog() === 'help'}>
         <HelpDialog desk={desk} onClose={() => setDialog(null)} />
