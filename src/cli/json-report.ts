@@ -7,7 +7,7 @@ import { siUnitText } from '../quantity/index.ts';
 import { checkText, shownCell, shownReading, workingsOf } from '../record/index.ts';
 import type { JudgedSpread } from '../record/index.ts';
 import type { SheetSpread, StandingDraw } from '../spread/index.ts';
-import type { CellKind, CellReading, Fault, Reading, Sheet } from '../sheet/index.ts';
+import type { BenchReading, CellKind, CellReading, Fault, Reading, Sheet } from '../sheet/index.ts';
 import { entryText } from './entry-text.ts';
 
 interface JsonValue {
@@ -55,6 +55,9 @@ interface JsonCell extends JsonValue {
   readonly error: JsonFault | null;
   /** Of inverse cells, where the sheet has spread: the share of builds with just one answer. */
   readonly answered?: JsonYield;
+  /** Of benches that ask for them: groups that match, and resistors for a current. */
+  readonly match?: NonNullable<BenchReading['match']>['groups'];
+  readonly fitting?: NonNullable<BenchReading['fitting']>['table'];
   /** Of parts, points, stages and benches, by value name. */
   readonly values?: Readonly<Record<string, JsonValue>>;
 }
@@ -140,6 +143,7 @@ function jsonCell(sheet: Sheet, cell: CellReading, spread: SheetSpread | null): 
     cell.kind === 'point' ||
     cell.kind === 'stage' ||
     cell.kind === 'bench';
+  const bench = sheet.bench(cell.name);
   const own = cell.reading === null ? null : jsonValue(cell.reading, shownCell(cell));
   const text = cell.check === null ? (own?.text ?? null) : checkText(cell);
   return {
@@ -152,6 +156,8 @@ function jsonCell(sheet: Sheet, cell: CellReading, spread: SheetSpread | null): 
     ...valueSpread(cell.name, spread),
     ...answeredShare(cell.name, spread),
     error: cell.fault === null ? null : jsonFault(sheet.tree.lines, cell.fault),
+    ...(bench?.match ? { match: bench.match.groups } : {}),
+    ...(bench?.fitting ? { fitting: bench.fitting.table } : {}),
     ...(offers
       ? {
           values: Object.fromEntries(

@@ -12,8 +12,12 @@ type Specimen = BenchReading['specimens'][number];
 const METER_DIGITS = 4;
 const DIFFERENCE_DIGITS = 2;
 
+function percent(share: number, rounding: 'nearest' | 'down' | 'up' = 'nearest'): string {
+  return formatValue(100 * share, PLAIN, { digits: 2, zeros: 'drop', rounding }).text;
+}
+
 /** One row for each specimen. */
-export function fitsTable({ specimens }: BenchReading): BenchTable {
+export function fitsTable({ specimens, kept }: BenchReading): BenchTable {
   const hasNames = specimens.some(({ name }) => name !== '');
   const hasCurrent = specimens.some(({ I_DSS }) => I_DSS > 0);
   const isFree = specimens.some(({ errors }) => errors.exponent !== null);
@@ -54,7 +58,10 @@ export function fitsTable({ specimens }: BenchReading): BenchTable {
       : []),
   ]);
   const slope = given === null ? '' : ` lambda is ${formatValue(given, RECIPROCAL_VOLTAGE, { zeros: 'drop' }).text}.`;
-  const caption = `The fitted square law${hasNames ? ' of each specimen' : ''}; ± is one standard error.${slope}`;
+  const share = kept
+    ? ` ${kept.count} of ${kept.of} are kept, ${percent(kept.count / kept.of)} %; of a batch from which they were taken at random it would be ${percent(kept.low, 'down')} to ${percent(kept.high, 'up')} %.`
+    : '';
+  const caption = `The fitted square law${hasNames ? ' of each specimen' : ''}; ± is one standard error.${slope}${share}`;
   return { name: 'fits', caption, columns, rows };
 }
 

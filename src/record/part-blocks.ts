@@ -23,14 +23,17 @@ const COLUMNS = [
 export function partBlocks(cell: CellReading, sheet: Sheet): readonly Block[] {
   if (cell.fault !== null) return [enteredTable(cell, sheet, ['row', 'as entered'])];
   const readings = new Map(cell.fields.map((field) => [field.line, field]));
-  const rows = cell.tree.fields.map((field) => fieldRow(field, readings.get(field.line.index) ?? null, cell, sheet));
+  const rows = [
+    ...cell.measured.map((reading) => measuredRow(reading, cell)),
+    ...cell.tree.fields.map((field) => fieldRow(field, readings.get(field.line.index) ?? null, cell, sheet)),
+  ];
   const table: readonly Block[] = rows.length === 0 ? [] : [{ type: 'table', name: 'part', columns: COLUMNS, rows }];
   return [...table, ...offeredBlocks(cell)];
 }
 
 /** What a part, point or stage offers beyond what was written in it, and why some of it has no value. */
 export function offeredBlocks(cell: CellReading): readonly Block[] {
-  const written = new Set(cell.fields.map((field) => field.name));
+  const written = new Set([...cell.fields, ...cell.measured].map((field) => field.name));
   const offered = cell.values.filter((value) => !written.has(value.name));
   if (cell.fault !== null || offered.length === 0) return [];
   const known = offered.filter(({ value }) => value !== null);
@@ -68,11 +71,22 @@ function fieldRow(field: FieldTree, reading: FieldReading | null, cell: CellRead
     const entry: Inline = { type: 'entry', text: typed(field.line, field.body.span) };
     return { mark: null, cells: [label, EMPTY_CELL, EMPTY_CELL, EMPTY_CELL, { content: [entry] }, origin] };
   }
-  const [low, nominal, high] = inputCells(reading, reading);
-  const isNegative = typeof reading.value === 'number' && reading.value < 0;
-  const [min, max] = isNegative ? [high, low] : [low, high];
   const condition: Cell = { content: conditionInlines(field.body.conditions) };
-  return { mark: null, cells: [label, min, nominal, max, condition, origin] };
+  return { mark: null, cells: [label, ...asPrinted(reading), condition, origin] };
+}
+
+/** A row that the bench gives: the least, the median and the largest of what was measured. */
+function measuredRow(reading: FieldReading, { tree, name: part }: CellReading): TableRow {
+  const bench = tree.entry.type === 'part' ? (tree.entry.fittedTo?.name ?? '') : '';
+  const rounded = { ...reading, spread: reading.spread && ({ ...reading.spread, form: 'tolerance' } as const) };
+  const cells = [{ content: [name(reading.name, part)] }, ...asPrinted(rounded), EMPTY_CELL];
+  return { mark: null, cells: [...cells, { content: [...plainText('bench '), name(bench)] }] };
+}
+
+/** Least, nominal and largest; of negative quantities by magnitude. */
+function asPrinted(reading: FieldReading): [Cell, Cell, Cell] {
+  const [low, nominal, high] = inputCells(reading, reading);
+  return typeof reading.value === 'number' && reading.value < 0 ? [high, nominal, low] : [low, nominal, high];
 }
 
 /** `V_DS = 15 V, T = 25 °C`. */

@@ -107,6 +107,8 @@ export interface Draft {
   readonly workings: (read: Read) => readonly WorkingStep[];
   readonly check: ((read: Read) => CheckReading) | null;
   readonly fields: (read: Read) => readonly FieldDraft[];
+  /** Rows of a part that its bench gives. */
+  readonly measured: (read: Read) => readonly FieldDraft[];
   readonly spread: ((read: Read) => DeclaredSpread | null) | null;
   /** What is drawn in each build, and from what. */
   readonly drawn: SpreadDraft;
@@ -162,6 +164,7 @@ export const EMPTY_DRAFT: Draft = {
   workings: () => [],
   check: null,
   fields: () => [],
+  measured: () => [],
   spread: null,
   drawn: NO_SPREAD,
   reserve: null,

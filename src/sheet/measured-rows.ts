@@ -172,7 +172,8 @@ function sampleText(part: string, bench: string, { specimens, kept }: Measured):
   if (specimens === 1)
     return `${part}: one specimen was measured in ${bench}; what others of its kind spread over is not in it.`;
   const which = kept === specimens ? `the ${specimens} specimens` : `${kept} of the ${specimens} specimens`;
-  return `${part}: ${which} of ${bench} stand for all; their least and largest are taken as the limits.`;
+  const together = kept > 2 ? '' : ' So few do not say what goes together: their constants are taken as independent.';
+  return `${part}: ${which} of ${bench} stand for all; their least and largest are taken as the limits.${together}`;
 }
 
 function replacedText(part: string, bench: string, own: string, row: Row): string {

@@ -119,6 +119,8 @@ export interface CellReading {
   /** In the order of the table of offered values; empty for other kinds. */
   readonly values: readonly OfferedReading[];
   readonly fields: readonly FieldReading[];
+  /** Rows of a part that come from the bench it is fitted to; their line is that of the part. */
+  readonly measured: readonly FieldReading[];
   readonly check: CheckReading | null;
   /** Entry is one number, with or without spread. */
   readonly isInput: boolean;

@@ -1,8 +1,8 @@
 // What others read of a cell, made from its compiled form and the slots as they stand.
 
 import type { Line, Message, Span } from '../language/index.ts';
-import type { Placed, Read } from './draft.ts';
-import type { CellReading, Fault, OfferedReading, Reading } from './model.ts';
+import type { FieldDraft, Placed, Read } from './draft.ts';
+import type { CellReading, Fault, FieldReading, OfferedReading, Reading } from './model.ts';
 import type { Node } from './node.ts';
 import { readable } from './workings.ts';
 
@@ -37,6 +37,7 @@ export function readCell(node: Node, nodes: readonly Node[], slot: (index: numbe
       missing: missing ? faultAt(missing, tree.line) : null,
     };
   });
+  const placed = (field: FieldDraft): FieldReading => ({ ...field, line: present(field.line).index });
   const names = (indices: readonly number[]): string[] => indices.map((i) => nodes[i]!.tree.name.name);
   return {
     name: tree.name.name,
@@ -46,7 +47,8 @@ export function readCell(node: Node, nodes: readonly Node[], slot: (index: numbe
     waitsFor: node.waitsFor,
     reading: own,
     values,
-    fields: alive ? draft.fields(read).map((field) => ({ ...field, line: present(field.line).index })) : [],
+    fields: alive ? draft.fields(read).map(placed) : [],
+    measured: alive ? draft.measured(read).map(placed) : [],
     check: alive && draft.check ? draft.check(read) : null,
     isInput: draft.isInput,
     spread: alive && draft.spread ? draft.spread(read) : null,

@@ -23,6 +23,20 @@ describe('the JSON report', () => {
     });
   });
 
+  it('has what a bench found, what matches in it, and the table of resistors', () => {
+    const rows = [-2, -1.9].flatMap((cutoff, k) =>
+      [0, -0.5, -1].map((vgs) => `  s${k + 1}, ${vgs}, ${(vgs - cutoff) ** 2}`),
+    );
+    const { cells } = report(
+      `M1 = bench\n  columns: unit, V_GS [V], I_D [mA]\n  V_DS: 10 V\n  lambda: 0 /V\n  match: pairs at I_D = 1 mA\n  fitting: I_D = 1 mA\n${rows.join('\n')}`,
+    );
+    const { values, match, fitting } = cells.M1!;
+    expect(values!['s2.V_TO']).toMatchObject({ value: expect.closeTo(-1.9, 6), unit: 'V' });
+    expect(values!['s1.R_S']).toMatchObject({ value: expect.closeTo(1000, 2), unit: 'ohm' });
+    expect(match).toMatchObject([{ difference: expect.closeTo(0.1, 6), members: [{ name: 's1' }, { name: 's2' }] }]);
+    expect(fitting!.map(({ R_S }) => R_S)).toEqual([910, 1000]);
+  });
+
   it('has the spread of a value, where its ends are, and the yield of a check', () => {
     const {
       cells,

@@ -18,8 +18,8 @@ P1 = point of Q1
 `;
 
 /** Completes at the `|` of a text in a cell of the sheet. */
-function at(key: string, column: Column, written: string, asked = false): Completion | null {
-  const sheet = createSheet(TEXT);
+function at(key: string, column: Column, written: string, asked = false, text = TEXT): Completion | null {
+  const sheet = createSheet(text);
   const rows = sheetRows(sheet, () => false);
   const row = rows.row(key)!;
   const caret = written.indexOf('|');
@@ -76,6 +76,15 @@ describe('in other places', () => {
   test('behind the equals sign stand kinds of cell, behind their words what they are of', () => {
     expect(offered(at('ghost:0', 'name', 'Q2 = n-|'))).toEqual(['n-JFET', 'n-MOSFET']);
     expect(offered(at('ghost:0', 'name', 'A1 = stage of |', true))).toEqual(['Q1']);
+  });
+
+  test('behind a kind of part stands what it may be fitted to, and below a bench what can be asked of it', () => {
+    const more = `${TEXT}M1 = bench\n  columns: V_GS [V], I_D [mA]\n`;
+    expect(offered(at('ghost:0', 'name', 'Q2 = n-JFET fi|', false, more))).toEqual(['fitted to ']);
+    expect(offered(at('ghost:0', 'name', 'Q2 = n-JFET fitted to |', true, more))).toEqual(['M1']);
+    expect(offered(at('ghost:0', 'name', 'F1 = plot bench of |', true, more))).toEqual(['M1']);
+    expect(offered(at('ghost:0', 'name', '  ma|', false, more))).toEqual(['match: ']);
+    expect(offered(at('ghost:0', 'name', '  col|', false, more))).toEqual([]);
   });
 
   test('in brackets and in the column of sources stand those used, latest first', () => {

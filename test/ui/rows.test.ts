@@ -61,6 +61,18 @@ describe('which rows there are', () => {
     expect(keysOf(rowsOf(`${PART}x_1 = Q1.g_fs0\n`))).toContain('value:Q1.g_fs0');
   });
 
+  test('the readings of a long bench are folded, and unfold by themselves around a fault', () => {
+    const bench = (readings: readonly string[]): string =>
+      `M1 = bench\n  columns: V_GS [V], I_D [mA]\n  V_DS: 10 V\n${readings.map((each) => `  ${each}\n`).join('')}`;
+    const readings = Array.from({ length: 12 }, (_, k) => `${-k / 8}, ${(2 - k / 8) ** 2}`);
+    const rows = rowsOf(bench(readings));
+    expect(rows.row('readings:M1')!.fold).toEqual({ key: 'readings:M1', open: false });
+    expect(rows.row('row:M1.12')).toBeNull();
+    expect(rowsOf(bench(readings.slice(0, 8))).row('row:M1.8')).not.toBeNull();
+    const broken = rowsOf(bench(readings.with(3, '1 A, 2')));
+    expect(broken.row('row:M1.4')!.fault?.text).toBe('V_GS is a voltage; 1 A is a current.');
+  });
+
   test('the wiring of a solved stage is folded, and unfolds by itself around a fault', () => {
     const rows = rowsOf(example);
     expect(rows.row('wiring:A1')!.fold).toEqual({ key: 'wiring:A1', open: false });

@@ -96,6 +96,8 @@ export interface FittingReading {
 export interface BenchReading {
   readonly name: string;
   readonly channel: 1 | -1;
+  /** How many are kept, and which share of a whole batch would be, with its exact interval at 95 %; null where all are kept unasked. */
+  readonly kept: { readonly count: number; readonly of: number; readonly low: number; readonly high: number } | null;
   readonly specimens: readonly SpecimenReading[];
   readonly match: MatchReading | null;
   readonly fitting: FittingReading | null;

@@ -3,7 +3,7 @@
 
 import { channelCurrent } from '../../fet/index.ts';
 import { fitLaw } from '../../measured/index.ts';
-import type { LawFit } from '../../measured/index.ts';
+import type { LawFit, Points } from '../../measured/index.ts';
 import { formatValue, VOLTAGE } from '../../quantity/index.ts';
 import { stop } from '../stop.ts';
 import type { SpecimenReading } from './bench-reading.ts';
@@ -18,17 +18,40 @@ export interface FittedSpecimen {
   readonly reading: SpecimenReading;
 }
 
+/** The laws of a specimen, and what they were found from. */
+interface Laws {
+  readonly points: Points;
+  readonly asked: string;
+  readonly fit: LawFit;
+  readonly free: LawFit | null;
+}
+
+/** By the tree of a specimen's first row, which stays as long as its line does: an edit elsewhere in the table fits nothing again. */
+const FOUND = new WeakMap<object, Laws>();
+
 /** Fits every specimen; stops at the first that no law fits. */
 export function fitSpecimens({ channel, specimens }: BenchRows, settings: BenchSettings): FittedSpecimen[] {
+  const { lambda, exponent } = settings;
+  const asked = `${channel} ${lambda} ${exponent}`;
   return specimens.map((specimen) => {
-    const { lambda } = settings;
-    const fit = fitted(specimen, fitLaw(specimen.points, { channel, exponent: 'square', lambda }));
-    const free =
-      settings.exponent === 'free'
-        ? fitted(specimen, fitLaw(specimen.points, { channel, exponent: 'free', lambda }))
-        : null;
+    const { points } = specimen;
+    const key = specimen.rows[0]!.values;
+    let laws = FOUND.get(key);
+    if (!laws || laws.asked !== asked || !isSame(laws.points, points)) {
+      const fit = fitted(specimen, fitLaw(points, { channel, exponent: 'square', lambda }));
+      const free = exponent === 'free' ? fitted(specimen, fitLaw(points, { channel, exponent, lambda })) : null;
+      laws = { points, asked, fit, free };
+      FOUND.set(key, laws);
+    }
+    const { fit, free } = laws;
     return { specimen, fit, free, reading: readingOf(specimen, fit, free, settings) };
   });
+}
+
+function isSame(a: Points, b: Points): boolean {
+  return (['V_GS', 'V_DS', 'I_D'] as const).every(
+    (name) => a[name].length === b[name].length && a[name].every((value, i) => value === b[name][i]),
+  );
 }
 
 function fitted({ name, rows }: BenchSpecimen, found: ReturnType<typeof fitLaw>): LawFit {

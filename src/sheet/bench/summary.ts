@@ -1,8 +1,15 @@
 // What a bench comes to as a whole: one specimen's constants with their standard errors, or what several spread over.
 
+import { binomialInterval } from '../../numeric/index.ts';
 import { summarise } from '../../measured/index.ts';
+import type { BenchReading } from './bench-reading.ts';
 import type { FittedSpecimen } from './fits.ts';
 import type { Measured } from './measured.ts';
+
+/** The share that is kept, and that of a whole batch from which these were taken at random. */
+export function keptShare({ kept, specimens }: Measured): NonNullable<BenchReading['kept']> {
+  return { count: kept, of: specimens, ...binomialInterval(kept, specimens) };
+}
 
 /** The numbers that parts take and formulas read, of the specimens that are kept. */
 export function measuredOf(channel: 1 | -1, specimens: readonly FittedSpecimen[]): Measured {

@@ -10,7 +10,7 @@ import { matchReading } from '../bench/matching.ts';
 import { benchOffers } from '../bench/offers.ts';
 import { benchRows } from '../bench/rows.ts';
 import { benchSettings } from '../bench/settings.ts';
-import { measuredOf } from '../bench/summary.ts';
+import { keptShare, measuredOf } from '../bench/summary.ts';
 import { benchWorkings } from '../bench/workings.ts';
 import { EMPTY_DRAFT } from '../draft.ts';
 import type { CellContext, Draft } from '../draft.ts';
@@ -25,6 +25,7 @@ export function compileBenchCell({ tree, builder }: CellContext): Draft {
   const reading = {
     name: tree.name.name,
     channel: rows.channel,
+    kept: settings.keep.length === 0 ? null : keptShare(measured),
     specimens: specimens.map((each) => each.reading),
     match: settings.match && matchReading(specimens, settings.match),
     fitting: settings.fitting && fittingReading(rows.channel, specimens, settings.fitting),

@@ -69,6 +69,7 @@ export function compilePartCell(context: CellContext): Draft {
     ],
     workings: (read) => partWorkings(tree.name.name, entry, given, law, read),
     fields: (read) => [...written.values()].flat().map((field) => fieldReading(field, read)),
+    measured: (read) => fields.filter(({ measured: from }) => from).map((field) => fieldReading(field, read)),
     drawn: partSpread(entry.family, channel, law, given, builder),
     extra: { type: 'part', channel, family: entry.family, device, limits, statedTemperatureLaws },
   };

@@ -13,6 +13,7 @@ import {
   functionSuggestions,
   kindSuggestions,
   nameSuggestions,
+  partSuggestions,
   placeSuggestions,
   sourceSuggestions,
   unitSuggestions,
@@ -91,9 +92,11 @@ function entryContext(before: string, place: EditPlace, self: string | null, she
   if (place.row.type === 'field' && cell) return fieldContext(before, place.row.name?.text ?? '', cell, place, sheet);
   const of = /^\s*(stage|point|another|plot \w+)\s+(?:of\s+)?(?:.*[=,]\s*)?([\w.]*)$/.exec(before);
   if (of && /\b(?:of|another)\s/.test(before)) {
-    const kinds: readonly CellReading['kind'][] = of[1]!.startsWith('plot') ? ['stage', 'point'] : ['part', 'another'];
-    return { token: of[2]!, items: cellSuggestions(sheet, kinds), expected: null };
+    return { token: of[2]!, items: cellSuggestions(sheet, subjectsOf(of[1]!)), expected: null };
   }
+  const part = /^\s*[np]-(?:JFET|MOSFET)\s+(?:fitted\s+to\s+([\w.]*)|(\w*))$/.exec(before);
+  if (part?.[1] !== undefined) return { token: part[1], items: cellSuggestions(sheet, ['bench']), expected: null };
+  if (part) return { token: part[2]!, items: partSuggestions(), expected: null };
   // The word log behind a range is complete in itself.
   if (/\bover\b.*\.\..*\s(?:l|lo|log)$/.test(before)) return null;
   const unit = units(before, place, sheet);
@@ -106,6 +109,12 @@ function entryContext(before: string, place: EditPlace, self: string | null, she
     items: [...(start ? kindSuggestions() : []), ...nameSuggestions(sheet, self), ...functionSuggestions()],
     expected: expectedKind(before.slice(0, before.length - token.length), place, sheet),
   };
+}
+
+/** What a figure shows, or what a point, a stage or a further piece is made of. */
+function subjectsOf(word: string): readonly CellReading['kind'][] {
+  if (/^plot\s+bench/.test(word)) return ['bench'];
+  return word.startsWith('plot') ? ['stage', 'point'] : ['part', 'another'];
 }
 
 function fieldContext(

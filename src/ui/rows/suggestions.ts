@@ -80,12 +80,19 @@ const KINDS: readonly (readonly [text: string, meaning: string])[] = [
   ['another ', 'a further piece of the same kind'],
   ['plot transfer of ', 'device curve with the bias line'],
   ['plot output of ', 'family of curves with the load line'],
+  ['plot bench of ', 'readings with the fitted laws'],
   ['bench', 'measured points of real specimens'],
 ];
 
 /** What a cell can be. */
 export function kindSuggestions(): Suggestion[] {
   return KINDS.map(([text, meaning]) => ({ text, label: text.trim(), value: '', meaning, kind: null }));
+}
+
+/** Behind a kind of part. */
+export function partSuggestions(): Suggestion[] {
+  const meaning = 'takes its law from what the specimens of a bench spread over';
+  return [{ text: 'fitted to ', label: 'fitted to', value: '', meaning, kind: null }];
 }
 
 /** The sources used so far, those nearest above the line first, then the words that stand for one. */
@@ -124,9 +131,11 @@ export function fieldSuggestions(cell: CellReading): Suggestion[] {
         ? STAGE_LINES
         : entry.type === 'point'
           ? POINT_LINES
-          : [];
+          : entry.type === 'bench'
+            ? BENCH_LINES
+            : [];
   return fields
-    .filter(([name]) => !present.has(name))
+    .filter(([name]) => !present.has(name) || name === 'keep')
     .map(([name, meaning]) => ({ text: `${name}: `, label: name, value: '', meaning, kind: null }));
 }
 
@@ -161,6 +170,17 @@ const POINT_LINES: readonly (readonly [string, string])[] = [
   ['V_GS', 'Gate to source voltage.'],
   ['V_DS', 'Drain to source voltage.'],
   ['V_SB', 'Source to bulk voltage, where it is not 0.'],
+];
+
+const BENCH_LINES: readonly (readonly [string, string])[] = [
+  ['columns', 'what the rows hold: unit, V_GS [V], I_D [mA], V_DS [V]'],
+  ['V_DS', 'the drain voltage of all rows, where no column has it'],
+  ['lambda', 'taken as it is, not fitted'],
+  ['exponent', 'free: fitted beside the square law'],
+  ['R_thJA', 'finds readings that heated the specimen'],
+  ['keep', 'which specimens count: V_P in -2 V .. -1.2 V'],
+  ['match', 'pairs or quads that differ least: pairs at I_D = 1 mA'],
+  ['fitting', 'the source resistor of each for a current: I_D = 1 mA'],
 ];
 
 function placeMeaning(text: string): string {

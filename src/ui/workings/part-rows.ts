@@ -21,30 +21,35 @@ export interface FormRow {
 
 const DIGITS = 4;
 
-/** One row for each field that is a number. */
+/** One row for each field that is a number, behind those that come from a bench. */
 export function partRows(cell: CellReading, sheet: SheetView): readonly PartRow[] {
-  return cell.fields.map((field) => {
+  const { entry } = cell.tree;
+  const bench = entry.type === 'part' && entry.fittedTo ? `bench ${entry.fittedTo.name}` : '';
+  const measured = cell.measured.map((field) => ({ name: field.name, ...numbersOf(field), source: bench }));
+  const written = cell.fields.map((field) => {
     const tree = cell.tree.fields.find(({ line }) => line.index === field.line);
     const source = tree ? sourceWords(tree, sheet.tree.lines) : null;
     return { name: field.name, ...numbersOf(field), source: source ?? (field.isInput ? 'no source yet' : '') };
   });
+  return [...measured, ...written];
 }
 
 /** What a part or point offers beyond what was given, as far as it has a value. */
 export function formRows(cell: CellReading): readonly FormRow[] {
-  const given = new Set(cell.fields.map(({ name }) => name));
+  const given = new Set([...cell.fields, ...cell.measured].map(({ name }) => name));
   return cell.values.flatMap((offered) => {
     const value = shownReading(offered);
     return value === null || given.has(offered.name) ? [] : [{ name: offered.name, value, sentence: offered.sentence }];
   });
 }
 
-function numbersOf({ value, type, as, spread }: FieldReading): Pick<PartRow, 'low' | 'nominal' | 'high'> {
+function numbersOf({ value, type, as, spread, isInput }: FieldReading): Pick<PartRow, 'low' | 'nominal' | 'high'> {
   if (typeof value !== 'number' || typeof type === 'string' || Number.isNaN(value)) {
     return { low: '', nominal: value === null ? '' : String(value), high: '' };
   }
   if (spread === null) {
-    return { low: '', nominal: formatValue(value, type, { unit: as, digits: 'all' }).text, high: '' };
+    const digits = isInput ? 'all' : DIGITS;
+    return { low: '', nominal: formatValue(value, type, { unit: as, digits, zeros: 'drop' }).text, high: '' };
   }
   const { low, nominal, high } = formatRow({ low: spread.low, nominal: value, high: spread.high }, type, {
     unit: as,
