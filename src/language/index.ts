@@ -52,3 +52,4 @@ export { partsOf, pathsOf, walkExpr } from './walk.ts';
 export { applySplices, invertSplices } from './splice.ts';
 export { cardLines, nameOfCard, readModelCards } from './model-card.ts';
 export { readCardNumeral } from './card-numeral.ts';
+export { partsOfText, partText, renamedPart } from './part-text.ts';

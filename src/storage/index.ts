@@ -20,3 +20,5 @@ export { joinTabs } from './tabs.ts';
 export { fileName, openFile, saveFile } from './file.ts';
 export type { Written } from './share-link.ts';
 export { LINK_LIMIT, readLink, TEXT_LIMIT, writeLink } from './share-link.ts';
+export type { KeptPart, PartShelf, ShownPart } from './part-shelf.ts';
+export { createPartShelf } from './part-shelf.ts';

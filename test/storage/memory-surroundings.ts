@@ -101,7 +101,7 @@ function undoneBehindPuts(objects: IDBObjectStore): IDBObjectStore {
       if (name === 'put') {
         return (value: unknown, key: IDBValidKey[]) => {
           target.put(value, key);
-          if (key[0] === 'head') target.transaction.abort();
+          if (key[0] === 'head' || key[0] === 'part') target.transaction.abort();
         };
       }
       const member = Reflect.get(target, name, target) as unknown;

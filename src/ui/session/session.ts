@@ -7,6 +7,7 @@ import { batch, createEffect, createRoot, createSignal, on } from 'solid-js';
 import { sha256Hex } from '../../numeric/index.ts';
 import {
   createKeeper,
+  createPartShelf,
   createShelf,
   followPage,
   joinTabs,
@@ -17,7 +18,7 @@ import {
   titleOf,
   writeLink,
 } from '../../storage/index.ts';
-import type { Keeper, KeepState, Shelf, SheetRecord, StorageFault, Written } from '../../storage/index.ts';
+import type { Keeper, KeepState, PartShelf, Shelf, SheetRecord, StorageFault, Written } from '../../storage/index.ts';
 import { createSheetDocument } from '../document/index.ts';
 import type { SheetDocument } from '../document/index.ts';
 import { EXAMPLES } from './examples.ts';
@@ -30,6 +31,8 @@ export type Origin = 'shelf' | 'example' | 'received' | 'new';
 export interface Session {
   readonly document: SheetDocument;
   readonly shelf: Shelf;
+  /** The user's own parts. */
+  readonly parts: PartShelf;
   /** What is folded of the open sheet; kept with it. */
   readonly folds: Folds;
   /** True once a sheet is open. */
@@ -59,7 +62,9 @@ const OPEN_KEY = 'squarelaw-open';
 /** Opens the session: the sheet of a link, else the one this tab had open, else the latest, else the worked example. */
 export function createSession(page: SessionWindow): Session {
   const tabs = joinTabs();
-  const shelf = createShelf({ store: openStore(), tabs, now: Date.now, newId: randomId });
+  const store = openStore();
+  const shelf = createShelf({ store, tabs, now: Date.now, newId: randomId });
+  const parts = createPartShelf({ store, now: Date.now, newId: randomId });
   const document = createSheetDocument('');
   const folds = createFolds();
   const [ready, setReady] = createSignal(false);
@@ -164,6 +169,7 @@ export function createSession(page: SessionWindow): Session {
   return {
     document,
     shelf,
+    parts,
     folds,
     ready,
     origin,

@@ -2,7 +2,7 @@
 
 import type { Command } from '../desk/index.ts';
 
-export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card' | 'divider';
+export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card' | 'divider' | 'parts';
 
 interface ShellActions {
   readonly show: (dialog: DialogName) => void;
@@ -56,6 +56,13 @@ export function shellCommands(actions: ShellActions): Command[] {
       keys: [],
       run: () => actions.show('divider'),
       insert: { words: 'two preferred resistors for a voltage', group: 'quantity' },
+    },
+    {
+      id: 'parts',
+      title: 'part of your own',
+      keys: [],
+      run: () => actions.show('parts'),
+      insert: { words: 'kept before, from any sheet', group: 'part' },
     },
     { id: 'help', title: 'Help', keys: ['F1'], run: () => actions.show('help') },
   ];
