@@ -146,7 +146,7 @@ test('self-bias holds a band exactly where the line starts at or below 0 V', () 
     seen[holds ? 0 : 1]++;
     expect({ n, holds }).toEqual({ n, holds: line.V_GG <= 0 });
     const middle = middleResistor(points, 0);
-    if (holds) expect({ n, inside: middle >= low && middle <= high }).toEqual({ n, inside: true });
+    expect({ n, inside: middle >= low && middle <= high }).toEqual({ n, inside: holds });
     const { low: from, high: to } = gateWindow(points, middle);
     expect(Math.abs(from + to)).toBeLessThan(1e-9 * (1 + Math.abs(from)));
   }
