@@ -53,3 +53,5 @@ export { applySplices, invertSplices } from './splice.ts';
 export { cardLines, nameOfCard, readModelCards } from './model-card.ts';
 export { readCardNumeral } from './card-numeral.ts';
 export { partsOfText, partText, renamedPart } from './part-text.ts';
+export { dataSheetLine } from './data-sheet-row.ts';
+export type { DataSheetRow } from './data-sheet-row.ts';

@@ -2,7 +2,7 @@
 
 import type { Command } from '../desk/index.ts';
 
-export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card' | 'divider' | 'parts';
+export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card' | 'divider' | 'parts' | 'data-sheet';
 
 interface ShellActions {
   readonly show: (dialog: DialogName) => void;
@@ -42,6 +42,13 @@ export function shellCommands(actions: ShellActions): Command[] {
       keys: [],
       run: () => actions.show('rows'),
       insert: { words: 'measured points, pasted from a spreadsheet', group: 'part' },
+    },
+    {
+      id: 'data-sheet',
+      title: 'data sheet',
+      keys: [],
+      run: () => actions.show('data-sheet'),
+      insert: { words: 'a part from rows typed as printed', group: 'part' },
     },
     {
       id: 'model-card',

@@ -22,6 +22,7 @@ import { keepWords } from './keep-words.ts';
 import { cyclePane, focusPane, paneOf } from './panes.ts';
 import { CardDialog } from './card-dialog.tsx';
 import { DividerDialog } from './divider-dialog.tsx';
+import { DataSheetDialog } from './data-sheet-dialog.tsx';
 import { PartsDialog } from './parts-dialog.tsx';
 import { RowsDialog } from './rows-dialog.tsx';
 import { ShareDialog } from './share-dialog.tsx';
@@ -194,6 +195,9 @@ export function Shell(props: { readonly session: Session }) {
       </Show>
       <Show when={dialog() === 'parts'}>
         <PartsDialog desk={desk} shelf={session.parts} onClose={() => setDialog(null)} />
+      </Show>
+      <Show when={dialog() === 'data-sheet'}>
+        <DataSheetDialog desk={desk} onClose={() => setDialog(null)} />
       </Show>
       <Show when={dialog() === 'help'}>
         <HelpDialog desk={desk} onClose={() => setDialog(null)} />
