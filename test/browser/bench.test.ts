@@ -2,6 +2,7 @@
 
 import type { Locator, Page } from 'playwright-core';
 import { expect } from 'vitest';
+import { findings } from '../support/axe-findings.ts';
 import { test } from '../support/page-test.ts';
 
 const cellOf = (page: Page, key: string, column: string): Locator =>
@@ -109,4 +110,8 @@ test('a pasted batch shows its fits, matches and resistors, and a stage computes
     .poll(() => texts(['low', 'nominal', 'high'], 'value:Q1.V_P'))
     .toEqual([expect.stringMatching(/^−2\.1/), expect.stringMatching(/^−2/), expect.stringMatching(/^−1\.(9|89)/)]);
   await expect.poll(() => cellOf(page, 'value:A1.I_D', 'nominal').textContent()).toMatch(/^1/);
+
+  await cellOf(page, 'cell:M1', 'name').click();
+  await workings.getByText('all 12 readings').click();
+  expect(await findings(page)).toEqual([]);
 });

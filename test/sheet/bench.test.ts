@@ -5,6 +5,7 @@ import { pastedBench, readPastedRows } from '../../src/language/index.ts';
 import { createSheet } from '../../src/sheet/index.ts';
 import type { BenchReading, Sheet } from '../../src/sheet/index.ts';
 import { number } from './kinds.ts';
+import { createDraw } from '../support/counter-random.ts';
 import { benchText, lawCurrent, noiseFrom } from './measured-points.ts';
 import type { Place, Truth } from './measured-points.ts';
 
@@ -147,6 +148,20 @@ describe('what a bench warns of', () => {
   });
 });
 
+test('a bench warns where a specimen carries the current that is asked for only in another way', () => {
+  const readings = benchText('M1', TRUTHS.slice(0, 2), PLACES.slice(0, 6), {
+    fields: '  match: pairs at I_D = 4.5 mA, V_DS = 5 V\n  fitting: I_D = 1 mA, V_DS = 0.5 V\n',
+  });
+  const sheet = createSheet(readings);
+  expect(sheet.cautions().map(({ text, line }) => [text, line])).toEqual([
+    ['More than I_DSS is asked of s2 at 4.50 mA: V_GS lies beyond 0 V there, where the gate of a JFET conducts.', 2],
+    [
+      'A V_DS of 500 mV leaves s1, s2 ohmic at 1.00 mA, and the law of saturation is taken. Write a V_DS above V_DSsat.',
+      3,
+    ],
+  ]);
+});
+
 test('a free exponent is fitted beside the square law and leaves less', () => {
   const rows = [0, -0.4, -0.8, -1.2, -1.6].map((vgs) => `  ${vgs}, ${4e-3 * (1 + vgs / 2.1) ** 1.8}\n`).join('');
   const sheet = createSheet(
@@ -266,6 +281,24 @@ test.each([
   );
   expect(number(sheet, 'M1.beta')).toBe(number(typed, 'M1.beta'));
   expect(number(sheet, 'M1.V_TO')).toBe(number(typed, 'M1.V_TO'));
+});
+
+test('a bench that is edited line by line is what it would be at once', () => {
+  const next = createDraw(11);
+  const sheet = createSheet(benchText('M1', TRUTHS, PLACES.slice(0, 6), { fields: '  lambda: 0.012 /V\n' }));
+  for (let k = 0; k < 40; k++) {
+    const lines = sheet.tree.text.split('\n');
+    const at = 3 + Math.floor(next() * (lines.length - 4));
+    const how = next();
+    if (how < 0.3) lines.splice(at, 1);
+    else if (how < 0.6) lines.splice(at, 0, lines[3 + Math.floor(next() * (lines.length - 4))]!);
+    else if (how < 0.9) lines[at] = lines[at]!.replace(/, [^,]*$/, `, ${next() * 4e-3}`);
+    else lines[2] = `  lambda: ${0.01 + next() / 100} /V`;
+    sheet.update(lines.join('\n'));
+    const fresh = createSheet(lines.join('\n'));
+    const valuesOf = (each: Sheet): unknown => [each.error('M1')?.text ?? null, each.cell('M1')!.values];
+    expect(valuesOf(sheet), `edit ${k}`).toEqual(valuesOf(fresh));
+  }
 });
 
 test('a bench is fitted again only when its own lines change', () => {

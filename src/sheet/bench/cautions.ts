@@ -2,7 +2,8 @@
 
 import type { CellTree } from '../../language/index.ts';
 import { selfHeating } from '../../measured/index.ts';
-import { TEMPERATURE_DIFFERENCE, formatValue } from '../../quantity/index.ts';
+import { CURRENT, TEMPERATURE_DIFFERENCE, VOLTAGE, formatValue } from '../../quantity/index.ts';
+import { gateAt } from './fits.ts';
 import type { FittedSpecimen } from './fits.ts';
 import type { BenchSettings } from './settings.ts';
 
@@ -16,7 +17,42 @@ interface Found {
 
 /** Every caution of a bench. */
 export function benchCautions(specimens: readonly FittedSpecimen[], settings: BenchSettings): Found[] {
-  return specimens.flatMap((each) => [...doubts(each), ...heat(each, settings)]);
+  const { match, fitting } = settings;
+  const second = match?.I_second ? [{ ...match, I_D: match.I_second }] : [];
+  const asked = [...(match ? [match] : []), ...second, ...(fitting ? [fitting] : [])];
+  return [
+    ...specimens.flatMap((each) => [...doubts(each), ...heat(each, settings)]),
+    ...asked.flatMap((point) => beyond(specimens, point)),
+  ];
+}
+
+/** What is asked at a current that a specimen carries only in another way than is computed. */
+function beyond(
+  specimens: readonly FittedSpecimen[],
+  { I_D, V_DS, tree }: { readonly I_D: number; readonly V_DS: number; readonly tree: { readonly line: Found['line'] } },
+): Found[] {
+  const kept = specimens.filter(({ reading }) => reading.isKept);
+  const current = formatValue(I_D, CURRENT).text;
+  const namesOf = (which: (each: FittedSpecimen) => boolean): string =>
+    kept
+      .filter(which)
+      .map(({ specimen }) => specimen.name || 'the specimen')
+      .join(', ');
+  const forward = namesOf(({ fit, reading }) => reading.I_DSS > 0 && fit.channel * gateAt(fit, { I_D, V_DS }) > 0);
+  const ohmic = namesOf(({ fit }) => fit.channel * (gateAt(fit, { I_D, V_DS }) - fit.V_TO) > V_DS);
+  const drain = formatValue((kept[0]?.fit.channel ?? 1) * (V_DS || 0), VOLTAGE, { zeros: 'drop' }).text;
+  return [
+    ...(forward === ''
+      ? []
+      : [
+          `More than I_DSS is asked of ${forward} at ${current}: V_GS lies beyond 0 V there, where the gate of a JFET conducts.`,
+        ]),
+    ...(ohmic === ''
+      ? []
+      : [
+          `A V_DS of ${drain} leaves ${ohmic} ohmic at ${current}, and the law of saturation is taken. Write a V_DS above V_DSsat.`,
+        ]),
+  ].map((text) => ({ text, line: tree.line }));
 }
 
 function doubts({ specimen, fit, free }: FittedSpecimen): Found[] {

@@ -7,7 +7,7 @@ import type { Column } from '../desk/index.ts';
 import { inputMark, shownSource } from './cell-row.ts';
 import { isBroken, rowFault } from './faults.ts';
 import { innerName, labelText, wordName } from './names.ts';
-import { inputNumbers, NO_NUMBERS, typedUnit, valueFigure } from './numbers.ts';
+import { inputNumbers, measuredNumbers, NO_NUMBERS, typedUnit, valueFigure } from './numbers.ts';
 import type { Numbers } from './numbers.ts';
 import { conditionText, tableEntry } from './part-numbers.ts';
 import { numbersAt } from './row-spread.ts';
@@ -211,9 +211,16 @@ function valueRow(value: OfferedReading, cell: CellReading, spread: RowSpread | 
     markText: MARK_TEXT.computed,
     name: innerName(value.name, ownerText(cell)),
     entry: { text: valueWords(value), look: 'words' },
-    ...(numbersAt(`${cell.name}.${value.name}`, value, spread) ?? { nominal: valueFigure(value) }),
+    ...(numbersAt(`${cell.name}.${value.name}`, value, spread) ??
+      benchNumbers(value, cell) ?? { nominal: valueFigure(value) }),
     source: missing ? { text: missing.text, note: '', look: 'words' } : null,
   };
+}
+
+function benchNumbers(value: OfferedReading, { kind, values }: CellReading): Numbers | null {
+  if (kind !== 'bench') return null;
+  const end = (which: string): OfferedReading | undefined => values.find(({ name }) => name === value.name + which);
+  return measuredNumbers(value, end('_min'), end('_max'));
 }
 
 function moreRow(key: string, cell: CellReading, count: number, open: boolean): Row {

@@ -60,6 +60,17 @@ export function inputNumbers(
   };
 }
 
+/** The numbers of a bench: the median of its specimens between the least and the largest. */
+export function measuredNumbers(reading: Reading, low: Reading | undefined, high: Reading | undefined): Numbers | null {
+  const { value, type, as } = reading;
+  const ends = [low?.value, high?.value];
+  if (typeof value !== 'number' || typeof type === 'string') return null;
+  if (!ends.every((end) => typeof end === 'number') || ends[0] === ends[1]) return null;
+  const row = formatRow({ low: ends[0]!, nominal: value, high: ends[1]! }, type, { unit: as });
+  const nominal = valueFigure(reading);
+  return { low: endFigure(row.low, row.nominal), nominal, high: endFigure(row.high, row.nominal), bar: null };
+}
+
 /** The numbers of a computed value with its ends over the declared set; null where nothing moves it. */
 export function spreadNumbers(
   reading: Reading,
