@@ -5,7 +5,7 @@ import type { ValueKind } from '../quantity/index.ts';
 import type { BenchReading } from '../sheet/index.ts';
 import { byColumns, namesOf, number, quantity, word } from './bench-table.ts';
 import type { BenchTable } from './bench-table.ts';
-import { columnTexts, columnWithErrors } from './column-texts.ts';
+import { NONE, columnTexts, columnWithErrors } from './column-texts.ts';
 
 type Specimen = BenchReading['specimens'][number];
 
@@ -17,11 +17,11 @@ function percent(share: number, rounding: 'nearest' | 'down' | 'up' = 'nearest')
 }
 
 /** One row for each specimen. */
-export function fitsTable({ specimens, kept }: BenchReading): BenchTable {
+export function fitsTable({ specimens, kept, unfitted }: BenchReading): BenchTable {
   const hasNames = specimens.some(({ name }) => name !== '');
   const hasCurrent = specimens.some(({ I_DSS }) => I_DSS > 0);
   const isFree = specimens.some(({ errors }) => errors.exponent !== null);
-  const hasRejected = specimens.some(({ isKept }) => !isKept);
+  const hasRejected = unfitted.length > 0 || specimens.some(({ isKept }) => !isKept);
   const given = specimens.every(({ errors }) => errors.lambda === null) ? specimens[0]!.lambda : null;
   const all = (name: 'beta' | 'V_TO' | 'I_DSS' | 'lambda' | 'exponent', kind: ValueKind): string[] =>
     columnWithErrors(
@@ -62,7 +62,10 @@ export function fitsTable({ specimens, kept }: BenchReading): BenchTable {
     ? ` ${kept.count} of ${kept.of} are kept, ${percent(kept.count / kept.of)} %; of a batch from which they were taken at random it would be ${percent(kept.low, 'down')} to ${percent(kept.high, 'up')} %.`
     : '';
   const caption = `The fitted square law${hasNames ? ' of each specimen' : ''}; ± is one standard error.${slope}${share}`;
-  return { name: 'fits', caption, columns, rows };
+  const left = unfitted.map(({ name, readings }) =>
+    columns.map(({ title }) => ({ specimen: name, readings: String(readings), kept: 'no' })[title] ?? NONE),
+  );
+  return { name: 'fits', caption, columns, rows: [...rows, ...left] };
 }
 
 /** One row for each reading. */

@@ -44,6 +44,12 @@ describe('the tables of a bench', () => {
     );
   });
 
+  it('have a row without numbers for a specimen that no law fits', () => {
+    const text = sheet.tree.text.replace('Q1 =', '  s4, 0, 0\nQ1 =');
+    const { rows } = benchTables(createSheet(text).bench('M1')!)[0]!;
+    expect(rows.at(-1)).toEqual(['s4', '1', '–', '–', '–', '–', 'no']);
+  });
+
   it('have every reading with its region', () => {
     expect(table('readings').rows).toHaveLength(12);
     expect(table('readings').rows[1]).toEqual([

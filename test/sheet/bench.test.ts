@@ -301,6 +301,21 @@ test('a bench that is edited line by line is what it would be at once', () => {
   }
 });
 
+test('a dead specimen among others is left out, which is said, and counts as not kept', () => {
+  const text = benchText('M1', TRUTHS.slice(0, 3), PLACES.slice(0, 6), { fields: '  lambda: 0.012 /V\n' });
+  const sheet = createSheet(`${text}  s9, 0, 10, 0\n  s9, -1, 10, 0\nx = M1.s9.V_TO\n`);
+  expect(sheet.error('M1')).toBeNull();
+  expect(sheet.cautions().map(({ text: said, line }) => [said, line])).toEqual([
+    [expect.stringMatching(/^s9 is left out, since it cannot be fitted\. No reading carries current\./), 21],
+  ]);
+  expect(number(sheet, 'M1.share')).toBe(3 / 4);
+  expect(number(sheet, 'M1.V_TO')).toBe(number(createSheet(text), 'M1.V_TO'));
+  expect(sheet.error('x')).toMatchObject({
+    code: 'not-fitted',
+    text: expect.stringMatching(/No reading carries current/),
+  });
+});
+
 test('a bench is fitted again only when its own lines change', () => {
   const text = `R_1 = 1 kohm\n${benchText('M1', [S1], PLACES)}`;
   const sheet = createSheet(text);

@@ -99,6 +99,8 @@ export interface BenchReading {
   /** How many are kept, and which share of a whole batch would be, with its exact interval at 95 %; null where all are kept unasked. */
   readonly kept: { readonly count: number; readonly of: number; readonly low: number; readonly high: number } | null;
   readonly specimens: readonly SpecimenReading[];
+  /** Those that no law fits, which are left out. */
+  readonly unfitted: readonly { readonly name: string; readonly readings: number; readonly text: string }[];
   readonly match: MatchReading | null;
   readonly fitting: FittingReading | null;
 }

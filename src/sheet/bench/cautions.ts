@@ -4,7 +4,7 @@ import type { CellTree } from '../../language/index.ts';
 import { selfHeating } from '../../measured/index.ts';
 import { CURRENT, TEMPERATURE_DIFFERENCE, VOLTAGE, formatValue } from '../../quantity/index.ts';
 import { gateAt } from './fits.ts';
-import type { FittedSpecimen } from './fits.ts';
+import type { FittedSpecimen, UnfittedSpecimen } from './fits.ts';
 import type { BenchSettings } from './settings.ts';
 
 /** Rise of the junction in K from which a reading is not that of a cool specimen (common practice, no source). */
@@ -16,11 +16,19 @@ interface Found {
 }
 
 /** Every caution of a bench. */
-export function benchCautions(specimens: readonly FittedSpecimen[], settings: BenchSettings): Found[] {
+export function benchCautions(
+  specimens: readonly FittedSpecimen[],
+  unfitted: readonly UnfittedSpecimen[],
+  settings: BenchSettings,
+): Found[] {
   const { match, fitting } = settings;
   const second = match?.I_second ? [{ ...match, I_D: match.I_second }] : [];
   const asked = [...(match ? [match] : []), ...second, ...(fitting ? [fitting] : [])];
   return [
+    ...unfitted.map(({ specimen: { name, rows }, text }) => ({
+      text: `${name} is left out, since it cannot be fitted. ${text}`,
+      line: rows[0]!.line,
+    })),
     ...specimens.flatMap((each) => [...doubts(each), ...heat(each, settings)]),
     ...asked.flatMap((point) => beyond(specimens, point)),
   ];

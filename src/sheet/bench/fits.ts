@@ -18,6 +18,12 @@ export interface FittedSpecimen {
   readonly reading: SpecimenReading;
 }
 
+/** A specimen that has no law, and why. */
+export interface UnfittedSpecimen {
+  readonly specimen: BenchSpecimen;
+  readonly text: string;
+}
+
 /** The laws of a specimen, and what they were found from. */
 interface Laws {
   readonly points: Points;
@@ -29,23 +35,38 @@ interface Laws {
 /** By the tree of a specimen's first row, which stays as long as its line does: an edit elsewhere in the table fits nothing again. */
 const FOUND = new WeakMap<object, Laws>();
 
-/** Fits every specimen; stops at the first that no law fits. */
-export function fitSpecimens({ channel, specimens }: BenchRows, settings: BenchSettings): FittedSpecimen[] {
-  const { lambda, exponent } = settings;
+/** Fits every specimen; a dead one among others is left out. Stops where no law fits any. */
+export function fitSpecimens(
+  { channel, specimens }: BenchRows,
+  settings: BenchSettings,
+): { readonly fitted: readonly FittedSpecimen[]; readonly unfitted: readonly UnfittedSpecimen[] } {
+  const fitted: FittedSpecimen[] = [];
+  const unfitted: UnfittedSpecimen[] = [];
+  for (const specimen of specimens) {
+    const laws = lawsOf(specimen, channel, settings);
+    if ('text' in laws) unfitted.push({ specimen, text: laws.text });
+    else fitted.push({ specimen, ...laws, reading: readingOf(specimen, laws.fit, laws.free, settings) });
+  }
+  if (fitted.length === 0) unfit(unfitted[0]!);
+  return { fitted, unfitted };
+}
+
+function lawsOf(
+  { points, rows }: BenchSpecimen,
+  channel: 1 | -1,
+  { lambda, exponent }: BenchSettings,
+): Laws | { readonly text: string } {
   const asked = `${channel} ${lambda} ${exponent}`;
-  return specimens.map((specimen) => {
-    const { points } = specimen;
-    const key = specimen.rows[0]!.values;
-    let laws = FOUND.get(key);
-    if (!laws || laws.asked !== asked || !isSame(laws.points, points)) {
-      const fit = fitted(specimen, fitLaw(points, { channel, exponent: 'square', lambda }));
-      const free = exponent === 'free' ? fitted(specimen, fitLaw(points, { channel, exponent, lambda })) : null;
-      laws = { points, asked, fit, free };
-      FOUND.set(key, laws);
-    }
-    const { fit, free } = laws;
-    return { specimen, fit, free, reading: readingOf(specimen, fit, free, settings) };
-  });
+  const key = rows[0]!.values;
+  const known = FOUND.get(key);
+  if (known && known.asked === asked && isSame(known.points, points)) return known;
+  const fit = fitLaw(points, { channel, exponent: 'square', lambda });
+  const free = exponent === 'free' ? fitLaw(points, { channel, exponent, lambda }) : null;
+  if ('code' in fit) return fit;
+  if (free && 'code' in free) return free;
+  const laws = { points, asked, fit, free };
+  FOUND.set(key, laws);
+  return laws;
 }
 
 function isSame(a: Points, b: Points): boolean {
@@ -54,11 +75,11 @@ function isSame(a: Points, b: Points): boolean {
   );
 }
 
-function fitted({ name, rows }: BenchSpecimen, found: ReturnType<typeof fitLaw>): LawFit {
-  if (!('code' in found)) return found;
+function unfit({ specimen, text }: UnfittedSpecimen): never {
+  const { name, rows } = specimen;
   const [first] = rows;
   const span = { start: first!.values[0]!.span.start, end: first!.values.at(-1)!.span.end };
-  return stop('bench-fit', `${name === '' ? 'The bench' : name} cannot be fitted. ${found.text}`, span, first!.line);
+  return stop('bench-fit', `${name === '' ? 'The bench' : name} cannot be fitted. ${text}`, span, first!.line);
 }
 
 function readingOf(

@@ -47,6 +47,11 @@ export function benchOffers(reading: BenchReading, measured: Measured, builder: 
     offer('specimens', PLAIN, measured.specimens, 'Number of specimens.'),
     offer('share', PLAIN, measured.kept / measured.specimens, 'Share of the specimens that is kept.'),
     ...(isOne && only!.name === '' ? [] : reading.specimens.flatMap((specimen) => specimenOffers(specimen))),
+    ...reading.unfitted.flatMap(({ name, text }) =>
+      constants.map((constant) =>
+        offer(`${name}.${constant}`, CONSTANTS[constant][0], null, CONSTANTS[constant][1], text),
+      ),
+    ),
   ];
 
   function ends(name: Constant, { low, high }: Measured['beta']): OfferDraft[] {

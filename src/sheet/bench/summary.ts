@@ -11,12 +11,12 @@ export function keptShare({ kept, specimens }: Measured): NonNullable<BenchReadi
   return { count: kept, of: specimens, ...binomialInterval(kept, specimens) };
 }
 
-/** The numbers that parts take and formulas read, of the specimens that are kept. */
-export function measuredOf(channel: 1 | -1, specimens: readonly FittedSpecimen[]): Measured {
+/** The numbers that parts take and formulas read, of the specimens that are kept; so many more are `unfitted`. */
+export function measuredOf(channel: 1 | -1, specimens: readonly FittedSpecimen[], unfitted: number): Measured {
   const kept = specimens.filter(({ reading }) => reading.isKept);
-  const counts = { specimens: specimens.length, kept: kept.length };
+  const counts = { specimens: specimens.length + unfitted, kept: kept.length };
   const [{ fit, reading }] = kept as [FittedSpecimen];
-  if (specimens.length === 1) {
+  if (counts.specimens === 1) {
     const one = (nominal: number, error: number | null) => ({ nominal, low: null, high: null, error });
     return {
       channel,

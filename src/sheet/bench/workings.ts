@@ -14,7 +14,7 @@ export function benchWorkings(name: string, specimens: readonly FittedSpecimen[]
   const steps = specimens.map((each) => lawStep(each));
   const frame = measured.channel === -1 ? ' Voltages are mirrored into the frame of an n-channel FET.' : '';
   if (frame) steps[0] = { ...steps[0]!, sentence: `${steps[0]!.sentence}${frame}` };
-  if (specimens.length === 1) return steps;
+  if (measured.specimens === 1) return steps;
   const kept = specimens.filter(({ reading }) => reading.isKept);
   return [
     ...steps,
@@ -74,7 +74,7 @@ function median(
     value: nominal,
     type: kind,
     as: null,
-    sentence: `The median of ${kept.length} specimens, which lie from ${shown(low!, kind)} to ${shown(high!, kind)}.`,
+    sentence: `The median of ${kept.length} ${kept.length === 1 ? 'specimen' : 'specimens'}, which ${kept.length === 1 ? 'lies' : 'lie'} from ${shown(low!, kind)} to ${shown(high!, kind)}.`,
   };
 }
 

@@ -19,21 +19,22 @@ import type { CellContext, Draft } from '../draft.ts';
 export function compileBenchCell({ tree, builder }: CellContext): Draft {
   const settings = benchSettings(tree);
   const rows = benchRows(tree, benchColumns(tree, settings.V_DS !== null), settings.V_DS);
-  const specimens = fitSpecimens(rows, settings);
+  const { fitted: specimens, unfitted } = fitSpecimens(rows, settings);
   checkKept(specimens, settings);
-  const measured = measuredOf(rows.channel, specimens);
+  const measured = measuredOf(rows.channel, specimens, unfitted.length);
   const reading = {
     name: tree.name.name,
     channel: rows.channel,
     kept: settings.keep.length === 0 ? null : keptShare(measured),
     specimens: specimens.map((each) => each.reading),
+    unfitted: unfitted.map(({ specimen: { name, rows: own }, text }) => ({ name, readings: own.length, text })),
     match: settings.match && matchReading(specimens, settings.match),
     fitting: settings.fitting && fittingReading(rows.channel, specimens, settings.fitting),
   };
   return {
     ...EMPTY_DRAFT,
     offers: benchOffers(reading, measured, builder),
-    cautions: () => benchCautions(specimens, settings),
+    cautions: () => benchCautions(specimens, unfitted, settings),
     assumptions: [],
     workings: () => benchWorkings(tree.name.name, specimens, measured),
     bench: { measured, reading },
