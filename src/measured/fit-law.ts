@@ -49,7 +49,7 @@ export function fitLaw(points: Points, options: FitOptions): LawFit | FitFault {
   const first = best(fitter, framed, known ?? 0, asksLambda ? [BETA, V_TO, LAMBDA] : [BETA, V_TO], weights);
   if (first === null) return NO_LAW;
   // A channel is never longer at a higher voltage: what comes out below 0 is scatter.
-  const isSeen = asksLambda && first[LAMBDA]! > 0;
+  let isSeen = asksLambda && first[LAMBDA]! > 0;
   let free = isSeen ? [BETA, V_TO, LAMBDA] : [BETA, V_TO];
   let law: Float64Array = isSeen ? first : (best(fitter, framed, known ?? 0, free, weights) ?? first);
   if (!isSeen) law[LAMBDA] = known ?? 0;
@@ -59,6 +59,14 @@ export function fitLaw(points: Points, options: FitOptions): LawFit | FitFault {
     if (isAtBorder(law)) free = free.filter((k) => k !== EXPONENT);
   }
   if (loss === 'robust') weigh(fitter, framed, law, free, weights);
+  // With the exponent free, or with outliers counting less, it may come out below 0 once more.
+  if (isSeen && law[LAMBDA]! < 0) {
+    isSeen = false;
+    law[LAMBDA] = 0;
+    free = free.filter((k) => k !== LAMBDA);
+    fitter.fit(law, free, weights);
+    if (loss === 'robust') weigh(fitter, framed, law, free, weights);
+  }
   const covariance = inverseOf(fitter.normal(law, free, new Float64Array(weights.length).fill(1)), free.length);
   if (covariance === null) return NO_LAW;
   const residuals = fitter.residuals(law);

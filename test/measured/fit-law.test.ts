@@ -250,3 +250,18 @@ it('finds its way from any start: random devices over random grids', () => {
   }
   expect(failed).toBe(0);
 });
+
+it('a lambda below 0 never comes out, however the readings scatter', () => {
+  const [device] = DEVICES.map(([, each]) => each);
+  let least = Infinity;
+  for (let seed = 1; seed <= 150; seed++) {
+    const points = scattered(readings(device!, DRIVES, [4, 10]), 5e-4, seed);
+    for (const exponent of ['square', 'free'] as const) {
+      for (const loss of ['robust', 'plain'] as const) {
+        const found = fitLaw(points, { channel: device!.channel, exponent, lambda: 'fit', loss });
+        if (!('code' in found)) least = Math.min(least, found.lambda);
+      }
+    }
+  }
+  expect(least).toBe(0);
+});
