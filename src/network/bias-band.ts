@@ -33,7 +33,7 @@ export interface BandPoints {
 }
 
 /** By which share the parts of the bias may be off, to either side. */
-interface BiasAllowance {
+export interface BiasAllowance {
   readonly resistor: number;
   readonly gate: number;
 }

@@ -21,5 +21,5 @@ export type { DerivationStep } from './derivation.ts';
 export { derivePoint } from './derive-law.ts';
 export type { SolvedFet } from './derive-law.ts';
 export { deriveStage } from './derive-stage.ts';
-export type { BandPoints } from './bias-band.ts';
+export type { BandPoints, BiasAllowance } from './bias-band.ts';
 export { biasLine, dividerAllowance, gateWindow, middleResistor, selfBiasWindow } from './bias-band.ts';

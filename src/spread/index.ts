@@ -17,6 +17,7 @@ export type {
 export { portionsOf } from './portion.ts';
 export type { SheetSpread } from './analyse.ts';
 export { searchExtremes } from './extremes.ts';
+export { openEnds } from './open-ends.ts';
 export type { Extremes } from './extremes.ts';
 export type { End, Share, ValueSpread } from './report.ts';
 export { slotsAt, slotsOf } from './where.ts';

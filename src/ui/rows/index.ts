@@ -12,7 +12,7 @@ export { complete } from './completion.ts';
 export type { Completion } from './completion.ts';
 export { INSERTIONS, insertionLines } from './insertions.ts';
 export type { InsertionChoice } from './insertions.ts';
-export { freeName } from './sheet-stock.ts';
+export { freeName, supplyOf } from './sheet-stock.ts';
 export { setNumbers } from './part-numbers.ts';
 export type { RowSpread } from './row-spread.ts';
 export type { PlotInput } from './plot-against.ts';

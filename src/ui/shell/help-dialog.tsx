@@ -21,6 +21,11 @@ const LINES: readonly (readonly [line: string, what: string])[] = [
   ['R_buy = E24(R_S0)', 'the nearest preferred value'],
   ['F1 = plot A1.I_D against R_S over 100 ohm .. 10 kohm log', 'a curve'],
 ];
+/** What Insert offers beside single lines. */
+const DIALOGS: readonly (readonly [title: string, what: string])[] = [
+  ['band', 'limits of the drain current in; three ways to bias side by side, with what each reaches over everything'],
+  ['divider pair', 'two preferred resistors for a voltage at their tap, ranked by what they miss'],
+];
 /** Keys of the grid that are no commands. */
 const GRID_KEYS: readonly (readonly [key: string, what: string])[] = [
   ['arrows, Home, End, Page', 'move by cell'],
@@ -46,6 +51,19 @@ export function HelpDialog(props: { readonly desk: Desk; readonly onClose: () =>
                 <dt>
                   <code>{line}</code>
                 </dt>
+                <dd>{what}</dd>
+              </div>
+            )}
+          </For>
+        </dl>
+      </section>
+      <section>
+        <h3>Found for you, from Insert</h3>
+        <dl class="help-lines">
+          <For each={DIALOGS}>
+            {([title, what]) => (
+              <div>
+                <dt>{title}</dt>
                 <dd>{what}</dd>
               </div>
             )}

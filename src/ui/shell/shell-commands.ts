@@ -2,7 +2,17 @@
 
 import type { Command } from '../desk/index.ts';
 
-export type DialogName = 'shelf' | 'share' | 'help' | 'record' | 'rows' | 'card' | 'divider' | 'parts' | 'data-sheet';
+export type DialogName =
+  | 'shelf'
+  | 'share'
+  | 'help'
+  | 'record'
+  | 'rows'
+  | 'card'
+  | 'divider'
+  | 'parts'
+  | 'data-sheet'
+  | 'band';
 
 interface ShellActions {
   readonly show: (dialog: DialogName) => void;
@@ -63,6 +73,13 @@ export function shellCommands(actions: ShellActions): Command[] {
       keys: [],
       run: () => actions.show('divider'),
       insert: { words: 'two preferred resistors for a voltage', group: 'quantity' },
+    },
+    {
+      id: 'band',
+      title: 'band',
+      keys: [],
+      run: () => actions.show('band'),
+      insert: { words: 'a bias that keeps the drain current between two limits', group: 'stage' },
     },
     {
       id: 'parts',

@@ -13,6 +13,7 @@ import { sheetTitle } from '../session/index.ts';
 import { createSpreadFeed } from '../spread/index.ts';
 import { VerdictLine } from '../verdict/index.ts';
 import { WorkingsPane } from '../workings/index.ts';
+import { BandDialog } from './band-dialog.tsx';
 import { Banners } from './banner.tsx';
 import { NARROWEST, WIDEST, createDivider } from './divider.ts';
 import { FindBar } from './find-bar.tsx';
@@ -198,6 +199,9 @@ export function Shell(props: { readonly session: Session }) {
       </Show>
       <Show when={dialog() === 'data-sheet'}>
         <DataSheetDialog desk={desk} onClose={() => setDialog(null)} />
+      </Show>
+      <Show when={dialog() === 'band'}>
+        <BandDialog desk={desk} onClose={() => setDialog(null)} />
       </Show>
       <Show when={dialog() === 'help'}>
         <HelpDialog desk={desk} onClose={() => setDialog(null)} />
