@@ -7,7 +7,7 @@ import { ownName } from './band-wish.ts';
 import type { BandWish } from './band-wish.ts';
 
 /** The lines, and the names by which what they write is read again. */
-export interface BandLines {
+interface BandLines {
   readonly lines: readonly string[];
   readonly stage: string;
 }
