@@ -22,30 +22,34 @@ export interface DividerPair {
   readonly parallelError: number;
 }
 
-/** The parallel resistance may be off by so much, as a factor to either side: pairs beyond are not looked at. */
+/** How far each resistor may be from its exact value, as a factor to either side: pairs beyond are not looked at. */
 const REACH = 10;
 /** How much a share off the wanted ratio weighs against a share off the wanted parallel resistance. */
 const RATIO_WEIGHT = 10;
 
 /**
- * The best pairs, the best first. Ranked by 10 |error of the ratio| + |error of the parallel resistance|, both as shares: the
- * ratio sets a voltage, the parallel resistance only loads what drives it. Throws RangeError unless 0 < ratio < 1 and the
- * parallel resistance is positive and finite.
+ * The best pairs, the best first, of all whose resistors lie within a factor of ten of the exact ones. Ranked by
+ * 10 |error of the ratio| + |error of the parallel resistance|, both as shares: the ratio sets a voltage, the parallel
+ * resistance only loads what drives it. Of pairs that rank alike the one with the smaller upper resistor comes first. Throws
+ * RangeError unless 0 < ratio < 1 and the parallel resistance is positive and finite.
  */
 export function dividerPairs({ ratio, parallel, series }: WantedDivider, count: number): DividerPair[] {
   if (!(ratio > 0 && ratio < 1)) throw new RangeError(`no divider has the ratio ${ratio}`);
   if (!(parallel > 0 && parallel < Infinity)) throw new RangeError(`no divider looks like ${parallel} ohm`);
-  const found: DividerPair[] = [];
   // Exact pairs have upper = parallel / ratio and lower = parallel / (1 - ratio).
-  const uppers = preferredBetween(series, parallel / ratio / REACH, (parallel / ratio) * REACH);
-  for (const upper of uppers) {
-    // With this upper one, the lower one of the wanted ratio, and its neighbours.
-    const lower = (upper * ratio) / (1 - ratio);
-    const below = preferredValue(series, lower, 'down');
-    for (const each of [nextPreferred(series, below, 'down'), below, nextPreferred(series, below, 'up')])
-      found.push(pairOf(upper, each, ratio, parallel));
+  const uppers = preferredAround(series, parallel / ratio);
+  const lowers = preferredAround(series, parallel / (1 - ratio));
+  const ranks = new Float64Array(uppers.length * lowers.length);
+  for (let u = 0, at = 0; u < uppers.length; u++) {
+    const upper = uppers[u]!;
+    for (let l = 0; l < lowers.length; l++, at++) {
+      const own = lowers[l]! / (upper + lowers[l]!);
+      ranks[at] = RATIO_WEIGHT * Math.abs(own / ratio - 1) + Math.abs((upper * own) / parallel - 1);
+    }
   }
-  return found.toSorted((a, b) => rank(a) - rank(b)).slice(0, count);
+  return leastOf(ranks, count).map((at) => {
+    return pairOf(uppers[Math.floor(at / lowers.length)]!, lowers[at % lowers.length]!, ratio, parallel);
+  });
 }
 
 function pairOf(upper: number, lower: number, ratio: number, parallel: number): DividerPair {
@@ -61,13 +65,25 @@ function pairOf(upper: number, lower: number, ratio: number, parallel: number): 
   };
 }
 
-function rank({ ratioError, parallelError }: DividerPair): number {
-  return RATIO_WEIGHT * Math.abs(ratioError) + Math.abs(parallelError);
+/** The values of a series within the reach of an exact one. */
+function preferredAround(series: SeriesName, exact: number): Float64Array {
+  const values: number[] = [];
+  for (let value = preferredValue(series, exact / REACH, 'up'); value <= exact * REACH;) {
+    values.push(value);
+    value = nextPreferred(series, value, 'up');
+  }
+  return Float64Array.from(values);
 }
 
-function preferredBetween(series: SeriesName, low: number, high: number): number[] {
-  const values: number[] = [];
-  for (let value = preferredValue(series, low, 'up'); value <= high; value = nextPreferred(series, value, 'up'))
-    values.push(value);
-  return values;
+/** Where the least ranks stand, in their order: one pass with a short sorted list. */
+function leastOf(ranks: Float64Array, count: number): number[] {
+  const least: number[] = [];
+  for (let at = 0; at < ranks.length; at++) {
+    if (least.length === count && !(ranks[at]! < ranks[least[count - 1]!]!)) continue;
+    let place = least.length;
+    while (place > 0 && ranks[least[place - 1]!]! > ranks[at]!) place--;
+    least.splice(place, 0, at);
+    if (least.length > count) least.pop();
+  }
+  return least;
 }

@@ -1,8 +1,9 @@
 // Divider pairs against every pair of the series, and against a divider of a handbook's kind.
 
 import { describe, expect, it } from 'vitest';
-import { dividerPairs, nextPreferred, SERIES_NAMES } from '../../src/quantity/index.ts';
+import { dividerPairs, nextPreferred, SERIES, SERIES_NAMES } from '../../src/quantity/index.ts';
 import type { SeriesName } from '../../src/quantity/index.ts';
+import { createDraw } from '../support/counter-random.ts';
 
 /** The least 10 |ratio error| + |parallel error| over every pair of a series within four decades. */
 function least(ratio: number, parallel: number, series: SeriesName): number {
@@ -33,6 +34,37 @@ describe.each(SERIES_NAMES.filter((name) => name !== 'E192'))('of %s', (series) 
     expect(error).toBeLessThanOrEqual(least(ratio, parallel, series) * (1 + 1e-12) + 1e-15);
   });
 });
+
+describe.each(SERIES_NAMES)('the list of %s', (series) => {
+  it('is the head of all pairs within a factor of ten of the exact resistors, in the order of their rank', () => {
+    const draw = createDraw(63);
+    for (let n = 0; n < 6; n++) {
+      const wanted = { ratio: 0.05 + 0.9 * draw(), parallel: 10 ** (2 + 5 * draw()) };
+      const found = dividerPairs({ ...wanted, series }, 7).map(({ upper, lower }) => [upper, lower]);
+      // The n-th want of seed 63.
+      expect({ n, found }).toEqual({ n, found: ranked(series, wanted).slice(0, 7) });
+    }
+  });
+});
+
+/** Every pair of a table of values over eleven decades, sorted. */
+function ranked(series: SeriesName, wanted: { ratio: number; parallel: number }): number[][] {
+  const digits = SERIES[series][0] === 10 ? 1 : 2;
+  const values = Array.from({ length: 11 }, (_, decade) =>
+    SERIES[series].map((printed) => Number(`${printed}e${decade - digits}`)),
+  ).flat();
+  const near = (exact: number): number[] => values.filter((value) => value >= exact / 10 && value <= exact * 10);
+  return near(wanted.parallel / wanted.ratio)
+    .flatMap((upper) =>
+      near(wanted.parallel / (1 - wanted.ratio)).map((lower) => {
+        const ratio = lower / (upper + lower);
+        const rank = 10 * Math.abs(ratio / wanted.ratio - 1) + Math.abs((upper * ratio) / wanted.parallel - 1);
+        return [rank, upper, lower];
+      }),
+    )
+    .toSorted((a, b) => a[0]! - b[0]! || a[1]! - b[1]!)
+    .map(([, upper, lower]) => [upper!, lower!]);
+}
 
 it('pairs say what they come to, the best first', () => {
   const pairs = dividerPairs({ ratio: 1 / 3, parallel: 66.7e3, series: 'E24' }, 6);

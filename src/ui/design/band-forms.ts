@@ -54,7 +54,7 @@ const COMPLIANCE = 1;
 const SETTLED = 1e-6;
 const PASSES = 8;
 /** Divider pairs looked at for one whose voltage lies in the window, and how far their parallel resistance may be off, as a factor. */
-const PAIRS = 60;
+const PAIRS = 300;
 const PARALLEL_OFF = 2;
 /** Values above the least source resistance that are tried for a divider in their window. */
 const STEPS = 4;

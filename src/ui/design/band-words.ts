@@ -82,7 +82,7 @@ function endSentences({ least, most }: BandWish, { I_D, open }: Reached): string
 function marginSentences({ margin }: Reached): string[] {
   if (margin.low === null || margin.low >= 0) return [];
   const short = formatValue(-margin.low, VOLTAGE, { digits: 2, rounding: 'up' }).text;
-  return [`Saturation is short of ${short}: drain and source take too much of the supply.`];
+  return [`Saturation is short by ${short}: drain and source take too much of the supply.`];
 }
 
 function amount(value: number, rounding: 'up' | 'down'): string {

@@ -8,23 +8,23 @@ import type { SheetView } from '../../sheet/index.ts';
 import { freeName } from '../rows/index.ts';
 import { linesBehind } from './behind.ts';
 
-/** The SI number, or why there is none, as a sentence. */
-type Entered = { readonly value: number } | { readonly fault: string };
+/** The SI number, or why there is none, as a sentence; and whether the entry computes, to something of another kind. */
+type Entered = { readonly value: number } | { readonly fault: string; readonly isOther: boolean };
 
 /** Reads an entry that is to be of this kind; `what` names it in sentences: `The ratio`. */
 export function readEntered(sheet: SheetView, text: string, kind: ValueKind, what: string): Entered {
-  if (text.trim() === '') return { fault: `${what} is not given yet.` };
+  if (text.trim() === '') return { fault: `${what} is not given yet.`, isOther: false };
   const expr = parseExpression(text);
-  if ('code' in expr) return { fault: expr.text };
+  if ('code' in expr) return { fault: expr.text, isOther: false };
   const used = pathsOf(expr).map(({ names }) => names[0]!.name);
   const name = freeName(sheet, 'x_');
   const trial = createSheet([...linesBehind(sheet, used), `${name} = ${text}`].join('\n'));
   const cell = trial.cell(name);
-  if (!cell || cell.fault) return { fault: cell?.fault?.text ?? `${what} cannot be read.` };
+  if (!cell || cell.fault) return { fault: cell?.fault?.text ?? `${what} cannot be read.`, isOther: false };
   const { type, value } = cell.reading ?? {};
   if (type === undefined || typeof type === 'string' || typeof value !== 'number')
-    return { fault: `${what} is ${dimensionName(kind)}; ${text.trim()} is none.` };
+    return { fault: `${what} is ${dimensionName(kind)}; ${text.trim()} is none.`, isOther: true };
   if (!sameKind(type, kind))
-    return { fault: `${what} is ${dimensionName(kind)}; ${text.trim()} is ${dimensionName(type)}.` };
+    return { fault: `${what} is ${dimensionName(kind)}; ${text.trim()} is ${dimensionName(type)}.`, isOther: true };
   return { value };
 }

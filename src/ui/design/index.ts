@@ -2,3 +2,4 @@
 
 export { createBandChoice } from './band-choice.ts';
 export type { BandChoice } from './band-choice.ts';
+export { readEntered } from './entered.ts';

@@ -2,11 +2,12 @@
 
 import { For, Show } from 'solid-js';
 import { formatValue, PLAIN, RESISTANCE, VOLTAGE } from '../../quantity/index.ts';
-import type { SeriesName } from '../../quantity/index.ts';
 import { insertBlock } from '../desk/index.ts';
 import type { Desk } from '../desk/index.ts';
-import { Modal } from './modal.tsx';
 import { createDivider } from './divider-state.ts';
+import { EntryField, SelectField } from './entry-field.tsx';
+import { Modal } from './modal.tsx';
+import './choice-dialog.css';
 import './rows-dialog.css';
 
 /** Offers pairs for a ratio and a resistance of both in parallel. */
@@ -27,27 +28,18 @@ export function DividerDialog(props: { readonly desk: Desk; readonly onClose: ()
         Two preferred resistors for a voltage at their tap and for both in parallel, which is what the tap looks like.
         An error of the voltage weighs ten times one of the resistance.
       </p>
-      <div class="rows-fields">
+      <div class="choice-fields">
         <For each={divider.fields}>
           {([label, example, value, setValue]) => (
-            <label>
-              {label}
-              <input placeholder={example} value={value()} onInput={(event) => setValue(event.currentTarget.value)} />
-            </label>
+            <EntryField label={label} hint={example} value={value()} onInput={setValue} />
           )}
         </For>
-        <label>
-          Series
-          <select onChange={(event) => divider.setSeries(event.currentTarget.value as SeriesName)}>
-            <For each={divider.names}>
-              {(name) => (
-                <option value={name} selected={name === divider.series()}>
-                  {name}
-                </option>
-              )}
-            </For>
-          </select>
-        </label>
+        <SelectField
+          label="Series"
+          value={divider.series()}
+          options={divider.names.map((name) => ({ value: name, words: name }))}
+          onChange={(name) => divider.setSeries(name)}
+        />
       </div>
       <section aria-label="Pairs" aria-live="polite">
         <Show when={divider.pairs().length > 0}>
@@ -89,7 +81,7 @@ export function DividerDialog(props: { readonly desk: Desk; readonly onClose: ()
               </tbody>
             </table>
           </div>
-          <pre class="card-lines">{divider.lines().join('\n')}</pre>
+          <pre class="choice-lines">{divider.lines().join('\n')}</pre>
         </Show>
       </section>
       <div class="modal-row">

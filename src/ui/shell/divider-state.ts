@@ -1,10 +1,10 @@
 // The state of the dialog for divider pairs: what is wanted, the pairs that come near it, and the lines of the chosen one.
 
 import { createMemo, createSignal } from 'solid-js';
-import { dividerPairs, plainText, RESISTANCE, sameKind, SERIES_NAMES, VOLTAGE } from '../../quantity/index.ts';
+import { dividerPairs, plainText, RESISTANCE, SERIES_NAMES, VOLTAGE } from '../../quantity/index.ts';
 import type { DividerPair, SeriesName, ValueKind } from '../../quantity/index.ts';
-import { evaluateExpression } from '../../sheet/index.ts';
 import type { SheetView } from '../../sheet/index.ts';
+import { readEntered } from '../design/index.ts';
 import { freeName } from '../rows/index.ts';
 
 /** Tolerances that go with the series. Source: IEC 60063:2015. */
@@ -30,9 +30,9 @@ export function createDivider(sheet: SheetView) {
   const [chosen, choose] = createSignal(0);
   const wanted = createMemo(() => {
     const [whole, part, both] = [
-      amount(top(), VOLTAGE, 'the voltage that is divided, such as 15 V'),
-      amount(tap(), VOLTAGE, 'the voltage at the tap, such as 3 V'),
-      amount(parallel(), RESISTANCE, 'both in parallel, such as 100 kohm'),
+      amount(sheet, top(), VOLTAGE, 'the voltage that is divided, such as 15 V'),
+      amount(sheet, tap(), VOLTAGE, 'the voltage at the tap, such as 3 V'),
+      amount(sheet, parallel(), RESISTANCE, 'both in parallel, such as 100 kohm'),
     ];
     for (const each of [whole, part, both]) if (typeof each === 'string') return each;
     const ratio = (part as number) / (whole as number);
@@ -65,7 +65,7 @@ export function createDivider(sheet: SheetView) {
     pairs,
     chosen: () => Math.min(chosen(), pairs().length - 1),
     choose,
-    voltageAt: ({ ratio }: DividerPair): number => ratio * (amount(top(), VOLTAGE, '') as number),
+    voltageAt: ({ ratio }: DividerPair): number => ratio * (amount(sheet, top(), VOLTAGE, '') as number),
     lines(): string[] {
       const pair = pairs()[Math.min(chosen(), pairs().length - 1)];
       if (!pair) return [];
@@ -88,11 +88,12 @@ export function createDivider(sheet: SheetView) {
   };
 }
 
-/** A typed amount in SI, or the sentence that says what to type. */
-function amount(text: string, kind: ValueKind, what: string): number | string {
+/** A typed amount in SI, formulas over the sheet's cells included, or the sentence that says what to type. */
+function amount(sheet: SheetView, text: string, kind: ValueKind, what: string): number | string {
   if (text.trim() === '') return `Write ${what}.`;
-  const found = evaluateExpression(text);
-  if ('code' in found) return `${text.trim()} cannot be read: ${found.text}`;
-  const isKind = typeof found.type !== 'string' && sameKind(found.type, kind);
-  return isKind && typeof found.value === 'number' ? found.value : `${text.trim()} is of another kind. Write ${what}.`;
+  const read = readEntered(sheet, text, kind, 'What is wanted here');
+  if ('value' in read) return read.value;
+  return read.isOther
+    ? `${text.trim()} is of another kind. Write ${what}.`
+    : `${text.trim()} cannot be read: ${read.fault}`;
 }
