@@ -3,21 +3,16 @@
 // Values come from the bias-line construction and are then taken from a preferred series; what a form cannot do is said with
 // the number by which it cannot.
 
-import { biasLine, dividerAllowance, gateWindow, middleResistor, selfBiasWindow } from '../../network/index.ts';
-import type { BandPoints, BiasAllowance } from '../../network/index.ts';
-import {
-  CURRENT,
-  dividerPairs,
-  formatValue,
-  nextPreferred,
-  preferredValue,
-  RESISTANCE,
-  VOLTAGE,
-} from '../../quantity/index.ts';
-import type { DividerPair, SeriesName } from '../../quantity/index.ts';
+import { biasLine, middleResistor, selfBiasWindow } from '../../network/index.ts';
+import type { BandPoints } from '../../network/index.ts';
+import type { DividerPair } from '../../quantity/index.ts';
 import { createSheet } from '../../sheet/index.ts';
+import { amps, resistance, volts } from './amounts.ts';
 import { bandPoints, findPoints, pointLines } from './band-points.ts';
+import { aboveSupply, gateAllowance, lineSentence, MOST_GATE, resistorAllowance, targetOf } from './band-target.ts';
+import type { Target } from './band-target.ts';
 import type { BandWish } from './band-wish.ts';
+import { pairFor, preferredIn, preferredLine, tooLarge } from './preferred-bias.ts';
 
 export type FormName = 'self' | 'fixed' | 'source';
 
@@ -45,22 +40,11 @@ export interface BiasForm {
   readonly line: string | null;
 }
 
-/** A larger share of the supply at the gate is no bias any more; a fifth is what a gate gets that may have any (common practice, no source). */
-const MOST_GATE = 0.9;
-const FREE_GATE = 0.2;
 /** What a current source needs across it, V (common practice for a transistor and its resistor, no source). */
 const COMPLIANCE = 1;
 /** A source resistance is found once it no longer moves V_GS through V_DS: share and passes. */
 const SETTLED = 1e-6;
 const PASSES = 8;
-/** Divider pairs looked at for one whose voltage lies in the window, and how far their parallel resistance may be off, as a factor. */
-const PAIRS = 300;
-const PARALLEL_OFF = 2;
-/** Values above the least source resistance that are tried for a divider in their window. */
-const STEPS = 4;
-/** A resistor above this is seldom stocked, ohms (common practice, no source). */
-const MOST_STOCKED = 22e6;
-
 /** The three forms; a sentence where the part has no points for such a band. */
 export function biasForms(wish: BandWish): readonly BiasForm[] | string {
   const fixed = fixedForm(wish);
@@ -70,23 +54,20 @@ export function biasForms(wish: BandWish): readonly BiasForm[] | string {
   return [self, fixed, source] as BiasForm[];
 }
 
-/** The allowance for resistors alone, where one is asked for. */
-function resistorAllowance({ roomy, tolerance }: BandWish): number {
-  return roomy ? tolerance.share : 0;
-}
-
 function selfForm(wish: BandWish): BiasForm | string {
   const settled = settle(wish, (points) => Math.max(0, middleResistor(points, 0)));
   if (typeof settled === 'string') return settled;
   const { points, ohms } = settled;
   if (!(ohms > 0)) {
     const asked = biasLine(points);
+    const side = wish.rails.channel > 0 ? 'below' : 'above';
+    const own = (value: number): string => volts(wish.rails.channel * value);
     const reasons = [
       points.vgsMost >= 0
-        ? `Self-bias holds V_GS below 0 V; ${amps(wish.most)} needs ${volts(points.vgsMost)} at least.`
-        : `Self-bias holds no part of the band: ${amps(wish.least)} needs ${volts(points.vgsLeast)} of V_GS from a low device.`,
+        ? `With the gate at its rail V_GS lies ${side} 0 V; a high device needs ${own(points.vgsMost)} for ${amps(wish.most)}.`
+        : `With the gate at its rail no resistor comes near: a low device needs V_GS ${own(points.vgsLeast)} for ${amps(wish.least)}.`,
     ];
-    if (asked && asked.V_GG > 0) reasons.push(`The bias line starts at V_GG ${volts(asked.V_GG)}, not at 0 V.`);
+    if (asked && asked.V_GG > 0) reasons.push(`The bias line starts at V_GG ${own(asked.V_GG)}, not at 0 V.`);
     return { form: 'self', bias: null, reasons, line: null };
   }
   const window = selfBiasWindow(points, { resistor: resistorAllowance(wish), gate: 0 });
@@ -122,13 +103,16 @@ function fixedForm(wish: BandWish): BiasForm | string {
   if (target.why !== null) reasons.push(target.why);
   const forward = gateForward(wish, points.vgsLeast, wish.least);
   if (forward !== null) reasons.push(forward);
-  const line = lineSentence(points, target);
+  const line = lineSentence(points, target, wish);
   if (!(target.ohms > 0)) {
     reasons.push(`The line would need ${resistance(target.ohms)} in the source.`);
     return { form: 'fixed', bias: null, reasons, line };
   }
-  const { ohms, pair } = preferredLine(points, target, wish);
-  if (pair.upper > MOST_STOCKED) reasons.push(tooLarge(pair.upper));
+  const { ohms, pair, isInside } = preferredLine(points, target, wish);
+  if (target.why === null && !isInside)
+    reasons.push(`No divider of ${wish.series} values meets the window of V_GG for these R_S; a finer series may.`);
+  const large = tooLarge(pair.upper);
+  if (large !== null) reasons.push(large);
   return {
     form: 'fixed',
     bias: {
@@ -140,107 +124,6 @@ function fixedForm(wish: BandWish): BiasForm | string {
     reasons,
     line,
   };
-}
-
-/** What the construction gives before and, where room is left, after the tolerances. */
-function lineSentence(points: BandPoints, { isLeast, why, ohms, V_GG }: Target): string {
-  const exact = biasLine(points)!;
-  const plain = `The line through both limit devices: R_S ${resistance(exact.R_S)} from V_GG ${volts(exact.V_GG)}`;
-  return isLeast && why === null && ohms !== exact.R_S
-    ? `${plain}; with room for the tolerances ${resistance(ohms)} from ${volts(V_GG)}.`
-    : `${plain}.`;
-}
-
-/** The least preferred source resistance that has a divider of preferred values in its window, else the least with the nearest. */
-function preferredLine(points: BandPoints, target: Target, wish: BandWish): { ohms: number; pair: DividerPair } {
-  const most = MOST_GATE * wish.rails.height;
-  let ohms = preferredValue(wish.series, target.ohms, target.isLeast ? 'up' : 'nearest');
-  let first: { ohms: number; pair: DividerPair } | null = null;
-  for (let step = 0; step < STEPS; step++) {
-    const { low, high } = gateWindow(points, ohms, target.allowance);
-    const window = { low: Math.max(low, 0), high: Math.min(high, most) };
-    const isOpen = window.low <= window.high;
-    const { pair, isInside } = pairFor(
-      isOpen ? (window.low + window.high) / 2 : Math.min(target.V_GG, most),
-      window,
-      wish,
-    );
-    first ??= { ohms, pair };
-    if (isInside) return { ohms, pair };
-    if (!target.isLeast) break;
-    ohms = nextPreferred(wish.series, ohms, 'up');
-  }
-  return first!;
-}
-
-/** A line and how it came about. */
-interface Target {
-  readonly ohms: number;
-  readonly V_GG: number;
-  readonly allowance: BiasAllowance;
-  /** It is the least resistance that holds the band, and so is rounded up. */
-  readonly isLeast: boolean;
-  /** What is odd about it; null where nothing is. */
-  readonly why: string | null;
-}
-
-function targetOf(points: BandPoints, wish: BandWish): Target {
-  const { height } = wish.rails;
-  const most = MOST_GATE * height;
-  const exact = biasLine(points)!;
-  const none = { resistor: 0, gate: 0 };
-  const middle = (V_GG: number, why: string | null): Target => {
-    return { ohms: middleResistor(points, V_GG), V_GG, allowance: none, isLeast: false, why };
-  };
-  if (exact.R_S <= 0) {
-    const fixedEnds = `${volts(points.vgsLeast)} to ${volts(points.vgsMost)}`;
-    return middle(
-      FREE_GATE * height,
-      `The line through both limits asks for ${resistance(exact.R_S)}, a negative R_S: the band is wider than the part spreads at a fixed V_GS of ${fixedEnds}. V_GG is chosen at a fifth of the supply.`,
-    );
-  }
-  if (exact.V_GG > most) return middle(most, aboveSupply(exact.V_GG, wish));
-  const allowance = gateAllowance(exact.V_GG, wish);
-  const line = biasLine(points, allowance);
-  if (line === null) {
-    return {
-      ...exact,
-      ohms: exact.R_S,
-      allowance: none,
-      isLeast: true,
-      why: `Resistors and supply alone move the current by more than from ${amps(wish.least)} to ${amps(wish.most)}: no line leaves room for their tolerances.`,
-    };
-  }
-  const refined = biasLine(points, gateAllowance(line.V_GG, wish)) ?? line;
-  if (refined.V_GG > most) {
-    return middle(most, aboveSupply(refined.V_GG, wish));
-  }
-  if (refined.V_GG <= 0) {
-    return middle(
-      FREE_GATE * height,
-      `Self-bias holds the band already; with V_GG at a fifth of the supply, as here, the current moves less.`,
-    );
-  }
-  return {
-    ohms: refined.R_S,
-    V_GG: refined.V_GG,
-    allowance: gateAllowance(refined.V_GG, wish),
-    isLeast: true,
-    why: null,
-  };
-}
-
-function aboveSupply(V_GG: number, { rails }: BandWish): string {
-  const beyond = V_GG - rails.height;
-  return beyond > 0
-    ? `The line asks for V_GG of ${volts(V_GG)}, ${volts(beyond)} above the supply of ${volts(rails.height)}; the divider stops at nine tenths of the supply.`
-    : `The line asks for V_GG of ${volts(V_GG)}, ${volts(-beyond)} below the supply of ${volts(rails.height)}: nothing is left for the FET. The divider stops at nine tenths of the supply.`;
-}
-
-function gateAllowance(V_GG: number, wish: BandWish): BiasAllowance {
-  if (!wish.roomy) return { resistor: 0, gate: 0 };
-  const ratio = Math.min(MOST_GATE, Math.max(0.01, V_GG / wish.rails.height));
-  return { resistor: wish.tolerance.share, gate: dividerAllowance(ratio, wish.tolerance.share, wish.supplyOff) };
 }
 
 function sourceForm(wish: BandWish): BiasForm | string {
@@ -270,7 +153,8 @@ function sourceForm(wish: BandWish): BiasForm | string {
   // Room for the divider's own tolerances; the voltage itself matters little.
   const V_GG = wanted * (1 + gateAllowance(wanted, { ...wish, roomy: true }).gate);
   const { pair } = pairFor(V_GG, { low: wanted, high: Infinity }, wish);
-  if (pair.upper > MOST_STOCKED) reasons.push(tooLarge(pair.upper));
+  const large = tooLarge(pair.upper);
+  if (large !== null) reasons.push(large);
   const bias = {
     gate: { type: 'divider', pair },
     V_GG: pair.ratio * rails.height,
@@ -298,35 +182,10 @@ function settle(
   }
 }
 
-/** The preferred value nearest to one that lies in a window, else the nearest. */
-function preferredIn(series: SeriesName, wanted: number, { low, high }: { low: number; high: number }): number {
-  const [nearest, up, down] = (['nearest', 'up', 'down'] as const).map((way) => preferredValue(series, wanted, way));
-  return [nearest!, up!, down!].find((value) => value >= low && value <= high) ?? nearest!;
-}
-
-/** The divider for a gate voltage: the best ranked one that stays in the window, else the best; and whether it does. */
-function pairFor(
-  V_GG: number,
-  { low, high }: { low: number; high: number },
-  wish: BandWish,
-): { readonly pair: DividerPair; readonly isInside: boolean } {
-  const { height } = wish.rails;
-  const pairs = dividerPairs({ ratio: V_GG / height, parallel: wish.gateOhms, series: wish.series }, PAIRS);
-  const inside = pairs.find(({ ratio, parallel }) => {
-    const off = Math.max(parallel / wish.gateOhms, wish.gateOhms / parallel);
-    return ratio * height >= low && ratio * height <= high && off <= PARALLEL_OFF;
-  });
-  return { pair: inside ?? pairs[0]!, isInside: inside !== undefined };
-}
-
-function tooLarge(ohms: number): string {
-  return `A divider resistor of ${formatValue(ohms, RESISTANCE, { zeros: 'drop' }).text} is seldom stocked; with less resistance at the gate both are smaller.`;
-}
-
 /** What a JFET's gate does at a current; null where it only holds. */
 function gateForward(wish: BandWish, vgs: number, current: number): string | null {
   if (wish.family !== 'JFET' || vgs <= 0) return null;
-  return `At ${amps(current)} a low device stands at V_GS ${volts(vgs)} in its own sense: its gate would conduct.`;
+  return `At ${amps(current)} a low device stands at V_GS ${volts(wish.rails.channel * vgs)}: its gate would conduct.`;
 }
 
 /** A current of two digits where that lies in the band, else of three. */
@@ -334,7 +193,3 @@ function roundInside(current: number, { least, most }: BandWish): number {
   const rounded = Number(current.toPrecision(2));
   return rounded > least && rounded < most ? rounded : Number(current.toPrecision(3));
 }
-
-const volts = (value: number): string => formatValue(value, VOLTAGE).text;
-const amps = (value: number): string => formatValue(value, CURRENT, { zeros: 'drop' }).text;
-const resistance = (value: number): string => formatValue(value, RESISTANCE).text;

@@ -47,8 +47,13 @@ export function findPoints(
   names: readonly string[],
 ): readonly FoundPoint[] | string {
   const { channel } = wish.rails;
-  const fault = names.map((name) => sheet.error(name)).find((each) => each !== null);
-  if (fault) return fault.text;
+  const cannotCarry = (k: number): string =>
+    `Not every device of ${wish.part} carries ${formatValue(held[k]!.current, CURRENT).text} at the voltage that is left for it.`;
+  const faulty = names.findIndex((name) => sheet.error(name) !== null);
+  if (faulty >= 0) {
+    const { code, text } = sheet.error(names[faulty]!)!;
+    return code === 'not-solved' ? cannotCarry(faulty) : text;
+  }
   const model = sheet.spreadModel();
   const slots = names.map((name) => model.values.find(({ path }) => path === `${name}.V_GS`)!.slot);
   const search = searchExtremes(model, slots);
@@ -59,9 +64,7 @@ export function findPoints(
     return { vgs: channel * value, at: slotsAt(model, position), isKnown: unsolved === null };
   });
   const unknown = found.findIndex(({ isKnown }) => !isKnown);
-  if (unknown >= 0) {
-    return `Not every device of ${wish.part} carries ${formatValue(held[unknown]!.current, CURRENT).text} at the voltage that is left for it.`;
-  }
+  if (unknown >= 0) return cannotCarry(unknown);
   return found;
 }
 

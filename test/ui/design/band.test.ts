@@ -11,6 +11,7 @@ import { reachedBand } from '../../../src/ui/design/band-reached.ts';
 import type { Reached } from '../../../src/ui/design/band-reached.ts';
 import { firstEntries, readWish } from '../../../src/ui/design/band-wish.ts';
 import type { BandEntries, BandWish } from '../../../src/ui/design/band-wish.ts';
+import { createDraw } from '../../support/counter-random.ts';
 
 const CLIMATE = 'T_A = 25 degC in 0 degC .. 60 degC';
 const SHEETS = {
@@ -144,6 +145,70 @@ test('a mirrored sheet gives the same bias and the same band to the last bit', (
   expect(p).toEqual(n);
 });
 
+describe('for parts and wants at random', () => {
+  const draw = createDraw(4711);
+  const cases = Array.from({ length: 24 }, (_, n) => [n, drawCase(draw)] as const);
+
+  test.each(cases)(
+    'number %i of seed 4711: fixed plus self holds at every extreme, or says why not',
+    (_n, { text, entries }) => {
+      const wish = wishFor(text, entries);
+      const { fixed } = formsFor(wish);
+      const found = fixed.bias && reached(wish, fixed);
+      const holds = found !== null && found.I_D.low! >= wish.least && found.I_D.high! <= wish.most;
+      const isExplained = fixed.reasons.length > 0 || (found !== null && found.margin.low! < 0);
+      expect({ text, entries, isFine: holds || isExplained }).toEqual({ text, entries, isFine: true });
+    },
+  );
+
+  test('most of them hold', () => {
+    const held = cases.filter(([, { text, entries }]) => {
+      const wish = wishFor(text, entries);
+      return formsFor(wish).fixed.reasons.length === 0;
+    });
+    expect(held.length).toBeGreaterThan(8);
+  });
+});
+
+/** A part of either channel and kind, a supply of either sign, a band. */
+function drawCase(draw: () => number): { readonly text: string; readonly entries: Partial<BandEntries> } {
+  const pick = <Value>(of: readonly Value[]): Value => of[Math.floor(draw() * of.length)]!;
+  const [isP, kind] = [draw() < 0.5, pick(['JFET', 'depletion', 'enhancement'])];
+  const limits = (low: number, high: number): string =>
+    isP
+      ? `${(-high).toPrecision(4)} V .. ${(-low).toPrecision(4)} V`
+      : `${low.toPrecision(4)} V .. ${high.toPrecision(4)} V`;
+  const opening = 0.6 + 2 * draw();
+  const current = 1 + 4 * draw();
+  const rows =
+    kind === 'enhancement'
+      ? [
+          `  V_GSth: ${limits(opening, opening + 0.2 + draw())} at I_D = 1 mA`,
+          `  K: ${(2 + 50 * draw()).toFixed(1)} mA/V^2 ± 20 %`,
+        ]
+      : [
+          `  I_DSS: ${current.toFixed(2)} mA .. ${(current * (1.5 + 2 * draw())).toFixed(2)} mA`,
+          `  V_P: ${limits(-opening * (1.3 + draw()), -opening)}`,
+        ];
+  const least = 0.1 + 1.5 * draw();
+  return {
+    text: [
+      `V_DD = ${(pick([1, -1]) * (15 + 15 * draw())).toFixed(1)} V ± ${pick([0.5, 2, 5])} %`,
+      pick([CLIMATE, '> at room temperature']),
+      `Q1 = ${isP ? 'p' : 'n'}-${kind === 'JFET' ? 'JFET' : 'MOSFET'}`,
+      ...rows,
+      pick(['  lambda: 0.02 /V', '  lambda: 0 /V']),
+    ].join('\n'),
+    entries: {
+      least: `${least.toFixed(3)} mA`,
+      most: `${(least * (1.15 + draw())).toFixed(3)} mA`,
+      drain: pick(['', '1 kohm']),
+      series: pick(['E12', 'E24', 'E96']),
+      tolerance: pick(['1 %', '0.1 %', '']),
+    },
+  };
+}
+
 describe('what cannot be held is said with its number', () => {
   const said = (text: string, entries: Partial<BandEntries>, form: 'self' | 'fixed' | 'source'): string => {
     const found = lookFor(wishFor(text, entries));
@@ -163,14 +228,14 @@ describe('what cannot be held is said with its number', () => {
 
   test('an enhancement FET has no self-bias', () => {
     expect(said('V_DD = 15 V\nQ1 = n-MOSFET\n  V_TO: 1 V .. 2 V\n  K: 2 mA/V^2', {}, 'self')).toBe(
-      'Self-bias holds V_GS below 0 V; 2 mA needs 2.00 V at least. The bias line starts at V_GG 3.41 V, not at 0 V.',
+      'With the gate at its rail V_GS lies below 0 V; a high device needs 2.00 V for 2 mA. The bias line starts at V_GG 3.41 V, not at 0 V.',
     );
     // By hand: 2.707 V at 1 mA from a threshold of 2 V, 2 V at 2 mA from one of 1 V; 707 ohm.
   });
 
   test('a gate voltage above the supply', () => {
     const text = said(`V_DD = 12 V\n${exactPart}`, { least: '2 mA', most: '2.1 mA', roomy: false }, 'fixed');
-    expect(text).toMatch(/The line asks for V_GG of \d+\.\d V, \d+\.\d V above the supply of 12\.0 V/);
+    expect(text).toMatch(/The line asks for V_GG of \d+\.\d V, \d+\.\d V beyond the supply of 12\.0 V/);
     expect(text).toMatch(/(low|high) end misses by/);
   });
 
