@@ -21,39 +21,41 @@ import type { ValueKind } from '../quantity/index.ts';
 interface TakenParameter {
   readonly field: string;
   readonly kind: ValueKind;
+  /** What a 0 is: there is none of it, which a part says by leaving the row out; a number as others; or nothing that can be. */
+  readonly zero: 'none' | 'number' | 'refused';
 }
 
 /** 0 degC in K: cards give temperatures in degC. */
 export const ZERO_CELSIUS = 273.15;
 
 const BOTH = {
-  VTO: { field: 'V_TO', kind: VOLTAGE },
-  LAMBDA: { field: 'lambda', kind: RECIPROCAL_VOLTAGE },
-  RS: { field: 'r_s', kind: RESISTANCE },
-  RD: { field: 'r_d', kind: RESISTANCE },
-  PB: { field: 'PB', kind: VOLTAGE },
-  TNOM: { field: 'T_nom', kind: TEMPERATURE_POINT },
+  VTO: { field: 'V_TO', kind: VOLTAGE, zero: 'number' },
+  LAMBDA: { field: 'lambda', kind: RECIPROCAL_VOLTAGE, zero: 'number' },
+  RS: { field: 'r_s', kind: RESISTANCE, zero: 'none' },
+  RD: { field: 'r_d', kind: RESISTANCE, zero: 'none' },
+  PB: { field: 'PB', kind: VOLTAGE, zero: 'refused' },
+  TNOM: { field: 'T_nom', kind: TEMPERATURE_POINT, zero: 'number' },
 } as const;
 
 /** By family, in the order in which the lines are written. */
 export const TAKEN: Readonly<Record<'JFET' | 'MOSFET', Readonly<Record<string, TakenParameter>>>> = {
   JFET: {
-    BETA: { field: 'beta', kind: SQUARE_LAW_CONSTANT },
+    BETA: { field: 'beta', kind: SQUARE_LAW_CONSTANT, zero: 'refused' },
     ...BOTH,
-    CGS: { field: 'C_GS', kind: CAPACITANCE },
-    CGD: { field: 'C_GD', kind: CAPACITANCE },
-    M: { field: 'M', kind: PLAIN },
-    VTOTC: { field: 'tempco', kind: VOLTAGE_TEMPERATURE_COEFFICIENT },
+    CGS: { field: 'C_GS', kind: CAPACITANCE, zero: 'none' },
+    CGD: { field: 'C_GD', kind: CAPACITANCE, zero: 'none' },
+    M: { field: 'M', kind: PLAIN, zero: 'number' },
+    VTOTC: { field: 'tempco', kind: VOLTAGE_TEMPERATURE_COEFFICIENT, zero: 'number' },
   },
   MOSFET: {
-    KP: { field: 'K_P', kind: SQUARE_LAW_CONSTANT },
-    W: { field: 'W', kind: LENGTH },
-    L: { field: 'L', kind: LENGTH },
+    KP: { field: 'K_P', kind: SQUARE_LAW_CONSTANT, zero: 'refused' },
+    W: { field: 'W', kind: LENGTH, zero: 'refused' },
+    L: { field: 'L', kind: LENGTH, zero: 'refused' },
     ...BOTH,
-    GAMMA: { field: 'gamma', kind: ROOT_VOLTAGE },
-    PHI: { field: 'phi', kind: VOLTAGE },
-    CBD: { field: 'C_DS', kind: CAPACITANCE },
-    MJ: { field: 'M', kind: PLAIN },
+    GAMMA: { field: 'gamma', kind: ROOT_VOLTAGE, zero: 'none' },
+    PHI: { field: 'phi', kind: VOLTAGE, zero: 'refused' },
+    CBD: { field: 'C_DS', kind: CAPACITANCE, zero: 'none' },
+    MJ: { field: 'M', kind: PLAIN, zero: 'number' },
   },
 };
 

@@ -44,6 +44,12 @@ interface Word {
   readonly column: number;
 }
 
+/** A number of the card and the word that names it. */
+interface GivenValue {
+  readonly value: number;
+  readonly key: Word;
+}
+
 /** Reads every card of a text. */
 export function readModelCards(text: string): ReadCards {
   const statements = statementsOf(text);
@@ -113,14 +119,14 @@ function cardOf(head: readonly Word[], first: Word): ModelCard {
     return { ...nothing, faults: [faultAt(word, text)] };
   }
   const type = typeOf(head[typeAt]!.text)!;
-  const family = type.endsWith('JF') ? 'JFET' : 'MOSFET';
+  const family = familyOf(type);
   const faults: CardFault[] = [];
   const remarks: string[] = [];
   const untaken: { name: string; value: string; meaning: string }[] = [];
-  const values = new Map<string, number>();
+  const values = new Map<string, GivenValue>();
   const seen = new Set<string>();
   for (const { key, value } of pairsOf(head.slice(typeAt + 1), faults)) {
-    const parameter = key.text.toUpperCase();
+    const parameter = parameterOf(key.text);
     if (seen.has(parameter)) {
       faults.push(faultAt(key, `${parameter} stands twice. Leave one of them.`));
       continue;
@@ -148,7 +154,7 @@ function cardOf(head: readonly Word[], first: Word): ModelCard {
       );
       continue;
     }
-    values.set(parameter, numeral.value);
+    values.set(parameter, { value: numeral.value, key });
     remarks.push(...traps(parameter, value.text, numeral.suffix, taken.field));
   }
   for (const needed of NEEDED[family]) {
@@ -157,15 +163,25 @@ function cardOf(head: readonly Word[], first: Word): ModelCard {
         faultAt(first, `The card has no ${needed}, and without it there is no law. Add ${needed} to the card.`),
       );
   }
-  checkSigns(type, values, head, faults);
-  const fields = Object.entries(TAKEN[family]).flatMap(([parameter, { field, kind }]) => {
-    const value = values.get(parameter);
-    if (value === undefined) return [];
+  for (const [one, other] of [
+    ['W', 'L'],
+    ['L', 'W'],
+  ] as const) {
+    if (seen.has(one) && !seen.has(other) && family === 'MOSFET')
+      faults.push(
+        faultAt(
+          values.get(one)?.key ?? first,
+          `${one} counts only with ${other}. Write both, or neither for W / L = 1.`,
+        ),
+      );
+  }
+  faults.push(...faultsOfValues(type, values));
+  remarks.push(...remarksOn(type, values, seen));
+  const fields = Object.entries(TAKEN[family]).flatMap(([parameter, { field, kind, zero }]) => {
+    const value = values.get(parameter)?.value;
+    if (value === undefined || (value === 0 && zero === 'none')) return [];
     const si = parameter === 'TNOM' ? value + ZERO_CELSIUS : value;
-    // A resistance or capacitance of 0 is none.
-    return value === 0 && !['VTO', 'LAMBDA', 'TNOM', 'VTOTC'].includes(parameter)
-      ? []
-      : [`${field}: ${plainText(si, kind)}`];
+    return [`${field}: ${plainText(si, kind)}`];
   });
   return { name, kind: TYPES[type], fields, untaken, remarks, faults };
 }
@@ -203,31 +219,61 @@ function traps(parameter: string, written: string, suffix: string, field: string
   return [];
 }
 
+/** A parameter in capitals; a 0 in VT0 is the letter O. */
+function parameterOf(word: string): string {
+  const upper = word.toUpperCase();
+  return upper === 'VT0' ? 'VTO' : upper;
+}
+
 /** What a sign or a size on the card cannot mean. */
-function checkSigns(
-  type: CardType,
-  values: ReadonlyMap<string, number>,
-  head: readonly Word[],
-  faults: CardFault[],
-): void {
-  const where = (parameter: string): Word => head.find(({ text }) => text.toUpperCase() === parameter)!;
-  const VTO = values.get('VTO');
-  if (VTO !== undefined && type.endsWith('JF') && VTO >= 0) {
-    faults.push(
-      faultAt(
-        where('VTO'),
-        `VTO of a JFET is negative on the card of either channel. Write VTO=${-VTO || -2} for a pinch-off voltage of ${formatValue(Math.abs(VTO) || 2, TAKEN.JFET.VTO!.kind, { zeros: 'drop' }).text}.`,
-      ),
-    );
-  }
-  for (const [parameter, value] of values) {
-    if (value >= 0 || parameter === 'VTO' || parameter === 'VTOTC' || parameter === 'TNOM') continue;
-    faults.push(faultAt(where(parameter), `${parameter} is not negative on a card of either channel.`));
-  }
-  for (const parameter of ['BETA', 'KP']) {
-    if (values.get(parameter) === 0)
-      faults.push(faultAt(where(parameter), `${parameter} is 0: such a FET carries no current.`));
-  }
+function faultsOfValues(type: CardType, values: ReadonlyMap<string, GivenValue>): CardFault[] {
+  const family = familyOf(type);
+  return [...values].flatMap(([parameter, { value, key }]): CardFault[] => {
+    const { zero, kind } = TAKEN[family][parameter]!;
+    if (parameter === 'VTO' && family === 'JFET' && value >= 0) {
+      const volts = formatValue(value || 2, kind, { zeros: 'drop' }).text;
+      return [
+        faultAt(
+          key,
+          `VTO of a JFET is negative on the card of either channel. Write VTO=${-value || -2} for a pinch-off voltage of ${volts}.`,
+        ),
+      ];
+    }
+    if (parameter === 'TNOM' && value <= -ZERO_CELSIUS)
+      return [faultAt(key, 'TNOM is in °C and lies above absolute zero, as in TNOM=27.')];
+    if (value < 0 && !SIGNED.has(parameter))
+      return [faultAt(key, `${parameter} is not negative on a card of either channel.`)];
+    if (value === 0 && zero === 'refused') return [faultAt(key, zeroText(parameter))];
+    return [];
+  });
+}
+
+const SIGNED: ReadonlySet<string> = new Set(['VTO', 'VTOTC', 'TNOM']);
+
+function zeroText(parameter: string): string {
+  return parameter === 'BETA' || parameter === 'KP'
+    ? `${parameter} is 0: such a FET carries no current.`
+    : `${parameter} is 0 and has to be above it. Leave it out for the value that a part takes without it.`;
+}
+
+/** What a card leaves to be understood. */
+function remarksOn(type: CardType, values: ReadonlyMap<string, GivenValue>, seen: ReadonlySet<string>): string[] {
+  if (familyOf(type) === 'JFET') return [];
+  const VTO = values.get('VTO')?.value ?? 0;
+  const isDepletion = type === 'NMOS' ? VTO < 0 : VTO > 0;
+  const kind = TYPES[type];
+  return [
+    ...(isDepletion
+      ? [
+          `VTO=${VTO} makes it a depletion ${kind}, which conducts at V_GS = 0. That of an enhancement ${kind} is ${type === 'NMOS' ? 'positive' : 'negative'}.`,
+        ]
+      : []),
+    ...(seen.has('W') || seen.has('L') ? [] : ['The card has no W and no L: W / L is taken as 1, so K is KP / 2.']),
+  ];
+}
+
+function familyOf(type: CardType): 'JFET' | 'MOSFET' {
+  return type.endsWith('JF') ? 'JFET' : 'MOSFET';
 }
 
 function faultAt({ line, column }: Word, text: string): CardFault {

@@ -3,6 +3,7 @@
 import { describe, expect, it } from 'vitest';
 import { cardLines, readCardNumeral, readModelCards } from '../../src/language/index.ts';
 import { createSheet } from '../../src/sheet/index.ts';
+import { createDraw } from '../support/counter-random.ts';
 
 describe('a number of a card', () => {
   it.each([
@@ -77,6 +78,7 @@ describe('the same card', () => {
       '* a JFET\n.model J1 NJF (BETA=1.1m ; best\n* between\n+ VTO=-2.2 LAMBDA=8m $ dull\n+ RS=12 CGS=4p)\n.end',
     ],
     ['with letters behind its suffixes', '.model J1 NJF (BETA=1.1mA VTO=-2.2V LAMBDA=8m RS=12ohm CGS=4pF)'],
+    ['with the digit 0 for the letter O', '.model J1 NJF (BETA=1.1m VT0=-2.2 LAMBDA=8m RS=12 CGS=4p)'],
     ['with its level', '.model J1 NJF (LEVEL=1 BETA=1.1m VTO=-2.2 LAMBDA=8m RS=12 CGS=4p)'],
     ['with the line ends of another system', '.model J1 NJF (BETA=1.1m VTO=-2.2\r\n+ LAMBDA=8m RS=12 CGS=4p)\r\n'],
   ])('is read alike %s', (_, text) => {
@@ -144,6 +146,112 @@ describe('what no part has', () => {
   });
 });
 
+describe('a MOSFET card', () => {
+  const remarks = (card: string) => readModelCards(card).cards[0]!.remarks;
+
+  it('whose VTO has the sign of depletion says so', () => {
+    expect(remarks('.model X PMOS (KP=1m VTO=2 W=1u L=1u)')).toEqual([
+      'VTO=2 makes it a depletion p-MOSFET, which conducts at V_GS = 0. That of an enhancement p-MOSFET is negative.',
+    ]);
+    expect(remarks('.model X NMOS (KP=1m VTO=-2 W=1u L=1u)')).toEqual([
+      'VTO=-2 makes it a depletion n-MOSFET, which conducts at V_GS = 0. That of an enhancement n-MOSFET is positive.',
+    ]);
+    expect(remarks('.model X PMOS (KP=1m VTO=-2 W=1u L=1u)')).toEqual([]);
+  });
+
+  it('without W and L says what is taken', () => {
+    expect(remarks('.model X NMOS (KP=1m VTO=2)')).toEqual([
+      'The card has no W and no L: W / L is taken as 1, so K is KP / 2.',
+    ]);
+  });
+
+  it('with W in millimetres says so', () => {
+    expect(remarks('.model X NMOS (KP=1m VTO=2 W=1M L=2u)')).toEqual([
+      'W=1M is in millimetres: on a card M is milli, not the metre.',
+    ]);
+  });
+});
+
+describe('a value of 0', () => {
+  const rows = (card: string) => readModelCards(card).cards[0]!.fields;
+
+  it('is kept where it is a number like others: M = 0 is a constant capacitance', () => {
+    expect(rows('.model X NJF (BETA=1m VTO=-2 LAMBDA=0 CGS=4p M=0)')).toEqual([
+      'beta: 1 mA/V^2',
+      'V_TO: -2 V',
+      'lambda: 0 /V',
+      'C_GS: 4 pF',
+      'M: 0',
+    ]);
+  });
+
+  it('of a resistance, capacitance or gamma is none, and leaves the row out', () => {
+    expect(rows('.model X NMOS (KP=1m VTO=2 RS=0 RD=0 CBD=0 GAMMA=0)')).toEqual(['K_P: 1 mA/V^2', 'V_TO: 2 V']);
+  });
+});
+
+it('a number comes into the part as the very number of the card', () => {
+  const random = createDraw(17);
+  for (let k = 0; k < 300; k++) {
+    const digits = `${1 + Math.floor(random() * 9)}.${String(Math.floor(random() * 1e9)).padStart(9, '0')}`;
+    const suffix = ['f', 'p', 'n', 'u', 'm', '', 'k', 'meg'][Math.floor(random() * 8)]!;
+    const [card] = readModelCards(
+      `X NJF BETA=${digits}${suffix} VTO=-${digits}${suffix} RS=${digits}${suffix} CGS=${digits}${suffix}`,
+    ).cards;
+    const sheet = createSheet(`${cardLines(card!, 'Q1').join('\n')}\n`);
+    const value = readCardNumeral(`${digits}${suffix}`)!.value;
+    const read = ['beta', 'V_TO', 'r_s', 'C_GS'].map((name) => sheet.value(`Q1.${name}`));
+    expect(read, `${digits}${suffix}`).toEqual([value, -value, value, value]);
+  }
+});
+
+it('whatever is pasted is read to the end without an exception, and what a sound card becomes is a part', () => {
+  const random = createDraw(23);
+  const pieces = [
+    '.model',
+    'X',
+    'NJF',
+    'pmos',
+    'BETA',
+    'KP',
+    'VTO',
+    'M',
+    'LEVEL',
+    '=',
+    '(',
+    ')',
+    '+',
+    '\n+',
+    '\n',
+    ' ',
+    ',',
+    '1m',
+    '-2',
+    '1e',
+    '{',
+    '}',
+    '*',
+    ';',
+    '$',
+    '[',
+    ']',
+    "'",
+    '2MEG',
+    'RS',
+  ];
+  const begins = ['', 'X NJF BETA=1m VTO=-2 ', '.model X PMOS (KP=1m VTO=-2 '];
+  let sound = 0;
+  for (let k = 0; k < 2000; k++) {
+    const some = Array.from({ length: 8 }, () => pieces[Math.floor(random() * pieces.length)]);
+    const text = begins[k % 3]! + some.join(random() < 0.5 ? ' ' : '');
+    for (const card of readModelCards(text).cards.filter(({ faults }) => faults.length === 0)) {
+      sound++;
+      expect(createSheet(`${cardLines(card, 'Q').join('\n')}\n`).error('Q'), text).toBeNull();
+    }
+  }
+  expect(sound).toBeGreaterThan(100);
+});
+
 describe('what cannot be read says where, what and what would be right', () => {
   it.each([
     ['hello', '1:1 hello begins no model card. Write a card as .model NAME NJF (BETA=1m VTO=-2).'],
@@ -159,6 +267,12 @@ describe('what cannot be read says where, what and what would be right', () => {
       '2:3 VTO of a JFET is negative on the card of either channel. Write VTO=-2 for a pinch-off voltage of 2 V.',
     ],
     ['.model X PJF (BETA=-1m VTO=-2)', '1:15 BETA is not negative on a card of either channel.'],
+    ['.model X NMOS (KP=1m VTO=2 W=1m)', '1:28 W counts only with L. Write both, or neither for W / L = 1.'],
+    [
+      '.model X NJF (BETA=1m VTO=-2 PB=0)',
+      '1:30 PB is 0 and has to be above it. Leave it out for the value that a part takes without it.',
+    ],
+    ['.model X NJF (BETA=1m VTO=-2 TNOM=-300)', '1:30 TNOM is in °C and lies above absolute zero, as in TNOM=27.'],
     ['.model X NJF (BETA=0 VTO=-2)', '1:15 BETA is 0: such a FET carries no current.'],
     ['.model X NJF (BETA={b} VTO=-2)', '1:20 BETA is a formula here, {b}. Write its number, such as 1.2m or 3e-12.'],
     ['.model X NJF (BETA=abc VTO=-2)', '1:20 BETA is no number here, abc. Write its number, such as 1.2m or 3e-12.'],

@@ -134,6 +134,7 @@ export const MESSAGE_CASES: readonly MessageCase[] = [
   ['capacitance-order', PART + '  C_rss: 3 pF\n  C_oss: 2.5 pF\n  C_iss: 5 pF', 'Q1', 4, 10, 'C_rss is 3 pF and C_oss 2.5 pF, so C_DS = C_oss - C_rss would lie below 0. Take both rows at the same voltages, where C_rss is the smaller one.'],
   ['field-family', PART + '  gamma: 0.5 V^0.5', 'Q1', 4, 3, 'gamma is no field of a JFET.'],
   ['field-family', 'Q1 = n-MOSFET\n  beta: 6 mA/V^2\n  V_TO: 2 V', 'Q1', 2, 3, 'beta is not used for MOSFETs, because half of the books mean twice the other half by it. Write K, with I_D = K (V_GS - V_TO)².'],
+  ['size-alone', 'Q1 = n-MOSFET\n  K_P: 6 mA/V^2\n  W: 2 mm\n  V_TO: 2 V', 'Q1', 3, 3, 'W counts only with L. Write both, or neither for W / L = 1.'],
   ['unknown-field', 'Q1 = n-JFET\n  I_DS: 6 mA', 'Q1', 2, 3, 'A part has no field I_DS. Did you mean I_DSS or C_DS?'],
   ['field-twice', 'Q1 = n-JFET\n  I_DSS: 6 mA\n  I_DSS: 7 mA', 'Q1', 3, 3, 'I_DSS stands twice in this part. Keep one of the two lines.'],
   ['field-dimension', 'Q1 = n-JFET\n  I_DSS: 6 V\n  V_P: -2 V', 'Q1', 2, 10, 'I_DSS is a current; this is a voltage. Write for example I_DSS: 2 mA.'],

@@ -36,6 +36,7 @@ export function compilePartCell(context: CellContext): Draft {
   const { given, assumptions: measured } = entry.fittedTo
     ? measuredRows(entry, written, context)
     : { given: written, assumptions: [] };
+  checkSizes(given);
   const law = partLaw(entry, channel, given, context);
   const { device, statedTemperatureLaws, assumptions } = partDevice(entry.family, law, given, builder);
   const limits: Partial<Record<LimitName, Handle>> = {};
@@ -114,6 +115,24 @@ function readFields(entry: PartEntry, context: CellContext): GivenFields {
     ]);
   }
   return given;
+}
+
+/** W / L is 1 where neither is given; one of them alone says nothing. */
+function checkSizes(given: GivenFields): void {
+  for (const [name, other] of [
+    ['W', 'L'],
+    ['L', 'W'],
+  ] as const) {
+    const alone = given.has(other) ? undefined : given.get(name)?.[0];
+    if (alone) {
+      stop(
+        'size-alone',
+        `${name} counts only with ${other}. Write both, or neither for W / L = 1.`,
+        alone.tree.labelSpan,
+        alone.tree.line,
+      );
+    }
+  }
 }
 
 function familyText(name: string, entry: PartEntry): string {
