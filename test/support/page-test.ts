@@ -22,9 +22,14 @@ beforeAll(async () => {
 afterAll(() => browser.close());
 
 /** Opens a context outside the watch, for a test that provokes faults; the caller closes it. */
-export function openUnwatchedContext(): Promise<BrowserContext> {
-  return browser.newContext({ locale: 'en-US' });
+export async function openUnwatchedContext(): Promise<BrowserContext> {
+  const context = await browser.newContext({ locale: 'en-US' });
+  context.setDefaultTimeout(PATIENCE);
+  return context;
 }
+
+/** How long a step of a test waits for the page, in ms. */
+const PATIENCE = 90_000;
 
 export const test = plainTest.extend<PageFixtures>({
   // oxlint-disable-next-line no-empty-pattern -- the fixture's dependencies are read from this pattern
