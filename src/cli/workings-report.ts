@@ -1,6 +1,6 @@
 // The workings of one cell as text for a terminal.
 
-import { benchTables, stepSides, stepText, workingsOf } from '../record/index.ts';
+import { benchTables, partTables, stepSides, stepText, workingsOf } from '../record/index.ts';
 import type { BenchTable, PrintedStep } from '../record/index.ts';
 import type { Sheet } from '../sheet/index.ts';
 import { faultText } from './text-report.ts';
@@ -19,9 +19,18 @@ export function workingsReport(sheet: Sheet, name: string, width: number): strin
     if (step.sentence !== '') lines.push('', ...wrapText(step.sentence, width));
     lines.push(...stepLines(step, width));
   }
-  const bench = sheet.bench(name);
-  if (bench) lines.push(...benchTables(bench).flatMap((table) => ['', ...tableLines(table, width)]));
+  lines.push(...tablesOf(sheet, name).flatMap((table) => ['', ...tableLines(table, width)]));
   return `${lines.join('\n')}\n`;
+}
+
+function tablesOf(sheet: Sheet, name: string): readonly BenchTable[] {
+  const bench = sheet.bench(name);
+  const part = sheet.part(name);
+  const entry = sheet.cell(name)?.tree.entry;
+  return [
+    ...(bench ? benchTables(bench) : []),
+    ...(part && entry?.type === 'part' ? partTables(part, entry.family === 'JFET') : []),
+  ];
 }
 
 /** What the table shows, its heads, its rows; numbers stand to the right. What is too wide is not broken. */

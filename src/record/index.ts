@@ -4,6 +4,7 @@
 export { answeredSentence, answeredSentences } from './answered-text.ts';
 export { benchTables } from './bench-tables.ts';
 export type { BenchTable } from './bench-table.ts';
+export { conventionRows, partTables, routesTable } from './part-tables.ts';
 export { checkText, reserveText } from './check-text.ts';
 export { endsText } from './ends-text.ts';
 export { recordHtml } from './html.ts';

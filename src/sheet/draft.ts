@@ -4,7 +4,15 @@ import type { CellTree, Line, Message, Span } from '../language/index.ts';
 import type { Builder } from '../program/index.ts';
 import type { Handle } from '../network/index.ts';
 import type { Unit, ValueKind } from '../quantity/index.ts';
-import type { CheckReading, DeclaredSpread, FieldReading, StageReading, ValueType, WorkingStep } from './model.ts';
+import type {
+  CheckReading,
+  DeclaredSpread,
+  FieldReading,
+  PartReading,
+  StageReading,
+  ValueType,
+  WorkingStep,
+} from './model.ts';
 import type { BenchReading } from './bench/bench-reading.ts';
 import type { Measured } from './bench/measured.ts';
 import type { Scope } from './scope.ts';
@@ -123,6 +131,8 @@ export interface Draft {
   readonly shape: (() => string) | null;
   /** What a kind of cell tells those that are built on it (a part its device). */
   readonly extra: Interface['extra'];
+  /** A part in every convention. */
+  readonly part: ((read: Read) => PartReading) | null;
   /** What a bench has found. */
   readonly bench: { readonly measured: Measured; readonly reading: BenchReading } | null;
 }
@@ -173,5 +183,6 @@ export const EMPTY_DRAFT: Draft = {
   stage: null,
   shape: null,
   extra: null,
+  part: null,
   bench: null,
 };

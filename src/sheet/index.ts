@@ -13,6 +13,7 @@ export type {
   StageReading,
   FieldReading,
   OfferedReading,
+  PartReading,
   Reading,
   Sheet,
   SheetView,

@@ -132,6 +132,36 @@ export interface CellReading {
   readonly assumptions: readonly Assumption[];
 }
 
+/** The law of a part in one convention of the trade. */
+export interface ConventionReading extends Reading {
+  /** `I_DSS`, `R_DSon`. */
+  readonly name: string;
+  /** SI, at which it is read; currents are positive on both channels. */
+  readonly conditions: readonly { readonly name: string; readonly value: number; readonly type: ValueKind }[];
+  readonly value: number;
+  readonly type: ValueKind;
+  /** What the part's own row says; null where it has none. */
+  readonly written: number | null;
+  readonly sentence: string;
+}
+
+/** A way from rows of a part to its law. */
+export interface RouteReading {
+  /** `I_DSS with V_GSoff`. */
+  readonly name: string;
+  /** beta (K of a MOSFET) in A/V² and V_TO in V; null where these rows have no solution. */
+  readonly beta: number | null;
+  readonly V_TO: number | null;
+  /** Of beta against that of the route that computes: 0.12 is 12 % more; null where there is no solution. */
+  readonly difference: number | null;
+}
+
+export interface PartReading {
+  readonly conventions: readonly ConventionReading[];
+  /** The one that computes first. */
+  readonly routes: readonly RouteReading[];
+}
+
 /** One leg of a stage with its number. */
 interface LegReading {
   /** The place on whose line it stands. */
@@ -330,6 +360,8 @@ export interface SheetView {
   error(name: string): Fault | null;
   /** The SI value of `R_S`, `A1.I_D`, `A1.Qa.I_D`; a region's word; null where there is none. */
   value(path: string): number | string | boolean | null;
+  /** A part in every convention; null of another cell, or of a part without a law. */
+  part(name: string): PartReading | null;
   /** The formulas, operands and results that stand behind a cell. */
   workings(name: string): readonly WorkingStep[];
   /** The stage as figures want it; null where there is none of that name, or it cannot be read. */

@@ -17,6 +17,7 @@ import {
 import type { GivenField, GivenFields } from './part-given.ts';
 import type { Read } from './draft.ts';
 import { evaluateStep, stepAgrees } from './evaluate-step.ts';
+import { conventionValue, lawNumbers } from './law-numbers.ts';
 import type { WorkingStep } from './model.ts';
 import type { PartLaw } from './part-law.ts';
 import { lawOf, magnitude, operand, solvedForm } from './row-formulas.ts';
@@ -33,6 +34,7 @@ export function partWorkings(
 ): WorkingStep[] {
   const T_nom = given.get('T_nom')?.[0];
   const temperature = T_nom ? read(T_nom.handle) : DEFAULTS[entry.family].T_nom.value;
+  const numbers = lawNumbers(entry, law, given, read);
   const constants: LawInHand = {
     part: name,
     // Bare K, W and L are units in a formula, so those of a MOSFET bear the part's name.
@@ -48,6 +50,7 @@ export function partWorkings(
     given,
     channel: entry.channel === 'n' ? 1 : -1,
     read,
+    reads: (field) => conventionValue(field.name, numbers, field.conditions),
   };
   const frame = entry.channel === 'p' ? ' Voltages are mirrored into the frame of an n-channel FET.' : '';
   const steps = settling(name, law, constants).filter(stepAgrees);

@@ -25,6 +25,8 @@ export interface LawInHand {
   readonly given: GivenFields;
   readonly channel: 1 | -1;
   readonly read: Read;
+  /** What the law itself reads where a row was written, in the sense of the channel. */
+  readonly reads: (field: GivenField) => number;
 }
 
 /** The constant that a row fixes once the other is known, as a formula; null where the row has none. */
@@ -119,22 +121,30 @@ function channelSlope(c: LawInHand, at: { readonly lift: string }): string {
 export function lawOf(field: GivenField, c: LawInHand): { formula: string; operands: Operand[] } | null {
   const vto = operand('V_TO', c.V_TO, VOLTAGE);
   const beta = operand(c.letter, c.beta, SQUARE_LAW_CONSTANT);
-  const at = stated(field, c);
+  const at = stated(field, c, ['I_DSS', 'I_on'].includes(field.name) ? c.reads(field) : NaN);
   const lead = sourceLead(field, c);
-  const row = operand(field.name, magnitude(field, c), field.kind);
+  // Where the value stands on both sides of its equation it is the law's own, solved apart: the step shows that it fits.
+  const row = (): Operand => operand(field.name, c.reads(field), field.kind);
   switch (field.name) {
     case 'I_DSS':
       if (lead.length === 0)
         return { formula: `${c.letter} * V_TO^2${at.factor}`, operands: [beta, vto, ...at.operands] };
       return {
         formula: `${c.letter} * (I_DSS * r_s + V_TO)^2${at.factor}`,
-        operands: [beta, row, vto, ...lead, ...at.operands],
+        operands: [beta, row(), vto, ...lead, ...at.operands],
       };
     case 'I_on':
       if (!field.conditions.has('V_GS')) return null;
       return {
         formula: `${c.letter} * (V_GS${lead.length > 0 ? ' - I_on * r_s' : ''} - V_TO)^2${at.factor}`,
-        operands: [beta, condition('V_GS', field, c), vto, ...(lead.length > 0 ? [row] : []), ...lead, ...at.operands],
+        operands: [
+          beta,
+          condition('V_GS', field, c),
+          vto,
+          ...(lead.length > 0 ? [row()] : []),
+          ...lead,
+          ...at.operands,
+        ],
       };
     case 'g_fs0':
       return zeroGateLaw(beta, vto, at, c);
@@ -154,6 +164,7 @@ export function lawOf(field: GivenField, c: LawInHand): { formula: string; opera
           operands: [...leads(c), beta, vgs, vto],
         };
       }
+      if (c.reads(field) === Infinity) return null;
       const vds = inLeads === '' ? 'I_D * R_DSon' : 'I_D * (R_DSon - r_s - r_d)';
       const drive = `2 * (V_GS${c.r_s > 0 ? ' - I_D * r_s' : ''} - V_TO) - ${vds}`;
       const lift = c.lambda === 0 ? '' : ` * (1 + lambda * ${vds})`;
@@ -165,7 +176,7 @@ export function lawOf(field: GivenField, c: LawInHand): { formula: string; opera
           vgs,
           vto,
           operand('I_D', current, CURRENT),
-          row,
+          row(),
           ...(lift === '' ? [] : [operand('lambda', c.lambda, RECIPROCAL_VOLTAGE)]),
         ],
       };
@@ -206,7 +217,11 @@ function sourceLead(field: GivenField, c: LawInHand): Operand[] {
 }
 
 /** (1 + lambda V_DS) of the channel of a row, as a factor and alone; nothing where no V_DS is stated or lambda is 0. */
-function stated(field: GivenField, c: LawInHand): { factor: string; lift: string; operands: Operand[] } {
+function stated(
+  field: GivenField,
+  c: LawInHand,
+  value = magnitude(field, c),
+): { factor: string; lift: string; operands: Operand[] } {
   const vds = field.conditions.get('V_DS');
   if (vds === undefined || c.lambda === 0) return { factor: '', lift: '', operands: [] };
   const current = ['I_DSS', 'I_on'].includes(field.name) ? field.name : field.conditions.has('I_D') ? 'I_D' : null;
@@ -219,7 +234,7 @@ function stated(field: GivenField, c: LawInHand): { factor: string; lift: string
       operand('lambda', c.lambda, RECIPROCAL_VOLTAGE),
       operand('V_DS', Math.abs(vds), VOLTAGE),
       ...(inLeads ? leads(c) : []),
-      ...(inLeads && current !== 'I_D' ? [operand(current, magnitude(field, c), field.kind)] : []),
+      ...(inLeads && current !== 'I_D' ? [operand(current, value, field.kind)] : []),
     ],
   };
 }

@@ -74,6 +74,13 @@ export function createView(state: () => SheetState): SheetView {
       const { draft, slot } = node.compiled;
       return draft.stage!((handle) => slots[slot(handle)]!, node.fault === null);
     },
+    part(name) {
+      const { byName, slots } = state();
+      const node = byName.get(name);
+      if (!node || node.fault || node.waitsFor) return null;
+      const { draft, slot } = node.compiled;
+      return draft.part?.((handle) => slots[slot(handle)]!) ?? null;
+    },
     bench(name) {
       const node = state().byName.get(name);
       if (!node || node.fault || node.waitsFor) return null;

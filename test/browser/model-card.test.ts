@@ -24,7 +24,6 @@ test('a pasted card is shown as a part, what is not taken is listed, and it is p
   await page.keyboard.type('.model J1 NJF (BETA=1.1m VTO=-2.2 KF=1e-17)');
   await dialog.getByText('beta: 1.1 mA/V^2 [model card J1]').waitFor();
   await dialog.getByRole('row', { name: /^KF 1e-17 coefficient of flicker noise/ }).waitFor();
-  await dialog.getByText('in every convention').click();
   await dialog.getByRole('row', { name: /^IDSS 5\.32 mA/ }).waitFor();
   expect(await dialog.getByLabel('Name').inputValue()).toBe('J1');
   expect(await findings(page)).toEqual([]);

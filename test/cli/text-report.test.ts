@@ -107,6 +107,28 @@ describe('the printed workings', () => {
     );
   });
 
+  it('of a part end with its law in every convention, and with its routes side by side', () => {
+    const part = 'Q1 = n-JFET\n  I_DSS: 8 mA\n  V_P: -2 V\n  g_fs0: 10 mS\n';
+    const { out } = runSheet(part, '--workings', 'Q1');
+    expect(out.slice(out.indexOf('The law in every'))).toBe(`The law in every convention.
+  form        nominal  as written  condition
+  beta     2.00 mA/V²
+  V_TO        −2.00 V
+  I_DSS       8.00 mA
+  V_P         −2.00 V
+  V_GSoff     −2.18 V              at I_D = 10 nA
+  g_fs0       8.00 mS       10 mS
+  R_DSon        125 Ω              at V_GS = 0 V
+  g_fs        2.83 mS              at I_D = 1 mA
+  lambda         0 /V
+
+Routes to the law. The difference is that of beta.
+  rows                    beta     V_TO  difference
+  I_DSS with V_P    2.00 mA/V²  −2.00 V    computes
+  g_fs0 with I_DSS  3.13 mA/V²  −1.60 V  56 % above
+`);
+  });
+
   it('of a broken cell are its message', () => {
     const { status, out } = runSheet('x_1 = 1 V + 2 mA', '--workings', 'x_1');
     expect(status).toBe(2);

@@ -14,6 +14,7 @@ import { PART_FIELDS } from '../part-fields.ts';
 import type { GivenField, GivenFields } from '../part-given.ts';
 import { comparedCautions, leadCautions, measuredComparisons } from '../measured-comparison.ts';
 import { measuredRows } from '../measured-rows.ts';
+import { partReading } from '../part-conventions.ts';
 import { partDevice } from '../part-device.ts';
 import { partLaw } from '../part-law.ts';
 import { fieldName, isShadowed, partSpread } from '../part-spread.ts';
@@ -71,6 +72,7 @@ export function compilePartCell(context: CellContext): Draft {
     workings: (read) => partWorkings(tree.name.name, entry, given, law, read),
     fields: (read) => [...written.values()].flat().map((field) => fieldReading(field, read)),
     measured: (read) => fields.filter(({ measured: from }) => from).map((field) => fieldReading(field, read)),
+    part: (read) => partReading(entry, law, given, read),
     drawn: partSpread(entry.family, channel, law, given, builder),
     extra: { type: 'part', channel, family: entry.family, device, limits, statedTemperatureLaws },
   };

@@ -5,7 +5,7 @@ import { insertBlock } from '../desk/index.ts';
 import type { Desk } from '../desk/index.ts';
 import { freeName } from '../rows/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
-import { formRows, FormTable } from '../workings/index.ts';
+import { LawTables } from '../workings/index.ts';
 import { Modal } from './modal.tsx';
 import { createPastedCard } from './pasted-card.ts';
 import './rows-dialog.css';
@@ -81,14 +81,11 @@ function Outcome(props: { readonly pasted: ReturnType<typeof createPastedCard> }
   const { pasted } = props;
   return (
     <section aria-label="What was read" aria-live="polite">
-      <Show when={pasted.part()}>
-        {(part) => (
+      <Show when={pasted.law()}>
+        {(law) => (
           <>
             <pre class="card-lines">{pasted.lines().join('\n')}</pre>
-            <details>
-              <summary>in every convention</summary>
-              <FormTable title="the same law as" rows={formRows(part())} />
-            </details>
+            <LawTables part={law()} isJfet={pasted.card()!.kind.endsWith('JFET')} />
           </>
         )}
       </Show>

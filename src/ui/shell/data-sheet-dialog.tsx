@@ -4,7 +4,7 @@ import { For, Show } from 'solid-js';
 import { insertBlock } from '../desk/index.ts';
 import type { Desk } from '../desk/index.ts';
 import { Name, Prose } from '../typeset/index.ts';
-import { formRows, FormTable } from '../workings/index.ts';
+import { LawTables } from '../workings/index.ts';
 import { PART_KINDS } from './data-sheet-rows.ts';
 import { createDataSheet } from './data-sheet-state.ts';
 import { Modal } from './modal.tsx';
@@ -123,11 +123,11 @@ export function DataSheetDialog(props: { readonly desk: Desk; readonly onClose: 
             )}
           </For>
         </ul>
-        <Show when={state.outcome()?.part.fault === null && state.outcome()!.part}>
-          {(part) => (
+        <Show when={state.outcome()?.law}>
+          {(law) => (
             <details>
-              <summary>in every convention, nominal</summary>
-              <FormTable title="the same law as" rows={formRows(part())} />
+              <summary>the law in every convention, nominal</summary>
+              <LawTables part={law()} isJfet={state.kind().endsWith('JFET')} />
             </details>
           )}
         </Show>

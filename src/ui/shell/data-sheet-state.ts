@@ -43,10 +43,10 @@ export function createDataSheet(sheet: SheetView) {
     const own = isCellName(name().trim()) ? name().trim() : 'Q';
     const alone = createSheet(`${[`${own} = ${kind()}`, ...lines().slice(1)].join('\n')}\n`);
     const part = alone.cell(own)!;
-    if (part.fault) return { part, said: [] };
+    if (part.fault) return { part, law: null, said: [] };
     const spread = analyse(alone.spreadModel(), { samples: BUILDS, seed: 1 });
     const cautions = part.cautions.map(({ text }) => text);
-    return { part, said: [...(spread ? declaredSentences(spread) : []), ...cautions] };
+    return { part, law: alone.part(own), said: [...(spread ? declaredSentences(spread) : []), ...cautions] };
   });
   return {
     kind,

@@ -3,7 +3,7 @@
 import { createMemo, createSignal } from 'solid-js';
 import { cardLines, isCellName, nameOfCard, readModelCards } from '../../language/index.ts';
 import { createSheet } from '../../sheet/index.ts';
-import type { CellReading, SheetView } from '../../sheet/index.ts';
+import type { SheetView } from '../../sheet/index.ts';
 
 /** Creates the state; `freeName` is the name of a part whose card has none that a cell could bear. */
 export function createPastedCard(sheet: SheetView, freeName: string) {
@@ -31,13 +31,13 @@ export function createPastedCard(sheet: SheetView, freeName: string) {
     if (card() === null) return 'There is no card in this text.';
     if (!isCellName(name().trim())) return `${name().trim() || 'An empty name'} cannot name a cell.`;
     if (isTaken(name().trim())) return `${name().trim()} already stands in the sheet. Choose another name.`;
-    return part()?.fault?.text ?? null;
+    return alone()?.error('Q')?.text ?? null;
   });
-  /** The part as it would compute, alone. */
-  const part = createMemo<CellReading | null>(() => {
+  /** A sheet of the part alone, as `Q`. */
+  const alone = createMemo<SheetView | null>(() => {
     const found = card();
     if (found === null || faults().length > 0) return null;
-    return createSheet(`${cardLines(found, 'Q').join('\n')}\n`).cell('Q');
+    return createSheet(`${cardLines(found, 'Q').join('\n')}\n`);
   });
   return {
     text,
@@ -56,7 +56,8 @@ export function createPastedCard(sheet: SheetView, freeName: string) {
     name,
     setName: setTypedName,
     lines,
-    part,
+    /** The law of the part as it would compute. */
+    law: () => alone()?.part('Q') ?? null,
     faults,
     /** Why no part can be put in, as a sentence; null where it can. */
     fault,

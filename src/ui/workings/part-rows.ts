@@ -21,6 +21,11 @@ export interface FormRow {
 
 const DIGITS = 4;
 
+/** Whether a part is one of a JFET. */
+export function isJfet({ tree }: CellReading): boolean {
+  return tree.entry.type === 'part' && tree.entry.family === 'JFET';
+}
+
 /** One row for each field that is a number, behind those that come from a bench. */
 export function partRows(cell: CellReading, sheet: SheetView): readonly PartRow[] {
   const { entry } = cell.tree;

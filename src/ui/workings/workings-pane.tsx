@@ -14,8 +14,8 @@ import { CellLinks } from './cell-links.tsx';
 import { kindWords, valueWords } from './cell-words.ts';
 import { EndsTable } from './ends-table.tsx';
 import { faultWords } from './fault-words.ts';
-import { formRows, partRows } from './part-rows.ts';
-import { FormTable, PartTable } from './part-tables.tsx';
+import { formRows, isJfet, partRows } from './part-rows.ts';
+import { FormTable, LawTables, PartTable } from './part-tables.tsx';
 import { MendSection } from './mend-section.tsx';
 import { sourceWords } from './source-words.ts';
 import { SpreadSection } from './spread-section.tsx';
@@ -71,7 +71,8 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
   });
   const source = createMemo(() => sourceWords(props.cell.tree, document.tree().lines));
   const isFailing = createMemo(() => failsCheck(props.cell, props.desk.spread.judged()));
-  const hasForms = (): boolean => ['part', 'another', 'point'].includes(props.cell.kind);
+  const hasForms = (): boolean => ['another', 'point'].includes(props.cell.kind);
+  const lawOf = createMemo(() => (version(), props.desk.view().part(name())));
 
   return (
     <>
@@ -143,6 +144,7 @@ function CellWorkings(props: { readonly desk: Desk; readonly cell: CellReading; 
 
       <EndsTable desk={props.desk} cell={props.cell} />
       <PartTable rows={partRows(props.cell, props.desk.view())} />
+      <Show when={lawOf()}>{(part) => <LawTables part={part()} isJfet={isJfet(props.cell)} />}</Show>
       <Show when={hasForms()}>
         <FormTable title={props.cell.kind === 'point' ? 'offers' : 'other forms'} rows={formRows(props.cell)} />
       </Show>
